@@ -1,0 +1,121 @@
+import type { Vec3 } from '../domain/vector.ts';
+
+/** A validated brief: SI throughout, defaults filled in. Each rule keeps its line in the file, for findings. */
+export interface Brief {
+  readonly title: string | null;
+  readonly source: 'physical' | 'analysis' | null;
+  readonly axes: 'given' | 'centroid';
+  readonly scope: { readonly include: readonly MemberSelector[]; readonly exclude: readonly MemberSelector[] };
+  readonly joints: {
+    /** m; null where the sections decide. */
+    readonly reach: number | null;
+    readonly offset: number | null;
+    readonly crossings: 'apart' | 'joined';
+    readonly seated: 'node' | 'apart';
+    readonly pairs: 'one' | 'apart';
+  };
+  readonly chords: 'pinned' | 'strict' | 'continuous';
+  readonly supports: readonly SupportRule[];
+  readonly materials: { readonly default: string | null };
+  readonly sections: readonly SectionRule[];
+  readonly cases: readonly CaseRule[];
+  readonly combinations: readonly CombinationRule[];
+}
+
+/** An end left null is open. */
+export type Range = readonly [from: number | null, to: number | null];
+
+/** All keys given must hold. Texts take `*`. */
+export interface MemberSelector {
+  readonly line: number;
+  readonly class?: string;
+  readonly predefinedType?: string;
+  readonly globalId?: string;
+  readonly tag?: string;
+  readonly name?: string;
+  readonly type?: string;
+  readonly assembly?: string;
+  readonly storey?: string;
+  readonly layer?: string;
+  readonly section?: string;
+  readonly material?: string;
+  /** World z of the member's middle, m. */
+  readonly level?: Range;
+  /** Angle to the horizontal, rad. */
+  readonly slope?: Range;
+  /** m. */
+  readonly length?: Range;
+  readonly not?: MemberSelector;
+}
+
+/** All keys given must hold. */
+export interface NodeSelector {
+  readonly line: number;
+  readonly near?: Vec3;
+  /** m; goes with `near`. */
+  readonly within?: number;
+  readonly lowest?: boolean;
+  readonly highest?: boolean;
+  /** World z, m. */
+  readonly level?: Range;
+  readonly top?: boolean;
+  /** An end of such a member lies at the node. */
+  readonly endOf?: readonly MemberSelector[];
+  /** Such a member meets the node, wherever along it. */
+  readonly joins?: readonly MemberSelector[];
+  readonly not?: NodeSelector;
+}
+
+export interface SupportRule {
+  readonly line: number;
+  readonly at: readonly NodeSelector[];
+  /** Unit directions rigidly held. */
+  readonly fix: readonly Vec3[];
+  /** Stiffness in N/m along a unit direction. */
+  readonly springs: readonly { readonly direction: Vec3; readonly stiffness: number }[];
+}
+
+export interface SectionRule {
+  readonly line: number;
+  readonly on: readonly MemberSelector[];
+  readonly use: string;
+}
+
+export type Nature = 'permanent' | 'imposed' | 'snow' | 'wind' | 'thermal' | 'accidental';
+
+export interface CaseRule {
+  readonly line: number;
+  readonly name: string;
+  readonly nature: Nature;
+  readonly loads: readonly LoadRule[];
+}
+
+export type LoadRule =
+  | { readonly kind: 'selfWeight'; readonly line: number; readonly factor: number }
+  | {
+      readonly kind: 'area';
+      readonly line: number;
+      /** N/m2. */
+      readonly pressure: number;
+      readonly over: readonly NodeSelector[];
+      readonly acts: 'down' | 'normal';
+      readonly per: 'slope' | 'plan';
+    }
+  | {
+      readonly kind: 'line';
+      readonly line: number;
+      /** N/m, global axes. */
+      readonly force: Vec3;
+      readonly on: readonly MemberSelector[];
+      readonly per: 'length' | 'plan';
+    }
+  | { readonly kind: 'point'; readonly line: number; readonly force: Vec3; readonly at: readonly NodeSelector[] };
+
+export type Limit = 'strength' | 'equilibrium' | 'accidental' | 'characteristic' | 'frequent' | 'quasi-permanent';
+
+export interface CombinationRule {
+  readonly line: number;
+  readonly name: string;
+  readonly limit: Limit;
+  readonly factors: Readonly<Record<string, number>>;
+}

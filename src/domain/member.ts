@@ -1,0 +1,62 @@
+import type { Vec3 } from './vector.ts';
+
+export type SectionShape = 'I' | 'U' | 'L' | 'T' | 'C' | 'Z' | 'RHS' | 'CHS' | 'rectangle' | 'circle' | 'other';
+
+/** A cross section, SI (m2, m4, m6). y is the profile's horizontal and z its vertical centroidal axis. */
+export interface Section {
+  readonly name: string;
+  readonly shape: SectionShape;
+  readonly area: number;
+  /** Integral of z^2: about the horizontal centroidal axis. */
+  readonly inertiaY: number;
+  /** Integral of y^2: about the vertical centroidal axis. */
+  readonly inertiaZ: number;
+  readonly inertiaYZ: number;
+  readonly inertiaMajor: number;
+  readonly inertiaMinor: number;
+  /** St. Venant torsion constant. */
+  readonly torsion: number;
+  /** Warping constant; 0 for closed and solid shapes. */
+  readonly warping: number;
+  readonly from: 'profile' | 'name' | 'properties' | 'brief' | 'mesh';
+  /** Extent of the outline along z, m. */
+  readonly depth: number;
+  /** Extent of the outline along y, m. */
+  readonly width: number;
+}
+
+/** SI: Pa, kg/m3, 1/K. Yield and ultimate strength are null where the grade is not known. */
+export interface Material {
+  readonly name: string;
+  readonly elasticModulus: number;
+  readonly density: number;
+  readonly expansion: number;
+  readonly yieldStrength: number | null;
+  readonly ultimateStrength: number | null;
+  readonly from: 'properties' | 'name' | 'brief' | 'default';
+}
+
+/** An element of the model read as a line of force. All lengths in metres, in the model's own world axes. */
+export interface Member {
+  readonly globalId: string;
+  /** 0, or the order among several members read from one element. */
+  readonly part: number;
+  readonly name: string | null;
+  readonly tag: string | null;
+  readonly class: string;
+  readonly predefinedType: string | null;
+  readonly type: string | null;
+  /** Name of the assembly the element is part of. */
+  readonly assembly: string | null;
+  /** Class of the element it is part of, e.g. IfcElementAssembly, IfcStair. */
+  readonly partOf: string | null;
+  readonly storey: string | null;
+  readonly layer: string | null;
+  readonly place: string | null;
+  readonly axisFrom: 'axis' | 'extrusion' | 'swept' | 'mesh' | 'analysis-view';
+  readonly axis: readonly [Vec3, Vec3];
+  /** Unit direction of the section's z axis; at right angles to the member's axis. */
+  readonly zAxis: Vec3;
+  readonly section: Section | null;
+  readonly material: Material;
+}

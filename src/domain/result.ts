@@ -1,0 +1,187 @@
+import { z } from 'zod';
+import { FINDING_SEVERITY, type FindingCode } from './finding.ts';
+
+/** The result of a run (CONTRACT "The result"): this schema is the one source of its types and of its JSON Schema. */
+
+const vector = z.tuple([z.number(), z.number(), z.number()]);
+const text = z.string();
+const textOrNull = text.nullable();
+const forcePerBar = z.array(z.number().nullable()).describe('N, tension positive, one per bar in the order of bars');
+const displacementPerNode = z.array(vector.nullable()).describe('m, one per node in the order of nodes');
+const nodeForces = z.array(z.object({ node: text, force: vector.describe('N, global axes') }));
+
+const sectionSchema = z.object({
+  name: text,
+  shape: text,
+  area: z.number().describe('m2'),
+  inertiaY: z.number().describe('m4, about the horizontal centroidal axis: integral of z^2'),
+  inertiaZ: z.number().describe('m4, about the vertical centroidal axis: integral of y^2'),
+  inertiaYZ: z.number(),
+  inertiaMajor: z.number(),
+  inertiaMinor: z.number(),
+  torsion: z.number().describe('m4, St. Venant'),
+  warping: z.number().describe('m6'),
+  from: z.enum(['profile', 'name', 'properties', 'brief', 'mesh']),
+});
+
+const materialSchema = z.object({
+  name: text,
+  elasticModulus: z.number().describe('Pa'),
+  density: z.number().describe('kg/m3'),
+  expansion: z.number().describe('1/K'),
+  yieldStrength: z.number().nullable().describe('Pa'),
+  ultimateStrength: z.number().nullable().describe('Pa'),
+  from: text,
+});
+
+const memberSchema = z.object({
+  id: text,
+  globalId: text,
+  part: z.number().int(),
+  name: textOrNull,
+  tag: textOrNull,
+  class: text,
+  predefinedType: textOrNull,
+  type: textOrNull,
+  assembly: textOrNull,
+  storey: textOrNull,
+  place: textOrNull,
+  axisFrom: z.enum(['axis', 'extrusion', 'swept', 'mesh', 'analysis-view']),
+  axis: z.tuple([vector, vector]).describe('m, world axes'),
+  zAxis: vector,
+  shift: z.number().describe('m, greatest way an end was carried to its joint'),
+  turn: z.number().describe('rad, how far the axis was turned by joining'),
+  section: sectionSchema.nullable(),
+  material: materialSchema.nullable(),
+});
+
+const nodeSchema = z.object({
+  id: text,
+  at: vector.describe('m, world axes'),
+  members: z.array(text).describe('GlobalIds'),
+  fixed: text.describe('letters of the rigidly held directions; "" for a free node'),
+  place: textOrNull,
+  carriedBy: z.object({ bar: text, t: z.number() }).nullable(),
+});
+
+const barSchema = z.object({
+  id: text,
+  name: text,
+  member: text.describe('GlobalId'),
+  members: z.array(text).optional(),
+  from: text,
+  to: text,
+  length: z.number(),
+});
+
+const findingSchema = z.object({
+  code: z.enum(Object.keys(FINDING_SEVERITY) as [FindingCode, ...FindingCode[]]),
+  severity: z.enum(['error', 'warning', 'note']),
+  message: text,
+  members: z.array(text),
+  nodes: z.array(text),
+  at: vector.nullable(),
+  place: textOrNull,
+  gap: z.number().nullable().describe('m'),
+  advice: text,
+});
+
+const modeSchema = z.object({
+  kind: z.enum(['local', 'part', 'whole']),
+  nodes: z.array(text),
+  movement: z.array(vector),
+  order: z.enum(['infinitesimal', 'finite', 'undecided']),
+  words: text,
+  remedy: z.array(z.union([z.object({ node: text, direction: vector }), z.object({ bar: z.tuple([text, text]) })])),
+});
+
+const stabilitySchema = z.object({
+  nodes: z.number().int(),
+  bars: z.number().int(),
+  restraints: z.number().int(),
+  springs: z.number().int(),
+  rank: z.number().int(),
+  mechanisms: z.number().int(),
+  selfStressStates: z.number().int(),
+  freeBody: z.boolean(),
+  gap: z.number().nullable().describe("ratio across the spectrum's gap, null where none is clear"),
+  setAside: z.array(text).describe('bars'),
+  modes: z.array(modeSchema),
+  modesOmitted: z.number().int().optional(),
+});
+
+const caseSchema = z.object({
+  name: text,
+  nature: z.enum(['permanent', 'imposed', 'snow', 'wind', 'thermal', 'accidental']),
+  refused: text.optional(),
+  loads: nodeForces,
+  loadSum: vector,
+  axialForce: forcePerBar,
+  displacement: displacementPerNode,
+  reactions: nodeForces,
+  residual: z.number().nullable().describe('largest out-of-balance joint force over the largest force'),
+});
+
+const combinationSchema = z.object({
+  name: text,
+  limit: z.enum(['strength', 'equilibrium', 'accidental', 'characteristic', 'frequent', 'quasi-permanent']),
+  factors: z.record(text, z.number()),
+  refused: text.optional(),
+  axialForce: forcePerBar,
+  displacement: displacementPerNode,
+  reactions: nodeForces,
+});
+
+const extreme = z.object({ force: z.number(), from: text }).nullable();
+
+const checkSchema = z.object({
+  bar: text,
+  member: text,
+  utilisation: z.number().nullable(),
+  withheld: text.optional(),
+  rule: text,
+  clause: text,
+  from: text,
+  demand: z.number(),
+  resistance: z.number(),
+  slenderness: z.number(),
+  axis: text,
+  bucklingLength: z.number(),
+  heldAt: z.array(text),
+  curve: text,
+  class: z.number().int(),
+  assumptions: z.array(text),
+});
+
+export const resultSchema = z.object({
+  format: z.literal('pinwright-result'),
+  version: z.literal(1),
+  generator: z.object({ name: text, version: text }),
+  caution: text,
+  units: z.object({ length: z.literal('m'), force: z.literal('N'), stress: z.literal('Pa') }),
+  model: z.object({
+    file: text,
+    sha256: text.describe("of the model's bytes without our own block"),
+    schema: text,
+    lengthUnit: text,
+    source: z.enum(['physical', 'analysis']),
+  }),
+  members: z.array(memberSchema),
+  nodes: z.array(nodeSchema),
+  bars: z.array(barSchema),
+  findings: z.array(findingSchema),
+  stability: stabilitySchema,
+  cases: z.array(caseSchema),
+  combinations: z.array(combinationSchema),
+  envelope: z.array(z.object({ bar: text, tension: extreme, compression: extreme })),
+  checks: z.array(checkSchema),
+});
+
+export type Result = z.infer<typeof resultSchema>;
+export type ResultMember = Result['members'][number];
+export type ResultNode = Result['nodes'][number];
+export type ResultBar = Result['bars'][number];
+export type ResultFinding = Result['findings'][number];
+export type ResultStability = Result['stability'];
+export type ResultCase = Result['cases'][number];
+export type ResultCombination = Result['combinations'][number];

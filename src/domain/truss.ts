@@ -1,0 +1,45 @@
+import type { Vec3 } from './vector.ts';
+
+/** A node on a through member that is not split there: it lies at fraction `t` of the way along bar `bar`. */
+export interface Carriage {
+  readonly bar: number;
+  readonly t: number;
+}
+
+export interface TrussNode {
+  readonly at: Vec3;
+  /** Indices into the members the truss was made of. */
+  readonly members: readonly number[];
+  readonly carriedBy: Carriage | null;
+  readonly place: string | null;
+}
+
+export interface TrussBar {
+  readonly name: string;
+  /** Indices into the members; the first is the one the bar is named for. More than one for splices and pairs. */
+  readonly members: readonly number[];
+  /** Indices into `nodes`. */
+  readonly from: number;
+  readonly to: number;
+  /** m, between the nodes. */
+  readonly length: number;
+  /** EA in N, in series or added over the bar's members; null where a member has no section. */
+  readonly stiffnessEA: number | null;
+  /** kg per metre of bar; 0 where a member has no section. */
+  readonly massPerLength: number;
+  /** 1/K; the members' expansion, weighted by length. */
+  readonly expansion: number;
+}
+
+/** How far a member's axis was carried to reach its joints: greatest shift of an end (m) and turn (rad). */
+export interface Faith {
+  readonly shift: number;
+  readonly turn: number;
+}
+
+/** Nodes and bars, in the order of geometry. `faith` is one entry a member. */
+export interface Truss {
+  readonly nodes: readonly TrussNode[];
+  readonly bars: readonly TrussBar[];
+  readonly faith: readonly Faith[];
+}

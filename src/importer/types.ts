@@ -1,0 +1,17 @@
+import type { Finding } from '../domain/finding.ts';
+import type { Member } from '../domain/member.ts';
+import type { PlaceNamer } from '../domain/place.ts';
+
+/** What was read of a model, before any scope is applied. */
+export interface ImportedModel {
+  readonly schema: string;
+  /** The file's own length unit as people write it: mm, m, in, ft. */
+  readonly lengthUnit: string;
+  readonly source: 'physical' | 'analysis';
+  /** In the order of geometry, not of the file. */
+  readonly members: readonly Member[];
+  readonly findings: readonly Finding[];
+  readonly placeOf: PlaceNamer;
+  /** Elements of the classes asked for, whether or not they could be read. */
+  readonly elementCount: number;
+}

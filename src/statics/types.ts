@@ -1,0 +1,110 @@
+import type { Limit, Nature } from '../brief/types.ts';
+import type { Finding } from '../domain/finding.ts';
+import type { Vec3 } from '../domain/vector.ts';
+
+/** A node held rigidly along a unit direction. Several on one node have linearly independent directions. */
+export interface Restraint {
+  readonly node: number;
+  readonly direction: Vec3;
+}
+
+/** A spring from a node to the ground along a unit direction, N/m. */
+export interface GroundSpring {
+  readonly node: number;
+  readonly direction: Vec3;
+  readonly stiffness: number;
+}
+
+export interface Supports {
+  readonly restraints: readonly Restraint[];
+  readonly springs: readonly GroundSpring[];
+}
+
+export interface NodalForce {
+  readonly node: number;
+  /** N, global axes. */
+  readonly force: Vec3;
+}
+
+/** One entry a loaded node; loads on carried nodes are listed at the carried node. */
+export interface LoadCase {
+  readonly name: string;
+  readonly nature: Nature;
+  readonly loads: readonly NodalForce[];
+}
+
+/** One independent way the truss can move without straining a bar. */
+export interface Mode {
+  readonly kind: 'local' | 'part' | 'whole';
+  readonly nodes: readonly number[];
+  /** One vector for each of `nodes`, largest component 1. */
+  readonly movement: readonly Vec3[];
+  readonly order: 'infinitesimal' | 'finite' | 'undecided';
+  readonly words: string;
+  readonly remedy: readonly Remedy[];
+}
+
+export type Remedy =
+  | { readonly node: number; readonly direction: Vec3 }
+  | { readonly bar: readonly [number, number] };
+
+/** The judgement. Counts leave out carried nodes and what is set aside: m = 3 nodes - restraints - rank, s = bars + springs - rank. */
+export interface Stability {
+  readonly nodes: number;
+  readonly bars: number;
+  readonly restraints: number;
+  readonly springs: number;
+  readonly rank: number;
+  readonly mechanisms: number;
+  readonly selfStressStates: number;
+  /** Judged without any support: six whole motions are expected and no fault. */
+  readonly freeBody: boolean;
+  /** Ratio across the spectrum's gap; null where none is clear. */
+  readonly gap: number | null;
+  /** Bars of parts that nothing supports, by index. */
+  readonly setAside: readonly number[];
+  /** All modes, however many; outputs list the first hundred. */
+  readonly modes: readonly Mode[];
+  readonly findings: readonly Finding[];
+}
+
+/** Forces of one case. Entries are null where the case is refused or the bar or node is set aside. */
+export interface SolvedCase {
+  readonly name: string;
+  readonly nature: Nature;
+  /** Why the case could not be carried; null where it was. */
+  readonly refused: string | null;
+  readonly loads: readonly NodalForce[];
+  readonly loadSum: Vec3;
+  /** N, one per bar, tension positive. */
+  readonly axialForce: readonly (number | null)[];
+  /** m, one per node. */
+  readonly displacement: readonly (Vec3 | null)[];
+  /** Force of the support on the truss, one entry a supported node. */
+  readonly reactions: readonly NodalForce[];
+  /** Largest out-of-balance joint force over the largest force. */
+  readonly residual: number | null;
+}
+
+export interface SolvedCombination {
+  readonly name: string;
+  readonly limit: Limit;
+  readonly factors: Readonly<Record<string, number>>;
+  readonly refused: string | null;
+  readonly axialForce: readonly (number | null)[];
+  readonly displacement: readonly (Vec3 | null)[];
+  readonly reactions: readonly NodalForce[];
+}
+
+export interface ExtremeForce {
+  readonly force: number;
+  /** Name of the combination or case it comes from. */
+  readonly from: string;
+}
+
+/** Greatest tension and compression of one bar; null where it never has any. */
+export interface BarEnvelope {
+  readonly bar: number;
+  readonly tension: ExtremeForce | null;
+  readonly compression: ExtremeForce | null;
+}
