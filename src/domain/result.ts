@@ -49,7 +49,7 @@ const memberSchema = z.object({
   axisFrom: z.enum(['axis', 'extrusion', 'swept', 'mesh', 'analysis-view']),
   axis: z.tuple([vector, vector]).describe('m, world axes'),
   zAxis: vector,
-  shift: z.number().describe('m, greatest way an end was carried to its joint'),
+  shift: z.number().describe('m, greatest sideways distance of its nodes from its axis as drawn'),
   turn: z.number().describe('rad, how far the axis was turned by joining'),
   section: sectionSchema.nullable(),
   material: materialSchema.nullable(),

@@ -11,6 +11,8 @@ export interface TrussNode {
   /** Indices into the members the truss was made of. */
   readonly members: readonly number[];
   readonly carriedBy: Carriage | null;
+  /** kg of overhangs that were cut off here: they carry no force but weigh. */
+  readonly overhangMass: number;
   readonly place: string | null;
 }
 
@@ -31,7 +33,7 @@ export interface TrussBar {
   readonly expansion: number;
 }
 
-/** How far a member's axis was carried to reach its joints: greatest shift of an end (m) and turn (rad). */
+/** How far joining moved a member off its axis as drawn: greatest sideways shift (m) and turn (rad). */
 export interface Faith {
   readonly shift: number;
   readonly turn: number;

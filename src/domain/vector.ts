@@ -37,3 +37,10 @@ export function anyNormal(u: Vec3): Vec3 {
   const steep = Math.abs(u[2]) > 1 - 1e-9;
   return unit(steep ? cross([1, 0, 0], u) : cross(UP, u)) as Vec3;
 }
+
+/** The mean of at least one point. */
+export function meanOf(points: readonly Vec3[]): Vec3 {
+  let sum: Vec3 = ORIGIN;
+  for (const point of points) sum = add(sum, point);
+  return scale(sum, 1 / points.length);
+}

@@ -1,6 +1,6 @@
 import { existsSync } from 'node:fs';
-import { fileURLToPath } from 'node:url';
 import { join, resolve } from 'node:path';
+import { fileURLToPath } from 'node:url';
 
 const checkout = fileURLToPath(new URL('../..', import.meta.url));
 

@@ -1,0 +1,171 @@
+import { CAUTION } from '../domain/caution.ts';
+import type { Finding } from '../domain/finding.ts';
+import type { Member } from '../domain/member.ts';
+import type { Result } from '../domain/result.ts';
+import type { Truss } from '../domain/truss.ts';
+import type { Vec3 } from '../domain/vector.ts';
+import type {
+  BarEnvelope,
+  ExtremeForce,
+  Mode,
+  NodalForce,
+  SolvedCase,
+  SolvedCombination,
+  Stability,
+  Supports,
+} from '../statics/types.ts';
+
+/** Everything a run found, by index; the result says the same by name. */
+export interface RunRecord {
+  readonly generator: Result['generator'];
+  readonly model: Result['model'];
+  readonly members: readonly Member[];
+  readonly truss: Truss;
+  readonly supports: Supports;
+  readonly stability: Stability;
+  readonly findings: readonly Finding[];
+  readonly cases: readonly SolvedCase[];
+  readonly combinations: readonly SolvedCombination[];
+  readonly envelope: readonly BarEnvelope[];
+}
+
+const MODES_LISTED = 100;
+
+const memberId = (index: number): string => `m${index + 1}`;
+const nodeId = (index: number): string => `n${index + 1}`;
+const barId = (index: number): string => `b${index + 1}`;
+
+/** The result of CONTRACT section 3. */
+export function assembleResult(run: RunRecord): Result {
+  const { truss, members } = run;
+  const fixed = fixedLetters(run.supports);
+  return {
+    format: 'pinwright-result',
+    version: 1,
+    generator: run.generator,
+    caution: CAUTION,
+    units: { length: 'm', force: 'N', stress: 'Pa' },
+    model: run.model,
+    members: members.map((member, index) => resultMember(member, index, truss)),
+    nodes: truss.nodes.map((node, index) => ({
+      id: nodeId(index),
+      at: point(node.at),
+      members: [...new Set(node.members.map((member) => members[member].globalId))],
+      fixed: fixed.get(index) ?? '',
+      place: node.place,
+      carriedBy: node.carriedBy && { bar: barId(node.carriedBy.bar), t: node.carriedBy.t },
+    })),
+    bars: truss.bars.map((bar, index) => resultBar(bar, index, members)),
+    findings: run.findings.map((finding) => ({
+      ...finding,
+      members: [...finding.members],
+      nodes: finding.nodes.map(nodeId),
+      at: finding.at && point(finding.at),
+    })),
+    stability: resultStability(run.stability),
+    cases: run.cases.map(resultCase),
+    combinations: run.combinations.map(resultCombination),
+    envelope: run.envelope.map(({ bar, tension, compression }) => ({
+      bar: barId(bar),
+      tension: extreme(tension),
+      compression: extreme(compression),
+    })),
+    checks: [],
+  };
+}
+
+const point = (at: Vec3): [number, number, number] => [at[0], at[1], at[2]];
+const extreme = (force: ExtremeForce | null) => force && { ...force };
+const nodalForces = (forces: readonly NodalForce[]) =>
+  forces.map(({ node, force }) => ({ node: nodeId(node), force: point(force) }));
+
+function resultMember(member: Member, index: number, truss: Truss): Result['members'][number] {
+  const { section, material, axis, zAxis, layer, partOf, ...told } = member;
+  const { shift, turn } = truss.faith[index];
+  return {
+    id: memberId(index),
+    ...told,
+    axis: [point(axis[0]), point(axis[1])],
+    zAxis: point(zAxis),
+    shift,
+    turn,
+    section: section && resultSection(section),
+    material: { ...material },
+  };
+}
+
+function resultSection({ depth, width, ...section }: NonNullable<Member['section']>) {
+  return section;
+}
+
+function resultBar(bar: Truss['bars'][number], index: number, members: readonly Member[]): Result['bars'][number] {
+  const own = bar.members.map((member) => members[member].globalId);
+  return {
+    id: barId(index),
+    name: bar.name,
+    member: own[0],
+    ...(own.length > 1 ? { members: own } : {}),
+    from: nodeId(bar.from),
+    to: nodeId(bar.to),
+    length: bar.length,
+  };
+}
+
+/** Letters of the directions along the world axes that are rigidly held. */
+function fixedLetters({ restraints }: Supports): Map<number, string> {
+  const letters = new Map<number, string>();
+  for (const [k, letter] of ['x', 'y', 'z'].entries()) {
+    for (const { node, direction } of restraints) {
+      if (Math.abs(direction[k]) > 1 - 1e-12) letters.set(node, (letters.get(node) ?? '') + letter);
+    }
+  }
+  return letters;
+}
+
+function resultStability(stability: Stability): Result['stability'] {
+  const { modes, setAside, findings, ...counts } = stability;
+  const listed = modes.slice(0, MODES_LISTED);
+  const omitted = stability.mechanisms - listed.length;
+  return {
+    ...counts,
+    setAside: setAside.map(barId),
+    modes: listed.map(resultMode),
+    ...(omitted > 0 ? { modesOmitted: omitted } : {}),
+  };
+}
+
+function resultMode({ nodes, movement, remedy, ...mode }: Mode): Result['stability']['modes'][number] {
+  return {
+    ...mode,
+    nodes: nodes.map(nodeId),
+    movement: movement.map(point),
+    remedy: remedy.map((step) =>
+      'bar' in step
+        ? { bar: [nodeId(step.bar[0]), nodeId(step.bar[1])] }
+        : { node: nodeId(step.node), direction: point(step.direction) },
+    ),
+  };
+}
+
+function resultCase({ refused, ...solved }: SolvedCase): Result['cases'][number] {
+  return {
+    ...solved,
+    ...(refused === null ? {} : { refused }),
+    loads: nodalForces(solved.loads),
+    loadSum: point(solved.loadSum),
+    axialForce: [...solved.axialForce],
+    displacement: solved.displacement.map((movement) => movement && point(movement)),
+    reactions: nodalForces(solved.reactions),
+  };
+}
+
+function resultCombination({ refused, ...solved }: SolvedCombination): Result['combinations'][number] {
+  return {
+    ...solved,
+    ...(refused === null ? {} : { refused }),
+    factors: { ...solved.factors },
+    axialForce: [...solved.axialForce],
+    displacement: solved.displacement.map((movement) => movement && point(movement)),
+    reactions: nodalForces(solved.reactions),
+  };
+}

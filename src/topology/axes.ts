@@ -1,0 +1,88 @@
+import type { Member } from '../domain/member.ts';
+import { cross, dot, norm, scale, subtract, unit, type Vec3 } from '../domain/vector.ts';
+import { TOLERANCE } from './options.ts';
+
+/** A member's axis made ready for joining. */
+export interface Axis {
+  /** Index into the members. */
+  readonly member: number;
+  readonly start: Vec3;
+  readonly finish: Vec3;
+  /** Unit, from start to finish. */
+  readonly direction: Vec3;
+  readonly length: number;
+  /** The greater extent of the section. */
+  readonly depth: number;
+  readonly assembly: string | null;
+  readonly sectionName: string | null;
+  /** Half the section's extent in a unit direction. */
+  readonly halfExtent: (direction: Vec3) => number;
+}
+
+/** The axes of all members that have a length, in the members' order; null for the others. */
+export function makeAxes(members: readonly Member[]): (Axis | null)[] {
+  return members.map((member, index) => {
+    const [start, finish] = member.axis;
+    const line = subtract(finish, start);
+    const length = norm(line);
+    const direction = unit(line);
+    if (direction === null || length < TOLERANCE.zeroLength) return null;
+    return {
+      member: index,
+      start,
+      finish,
+      direction,
+      length,
+      depth: member.section ? Math.max(member.section.depth, member.section.width) : TOLERANCE.unknownDepth,
+      assembly: member.partOf === 'IfcElementAssembly' ? member.assembly : null,
+      sectionName: member.section?.name ?? null,
+      halfExtent: halfExtentOf(member, direction),
+    };
+  });
+}
+
+function halfExtentOf(member: Member, axis: Vec3): (direction: Vec3) => number {
+  const section = member.section;
+  if (section === null) return () => TOLERANCE.unknownDepth / 2;
+  if (section.shape === 'CHS' || section.shape === 'circle') return () => section.depth / 2;
+  const z = member.zAxis;
+  const y = cross(z, axis);
+  return (direction) => (Math.abs(dot(direction, y)) * section.width + Math.abs(dot(direction, z)) * section.depth) / 2;
+}
+
+/** Where the lines of two axes come nearest: distances along each from its start, the distance and its direction. */
+export interface Approach {
+  readonly s: number;
+  readonly t: number;
+  readonly distance: number;
+  /** Unit, from the first to the second; null where the lines meet. */
+  readonly normal: Vec3 | null;
+}
+
+/** Nearest points of two lines that are not parallel. */
+export function approach(a: Axis, b: Axis): Approach {
+  const w = subtract(b.start, a.start);
+  const uv = dot(a.direction, b.direction);
+  const wu = dot(w, a.direction);
+  const wv = dot(w, b.direction);
+  const sine2 = 1 - uv * uv;
+  const s = (wu - uv * wv) / sine2;
+  const t = (uv * wu - wv) / sine2;
+  const gap: Vec3 = [0, 1, 2].map((k) => w[k] + t * b.direction[k] - s * a.direction[k]) as unknown as Vec3;
+  return { s, t, distance: norm(gap), normal: unit(gap) };
+}
+
+export const sineBetween = (a: Axis, b: Axis): number => norm(cross(a.direction, b.direction));
+
+/** Direction in which `a` comes at `b`: the part of a's direction that is square to b. Not for parallel axes. */
+export function approachDirection(a: Axis, b: Axis): Vec3 {
+  const square = subtract(a.direction, scale(b.direction, dot(a.direction, b.direction)));
+  return unit(square) as Vec3;
+}
+
+/** Distance from a point to the axis between its ends, and where the nearest point lies along it. */
+export function distanceToAxis(point: Vec3, axis: Axis): { readonly distance: number; readonly s: number } {
+  const w = subtract(point, axis.start);
+  const s = Math.min(Math.max(dot(w, axis.direction), 0), axis.length);
+  return { distance: norm(subtract(w, scale(axis.direction, s))), s };
+}

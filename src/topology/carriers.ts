@@ -1,0 +1,94 @@
+import type { Axis } from './axes.ts';
+import type { JoinOptions } from './options.ts';
+import { isFreeEnd, type Vertex, type VertexGraph } from './vertices.ts';
+
+/** Slope above which a member that frames in from below and ends free is a column standing on the ground: 60 degrees. */
+const STEEP = Math.sin(Math.PI / 3);
+
+/**
+ * For each vertex the member that carries it, or null for a node of the truss in its own right. A through member is
+ * split only where something that triangulates with it frames in; elsewhere (a purlin between panel points, a sag
+ * rod) a hinge in it would be false, so it carries the vertex (METHODS 2.4).
+ */
+export function findCarriers(
+  graph: VertexGraph,
+  axes: readonly (Axis | null)[],
+  options: JoinOptions,
+): (number | null)[] {
+  const carriers = graph.vertices.map((vertex, index) =>
+    options.chords === 'strict' ? null : carrierOf(vertex, index, graph, axes),
+  );
+  breakCycles(graph, carriers);
+  return carriers;
+}
+
+function carrierOf(vertex: Vertex, index: number, graph: VertexGraph, axes: readonly (Axis | null)[]): number | null {
+  const through = vertex.stations.filter(({ role }) => role === 'through').map(({ member }) => member);
+  if (through.length === 0) return null;
+  if (through.some((member) => isTriangulated(member, index, graph, axes))) return null;
+  const supporting = through.filter((member) => !vertex.seated.has(member));
+  const candidates = supporting.length > 0 ? supporting : through;
+  const depth = (member: number) => axes[member]?.depth ?? 0;
+  return candidates.reduce((best, member) => (depth(member) > depth(best) ? member : best));
+}
+
+/**
+ * Whether some member that frames in at the vertex closes a triangle on `runner`: its far end is tied, by a third
+ * member, back to the runner elsewhere. A column that stands on the ground holds its vertex as well.
+ */
+function isTriangulated(runner: number, index: number, graph: VertexGraph, axes: readonly (Axis | null)[]): boolean {
+  const { vertices, chains } = graph;
+  const vertex = vertices[index];
+  const onRunner = new Set(chains[runner]);
+  onRunner.delete(index);
+  for (const { member } of vertex.stations) {
+    if (member === runner || vertex.seated.has(member)) continue;
+    for (const far of neighboursOn(chains[member], index)) {
+      if (isFoot(vertices[far], vertex, axes[member])) return true;
+      for (const { member: third } of vertices[far].stations) {
+        if (third === member || third === runner) continue;
+        if (chains[third].some((other) => onRunner.has(other))) return true;
+      }
+    }
+  }
+  return false;
+}
+
+function isFoot(far: Vertex, near: Vertex, axis: Axis | null): boolean {
+  return axis !== null && isFreeEnd(far) && far.at[2] < near.at[2] && Math.abs(axis.direction[2]) > STEEP;
+}
+
+function neighboursOn(chain: readonly number[], vertex: number): number[] {
+  const at = chain.indexOf(vertex);
+  return [chain[at - 1], chain[at + 1]].filter((other) => other !== undefined);
+}
+
+/** Members that carry one another in a ring (each resting on the next) cannot all be carried: the ring is opened. */
+function breakCycles(graph: VertexGraph, carriers: (number | null)[]): void {
+  const state = new Uint8Array(carriers.length);
+  const DONE = 2;
+  const OPEN = 1;
+  for (let root = 0; root < carriers.length; root++) visit(root);
+
+  function visit(vertex: number): void {
+    if (state[vertex] === DONE || carriers[vertex] === null) return;
+    if (state[vertex] === OPEN) {
+      carriers[vertex] = null;
+      return;
+    }
+    state[vertex] = OPEN;
+    for (const end of barEnds(vertex)) visit(end);
+    state[vertex] = DONE;
+  }
+
+  function barEnds(vertex: number): number[] {
+    const carrier = carriers[vertex];
+    if (carrier === null) return [];
+    const chain = graph.chains[carrier];
+    const at = chain.indexOf(vertex);
+    const splits = (other: number) => carriers[other] !== carrier;
+    const before = chain.slice(0, at).findLast(splits);
+    const after = chain.slice(at + 1).find(splits);
+    return [before, after].filter((end) => end !== undefined);
+  }
+}

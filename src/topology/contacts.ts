@@ -1,0 +1,145 @@
+import { along, between, dot, scale, subtract, type Vec3 } from '../domain/vector.ts';
+import { type Axis, approach, approachDirection, sineBetween } from './axes.ts';
+import { type JoinOptions, TOLERANCE } from './options.ts';
+import { indexBoxes, searchBoxes } from './spatial-index.ts';
+
+/** Two axes that come near each other, and where. */
+export interface Contact {
+  /** Members, a < b. */
+  readonly a: number;
+  readonly b: number;
+  /** Distances along each axis from its start, m; below zero or beyond the length where an end is carried on. */
+  readonly s: number;
+  readonly t: number;
+  readonly point: Vec3;
+  /** `seat`: one sits on the other; `crossing`: both run through and only the brief or a third member joins them. */
+  readonly kind: 'meets' | 'seat' | 'crossing';
+  /** m by which the two axes have to be carried. */
+  readonly cost: number;
+}
+
+/** A contact with how near its limits it is: at most 1 is accepted. */
+export interface JudgedContact {
+  readonly contact: Contact;
+  readonly ratio: number;
+}
+
+/** All pairs of axes that meet, sit or cross. */
+export function findContacts(axes: readonly (Axis | null)[], options: JoinOptions): Contact[] {
+  const present = axes.filter((axis) => axis !== null);
+  const boxes = new Float64Array(6 * present.length);
+  present.forEach((axis, i) => {
+    boxes.set(boxAround(axis, largestReach(axis, options)), 6 * i);
+  });
+  const index = indexBoxes(boxes);
+  const contacts: Contact[] = [];
+  present.forEach((axis, i) => {
+    searchBoxes(index, boxes.subarray(6 * i, 6 * i + 6), (j) => {
+      if (j <= i) return;
+      const judged = judgePair(axis, present[j], options);
+      if (judged !== null && judged.ratio <= 1) contacts.push(judged.contact);
+    });
+  });
+  return contacts.sort((p, q) => p.a - q.a || p.b - q.b);
+}
+
+/** The box of an axis, widened on all sides. */
+export function boxAround(axis: Axis, margin: number): number[] {
+  const least = [0, 1, 2].map((k) => Math.min(axis.start[k], axis.finish[k]) - margin);
+  const greatest = [0, 1, 2].map((k) => Math.max(axis.start[k], axis.finish[k]) + margin);
+  return [...least, ...greatest];
+}
+
+/**
+ * No pair accepts a miss greater than the sum of its two axes' largest reaches: the one's notch and the other's half
+ * extent (at most half the diagonal of a square section) over the least sine.
+ */
+export function largestReach(axis: Axis, options: JoinOptions): number {
+  const halfExtent = axis.depth * Math.SQRT1_2;
+  const bySections = Math.max(halfExtent / TOLERANCE.leastSine, TOLERANCE.detailingGap, axis.depth);
+  return Math.max(TOLERANCE.sameAssembly * bySections + TOLERANCE.seatPacking, options.reach ?? 0, options.offset ?? 0);
+}
+
+/** How two axes come together, if they do at all. */
+export function judgePair(a: Axis, b: Axis, options: JoinOptions): JudgedContact | null {
+  const sine = sineBetween(a, b);
+  return sine < TOLERANCE.parallelSine ? judgeParallel(a, b, options) : judgeSkew(a, b, sine, options);
+}
+
+function judgeSkew(a: Axis, b: Axis, sine: number, options: JoinOptions): JudgedContact | null {
+  const { s, t, distance, normal } = approach(a, b);
+  const widening = wideningFor(a, b);
+  const reachA = (options.reach ?? reachOf(a, b.halfExtent(approachDirection(a, b)), sine)) * widening;
+  const reachB = (options.reach ?? reachOf(b, a.halfExtent(approachDirection(b, a)), sine)) * widening;
+  const extensionA = beyondEnds(s, a);
+  const extensionB = beyondEnds(t, b);
+  const lengthwise = Math.max(extensionA / reachA, extensionB / reachB);
+  const bothRunThrough = isInside(s, a, reachA) && isInside(t, b, reachB);
+
+  const offset = (options.offset ?? offsetOf(a, b)) * widening;
+  const seatHeight = normal === null ? 0 : a.halfExtent(normal) + b.halfExtent(normal);
+  const maySit = options.seated === 'node' && (!bothRunThrough || looksLikeSeat(a, b, s, t));
+  const seatMiss = maySit ? Math.abs(distance - seatHeight) / TOLERANCE.seatPacking : Number.POSITIVE_INFINITY;
+  const sits = distance > offset && seatMiss < distance / offset;
+  const sideways = sits ? seatMiss : distance / offset;
+  const kind = sits ? 'seat' : bothRunThrough ? 'crossing' : 'meets';
+  const cost = extensionA + extensionB + (sits ? Math.abs(distance - seatHeight) : distance);
+  const point = between(along(a.start, a.direction, s), along(b.start, b.direction, t), 0.5);
+  return { contact: { a: a.member, b: b.member, s, t, point, kind, cost }, ratio: Math.max(lengthwise, sideways) };
+}
+
+/** Parallel axes meet where two ends face each other: splices, a chord's ridge, a bar run on by the next. */
+function judgeParallel(a: Axis, b: Axis, options: JoinOptions): JudgedContact | null {
+  const sameWay = dot(a.direction, b.direction) > 0;
+  let best: JudgedContact | null = null;
+  for (const endA of [0, 1]) {
+    const endB = sameWay ? 1 - endA : endA;
+    const p = endA === 0 ? a.start : a.finish;
+    const q = endB === 0 ? b.start : b.finish;
+    const outward = scale(a.direction, endA === 0 ? -1 : 1);
+    const gap = subtract(q, p);
+    const lengthwise = dot(gap, outward);
+    const sideways = subtract(gap, scale(outward, lengthwise));
+    const aside = Math.hypot(...sideways);
+    const widening = wideningFor(a, b);
+    const reach = (options.reach ?? reachOf(a, 0, 1) + reachOf(b, 0, 1)) * widening;
+    const offset = (options.offset ?? offsetOf(a, b)) * widening;
+    const ratio = Math.max(Math.abs(lengthwise) / reach, aside / offset);
+    if (best !== null && best.ratio <= ratio) continue;
+    const half = lengthwise / 2;
+    const s = endA === 0 ? -half : a.length + half;
+    const t = endB === 0 ? -half : b.length + half;
+    const cost = Math.abs(lengthwise) + aside;
+    best = {
+      contact: { a: a.member, b: b.member, s, t, point: between(p, q, 0.5), kind: 'meets', cost },
+      ratio,
+    };
+  }
+  return best;
+}
+
+/** How far an end of `own` may be carried to a member that has this half extent on its way (METHODS 2.2). */
+function reachOf(own: Axis, halfExtentMet: number, sine: number): number {
+  const notch = Math.max(TOLERANCE.detailingGap, TOLERANCE.ownDepthShare * own.depth);
+  return halfExtentMet / Math.max(sine, TOLERANCE.leastSine) + notch;
+}
+
+const offsetOf = (a: Axis, b: Axis): number => Math.max(TOLERANCE.leastOffset, Math.max(a.depth, b.depth) / 2);
+
+const wideningFor = (a: Axis, b: Axis): number =>
+  a.assembly !== null && a.assembly === b.assembly ? TOLERANCE.sameAssembly : 1;
+
+const beyondEnds = (s: number, axis: Axis): number => Math.max(0, -s, s - axis.length);
+
+const isInside = (s: number, axis: Axis, reach: number): boolean => s > reach && s < axis.length - reach;
+
+/**
+ * Two members that both run on: a continuous purlin over a continuous chord sits; two alike that cross near the
+ * middle of both are crossed bracing laid back to back, and a thin rod that passes a deep member only passes it.
+ */
+function looksLikeSeat(a: Axis, b: Axis, s: number, t: number): boolean {
+  const alike = a.sectionName === b.sectionName && Math.abs(a.depth - b.depth) < 1e-6;
+  const middle = (x: number, axis: Axis) => Math.abs(x / axis.length - 0.5) < 0.2;
+  const slender = Math.min(a.depth, b.depth) < 0.4 * Math.max(a.depth, b.depth);
+  return !slender && !(alike && middle(s, a) && middle(t, b));
+}

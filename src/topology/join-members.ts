@@ -1,0 +1,87 @@
+import { type Finding, finding } from '../domain/finding.ts';
+import type { Member } from '../domain/member.ts';
+import type { PlaceNamer } from '../domain/place.ts';
+import type { Truss } from '../domain/truss.ts';
+import { type Axis, makeAxes } from './axes.ts';
+import { buildTruss } from './build-truss.ts';
+import { findCarriers } from './carriers.ts';
+import { findContacts } from './contacts.ts';
+import { makeJoints } from './joints.ts';
+import { labelOf, millimetres } from './labels.ts';
+import { looseEndFindings } from './loose-ends.ts';
+import { JOIN_DEFAULTS, type JoinOptions } from './options.ts';
+import { cutOverhangs } from './overhangs.ts';
+import { partFindings } from './parts.ts';
+import { cutPieces, joinSplices } from './pieces.ts';
+import { findStations } from './stations.ts';
+import { findTwins } from './twins.ts';
+import { makeVertices } from './vertices.ts';
+
+export interface JoinContext {
+  readonly placeOf: PlaceNamer;
+  /** Nodes of a truss that stand on supports: a free end there is a bearing, not a fault. */
+  readonly supportedNodes: (truss: Truss) => ReadonlySet<number>;
+}
+
+const NO_CONTEXT: JoinContext = { placeOf: () => null, supportedNodes: () => new Set() };
+
+/**
+ * Makes a truss of members: finds where axes meet, joins them into work points, and splits members into bars.
+ * Nodes and bars come in the order of geometry; the members' indices in the truss are those of `members`.
+ */
+export function joinMembers(
+  members: readonly Member[],
+  options: Partial<JoinOptions> = {},
+  context: Partial<JoinContext> = {},
+): { truss: Truss; findings: Finding[] } {
+  const chosen = { ...JOIN_DEFAULTS, ...options };
+  const { placeOf, supportedNodes } = { ...NO_CONTEXT, ...context };
+  const drawn = makeAxes(members);
+  const twins = findTwins(members, drawn, placeOf);
+  const axes = drawn.map((axis, member) => (twins.leftOut.has(member) ? null : axis));
+
+  const whole = trussOf(members, axes, chosen, placeOf);
+  const cut = cutOverhangs(whole, supportedNodes(whole));
+  const supported = supportedNodes(cut);
+  const findings = [
+    ...zeroLengthFindings(members, drawn, placeOf),
+    ...twins.findings,
+    ...looseEndFindings(cut, members, axes, supported, chosen, placeOf),
+    ...partFindings(cut, members, axes, supported, placeOf),
+  ];
+  return { truss: cut, findings };
+}
+
+function trussOf(
+  members: readonly Member[],
+  axes: readonly (Axis | null)[],
+  options: JoinOptions,
+  placeOf: PlaceNamer,
+): Truss {
+  const contacts = findContacts(axes, options).filter(
+    ({ kind }) => kind !== 'crossing' || options.crossings === 'joined',
+  );
+  const { joints } = makeJoints(axes, contacts, findStations(axes, contacts));
+  const graph = makeVertices(axes, joints);
+  const carriers = findCarriers(graph, axes, options);
+  const runs = joinSplices(cutPieces(graph, carriers), graph.vertices);
+  return buildTruss(graph, runs, members, axes, placeOf);
+}
+
+function zeroLengthFindings(
+  members: readonly Member[],
+  axes: readonly (Axis | null)[],
+  placeOf: PlaceNamer,
+): Finding[] {
+  return members.flatMap((member, index) => {
+    if (axes[index] !== null) return [];
+    const at = member.axis[0];
+    const label = labelOf(member);
+    return finding(
+      'zero-length',
+      `${label} has an axis of less than ${millimetres(0.001)} and is left out.`,
+      `Delete ${label}, or draw it with its real length.`,
+      { members: [member.globalId], at, place: placeOf(at) },
+    );
+  });
+}

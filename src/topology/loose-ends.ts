@@ -1,0 +1,124 @@
+import { type Finding, finding } from '../domain/finding.ts';
+import type { Member } from '../domain/member.ts';
+import type { PlaceNamer } from '../domain/place.ts';
+import type { Truss } from '../domain/truss.ts';
+import { distance, type Vec3 } from '../domain/vector.ts';
+import { type Axis, distanceToAxis } from './axes.ts';
+import { boxAround, judgePair, largestReach } from './contacts.ts';
+import { labelOf, millimetres } from './labels.ts';
+import { type JoinOptions, TOLERANCE } from './options.ts';
+import { indexBoxes, searchBoxes } from './spatial-index.ts';
+
+const STEEP = Math.sin(Math.PI / 3);
+
+/** Every end that no joint took and nothing supports: a near miss where another axis is close, else a loose end. */
+export function looseEndFindings(
+  truss: Truss,
+  members: readonly Member[],
+  axes: readonly (Axis | null)[],
+  supported: ReadonlySet<number>,
+  options: JoinOptions,
+  placeOf: PlaceNamer,
+): Finding[] {
+  const search = nearMissSearch(axes, options);
+  const barsOfMember = countBars(truss);
+  const findings: Finding[] = [];
+  for (const end of freeEnds(truss, axes)) {
+    if (supported.has(end.node) || (barsOfMember.get(end.axis.member) ?? 0) === 0) continue;
+    const miss = search(end);
+    const isFoot = end.axis.direction[2] * (end.atStart ? 1 : -1) > STEEP && supported.size === 0;
+    if (miss !== null) findings.push(nearMiss(end, miss, members, placeOf));
+    else if (!isFoot && !isLone(truss, end.axis.member)) findings.push(looseEnd(end, members, placeOf));
+  }
+  return findings;
+}
+
+interface FreeEnd {
+  readonly axis: Axis;
+  readonly node: number;
+  readonly at: Vec3;
+  readonly atStart: boolean;
+}
+
+interface Miss {
+  readonly other: Axis;
+  readonly gap: number;
+  readonly ratio: number;
+}
+
+function freeEnds(truss: Truss, axes: readonly (Axis | null)[]): FreeEnd[] {
+  const ends: FreeEnd[] = [];
+  truss.nodes.forEach(({ members, at, carriedBy }, node) => {
+    const axis = members.length === 1 && carriedBy === null ? axes[members[0]] : null;
+    if (axis) ends.push({ axis, node, at, atStart: distance(at, axis.start) < distance(at, axis.finish) });
+  });
+  return ends;
+}
+
+function countBars(truss: Truss): Map<number, number> {
+  const count = new Map<number, number>();
+  for (const bar of truss.bars) for (const member of bar.members) count.set(member, (count.get(member) ?? 0) + 1);
+  return count;
+}
+
+/** Both ends of a lone member are free; that is one finding of its own. */
+function isLone(truss: Truss, member: number): boolean {
+  return truss.nodes.every((node) => !node.members.includes(member) || node.members.length === 1);
+}
+
+function nearMissSearch(axes: readonly (Axis | null)[], options: JoinOptions): (end: FreeEnd) => Miss | null {
+  const present = axes.filter((axis) => axis !== null);
+  const boxes = new Float64Array(6 * present.length);
+  present.forEach((axis, i) => {
+    boxes.set(boxAround(axis, TOLERANCE.nearMiss * largestReach(axis, options)), 6 * i);
+  });
+  const index = indexBoxes(boxes);
+  return ({ axis, at, atStart }) => {
+    const margin = TOLERANCE.nearMiss * largestReach(axis, options);
+    let best: Miss | null = null;
+    const box = [...at.map((x) => x - margin), ...at.map((x) => x + margin)];
+    searchBoxes(index, box, (i) => {
+      const other = present[i];
+      if (other === axis) return;
+      const judged = judgePair(axis, other, options);
+      if (judged === null || judged.ratio > TOLERANCE.nearMiss || judged.contact.kind === 'crossing') return;
+      const { s } = judged.contact;
+      if (s < axis.length / 2 !== atStart) return;
+      const { distance: gap } = distanceToAxis(at, other);
+      if (
+        best === null ||
+        judged.ratio < best.ratio ||
+        (judged.ratio === best.ratio && other.member < best.other.member)
+      )
+        best = { other, gap, ratio: judged.ratio };
+    });
+    return best;
+  };
+}
+
+function nearMiss(end: FreeEnd, miss: Miss, members: readonly Member[], placeOf: PlaceNamer): Finding {
+  const own = members[end.axis.member];
+  const other = members[miss.other.member];
+  return finding(
+    'near-miss',
+    `An end of ${labelOf(own)} misses ${labelOf(other)} by ${millimetres(miss.gap)} and joins nothing.`,
+    `Carry the end of ${labelOf(own)} on to the axis of ${labelOf(other)}, or widen the reach in the brief if the gap is meant.`,
+    {
+      members: [own.globalId, other.globalId],
+      nodes: [end.node],
+      at: end.at,
+      place: placeOf(end.at),
+      gap: miss.gap,
+    },
+  );
+}
+
+function looseEnd(end: FreeEnd, members: readonly Member[], placeOf: PlaceNamer): Finding {
+  const own = members[end.axis.member];
+  return finding(
+    'loose-end',
+    `An end of ${labelOf(own)} joins nothing, and no other member is near.`,
+    `Join it to what it should meet, or name a support there in the brief.`,
+    { members: [own.globalId], nodes: [end.node], at: end.at, place: placeOf(end.at) },
+  );
+}

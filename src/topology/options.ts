@@ -1,0 +1,43 @@
+/** How far axes may be carried to meet. Lengths in metres; METHODS "Topology" gives the trade reasons. */
+export interface JoinOptions {
+  /** How far an end may be carried along its own axis; null lets the two sections decide. */
+  readonly reach: number | null;
+  /** Shortest distance between two axes that are still taken to meet; null lets the two sections decide. */
+  readonly offset: number | null;
+  /** Axes that run through each other away from their ends (crossed bracing). */
+  readonly crossings: 'apart' | 'joined';
+  /** Members that sit on others (purlins on chords). */
+  readonly seated: 'node' | 'apart';
+  /** `strict` splits a through member at every joint; `pinned` only where something triangulates. */
+  readonly chords: 'pinned' | 'strict';
+}
+
+export const JOIN_DEFAULTS: JoinOptions = {
+  reach: null,
+  offset: null,
+  crossings: 'apart',
+  seated: 'node',
+  chords: 'pinned',
+};
+
+/** Tolerances of joining, in metres or as plain ratios. Starting values of METHODS 2.2. */
+export const TOLERANCE = {
+  /** Detailing gap that a gusset bridges whatever the size of the member. */
+  detailingGap: 0.06,
+  /** Share of a member's own depth that its end plate or notch may take off. */
+  ownDepthShare: 0.75,
+  leastSine: 0.3,
+  leastOffset: 0.02,
+  /** Packing, cleat thickness and camber under a seat. */
+  seatPacking: 0.025,
+  /** Members of one assembly were drawn to belong together. */
+  sameAssembly: 1.5,
+  leastJoint: 0.05,
+  /** Below this sine two axes count as parallel: where their lines cross says nothing about where they meet. */
+  parallelSine: 0.17,
+  zeroLength: 0.001,
+  /** Depth assumed for a member without a section. */
+  unknownDepth: 0.05,
+  /** A near miss goes on to this multiple of its own limit; beyond, the end is loose. */
+  nearMiss: 3,
+} as const;

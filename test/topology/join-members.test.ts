@@ -1,0 +1,213 @@
+import { describe, expect, it } from 'vitest';
+import type { Member } from '../../src/domain/member.ts';
+import type { Truss } from '../../src/domain/truss.ts';
+import { distance, type Vec3 } from '../../src/domain/vector.ts';
+import { joinMembers } from '../../src/topology/join-members.ts';
+import { cutBack, hollow, member, round } from '../support/members.ts';
+
+/** A pitched truss of 12 m: continuous chords, webs cut back by 90 mm from the work points. */
+function pitchedTruss(y = 0, mark = ''): Member[] {
+  const p = (x: number, z: number): Vec3 => [x, y, z];
+  return [
+    member(`${mark}BC`, p(0, 0), p(12, 0)),
+    member(`${mark}TL`, p(0, 0), p(6, 2)),
+    member(`${mark}TR`, p(12, 0), p(6, 2)),
+    cutBack(`${mark}P`, p(6, 0), p(6, 2), 0.09),
+    cutBack(`${mark}DL`, p(6, 0), p(3, 1), 0.09),
+    cutBack(`${mark}DR`, p(6, 0), p(9, 1), 0.09),
+  ];
+}
+
+function nodeAt(truss: Truss, at: Vec3): number {
+  return truss.nodes.findIndex((node) => distance(node.at, at) < 1e-6);
+}
+
+const codes = (findings: readonly { code: string }[]) => findings.map(({ code }) => code);
+
+describe('joining members', () => {
+  it('splits continuous chords where webs end and carries cut-back webs to the work points', () => {
+    const { truss, findings } = joinMembers(pitchedTruss());
+    expect(truss.nodes.map((node) => node.at.map((x) => Math.round(x * 1e6) / 1e6))).toEqual([
+      [0, 0, 0],
+      [3, 0, 1],
+      [6, 0, 0],
+      [6, 0, 2],
+      [9, 0, 1],
+      [12, 0, 0],
+    ]);
+    expect(truss.bars.map((bar) => bar.name).sort()).toEqual(
+      ['BC.1', 'BC.2', 'DL', 'DR', 'P', 'TL.1', 'TL.2', 'TR.1', 'TR.2'].sort(),
+    );
+    expect(findings).toEqual([]);
+  });
+
+  it('numbers the bars of a split member in order along it', () => {
+    const { truss } = joinMembers(pitchedTruss());
+    const [first, second] = ['BC.1', 'BC.2'].map((name) => truss.bars.find((bar) => bar.name === name));
+    expect(truss.nodes[first!.from].at[0]).toBeCloseTo(0);
+    expect(truss.nodes[first!.to].at[0]).toBeCloseTo(6);
+    expect(second!.from).toBe(first!.to);
+  });
+
+  it('takes a purlin that sits on a panel point to the chord node', () => {
+    const purlin = member('PU', [3, 0, 1 + 0.1 * Math.hypot(1, 1 / 3)], [3, 6, 1 + 0.1 * Math.hypot(1, 1 / 3)]);
+    const { truss, findings } = joinMembers([...pitchedTruss(0, 'A'), ...pitchedTruss(6, 'B'), purlin]);
+    const bar = truss.bars.find(({ name }) => name === 'PU')!;
+    expect([bar.from, bar.to]).toEqual([nodeAt(truss, [3, 0, 1]), nodeAt(truss, [3, 6, 1])]);
+    expect(codes(findings)).toEqual([]);
+  });
+
+  it('leaves the seat apart where the brief says so', () => {
+    const purlin = member('PU', [3, 0, 1.105], [3, 6, 1.105]);
+    const { truss } = joinMembers([...pitchedTruss(0, 'A'), ...pitchedTruss(6, 'B'), purlin], { seated: 'apart' });
+    const bar = truss.bars.find(({ name }) => name === 'PU')!;
+    expect(truss.nodes[bar.from].members).toHaveLength(1);
+  });
+
+  it('lets a chord carry a purlin between panel points instead of putting a hinge in it', () => {
+    const z = 0.5 + 0.1 * Math.hypot(1, 1 / 3);
+    const purlin = member('PU', [1.5, 0, z], [1.5, 6, z]);
+    const { truss } = joinMembers([...pitchedTruss(0, 'A'), ...pitchedTruss(6, 'B'), purlin]);
+    const carried = truss.nodes.filter((node) => node.carriedBy !== null);
+    expect(carried).toHaveLength(2);
+    for (const { carriedBy, at } of carried) {
+      const bar = truss.bars[carriedBy!.bar];
+      expect(bar.name).toMatch(/TL\.1$/);
+      // The purlin lies square above the chord, so its foot is a little further up the slope than its x says.
+      expect(carriedBy!.t).toBeCloseTo(0.5 + (0.1 * (1 / 3)) / Math.hypot(3, 1), 6);
+      const [a, b] = [truss.nodes[bar.from].at, truss.nodes[bar.to].at];
+      const lever = a.map((x, k) => x + carriedBy!.t * (b[k] - x));
+      expect(distance(at, lever as unknown as Vec3)).toBeLessThan(1e-12);
+    }
+  });
+
+  it('splits a chord under every purlin when chords are strict', () => {
+    const z = 0.5 + 0.1 * Math.hypot(1, 1 / 3);
+    const purlin = member('PU', [1.5, 0, z], [1.5, 6, z]);
+    const members = [...pitchedTruss(0, 'A'), ...pitchedTruss(6, 'B'), purlin];
+    const { truss } = joinMembers(members, { chords: 'strict' });
+    expect(truss.nodes.some((node) => node.carriedBy !== null)).toBe(false);
+    expect(truss.bars.some(({ name }) => name === 'ATL.3')).toBe(true);
+  });
+
+  it('lets purlins carry a sag rod at midspan', () => {
+    const rods = member('SR', [3, 3, 0], [6, 3, 0], { section: round(0.016) });
+    const { truss } = joinMembers([member('P1', [3, 0, 0], [3, 6, 0]), member('P2', [6, 0, 0], [6, 6, 0]), rods]);
+    expect(truss.nodes.filter((node) => node.carriedBy !== null)).toHaveLength(2);
+    expect(truss.bars.map(({ name }) => name).sort()).toEqual(['P1', 'P2', 'SR']);
+  });
+
+  it('keeps crossed bracing apart, unless the brief joins crossings or a third member ends there', () => {
+    const rod = { section: round(0.02) };
+    const frame = [
+      member('A', [0, 0, 0], [4, 0, 0]),
+      member('B', [0, 4, 0], [4, 4, 0]),
+      member('C', [0, 0, 0], [0, 4, 0]),
+      member('D', [4, 0, 0], [4, 4, 0]),
+      member('X1', [0, 0, 0], [4, 4, 0], rod),
+      member('X2', [4, 0, 0], [0, 4, 0], rod),
+    ];
+    const post = member('K', [2, 2, 0], [2, 2, 3], rod);
+    expect(joinMembers(frame).truss.nodes).toHaveLength(4);
+    expect(joinMembers(frame, { crossings: 'joined' }).truss.nodes).toHaveLength(5);
+    const { truss } = joinMembers([...frame, post]);
+    expect(truss.nodes[nodeAt(truss, [2, 2, 0])].members).toHaveLength(3);
+  });
+
+  it('makes one bar of two members spliced in line, with their stiffness in series', () => {
+    const thick = hollow(0.2);
+    const { truss } = joinMembers([
+      member('S1', [0, 0, 0], [3, 0, 0]),
+      member('S2', [3.02, 0, 0], [5, 0, 0], { section: thick }),
+    ]);
+    expect(truss.nodes).toHaveLength(2);
+    expect(truss.bars).toHaveLength(1);
+    expect(truss.bars[0].members).toEqual([0, 1]);
+    const [l1, l2] = [3.01, 1.99];
+    const flexibility = l1 / (2.1e11 * hollow(0.1).area) + l2 / (2.1e11 * thick.area);
+    expect(truss.bars[0].stiffnessEA).toBeCloseTo(5 / flexibility, -3);
+  });
+
+  it('cuts an overhang off and leaves its weight at the last joint', () => {
+    const eaves = pitchedTruss().map((m) =>
+      m.tag === 'TL' ? { ...m, axis: [[-1.5, 0, -0.5], m.axis[1]] as const } : m,
+    );
+    const { truss } = joinMembers(eaves);
+    expect(truss.nodes).toHaveLength(6);
+    const mass = truss.nodes[nodeAt(truss, [0, 0, 0])].overhangMass;
+    expect(mass).toBeCloseTo(hollow(0.1).area * 7850 * Math.hypot(1.5, 0.5), 6);
+  });
+
+  it('keeps an end that stands on a support', () => {
+    const column = member('C', [0, 0, -4], [0, 0, 2]);
+    const context = {
+      supportedNodes: (truss: Truss) => new Set(truss.nodes.flatMap((node, i) => (node.at[2] < -3.9 ? [i] : []))),
+    };
+    const members = [...pitchedTruss(), column];
+    const { truss, findings } = joinMembers(members, {}, context);
+    expect(nodeAt(truss, [0, 0, -4])).toBeGreaterThanOrEqual(0);
+    expect(codes(findings)).not.toContain('loose-end');
+  });
+
+  it('never merges the two ends of one member', () => {
+    const short = member('S', [0, 0, 0], [0.05, 0, 0]);
+    const { truss } = joinMembers([short, member('A', [0.05, 0, 0], [3, 0, 0]), member('B', [0, 0, 0], [0, 3, 0])]);
+    for (const bar of truss.bars) expect(bar.from).not.toBe(bar.to);
+  });
+});
+
+describe('findings of joining', () => {
+  it('says a near miss with the gap and both members', () => {
+    const members = pitchedTruss().map((m) => (m.tag === 'P' ? { ...m, axis: [m.axis[0], [6, 0, 1.7]] as const } : m));
+    const { findings } = joinMembers(members);
+    const [miss] = findings.filter(({ code }) => code === 'near-miss');
+    expect(miss.members[0]).toBe('P');
+    expect(miss.at).toEqual([6, 0, 1.7]);
+    // Straight to the nearest point of a chord that slopes by 1 in 3: 0.3 m x cos.
+    expect(miss.gap).toBeCloseTo(0.3 * Math.cos(Math.atan(1 / 3)), 6);
+  });
+
+  it('says a loose end where nothing is near', () => {
+    const { findings } = joinMembers([...pitchedTruss(), member('T', [0, 0, 0], [0, 5, 0])]);
+    expect(findings.filter(({ code }) => code === 'loose-end').map(({ members, at }) => [members, at])).toEqual([
+      [['T'], [0, 5, 0]],
+    ]);
+  });
+
+  it('says a lone member once, at its end nearest to the rest', () => {
+    const { findings } = joinMembers([...pitchedTruss(), member('L', [0, 9, 0], [0, 4, 0])]);
+    expect(codes(findings)).toEqual(['lone-member']);
+    expect(findings[0].at).toEqual([0, 4, 0]);
+    expect(findings[0].gap).toBeCloseTo(4);
+  });
+
+  it('says a separate part once, with all its members', () => {
+    const { findings } = joinMembers([...pitchedTruss(), ...pitchedTruss(8, 'far ').slice(0, 3)]);
+    expect(codes(findings)).toEqual(['separate-part']);
+    expect(findings[0].members).toEqual(['far BC', 'far TL', 'far TR']);
+    expect(findings[0].gap).toBeCloseTo(8);
+  });
+
+  it('has nothing to say of a second part that stands on its own supports', () => {
+    const members = [...pitchedTruss(), ...pitchedTruss(8, 'far ')];
+    const lowest = (truss: Truss) => new Set(truss.nodes.flatMap((node, i) => (node.at[2] < 0.01 ? [i] : [])));
+    expect(joinMembers(members, {}, { supportedNodes: lowest }).findings).toEqual([]);
+  });
+
+  it('leaves a member drawn twice out once and names both', () => {
+    const twin = {
+      ...member('P twin', [6, 0, 0.1], [6, 0, 1.9]),
+      material: { ...member('', [0, 0, 0], [1, 0, 0]).material, from: 'default' as const },
+    };
+    const { truss, findings } = joinMembers([...pitchedTruss(), twin]);
+    expect(codes(findings)).toEqual(['twin-members']);
+    expect(findings[0].members).toEqual(['P', 'P twin']);
+    expect(truss.bars).toHaveLength(9);
+  });
+
+  it('leaves out a member without length', () => {
+    const { truss, findings } = joinMembers([...pitchedTruss(), member('Z', [1, 1, 1], [1, 1, 1])]);
+    expect(codes(findings)).toEqual(['zero-length']);
+    expect(truss.bars).toHaveLength(9);
+  });
+});
