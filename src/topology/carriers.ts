@@ -27,9 +27,9 @@ function carrierOf(vertex: Vertex, index: number, graph: VertexGraph, axes: read
   if (through.length === 0) return null;
   if (through.some((member) => isTriangulated(member, index, graph, axes))) return null;
   const supporting = through.filter((member) => !vertex.seated.has(member));
-  const candidates = supporting.length > 0 ? supporting : through;
+  if (supporting.length === 0) return null;
   const depth = (member: number) => axes[member]?.depth ?? 0;
-  return candidates.reduce((best, member) => (depth(member) > depth(best) ? member : best));
+  return supporting.reduce((best, member) => (depth(member) > depth(best) ? member : best));
 }
 
 /**

@@ -81,6 +81,15 @@ describe('joining members', () => {
     }
   });
 
+  it('splits a purlin that runs over a ridge: it sits on the node and cannot carry it', () => {
+    const above = 2 + 0.1;
+    const purlin = member('PU', [6, 0, above], [6, 12, above]);
+    const frames = [0, 6, 12].flatMap((y, i) => pitchedTruss(y, 'ABC'[i]));
+    const { truss } = joinMembers([...frames, purlin]);
+    expect(truss.nodes[nodeAt(truss, [6, 6, 2])].carriedBy).toBeNull();
+    expect(truss.bars.filter(({ name }) => name.startsWith('PU'))).toHaveLength(2);
+  });
+
   it('splits a chord under every purlin when chords are strict', () => {
     const z = 0.5 + 0.1 * Math.hypot(1, 1 / 3);
     const purlin = member('PU', [1.5, 0, z], [1.5, 6, z]);
