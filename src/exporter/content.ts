@@ -1,0 +1,21 @@
+import type { Result } from '../domain/result.ts';
+import type { StepFile } from '../step/step-file.ts';
+import type { Chunks } from './chunks.ts';
+import { tableToCsv } from './csv.ts';
+import { annotate } from './ifc/annotate.ts';
+import { resultToJson } from './json.ts';
+import type { Content } from './outputs.ts';
+
+/** What each planned file holds for this result; `file` is the model that an annotated copy is made of. */
+export function contentOf(result: Result, file: StepFile): (content: Content) => Chunks {
+  return (content) => {
+    switch (content.kind) {
+      case 'json':
+        return resultToJson(result);
+      case 'csv':
+        return tableToCsv(result, content.table);
+      case 'ifc':
+        return annotate(file, result);
+    }
+  };
+}

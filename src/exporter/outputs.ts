@@ -1,0 +1,165 @@
+import { accessSync, constants, lstatSync, realpathSync, rmSync, type Stats, statSync, writeFileSync } from 'node:fs';
+import { basename, dirname, join, resolve } from 'node:path';
+import { RequestError } from '../domain/errors.ts';
+import { asRequestError, errorCode } from './outputs/failure.ts';
+import { temporaryName } from './outputs/temporary.ts';
+import { TABLE_NAMES, type TableName } from './tables.ts';
+
+/** What a file holds. */
+export type Content =
+  | { readonly kind: 'json' }
+  | { readonly kind: 'ifc' }
+  | { readonly kind: 'csv'; readonly table: TableName };
+
+export interface PlannedFile {
+  /** The path as the user gave it, for messages. */
+  readonly given: string;
+  /** Absolute, links resolved. */
+  readonly target: string;
+  readonly content: Content;
+}
+
+export interface OutputPlan {
+  readonly files: readonly PlannedFile[];
+  /** Folders to be made if they are not there; their parents are. */
+  readonly folders: readonly string[];
+  /** The result's JSON goes to standard output as well. */
+  readonly stdout: boolean;
+}
+
+const WRITTEN = '.json .csv .csv/ .ifc';
+const NOT_YET = new Set(['.ifczip', '.xlsx', '.html', '.bcf', '.bcfzip', '.svg']);
+
+/**
+ * Finds what each output path asks for and whether it can be written, before any work is done. The endings pick the
+ * formats; `-` is the JSON on standard output, a path ending in `.csv/` a folder with every table.
+ *
+ * Throws a RequestError for a path that cannot be written, stands twice or names the input.
+ */
+export function planOutputs(paths: readonly string[], inputPath: string): OutputPlan {
+  const files: PlannedFile[] = [];
+  const folders: string[] = [];
+  for (const given of paths) {
+    if (given === '-') continue;
+    if (given.toLowerCase().endsWith('.csv/')) {
+      const folder = triedFolder(given);
+      folders.push(folder);
+      for (const table of TABLE_NAMES) {
+        const target = triedFile(given, join(folder, `${table}.csv`), folder);
+        files.push({ given, target, content: { kind: 'csv', table } });
+      }
+    } else {
+      const content = contentByEnding(given);
+      files.push({ given, target: triedFile(given, resolve(given), null), content });
+    }
+  }
+  forbidDoubles(paths, files, folders);
+  forbidInput(files, inputPath);
+  return { files, folders, stdout: paths.includes('-') };
+}
+
+function contentByEnding(given: string): Content {
+  if (given.endsWith('/')) throw new RequestError(`${given}: is a folder; only one ending in .csv/ can be written`);
+  const ending = (/\.[a-z0-9]+$/i.exec(basename(given))?.[0] ?? '').toLowerCase();
+  if (ending === '.json' || ending === '.ifc') return { kind: ending === '.ifc' ? 'ifc' : 'json' };
+  if (ending === '.csv') return { kind: 'csv', table: 'bars' };
+  if (NOT_YET.has(ending)) throw new RequestError(`${given}: ${ending} is not written yet; written are ${WRITTEN}`);
+  throw new RequestError(`${given}: the ending picks the format; use one of ${WRITTEN}, or - for JSON on stdout`);
+}
+
+/** The folder's real path, if it is one or can be made. */
+function triedFolder(given: string): string {
+  const path = resolve(given);
+  const there = statOrNull(path);
+  if (there !== null && !there.isDirectory()) {
+    throw new RequestError(`${given}: a folder is due, but a file of this name is there`);
+  }
+  if (there !== null) return tryWritingInto(given, realpathSync(path));
+  return join(tryWritingInto(given, parentFolder(given, path)), basename(path));
+}
+
+/** The file's real path, if it can be written; `newFolder` is the folder planned for it, which may not be there yet. */
+function triedFile(given: string, path: string, newFolder: string | null): string {
+  if (newFolder !== null && statOrNull(newFolder) === null) return path;
+  const there = lstatOrNull(path);
+  if (there === null) return join(tryWritingInto(given, parentFolder(given, path)), basename(path));
+
+  const behind = statOrNull(path);
+  if (behind === null) throw new RequestError(`${given}: is a link to nothing; remove it or name another file`);
+  if (behind.isDirectory()) throw new RequestError(`${given}: a folder of this name is there; name a file`);
+  if (!behind.isFile()) throw new RequestError(`${given}: is not a plain file`);
+  const target = realpathSync(path);
+  try {
+    accessSync(target, constants.W_OK);
+  } catch (error) {
+    throw asRequestError(given, error);
+  }
+  tryWritingInto(given, dirname(target));
+  return target;
+}
+
+function parentFolder(given: string, path: string): string {
+  const parent = dirname(path);
+  const there = statOrNull(parent);
+  if (there === null) throw new RequestError(`${given}: the folder ${parent} does not exist; make it first`);
+  if (!there.isDirectory()) throw new RequestError(`${given}: ${parent} is not a folder`);
+  return realpathSync(parent);
+}
+
+/** Permissions do not tell the whole truth (read-only disks, quotas), so a file is made and removed again. */
+function tryWritingInto(given: string, folder: string): string {
+  const probe = join(folder, temporaryName());
+  try {
+    writeFileSync(probe, '', { flag: 'wx' });
+    rmSync(probe);
+  } catch (error) {
+    throw asRequestError(given, error);
+  }
+  return folder;
+}
+
+function forbidDoubles(paths: readonly string[], files: readonly PlannedFile[], folders: readonly string[]): void {
+  if (paths.filter((path) => path === '-').length > 1) throw new RequestError('-: stands twice among the outputs');
+  const taken = new Set<string>();
+  const claim = (given: string, path: string) => {
+    for (const name of namesOf(path)) {
+      if (taken.has(name)) throw new RequestError(`${given}: two outputs would be written to ${path}`);
+    }
+    for (const name of namesOf(path)) taken.add(name);
+  };
+  for (const folder of folders) claim(folder, folder);
+  for (const { given, target } of files) claim(given, target);
+}
+
+function forbidInput(files: readonly PlannedFile[], inputPath: string): void {
+  const input = new Set(namesOf(resolve(inputPath)));
+  for (const { given, target } of files) {
+    if (namesOf(target).some((name) => input.has(name))) {
+      throw new RequestError(`${given}: is the input itself; name another output, the model is never overwritten`);
+    }
+  }
+}
+
+/** All that two paths of one file have in common: the path with its links resolved, and the file's own number. */
+function namesOf(path: string): string[] {
+  const there = statOrNull(path);
+  return there === null ? [path] : [realpathSync(path), `${there.dev}:${there.ino}`];
+}
+
+function statOrNull(path: string): Stats | null {
+  return orNull(path, () => statSync(path));
+}
+
+function lstatOrNull(path: string): Stats | null {
+  return orNull(path, () => lstatSync(path));
+}
+
+/** Null where nothing is there; any other failure is said now, before the work. */
+function orNull(path: string, look: () => Stats): Stats | null {
+  try {
+    return look();
+  } catch (error) {
+    if (['ENOENT', 'ENOTDIR'].includes(errorCode(error))) return null;
+    throw asRequestError(path, error);
+  }
+}

@@ -1,0 +1,103 @@
+import type { Result } from '../domain/result.ts';
+import { worstBars } from './summary/bars.ts';
+import { loadCases } from './summary/cases.ts';
+import { findings } from './summary/findings.ts';
+import { degrees, harmless, millimetres, wrapped } from './summary/layout.ts';
+import { SUMMARY_DEFAULTS, type SummaryOptions } from './summary/options.ts';
+import { reactions } from './summary/reactions.ts';
+import { count, verdict } from './verdict.ts';
+
+/** The result as plain text for a terminal; a survey, which has no cases, is told without loads and forces. */
+export function summarise(result: Result, options: Partial<SummaryOptions> = {}): string {
+  const chosen = { ...SUMMARY_DEFAULTS, ...options };
+  const paragraphs = [
+    [title(result)],
+    readAndJoined(result, chosen),
+    findings(result, chosen),
+    standing(result, chosen),
+    loadCases(result, chosen),
+    worstBars(result, chosen),
+    reactions(result, chosen),
+    wrapped(result.caution, chosen.width),
+  ];
+  return `${paragraphs
+    .filter((lines) => lines.length > 0)
+    .map((lines) => lines.join('\n'))
+    .join('\n\n')}\n`;
+}
+
+function title({ generator, model }: Result): string {
+  const source = model.source === 'analysis' ? ', its structural analysis view' : '';
+  return `Pinwright ${generator.version}: ${harmless(model.file)} (${model.schema}, ${model.lengthUnit}${source})`;
+}
+
+function readAndJoined(result: Result, { extras, width }: SummaryOptions): string[] {
+  const { members, nodes, bars } = result;
+  const { elementCount, mass } = extras;
+  const of = elementCount === undefined ? '' : ` of ${count(elementCount, 'element')}`;
+  const classes = tally(members.map((member) => member.class));
+  const read = `${count(members.length, 'member')}${of}${classes === '' ? '' : `: ${classes}`}`;
+  const lines = wrapped(read, width, 'Read     ', '         ');
+  if (members.length === 0) return lines;
+
+  const shapes = tally(members.map((member) => SHAPE_WORDS.get(member.section?.shape ?? 'none') ?? 'other shapes'));
+  lines.push(...wrapped(`sections: ${shapes}`, width, '         '));
+  if (mass !== undefined) lines.push(`         steel ${(mass / 1000).toFixed(mass < 10_000 ? 2 : 1)} t`);
+
+  const carried = nodes.filter((node) => node.carriedBy !== null).length;
+  const between = carried === 0 ? '' : `; ${count(carried, 'node')} carried between the ends of a bar`;
+  lines.push(
+    ...wrapped(
+      `${count(nodes.length, 'node')}, ${count(bars.length, 'bar')}${between}`,
+      width,
+      'Joined   ',
+      '         ',
+    ),
+  );
+  const shift = members.reduce((most, member) => Math.max(most, member.shift), 0);
+  const turn = members.reduce((most, member) => Math.max(most, member.turn), 0);
+  lines.push(`         axes moved at most ${millimetres(shift)}, turned at most ${degrees(turn)}`);
+  return lines;
+}
+
+const SHAPE_WORDS: ReadonlyMap<string, string> = new Map([
+  ['I', 'I'],
+  ['U', 'channel'],
+  ['C', 'lipped channel'],
+  ['L', 'angle'],
+  ['T', 'tee'],
+  ['Z', 'Z'],
+  ['RHS', 'rectangular hollow'],
+  ['CHS', 'circular hollow'],
+  ['rectangle', 'flat or square bar'],
+  ['circle', 'round bar'],
+  ['other', 'other shapes'],
+  ['none', 'unknown'],
+]);
+
+/** "12 IfcBeam, 9 IfcColumn", the most frequent first. */
+function tally(words: readonly string[]): string {
+  const counts = new Map<string, number>();
+  for (const word of words) counts.set(word, (counts.get(word) ?? 0) + 1);
+  return [...counts]
+    .sort(([a, m], [b, n]) => n - m || (a < b ? -1 : 1))
+    .map(([word, times]) => `${times} ${harmless(word)}`)
+    .join(', ');
+}
+
+function standing(result: Result, { width, modes }: SummaryOptions): string[] {
+  const { stability } = result;
+  const lines = wrapped(verdict(result), width, 'Stands   ', '         ');
+  if (result.bars.length === 0) return lines;
+  const { nodes, bars, restraints, springs, rank } = stability;
+  const springWords = springs === 0 ? '' : `, ${count(springs, 'spring')}`;
+  const gap = stability.gap === null ? '' : `, gap in the spectrum ${stability.gap.toExponential(0)}`;
+  const sum = `${count(nodes, 'node')}, ${count(bars, 'bar')}, ${count(restraints, 'restraint')}${springWords}, rank ${rank}${gap}`;
+  lines.push(...wrapped(sum, width, '         '));
+  const told = stability.freeBody ? stability.modes.filter((mode) => mode.kind !== 'whole') : stability.modes;
+  for (const mode of told.slice(0, modes))
+    lines.push(...wrapped(harmless(mode.words), width, '         - ', '           '));
+  const more = told.length - modes + (stability.modesOmitted ?? 0);
+  if (more > 0 && told.length > 0) lines.push(`         - and ${more} more`);
+  return lines;
+}
