@@ -3,7 +3,7 @@ import type { Vec3 } from '../domain/vector.ts';
 /** A validated brief: SI throughout, defaults filled in. Each rule keeps its line in the file, for findings. */
 export interface Brief {
   readonly title: string | null;
-  readonly source: 'physical' | 'analysis' | null;
+  readonly source: 'physical' | null;
   readonly axes: 'given' | 'centroid';
   readonly scope: { readonly include: readonly MemberSelector[]; readonly exclude: readonly MemberSelector[] };
   readonly joints: {
@@ -12,12 +12,10 @@ export interface Brief {
     readonly offset: number | null;
     readonly crossings: 'apart' | 'joined';
     readonly seated: 'node' | 'apart';
-    readonly pairs: 'one' | 'apart';
   };
-  readonly chords: 'pinned' | 'strict' | 'continuous';
+  readonly chords: 'pinned' | 'strict';
   readonly supports: readonly SupportRule[];
   readonly materials: { readonly default: string | null };
-  readonly sections: readonly SectionRule[];
   readonly cases: readonly CaseRule[];
   readonly combinations: readonly CombinationRule[];
 }
@@ -73,12 +71,6 @@ export interface SupportRule {
   readonly fix: readonly Vec3[];
   /** Stiffness in N/m along a unit direction. */
   readonly springs: readonly { readonly direction: Vec3; readonly stiffness: number }[];
-}
-
-export interface SectionRule {
-  readonly line: number;
-  readonly on: readonly MemberSelector[];
-  readonly use: string;
 }
 
 export type Nature = 'permanent' | 'imposed' | 'snow' | 'wind' | 'thermal' | 'accidental';

@@ -44,9 +44,7 @@ export interface Mode {
   readonly remedy: readonly Remedy[];
 }
 
-export type Remedy =
-  | { readonly node: number; readonly direction: Vec3 }
-  | { readonly bar: readonly [number, number] };
+export type Remedy = { readonly node: number; readonly direction: Vec3 } | { readonly bar: readonly [number, number] };
 
 /** The judgement. Counts leave out carried nodes and what is set aside: m = 3 nodes - restraints - rank, s = bars + springs - rank. */
 export interface Stability {

@@ -2,6 +2,7 @@ import { type Finding, finding } from '../domain/finding.ts';
 import type { Member } from '../domain/member.ts';
 import type { PlaceNamer } from '../domain/place.ts';
 import type { Truss } from '../domain/truss.ts';
+import { between } from '../domain/vector.ts';
 import { type Axis, makeAxes } from './axes.ts';
 import { buildTruss } from './build-truss.ts';
 import { findCarriers } from './carriers.ts';
@@ -48,6 +49,7 @@ export function joinMembers(
     ...twins.findings,
     ...looseEndFindings(cut, members, axes, supported, chosen, placeOf),
     ...partFindings(cut, members, axes, supported, placeOf),
+    ...axisMovedFindings(members, cut, placeOf),
   ];
   return { truss: cut, findings };
 }
@@ -81,6 +83,24 @@ function zeroLengthFindings(
       'zero-length',
       `${label} has an axis of less than ${millimetres(0.001)} and is left out.`,
       `Delete ${label}, or draw it with its real length.`,
+      { members: [member.globalId], at, place: placeOf(at) },
+    );
+  });
+}
+
+/** Beyond this turn (5 degrees) the truss is no longer what was drawn. */
+const MUCH_TURNED = Math.PI / 36;
+
+function axisMovedFindings(members: readonly Member[], truss: Truss, placeOf: PlaceNamer): Finding[] {
+  return members.flatMap((member, index) => {
+    const { shift, turn } = truss.faith[index];
+    if (turn <= MUCH_TURNED) return [];
+    const at = between(member.axis[0], member.axis[1], 0.5);
+    const degrees = ((turn * 180) / Math.PI).toFixed(0);
+    return finding(
+      'axis-moved',
+      `Joining turned the axis of ${labelOf(member)} by ${degrees} degrees and moved it by ${millimetres(shift)}.`,
+      `Look whether ${labelOf(member)} belongs to these joints; a smaller reach or offset in the brief keeps it apart.`,
       { members: [member.globalId], at, place: placeOf(at) },
     );
   });

@@ -1,7 +1,7 @@
 import { type Finding, finding } from '../domain/finding.ts';
 import type { Member } from '../domain/member.ts';
 import type { PlaceNamer } from '../domain/place.ts';
-import { along, between, cross, dot, norm, scale, subtract, unit } from '../domain/vector.ts';
+import { along, between, dot, norm, scale, subtract } from '../domain/vector.ts';
 import { type Axis, sineBetween } from './axes.ts';
 import { boxAround } from './contacts.ts';
 import { labelOf } from './labels.ts';
@@ -10,6 +10,8 @@ import { indexBoxes, searchBoxes } from './spatial-index.ts';
 const PARALLEL = 0.02;
 /** Bodies that share more than this of their length are one member drawn twice. */
 const MOST_OF_LENGTH = 0.5;
+/** Axes nearer than this, m, have no direction between them worth asking for. */
+const COINCIDENT = 1e-4;
 /** Bodies whose axes are nearer than this share of their touching distance interpenetrate. */
 const INTERPENETRATION = 0.5;
 
@@ -52,7 +54,8 @@ function areTwins(a: Axis, b: Axis): boolean {
   const arm = subtract(middle, a.start);
   const aside = subtract(arm, scale(a.direction, dot(arm, a.direction)));
   const distance = norm(aside);
-  const normal = unit(aside) ?? unit(cross(a.direction, [0, 0, 1])) ?? [1, 0, 0];
+  if (distance < COINCIDENT) return true;
+  const normal = scale(aside, 1 / distance);
   return distance < INTERPENETRATION * (a.halfExtent(normal) + b.halfExtent(normal));
 }
 

@@ -56,10 +56,19 @@ describe('the summary', () => {
     expect(text).toContain('2 combinations: 2 strength');
   });
 
-  it('has the load asked for beside the one applied', () => {
-    const asked = summarise(busyResult(), { extras: { loadAsked: { dead: [0, 0, -1100] } } });
-    expect(asked).toMatch(/dead +permanent +0\.00 +0\.00 +-1\.00 +-1\.10 +1e-13/);
-    expect(asked).toMatch(/wind ünder .* - +2e-14/);
+  it('says what the area loads cover, once for those that cover the same', () => {
+    const coverage = ['snow', 'wind'].map((name) => ({ case: name, area: 888.04, planArea: 864 }));
+    const covered = summarise(busyResult(), { extras: { coverage } });
+    expect(covered).toContain('  area loads (snow, wind) cover 888.0 m2 (864.0 m2 in plan)\n');
+  });
+
+  it('names each combination that governs in full, once, below the bars', () => {
+    const result = busyResult();
+    const [first] = result.combinations;
+    const terms = Object.entries(first!.factors)
+      .map(([name, factor]) => `${factor} ${name}`)
+      .join(' + ');
+    expect(flat(summarise(result)).split(`${first!.name} = ${terms}`)).toHaveLength(2);
   });
 
   it('begins the worst bars with the worst', () => {

@@ -214,6 +214,11 @@ describe('findings of joining', () => {
     expect(truss.bars).toHaveLength(9);
   });
 
+  it('finds a twin in the very same place on a sloping axis', () => {
+    const { findings } = joinMembers([...pitchedTruss(), member('TL copy', [0, 0, 0], [6, 0, 2])]);
+    expect(codes(findings)).toEqual(['twin-members']);
+  });
+
   it('leaves out a member without length', () => {
     const { truss, findings } = joinMembers([...pitchedTruss(), member('Z', [1, 1, 1], [1, 1, 1])]);
     expect(codes(findings)).toEqual(['zero-length']);

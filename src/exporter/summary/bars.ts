@@ -1,6 +1,6 @@
 import type { Result } from '../../domain/result.ts';
 import { envelopeTitle } from '../verdict.ts';
-import { columns, harmless, kilonewtons } from './layout.ts';
+import { columns, harmless, kilonewtons, wrapped } from './layout.ts';
 import type { SummaryOptions } from './options.ts';
 
 /** The bars with the greatest forces of the envelope, the greatest first. */
@@ -14,15 +14,21 @@ export function worstBars(result: Result, options: SummaryOptions): string[] {
   const barOf = new Map(result.bars.map((bar) => [bar.id, bar]));
   const memberOf = new Map(result.members.map((member) => [member.globalId, member]));
   const inKilonewtons = kilonewtons(shown.map(greatest));
+  const names: string[] = [];
+  const numberOf = (name: string | undefined): string => {
+    if (name === undefined) return '';
+    if (!names.includes(name)) names.push(name);
+    return `(${names.indexOf(name) + 1})`;
+  };
   const rows = shown.map(({ bar: id, tension, compression }) => {
     const bar = barOf.get(id);
     return [
       harmless(bar?.name ?? id),
       harmless(memberOf.get(bar?.member ?? '')?.section?.name ?? '-'),
       inKilonewtons(tension?.force ?? null),
-      harmless(tension?.from ?? ''),
+      numberOf(tension?.from),
       inKilonewtons(compression?.force ?? null),
-      harmless(compression?.from ?? ''),
+      numberOf(compression?.from),
     ];
   });
   const table = columns(
@@ -30,12 +36,25 @@ export function worstBars(result: Result, options: SummaryOptions): string[] {
       { head: 'bar', align: 'left', most: 14 },
       { head: 'section', align: 'left', most: 15 },
       { head: 'tension', align: 'right' },
-      { head: 'from', align: 'left', most: 11 },
+      { head: 'from', align: 'left' },
       { head: 'compression', align: 'right' },
-      { head: 'from', align: 'left', most: 11 },
+      { head: 'from', align: 'left' },
     ],
     rows,
   );
   const more = loaded.length - shown.length;
-  return [`Worst bars, kN (${envelopeTitle(result)})`, ...table, ...(more > 0 ? [`  and ${more} more bars`] : [])];
+  return [
+    `Worst bars, kN (${envelopeTitle(result)})`,
+    ...table,
+    ...(more > 0 ? [`  and ${more} more bars`] : []),
+    ...names.flatMap((name, i) => wrapped(`(${i + 1}) ${described(name, result)}`, options.width, '  ', '      ')),
+  ];
+}
+
+/** "strength: snow leads = 1.35 dead + 1.5 snow"; a case has its name alone. */
+function described(name: string, { combinations }: Result): string {
+  const combination = combinations.find((one) => one.name === name);
+  if (combination === undefined) return harmless(name);
+  const terms = Object.entries(combination.factors).map(([loadCase, factor]) => `${factor} ${harmless(loadCase)}`);
+  return `${harmless(name)} = ${terms.join(' + ').replaceAll('+ -', '- ')}`;
 }

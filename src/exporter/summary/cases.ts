@@ -6,24 +6,39 @@ import type { SummaryOptions } from './options.ts';
 /** Every load case with the sum of its loads and how well it is balanced; refused ones with the reason. */
 export function loadCases(result: Result, { extras, width }: SummaryOptions): string[] {
   const { cases } = result;
-  const { loadAsked } = extras;
   if (cases.length === 0) return [];
   const inKilonewtons = kilonewtons(cases.flatMap((loadCase) => loadCase.loadSum));
   const heads: Column[] = [
     { head: 'case', align: 'left', most: 22 },
     { head: 'nature', align: 'left' },
     ...['Fx kN', 'Fy kN', 'Fz kN'].map((head): Column => ({ head, align: 'right' })),
-    ...(loadAsked === undefined ? [] : [{ head: 'asked Fz', align: 'right' } as const]),
     { head: 'imbalance', align: 'right' },
   ];
   const rows = cases.map((loadCase) => [
     harmless(loadCase.name),
     loadCase.nature,
     ...loadCase.loadSum.map(inKilonewtons),
-    ...(loadAsked === undefined ? [] : [inKilonewtons(loadAsked[loadCase.name]?.[2] ?? null)]),
     loadCase.refused !== undefined ? 'refused' : (loadCase.residual?.toExponential(0) ?? '-'),
   ]);
-  return ['Load cases', ...columns(heads, rows), ...refusals(result, width), ...combinations(result, width)];
+  return [
+    'Load cases',
+    ...columns(heads, rows),
+    ...covered(extras, width),
+    ...refusals(result, width),
+    ...combinations(result, width),
+  ];
+}
+
+/** Area loads by the area they cover, the first thing a reader checks by hand. */
+function covered({ coverage = [] }: SummaryOptions['extras'], width: number): string[] {
+  const byArea = new Map<string, string[]>();
+  for (const { case: name, area, planArea } of coverage) {
+    const words = `${area.toFixed(1)} m2 (${planArea.toFixed(1)} m2 in plan)`;
+    byArea.set(words, [...(byArea.get(words) ?? []), harmless(name)]);
+  }
+  return [...byArea].flatMap(([words, names]) =>
+    wrapped(`area loads (${names.join(', ')}) cover ${words}`, width, '  ', '    '),
+  );
 }
 
 function refusals({ cases, combinations }: Result, width: number): string[] {

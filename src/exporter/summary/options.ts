@@ -1,13 +1,11 @@
-import type { Vec3 } from '../../domain/vector.ts';
-
 /** What the pipeline knows besides the result and the reader wants to see. */
 export interface SummaryExtras {
   /** Elements of the classes asked for, whether or not they could be read. */
   readonly elementCount?: number;
   /** kg, of the bars between their nodes. */
   readonly mass?: number;
-  /** N, by the name of the case: what the brief's rules add up to before they are shared out to nodes. */
-  readonly loadAsked?: Readonly<Record<string, Vec3>>;
+  /** m2 that each area load of the brief covers, on the slope and in plan. */
+  readonly coverage?: readonly { readonly case: string; readonly area: number; readonly planArea: number }[];
 }
 
 export interface SummaryOptions {

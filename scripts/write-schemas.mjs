@@ -1,0 +1,10 @@
+// Part of the build: the JSON Schemas that ship with the package, from the schemas the program itself reads by.
+import { mkdirSync, writeFileSync } from 'node:fs';
+import { briefJsonSchema } from '../dist/brief/json-schema.js';
+import { resultJsonSchema } from '../dist/exporter/json.js';
+
+const folder = new URL('../dist/schemas/', import.meta.url);
+mkdirSync(folder, { recursive: true });
+for (const [name, schema] of Object.entries({ brief: briefJsonSchema(), result: resultJsonSchema() })) {
+  writeFileSync(new URL(`${name}.schema.json`, folder), `${JSON.stringify(schema, null, 2)}\n`);
+}

@@ -1,0 +1,37 @@
+import { didYouMean } from './nearest-word.ts';
+import { quoted } from './one-line.ts';
+import type { WrittenBrief } from './schema.ts';
+import type { Path, Problem, WrittenSource } from './written-source.ts';
+
+/** Names that stand twice among cases and combinations, and factors of cases that do not exist. */
+export function findNameProblems(written: WrittenBrief, source: WrittenSource): Problem[] {
+  const cases = (written.cases ?? []).map((rule) => rule.name);
+  const combinations =
+    written.combinations === undefined || written.combinations === 'none' ? [] : written.combinations;
+  const places: { name: string; path: Path }[] = [
+    ...cases.map((name, i) => ({ name, path: ['cases', i, 'name'] })),
+    ...combinations.map(({ name }, i) => ({ name, path: ['combinations', i, 'name'] })),
+  ];
+  const seen = new Set<string>();
+  const problems: Problem[] = [];
+  for (const { name, path } of places) {
+    if (seen.has(name)) {
+      problems.push({
+        ...source.place(path),
+        message: `${source.excerpt(path)}this name is taken by another case or combination`,
+      });
+    }
+    seen.add(name);
+  }
+  combinations.forEach(({ factors }, i) => {
+    const path = ['combinations', i, 'factors'];
+    for (const name of Object.keys(factors)) {
+      if (cases.includes(name)) continue;
+      problems.push({
+        ...source.placeOfKey(path, name),
+        message: `${quoted(name)}there is no such case${didYouMean(name, cases)}`,
+      });
+    }
+  });
+  return problems;
+}

@@ -1,0 +1,15 @@
+import type { Brief } from './types.ts';
+
+/** What holds where no brief is given: default scope, joints by the sections, no supports, no loads. */
+export const DEFAULT_BRIEF: Brief = {
+  title: null,
+  source: null,
+  axes: 'given',
+  scope: { include: [], exclude: [] },
+  joints: { reach: null, offset: null, crossings: 'apart', seated: 'node' },
+  chords: 'pinned',
+  supports: [],
+  materials: { default: null },
+  cases: [],
+  combinations: [],
+};

@@ -1,0 +1,74 @@
+// Words for materials that are not steel, as models in several languages write them. Common practice.
+// Stems stand inside longer words too ("Brettschichtholz", "Stahlbeton"); the others are short and must stand alone.
+const STEMS: readonly string[] = [
+  ...[
+    'timber',
+    'lumber',
+    'plywood',
+    'glulam',
+    'concrete',
+    'masonry',
+    'brick',
+    'alumin',
+    'gypsum',
+    'plaster',
+    'plastic',
+  ],
+  ...['holz', 'beton', 'mauerwerk', 'ziegel', 'verglasung'],
+  ...['béton', 'maçonnerie', 'brique', 'verre', 'lamellé'],
+  ...['madera', 'hormigón', 'hormigon', 'ladrillo', 'mampostería', 'vidrio'],
+  ...['legno', 'legname', 'calcestruzzo', 'muratura', 'laterizio', 'vetro'],
+  ...[
+    'madeira',
+    'concreto',
+    'betão',
+    'alvenaria',
+    'metselwerk',
+    'baksteen',
+    'limträ',
+    'limtræ',
+    'murværk',
+    'tegelsten',
+  ],
+  ...['drewno', 'żelbet', 'dřevo', 'cihla', 'дерев', 'древес', 'бетон', 'кирпич', 'алюмин', '木材', '混凝土'],
+];
+
+const WORDS: ReadonlySet<string> = new Set([
+  ...['wood', 'wooden', 'glass', 'glas', 'stone', 'bois', 'tre', 'træ', 'trä', 'hout', 'puu', 'tiili', 'drevo'],
+  ...[
+    'bsh',
+    'kvh',
+    'clt',
+    'lvl',
+    'osb',
+    'mdf',
+    'pvc',
+    'upvc',
+    'oak',
+    'pine',
+    'spruce',
+    'larch',
+    'fichte',
+    'lärche',
+    'eiche',
+  ],
+]);
+
+// Strength classes: glued laminated timber (EN 14080), concrete (EN 206), wrought aluminium (EN 573).
+const GRADES: readonly RegExp[] = [/\bgl ?\d{2}[hc]?\b/u, /\bc ?\d{2,3}\/\d{2,3}\b/u, /\ben[ -]?aw\b/u];
+
+const STEEL: ReadonlySet<string> = new Set([
+  ...['steel', 'stahl', 'acier', 'acero', 'acciaio', 'staal', 'stål', 'aço', 'stal', 'ocel', 'teräs', 'сталь'],
+]);
+
+/** Whether a material's name plainly says something else than steel: a foreign word in it and no word for steel alone. */
+export function isPlainlyNotSteel(name: string): boolean {
+  const text = name.normalize('NFC').toLowerCase();
+  const words = text.split(/[^\p{L}\p{N}]+/u);
+  if (words.some((word) => STEEL.has(word))) return false;
+  return (
+    words.some((word) => WORDS.has(word)) ||
+    STEMS.some((stem) => text.includes(stem)) ||
+    GRADES.some((grade) => grade.test(text))
+  );
+}

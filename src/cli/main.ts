@@ -1,0 +1,43 @@
+#!/usr/bin/env node
+import { Command } from 'commander';
+import { CAUTION } from '../domain/caution.ts';
+import { EXIT } from '../domain/errors.ts';
+import { GENERATOR } from '../domain/generator.ts';
+import { reportFailure } from './failure.ts';
+import { type RunFlags, runCommand, withRunOptions } from './run-command.ts';
+
+const program = new Command('pinwright')
+  .description('Turns a steel roof in an IFC model into a pin-jointed truss, judges and solves it, and writes it back.')
+  .version(GENERATOR.version)
+  .exitOverride()
+  .showHelpAfterError('(pinwright --help shows the commands)')
+  .addHelpText(
+    'after',
+    `\nExit codes: 0 done; 1 done, with faults found; 2 wrong command or brief; 3 unreadable model.\n\n${CAUTION}`,
+  );
+
+let exitCode: number = EXIT.done;
+
+withRunOptions(program.command('survey'))
+  .description('read, join and judge a model; needs no supports or loads')
+  .addHelpText('after', '\nExample:\n  pinwright survey roof.ifc --brief roof.yaml')
+  .action(async (model: string, flags: RunFlags) => {
+    exitCode = await runCommand(model, 'survey', flags);
+  });
+
+withRunOptions(program.command('analyse'))
+  .description('everything: read, join, judge, load and solve a model')
+  .addHelpText(
+    'after',
+    '\nExample:\n  pinwright analyse roof.ifc --brief roof.yaml -o forces.json -o roof-with-forces.ifc',
+  )
+  .action(async (model: string, flags: RunFlags) => {
+    exitCode = await runCommand(model, 'analyse', flags);
+  });
+
+try {
+  await program.parseAsync();
+} catch (error) {
+  exitCode = reportFailure(error);
+}
+process.exitCode = exitCode;

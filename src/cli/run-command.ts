@@ -1,0 +1,89 @@
+import { basename } from 'node:path';
+import type { Command } from 'commander';
+import { DEFAULT_BRIEF } from '../brief/default-brief.ts';
+import { EXIT, ModelError } from '../domain/errors.ts';
+import { contentOf } from '../exporter/content.ts';
+import { planOutputs } from '../exporter/outputs.ts';
+import { summarise } from '../exporter/summary.ts';
+import { writeOutputs } from '../exporter/write-outputs.ts';
+import { type Run, type RunOptions, runModel, type Stage } from '../pipeline.ts';
+import { makeProgress } from './progress.ts';
+import { readBrief, readModelBytes } from './read-files.ts';
+
+export interface RunFlags {
+  readonly brief?: string;
+  readonly output?: string[];
+  readonly quiet?: boolean;
+  readonly timings?: boolean;
+}
+
+/** Adds what `survey` and `analyse` have in common. */
+export function withRunOptions(command: Command): Command {
+  return command
+    .argument('<model>', 'an IFC file')
+    .option('--brief <file>', 'scope, joints, supports, loads and combinations (YAML or JSON)')
+    .option(
+      '-o, --output <file>',
+      'write a result; the ending picks the format (.json .csv .csv/ .ifc), - is JSON on stdout; may be repeated',
+      (path: string, before: string[] = []) => [...before, path],
+    )
+    .option('--quiet', 'no summary and no progress')
+    .option('--timings', 'one line of JSON on stderr: seconds by stage, peak memory in bytes');
+}
+
+/** Runs a model and writes what was asked for. Gives the exit code. */
+export async function runCommand(model: string, extent: RunOptions['extent'], flags: RunFlags): Promise<number> {
+  const outputs = flags.output ?? [];
+  const plan = planOutputs(outputs, model);
+  const brief = flags.brief === undefined ? DEFAULT_BRIEF : readBrief(flags.brief);
+  const bytes = readModelBytes(model);
+  const progress = makeProgress(flags.quiet === true);
+  let run: Run;
+  try {
+    run = runModel(bytes, {
+      fileName: basename(model),
+      extent,
+      brief,
+      onStage: (stage) => progress.stage(STAGE_WORDS[stage]),
+    });
+  } catch (error) {
+    throw named(error, model);
+  } finally {
+    progress.done();
+  }
+  const analysed = performance.now();
+  await writeOutputs(plan, contentOf(run.result, run.file));
+  if (flags.timings) reportTimings(run, (performance.now() - analysed) / 1000);
+  if (!flags.quiet && !plan.stdout) {
+    const { elementCount, mass, coverage } = run;
+    process.stdout.write(summarise(run.result, { extras: { elementCount, mass, coverage } }));
+    if (outputs.length > 0) process.stdout.write(`\nWritten: ${outputs.join(', ')}\n`);
+  }
+  return hasFaults(run) ? EXIT.faultsFound : EXIT.done;
+}
+
+const STAGE_WORDS: Readonly<Record<Stage, string>> = {
+  import: 'Reading the model',
+  topology: 'Joining members',
+  stability: 'Judging whether it stands',
+  solve: 'Solving',
+  checks: 'Checking bars',
+  export: 'Writing',
+};
+
+/** The stages know bytes, not files; the user knows files. */
+function named(error: unknown, model: string): unknown {
+  return error instanceof ModelError ? new ModelError(`${model}: ${error.message}`) : error;
+}
+
+/** Whether an error stands or a force could not be found. */
+function hasFaults({ result }: Run): boolean {
+  const refused = [...result.cases, ...result.combinations].some((solved) => solved.refused !== undefined);
+  return refused || result.findings.some(({ severity }) => severity === 'error');
+}
+
+function reportTimings(run: Run, exportSeconds: number): void {
+  const none: Record<Stage, number> = { import: 0, topology: 0, stability: 0, solve: 0, checks: 0, export: 0 };
+  const peakMemory = process.resourceUsage().maxRSS * 1024;
+  process.stderr.write(`${JSON.stringify({ ...none, ...run.seconds, export: exportSeconds, peakMemory })}\n`);
+}

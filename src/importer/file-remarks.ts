@@ -1,0 +1,64 @@
+import { asString } from '../step/values.ts';
+import type { Reading } from './reading.ts';
+
+/** Findings about the file as a whole. */
+
+export function noteGuessedSchema(reading: Reading, schema: string): void {
+  reading.note({
+    code: 'schema-guessed',
+    key: schema,
+    say: () => `The file's schema ${schema} never became a standard; it is read as ${reading.family}.`,
+    advice: 'Export the model as IFC4 or IFC4X3_ADD2.',
+  });
+}
+
+export function noteMissingLengthUnit(reading: Reading): void {
+  reading.note({
+    code: 'units-missing',
+    key: 'length',
+    say: () => 'The file does not say its length unit; its numbers are read as metres.',
+    advice:
+      'Assign a length unit to the project and export again; check the size of the model before using any result.',
+  });
+}
+
+export function noteRepeatedGlobalIds(reading: Reading, elements: readonly number[]): void {
+  const count = new Map<string, number>();
+  for (const id of elements) {
+    const globalId = asString(reading.file.args(id)[0])?.trim() ?? '';
+    if (globalId !== '') count.set(globalId, (count.get(globalId) ?? 0) + 1);
+  }
+  for (const [globalId, times] of count) {
+    if (times === 1) continue;
+    reading.about(globalId);
+    reading.note({
+      code: 'doubled-globalid',
+      key: globalId,
+      say: () => `${times} elements have the GlobalId ${globalId}; results cannot be told apart by it.`,
+      advice: 'Give each copy a GlobalId of its own; copying in the modelling program does so, copying text does not.',
+    });
+  }
+  reading.about(null);
+}
+
+const ADVICE = {
+  'doubled-id': 'Export the model again; the first instance of each number is the one that is read.',
+  'encoding-broken': 'Export the model again; texts that cannot be decoded may fail to match selectors.',
+  'unreadable-element': 'Export the model again; what is broken is left out.',
+} as const;
+
+/** What the STEP reader met: one finding a kind, told by its first case. */
+export function noteFileProblems(reading: Reading): void {
+  for (const kind of Object.keys(ADVICE) as (keyof typeof ADVICE)[]) {
+    const problems = reading.file.problems.filter((problem) => problem.kind === kind);
+    const [first] = problems;
+    if (first === undefined) continue;
+    const more = problems.length - 1;
+    reading.note({
+      code: kind,
+      key: 'file',
+      say: () => `${first.message}${more === 0 ? '' : ` There are ${more} more such cases.`}`,
+      advice: ADVICE[kind],
+    });
+  }
+}

@@ -1,0 +1,52 @@
+import { add, scale, unit, type Vec3 } from '../../domain/vector.ts';
+import { asRef } from '../../step/values.ts';
+import { noAxis } from '../not-read.ts';
+import { readAxes } from '../placement-axes.ts';
+import type { Reading } from '../reading.ts';
+import type { SectionBook } from '../sections/section-book.ts';
+import { compose, mapDirection, mapPosition, type Transform } from '../transform.ts';
+import type { BodyAxis } from './body-axis.ts';
+
+/** An extrusion's parts, before any profile is read. */
+export interface Extrusion {
+  readonly profile: number;
+  readonly endProfile: number | null;
+  /** From the swept plane's coordinates to the world. */
+  readonly plane: Transform;
+  /** From the swept plane to the far end, in its own coordinates, metres. */
+  readonly sweep: Vec3;
+}
+
+/** IfcExtrudedAreaSolid and its tapered form. @throws NotRead (no-axis) where it has no profile, direction or depth. */
+export function readExtrusion(reading: Reading, id: number, world: Transform): Extrusion {
+  const args = reading.args(id);
+  const profile = asRef(args[0]);
+  if (profile === null) throw noAxis('its extrusion has no profile');
+  const direction = unit(reading.direction(args[2]) ?? [0, 0, 1]);
+  const depth = reading.length(args[3]);
+  if (direction === null || Number.isNaN(depth) || depth === 0) throw noAxis('its extrusion has no depth');
+  return {
+    profile,
+    endProfile: reading.file.typeOf(id) === 'IFCEXTRUDEDAREASOLIDTAPERED' ? asRef(args[4]) : null,
+    plane: compose(world, readAxes(reading, args[1])),
+    sweep: scale(direction, depth),
+  };
+}
+
+/** The line of the centroids from the swept plane to the far end. */
+export function extrusionAxis(book: SectionBook, extrusion: Extrusion): BodyAxis {
+  const { plane, profile, endProfile, sweep } = extrusion;
+  const [x, y] = book.centroidOrOrigin(profile);
+  const [endX, endY] = endProfile === null ? [x, y] : book.centroidOrOrigin(endProfile);
+  const start = mapPosition(plane, [x, y, 0]);
+  return {
+    from: 'extrusion',
+    start,
+    end: endProfile === null ? add(start, mapDirection(plane, sweep)) : mapPosition(plane, add([endX, endY, 0], sweep)),
+    x: plane.x,
+    y: plane.y,
+    profile,
+    endProfile,
+    rise: 0,
+  };
+}

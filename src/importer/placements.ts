@@ -1,0 +1,108 @@
+import { asRef } from '../step/values.ts';
+import { axesById, type Grid, type GridAxis, readGridPlacement } from './grids.ts';
+import { NotRead } from './not-read.ts';
+import { readAxes } from './placement-axes.ts';
+import type { Reading } from './reading.ts';
+import { compose, IDENTITY, type Transform } from './transform.ts';
+
+/** One link of a placement chain. */
+interface Link {
+  readonly relative: Transform;
+  readonly parent: number | null;
+}
+
+/** Object placements in world coordinates, each chain walked once. */
+export class Placements {
+  private readonly reading: Reading;
+  private readonly root: Transform;
+  private readonly world = new Map<number, Transform | NotRead>();
+  private readonly gridAxes: ReadonlyMap<number, { grid: Grid; axis: GridAxis }>;
+
+  constructor(reading: Reading, grids: readonly Grid[]) {
+    this.reading = reading;
+    this.root = worldCoordinateSystem(reading);
+    this.gridAxes = axesById(grids);
+  }
+
+  /**
+   * From the coordinates placed by `id` to the world's; without a placement, the project's own coordinate system.
+   * @throws NotRead where the chain runs in a circle or is of a kind that is not read.
+   */
+  worldOf(id: number | null): Transform {
+    // Walked in a loop and not by recursion: files hold chains of many thousand links.
+    const chain: { id: number; relative: Transform }[] = [];
+    const onWay = new Set<number>();
+    let at = id;
+    let base: Transform | NotRead = this.root;
+    while (at !== null) {
+      const known = this.world.get(at);
+      if (known !== undefined) {
+        base = known;
+        break;
+      }
+      if (onWay.has(at)) {
+        base = circle(at);
+        break;
+      }
+      onWay.add(at);
+      const link = this.link(at);
+      if (link instanceof NotRead) {
+        this.world.set(at, link);
+        base = link;
+        break;
+      }
+      chain.push({ id: at, relative: link.relative });
+      at = link.parent;
+    }
+    for (const link of chain.reverse()) {
+      base = base instanceof NotRead ? base : compose(base, link.relative);
+      this.world.set(link.id, base);
+    }
+    if (base instanceof NotRead) throw base;
+    return base;
+  }
+
+  private link(id: number): Link | NotRead {
+    const { reading } = this;
+    const args = reading.args(id);
+    const type = reading.typeOf(id);
+    if (type === 'IFCLOCALPLACEMENT') return { relative: readAxes(reading, args[1]), parent: asRef(args[0]) };
+    if (type === 'IFCGRIDPLACEMENT') {
+      try {
+        const { grid, relative } = readGridPlacement(reading, args, this.gridAxes);
+        return { relative, parent: grid.placement };
+      } catch (problem) {
+        if (problem instanceof NotRead) return problem;
+        throw problem;
+      }
+    }
+    if (type === 'IFCLINEARPLACEMENT' && asRef(args[2]) !== null) {
+      return { relative: readAxes(reading, args[2]), parent: asRef(args[0]) };
+    }
+    // What a missing parent would have moved is not known; the rest of the chain still holds.
+    if (type === '') return { relative: IDENTITY, parent: null };
+    return new NotRead(
+      'unreadable-element',
+      `its placement is of the class ${type}, which is not read`,
+      'Export the model with local placements.',
+    );
+  }
+}
+
+const circle = (id: number) =>
+  new NotRead(
+    'cyclic-placement',
+    `its placement leads back to itself at #${id}`,
+    'Export the model again; placed by hand, let each element be placed relative to its storey only.',
+  );
+
+/** Of the project's spatial context: the first one of type Model, else the first of three dimensions. */
+function worldCoordinateSystem(reading: Reading): Transform {
+  const contexts = reading.file
+    .idsOf('IFCGEOMETRICREPRESENTATIONCONTEXT')
+    .map((id) => reading.args(id))
+    .filter((args) => args[2] === 3);
+  const model = contexts.find((args) => typeof args[1] === 'string' && args[1].toUpperCase() === 'MODEL');
+  const chosen = model ?? contexts[0];
+  return chosen === undefined ? IDENTITY : readAxes(reading, chosen[4]);
+}

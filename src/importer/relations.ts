@@ -1,0 +1,60 @@
+import type { StepFile } from '../step/step-file.ts';
+import { asRef, asRefs, asString } from '../step/values.ts';
+
+/** Who belongs to whom: each relationship class is passed over once. Keys and values are instance ids. */
+export interface Relations {
+  /** The whole that a part is aggregated or nested into. */
+  readonly wholeOf: ReadonlyMap<number, number>;
+  /** The spatial structure element that contains an element. */
+  readonly containerOf: ReadonlyMap<number, number>;
+  readonly typeOf: ReadonlyMap<number, number>;
+  /** What IfcRelAssociatesMaterial gives an element or a type. */
+  readonly materialOf: ReadonlyMap<number, number>;
+  /** Name of the layer that a representation or an item is on. */
+  readonly layerOf: ReadonlyMap<number, string>;
+}
+
+export function readRelations(file: StepFile): Relations {
+  const wholeOf = new Map<number, number>();
+  for (const type of ['IFCRELAGGREGATES', 'IFCRELNESTS']) toMany(file, type, 4, 5, wholeOf);
+  const containerOf = new Map<number, number>();
+  toMany(file, 'IFCRELCONTAINEDINSPATIALSTRUCTURE', 5, 4, containerOf);
+  const typeOf = new Map<number, number>();
+  toMany(file, 'IFCRELDEFINESBYTYPE', 5, 4, typeOf);
+  const materialOf = new Map<number, number>();
+  toMany(file, 'IFCRELASSOCIATESMATERIAL', 5, 4, materialOf);
+  return { wholeOf, containerOf, typeOf, materialOf, layerOf: readLayers(file) };
+}
+
+/** Files the one at attribute `one` under each of those in the list at attribute `many`; the first relationship stands. */
+function toMany(file: StepFile, type: string, one: number, many: number, into: Map<number, number>): void {
+  for (const id of file.idsOf(type)) {
+    const args = file.args(id);
+    const relating = asRef(args[one]);
+    if (relating === null || !file.has(relating)) continue;
+    for (const related of asRefs(args[many])) if (!into.has(related)) into.set(related, relating);
+  }
+}
+
+function readLayers(file: StepFile): Map<number, string> {
+  const layers = new Map<number, string>();
+  for (const type of ['IFCPRESENTATIONLAYERASSIGNMENT', 'IFCPRESENTATIONLAYERWITHSTYLE']) {
+    for (const id of file.idsOf(type)) {
+      const args = file.args(id);
+      const name = asString(args[0]);
+      if (name !== null) for (const item of asRefs(args[2])) layers.set(item, name);
+    }
+  }
+  return layers;
+}
+
+/** The wholes that `id` is part of, the nearest first. Ends where the file's own relations run in a circle. */
+export function wholesAbove(relations: Relations, id: number): number[] {
+  const above: number[] = [];
+  const seen = new Set([id]);
+  for (let at = relations.wholeOf.get(id); at !== undefined && !seen.has(at); at = relations.wholeOf.get(at)) {
+    seen.add(at);
+    above.push(at);
+  }
+  return above;
+}

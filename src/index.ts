@@ -1,0 +1,41 @@
+/** The public library: the whole run, and each stage by itself. */
+
+export { parseBrief } from './brief/parse-brief.ts';
+export { applyScope } from './brief/scope.ts';
+export { selectMembers } from './brief/selectors/select-members.ts';
+export { selectNodes } from './brief/selectors/select-nodes.ts';
+export { resolveSupports } from './brief/supports.ts';
+export type { Brief, MemberSelector, NodeSelector } from './brief/types.ts';
+export { CAUTION } from './domain/caution.ts';
+export { EXIT, ModelError, PinwrightError, RequestError } from './domain/errors.ts';
+export type { Finding, FindingCode, Severity } from './domain/finding.ts';
+export type { Material, Member, Section } from './domain/member.ts';
+export type { Result } from './domain/result.ts';
+export type { Truss, TrussBar, TrussNode } from './domain/truss.ts';
+export type { Vec3 } from './domain/vector.ts';
+export { annotate } from './exporter/ifc/annotate.ts';
+export { resultJsonSchema, resultToJson } from './exporter/json.ts';
+export { summarise } from './exporter/summary.ts';
+export { importModel } from './importer/import-model.ts';
+export type { ImportedModel } from './importer/types.ts';
+export { type Run, type RunOptions, runModel, type Stage } from './pipeline.ts';
+export { buildCases } from './statics/loads/build-cases.ts';
+export { combine } from './statics/solution/combine.ts';
+export { envelope } from './statics/solution/envelope.ts';
+export { solveCases } from './statics/solution/solve-cases.ts';
+export { assessStability } from './statics/stability/assess-stability.ts';
+export type {
+  BarEnvelope,
+  GroundSpring,
+  LoadCase,
+  Mode,
+  NodalForce,
+  Restraint,
+  SolvedCase,
+  SolvedCombination,
+  Stability,
+  Supports,
+} from './statics/types.ts';
+export { openStep, type StepFile } from './step/step-file.ts';
+export { joinMembers } from './topology/join-members.ts';
+export type { JoinOptions } from './topology/options.ts';

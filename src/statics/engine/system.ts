@@ -1,0 +1,81 @@
+/**
+ * The unknowns: every block (node) has room for `stride` freedoms, 1..6, of which those marked in `active` exist. Unknown
+ * `stride * block + c` is freedom c of the block. A block without any active freedom is ground.
+ */
+export interface Freedoms {
+  readonly blocks: number;
+  readonly stride: number;
+  readonly active: Uint8Array;
+}
+
+export function countFreedoms(freedoms: Freedoms): number {
+  let count = 0;
+  for (const flag of freedoms.active) count += flag;
+  return count;
+}
+
+/** Linear forms of the unknowns, one a row: K = sum over rows of stiffness * row * row^T. */
+export interface SparseRows {
+  readonly count: number;
+  /** count + 1 entries. */
+  readonly start: Int32Array;
+  readonly unknown: Int32Array;
+  readonly value: Float64Array;
+}
+
+/** Makes rows one by one; `fill` puts (unknown, value) pairs, those of one unknown are added up. */
+export function buildRows(
+  count: number,
+  fill: (row: number, put: (unknown: number, value: number) => void) => void,
+): SparseRows {
+  const start = new Int32Array(count + 1);
+  const unknown: number[] = [];
+  const value: number[] = [];
+  const place = new Map<number, number>();
+  const put = (u: number, v: number) => {
+    const at = place.get(u);
+    if (at === undefined) {
+      place.set(u, unknown.length);
+      unknown.push(u);
+      value.push(v);
+    } else value[at] = value[at]! + v;
+  };
+  for (let row = 0; row < count; row++) {
+    place.clear();
+    fill(row, put);
+    start[row + 1] = unknown.length;
+  }
+  return { count, start, unknown: Int32Array.from(unknown), value: Float64Array.from(value) };
+}
+
+/** The value of every row at `q`: elongations, where rows are bars. */
+export function multiplyRows(rows: SparseRows, q: Float64Array): Float64Array {
+  const out = new Float64Array(rows.count);
+  for (let row = 0; row < rows.count; row++) {
+    let sum = 0;
+    for (let p = rows.start[row]!; p < rows.start[row + 1]!; p++) sum += rows.value[p]! * q[rows.unknown[p]!]!;
+    out[row] = sum;
+  }
+  return out;
+}
+
+/** sum of weight * row: the forces on the unknowns that hold the weights (bar forces) in balance. */
+export function combineRows(rows: SparseRows, weight: Float64Array, unknowns: number): Float64Array {
+  const out = new Float64Array(unknowns);
+  for (let row = 0; row < rows.count; row++) {
+    const w = weight[row]!;
+    if (w === 0) continue;
+    for (let p = rows.start[row]!; p < rows.start[row + 1]!; p++) {
+      const u = rows.unknown[p]!;
+      out[u] = out[u]! + w * rows.value[p]!;
+    }
+  }
+  return out;
+}
+
+/** K q without K: the rows weighted by stiffness times their values at q. */
+export function applyStiffness(rows: SparseRows, stiffness: Float64Array, q: Float64Array): Float64Array {
+  const elongation = multiplyRows(rows, q);
+  for (let row = 0; row < rows.count; row++) elongation[row] = elongation[row]! * stiffness[row]!;
+  return combineRows(rows, elongation, q.length);
+}

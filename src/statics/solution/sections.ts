@@ -1,0 +1,57 @@
+import type { Truss } from '../../domain/truss.ts';
+import type { Elongations } from '../model/elongation.ts';
+import type { Problem } from '../model/system.ts';
+import type { Judgement } from '../stability/assess-stability.ts';
+import type { LoadCase } from '../types.ts';
+
+/** EA/L of every bar, then the springs. Bars without a section get the mean EA of the others: only where no force hangs on it. */
+export function realStiffness(truss: Truss): (elongations: Elongations) => Float64Array {
+  const known = truss.bars.flatMap((bar) => (bar.stiffnessEA !== null && bar.stiffnessEA > 0 ? [bar.stiffnessEA] : []));
+  const mean = known.length > 0 ? known.reduce((sum, ea) => sum + ea, 0) / known.length : 1;
+  return ({ bars, springs, lengths }) => {
+    const out = new Float64Array(bars.length + springs.length);
+    bars.forEach((b, row) => {
+      const ea = truss.bars[b]!.stiffnessEA ?? mean;
+      out[row] = lengths[row]! > 0 ? ea / lengths[row]! : 0;
+    });
+    springs.forEach((spring, s) => {
+      out[bars.length + s] = spring.stiffness;
+    });
+    return out;
+  };
+}
+
+export interface SectionJudgement {
+  /** Why a case cannot be solved for want of a section; null where it can. */
+  readonly refuse: (one: LoadCase) => string | null;
+  /** Whether the displacement of a node is not known because a bar of its part has no section. */
+  readonly withoutDisplacement: (node: number) => boolean;
+}
+
+/** In a determinate part forces do not hang on sections, displacements do; elsewhere both do. */
+export function judgeSections({ truss, parts }: Problem, stability: Judgement): SectionJudgement {
+  const lacking = new Map<number, number[]>();
+  truss.bars.forEach((bar, b) => {
+    if (bar.stiffnessEA !== null || !parts.liveBar[b]) return;
+    const part = parts.partOf[bar.from]!;
+    lacking.set(part, [...(lacking.get(part) ?? []), b]);
+  });
+  const indeterminate = new Set(
+    stability.parts.filter((c) => c.selfStressStates > 0 && lacking.has(c.part)).map((c) => c.part),
+  );
+  return {
+    refuse: (one) => {
+      const load = one.loads.find(
+        ({ node, force }) =>
+          parts.liveNode[node] && indeterminate.has(parts.partOf[node]!) && force.some((component) => component !== 0),
+      );
+      if (load === undefined) return null;
+      const bars = lacking.get(parts.partOf[load.node]!)!;
+      const names = bars.slice(0, 3).map((b) => truss.bars[b]!.name);
+      const rest = bars.length > 3 ? ` and ${bars.length - 3} more` : '';
+      const verb = bars.length === 1 ? 'has' : 'have';
+      return `load case ${one.name}: ${names.join(', ')}${rest} ${verb} no section, and the truss is statically indeterminate there, so that its forces hang on it`;
+    },
+    withoutDisplacement: (node) => lacking.has(parts.partOf[node]!),
+  };
+}

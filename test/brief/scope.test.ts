@@ -1,0 +1,112 @@
+import { describe, expect, it } from 'vitest';
+import { isPlainlyNotSteel } from '../../src/brief/material-words.ts';
+import { applyScope } from '../../src/brief/scope.ts';
+import { makeMember } from './make-truss.ts';
+
+const NONE = { include: [], exclude: [] };
+const material = (name: string) => ({ material: { ...makeMember().material, name } });
+const member = (globalId: string, changes: Parameters<typeof makeMember>[0] = {}) =>
+  makeMember({ globalId, ...changes });
+
+describe('the default scope', () => {
+  it('keeps beams, columns and members, their StandardCase forms and parts of assemblies', () => {
+    const members = [
+      ...['IfcBeam', 'IfcBeamStandardCase', 'IfcColumn', 'IfcMember'].map((name) => member(name, { class: name })),
+      member('p', { class: 'IfcBuildingElementProxy', partOf: 'IfcElementAssembly' }),
+    ];
+    expect(applyScope(members, NONE)).toEqual({ members, findings: [] });
+  });
+
+  it('leaves out secondary parts and counts each kind in one note that names them', () => {
+    const { members, findings } = applyScope(
+      [
+        member('a'),
+        member('b', { partOf: 'IfcRailing' }),
+        member('c', { partOf: 'IfcRailing' }),
+        member('d', { predefinedType: 'MULLION' }),
+        member('e', material('Brettschichtholz GL24h')),
+        member('f', { class: 'IfcPile' }),
+      ],
+      NONE,
+    );
+    expect(members.map(({ globalId }) => globalId)).toEqual(['a']);
+    expect(findings.map(({ code, severity, message, members: named }) => [code, severity, message, named])).toEqual([
+      ['out-of-scope', 'note', '2 members left out: part of IfcRailing.', ['b', 'c']],
+      ['out-of-scope', 'note', '1 member left out: of predefined type MULLION.', ['d']],
+      ['out-of-scope', 'note', '1 member left out: of material Brettschichtholz GL24h, not steel.', ['e']],
+      ['out-of-scope', 'note', '1 member left out: of class IfcPile.', ['f']],
+    ]);
+  });
+
+  it('says so where nothing is left', () => {
+    expect(applyScope([member('a', { partOf: 'IfcStair' })], NONE).findings.map(({ code }) => code)).toEqual([
+      'out-of-scope',
+      'no-members',
+    ]);
+    expect(applyScope([], NONE).findings.map(({ code }) => code)).toEqual(['no-members']);
+  });
+});
+
+describe('a scope that the brief gives', () => {
+  it('is what include names, secondary parts too, less what exclude names', () => {
+    const { members, findings } = applyScope(
+      [
+        member('a', { name: 'T1' }),
+        member('b', { name: 'rail', partOf: 'IfcRailing' }),
+        member('c', { name: 'x' }),
+        member('d', { name: 'T2' }),
+      ],
+      {
+        include: [
+          { line: 3, name: 'T*' },
+          { line: 3, name: 'rail' },
+        ],
+        exclude: [{ line: 4, name: 'T2' }],
+      },
+    );
+    expect(members.map(({ globalId }) => globalId)).toEqual(['a', 'b']);
+    expect(findings.map(({ message, members: named }) => [message, named])).toEqual([
+      ['1 member left out: not caught by the include of the brief.', ['c']],
+      ['1 member left out: caught by the exclude of line 4 of the brief, {name: T2}.', ['d']],
+    ]);
+  });
+
+  it('warns of a selector that catches nothing, naming its line', () => {
+    const { findings } = applyScope([member('a')], { include: [], exclude: [{ line: 7, name: 'Z*' }] });
+    expect(findings).toHaveLength(1);
+    expect(findings[0]).toMatchObject({ code: 'selector-empty', severity: 'warning' });
+    expect(findings[0]!.message).toBe('Line 7 of the brief: no member is caught by {name: Z*}.');
+  });
+});
+
+describe('a material', () => {
+  it.each([
+    'Holz',
+    'Stahlbeton C30/37',
+    'Bois massif',
+    'béton armé',
+    'Madera',
+    'Hormigón',
+    'Legno lamellare',
+    'Træ',
+    'Hout',
+    'GL 28h',
+    'C25/30',
+    'EN AW-6060',
+    'Aluminium',
+    'Glass',
+    'Concrete, cast in situ',
+  ])('%s is plainly not steel', (name) => expect(isPlainlyNotSteel(name)).toBe(true));
+  it.each([
+    'S355',
+    'Steel',
+    'Stahl S235JR',
+    'A992',
+    'Default',
+    'Acier',
+    'Steel, concrete encased',
+    'C45',
+    'Metal - painted',
+    'Aluminized steel',
+  ])('%s may be steel', (name) => expect(isPlainlyNotSteel(name)).toBe(false));
+});
