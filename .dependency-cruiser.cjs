@@ -1,5 +1,17 @@
 /** The stages flow one way: each may use the domain and the stages before it, never one after it. */
-const STAGES = ['domain', 'step', 'importer', 'brief', 'topology', 'statics', 'checks', 'drawing', 'bcf', 'exporter', 'revisions'];
+const STAGES = [
+  'domain',
+  'step',
+  'importer',
+  'brief',
+  'topology',
+  'statics',
+  'checks',
+  'drawing',
+  'bcf',
+  'exporter',
+  'revisions',
+];
 const ENTRANCES = ['service', 'viewer', 'cli'];
 
 const oneWay = STAGES.map((stage, index) => ({
@@ -23,5 +35,9 @@ module.exports = {
     { name: 'no-circles', severity: 'error', from: {}, to: { circular: true } },
     { name: 'no-tests-in-source', severity: 'error', from: { path: '^src/' }, to: { path: '^(test|scripts)/' } },
   ],
-  options: { tsConfig: { fileName: 'tsconfig.json' }, tsPreCompilationDeps: true, doNotFollow: { path: 'node_modules' } },
+  options: {
+    tsConfig: { fileName: 'tsconfig.json' },
+    tsPreCompilationDeps: true,
+    doNotFollow: { path: 'node_modules' },
+  },
 };

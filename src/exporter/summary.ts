@@ -94,6 +94,7 @@ function standing(result: Result, { width, modes }: SummaryOptions): string[] {
   const gap = stability.gap === null ? '' : `, gap in the spectrum ${stability.gap.toExponential(0)}`;
   const sum = `${count(nodes, 'node')}, ${count(bars, 'bar')}, ${count(restraints, 'restraint')}${springWords}, rank ${rank}${gap}`;
   lines.push(...wrapped(sum, width, '         '));
+  if (result.findings.some(({ code }) => code === 'moves-freely')) return lines;
   const told = stability.freeBody ? stability.modes.filter((mode) => mode.kind !== 'whole') : stability.modes;
   for (const mode of told.slice(0, modes))
     lines.push(...wrapped(harmless(mode.words), width, '         - ', '           '));

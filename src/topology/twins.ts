@@ -68,6 +68,6 @@ function twinFinding(kept: Member, out: Member, axis: Axis, placeOf: PlaceNamer)
     'twin-members',
     `${labelOf(out)} is drawn over ${labelOf(kept)}: one member twice. Only ${labelOf(kept)} is in the truss.`,
     `Delete ${labelOf(out)}, or move it to where it belongs.`,
-    { members: [kept.globalId, out.globalId], at, place: placeOf(at), gap: 0 },
+    { members: [kept.globalId, out.globalId], at, place: placeOf(at) },
   );
 }

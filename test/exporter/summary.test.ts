@@ -107,7 +107,7 @@ describe('the summary', () => {
     result.cases[1]!.refused = 'it works on mode 1, node n7 moving sideways';
     const refused = summarise(result);
     expect(refused).toMatch(/wind ünder .*refused\n/);
-    expect(refused).toContain('wind ünder refused: it works on mode 1, node n7 moving sideways');
+    expect(refused).toContain('refused (wind ünder): it works on mode 1, node n7 moving sideways');
     expect(refused).toContain('1 of 2 load cases cannot be carried.');
   });
 

@@ -5,7 +5,7 @@ import { fileURLToPath } from 'node:url';
 const checkout = fileURLToPath(new URL('../..', import.meta.url));
 
 /** Public models, schemas and independent checkers that are not part of the project, where they are at hand. */
-const shared = process.env['PINWRIGHT_SHARED'] ?? resolve(checkout, '..', 'shared');
+const shared = process.env.PINWRIGHT_SHARED ?? resolve(checkout, '..', 'shared');
 
 /** The path of a public model, or null where it is absent. */
 export function publicModel(name: string): string | null {

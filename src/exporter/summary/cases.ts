@@ -41,10 +41,18 @@ function covered({ coverage = [] }: SummaryOptions['extras'], width: number): st
   );
 }
 
+/** Each reason once, with all it keeps from being carried; combinations fall with their cases. */
 function refusals({ cases, combinations }: Result, width: number): string[] {
-  return [...cases, ...combinations].flatMap(({ name, refused }) =>
-    refused === undefined ? [] : wrapped(`${harmless(name)} refused: ${harmless(refused)}`, width, '  ', '    '),
+  const byReason = new Map<string, string[]>();
+  for (const { name, refused } of cases) {
+    if (refused !== undefined) byReason.set(refused, [...(byReason.get(refused) ?? []), harmless(name)]);
+  }
+  const lines = [...byReason].flatMap(([reason, names]) =>
+    wrapped(`refused (${names.join(', ')}): ${harmless(reason)}`, width, '  ', '    '),
   );
+  const fallen = combinations.filter(({ refused }) => refused !== undefined);
+  const words = `refused with their cases: ${fallen.map(({ name }) => harmless(name)).join('; ')}`;
+  return fallen.length === 0 ? lines : [...lines, ...wrapped(words, width, '  ', '    ')];
 }
 
 function combinations({ combinations: all }: Result, width: number): string[] {

@@ -6,7 +6,7 @@ import type { StabilityOptions } from './options.ts';
 import { findPivots } from './pivots.ts';
 import { type RigidMotion, rigidMotions } from './rigid.ts';
 import type { Spectrum } from './slicing.ts';
-import { baseCandidates, bestBase, holdRigid } from './still-base.ts';
+import { baseCandidates, bestBase, holdRigid, withoutRigid } from './still-base.ts';
 
 /** A mode before it is put in words. */
 export interface FoundMode {
@@ -41,37 +41,34 @@ export function findModes(base: System, spectrum: Spectrum, options: StabilityOp
     motions: rigid.filter((m) => m.part === part),
     candidates: baseCandidates(problem, part),
   }));
-  let rigidPivots = bodies.flatMap((body) =>
-    holdRigid(problem, body.motions, body.candidates[body.candidates.length >> 1] ?? []),
+  const heldBodies = new Map(
+    bodies.map((body) => {
+      const middle = body.candidates[body.candidates.length >> 1] ?? [];
+      return [body.part, holdRigid(problem, body.motions, middle)] as const;
+    }),
   );
-  const inner = findPivots(base, rigidPivots, wanted - rigid.length, spectrum);
+  const rigidPivots = () => [...heldBodies.values()].flatMap((held) => held.pivots);
+  const inner = findPivots(base, rigidPivots(), wanted - rigid.length, spectrum);
   const most = Math.min(options.mostModes, Math.floor(MOST_NUMBERS / (3 * problem.truss.nodes.length)));
   let pivots = inner;
-  let moves = modesOfPivots(base, [...rigidPivots, ...inner], inner.slice(0, most));
+  let moves = modesOfPivots(base, [...rigidPivots(), ...inner], inner.slice(0, most));
   if (inner.length <= most && inner.length > 0) {
-    for (const body of bodies) {
-      const own = inner.map((p, i) => (problem.parts.partOf[p.node] === body.part ? i : -1)).filter((i) => i >= 0);
+    for (const { part, motions, candidates } of bodies) {
+      const own = inner.map((p, i) => (problem.parts.partOf[p.node] === part ? i : -1)).filter((i) => i >= 0);
       if (own.length === 0) continue;
-      const chosen = bestBase(
-        problem,
-        body.motions,
-        body.candidates,
-        own.map((i) => moves[i]!),
-      );
-      own.forEach((i, k) => {
-        moves[i] = chosen.modes[k]!;
-      });
-      const others = rigidPivots.filter((p) => problem.parts.partOf[p.node] !== body.part);
-      rigidPivots = [...others, ...holdRigid(problem, body.motions, chosen.base)];
+      const modes = own.map((i) => moves[i]!);
+      const held = holdRigid(problem, motions, bestBase(problem, motions, candidates, modes));
+      heldBodies.set(part, held);
+      for (const i of own) moves[i] = withoutRigid(held, moves[i]!);
     }
     const local = localise(problem.truss, moves);
     if (local.pivots.length === inner.length) {
       pivots = local.pivots;
-      moves = modesOfPivots(base, [...rigidPivots, ...pivots], pivots);
+      moves = modesOfPivots(base, [...rigidPivots(), ...pivots], pivots);
     }
   }
   const found = [
-    ...matchRigid(rigid, rigidPivots).map(({ motion, pivot }) => ({
+    ...matchRigid(rigid, rigidPivots()).map(({ motion, pivot }) => ({
       moves: tidyMode(motion.moves),
       pivot,
       rigid: motion,
@@ -81,7 +78,7 @@ export function findModes(base: System, spectrum: Spectrum, options: StabilityOp
   ];
   return {
     modes: found.filter((mode) => mode.stretch <= options.mostStretch),
-    pivots: [...rigidPivots, ...pivots],
+    pivots: [...rigidPivots(), ...pivots],
   };
 }
 

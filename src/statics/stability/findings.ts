@@ -25,23 +25,41 @@ export function movesFreely(truss: Truss, modes: readonly Mode[]): Finding[] {
   ];
 }
 
-function alike(modes: readonly Mode[]): Mode[][] {
-  const groups = new Map<string, Mode[]>();
-  for (const mode of modes) {
-    const likeness = likenessOf(mode);
-    groups.set(likeness, [...(groups.get(likeness) ?? []), mode]);
+/** The modes over one and the same nodes. */
+type Bundle = readonly Mode[];
+
+function alike(modes: readonly Mode[]): Bundle[][] {
+  const bundles = groupBy(modes, (mode) => (mode.kind === 'local' ? mode.nodes.join(' ') : mode.words));
+  return groupBy(bundles, (bundle) => bundle.map(likenessOf).join('|'));
+}
+
+function groupBy<T>(items: readonly T[], keyOf: (item: T) => string): T[][] {
+  const groups = new Map<string, T[]>();
+  for (const item of items) {
+    const key = keyOf(item);
+    const group = groups.get(key);
+    if (group) group.push(item);
+    else groups.set(key, [item]);
   }
   return [...groups.values()];
 }
 
-function aboutAlike(truss: Truss, group: readonly Mode[]): Finding {
-  const first = group[0]!;
+function aboutAlike(truss: Truss, group: readonly Bundle[]): Finding {
+  const bundle = group[0]!;
+  const first = bundle[0]!;
+  const ways = bundle.slice(1).map((mode) => directionInWords(mode.movement[indexOfMost(mode)]!));
+  const also = ways.length > 0 ? `; and in ${count(ways.length, 'more way')}: ${ways.join(', ')}` : '';
   const others = group.length > 1 ? `; the same at ${group.length} places in all` : '';
   return finding(
     'moves-freely',
-    capitalised(first.words) + others,
-    advise(truss, first, group.length),
-    whereOf(truss, group),
+    capitalised(first.words) + also + others,
+    advise(
+      truss,
+      bundle.flatMap((mode) => mode.remedy),
+      first.order,
+      group.length,
+    ),
+    whereOf(truss, group.flat()),
   );
 }
 
@@ -49,7 +67,7 @@ function aboutTangle(truss: Truss, group: readonly Mode[]): Finding {
   const first = group.reduce((least, mode) => (mode.nodes.length < least.nodes.length ? mode : least));
   const where = whereOf(truss, [first, ...group]);
   const message = `${where.nodes.length} nodes can move in ${group.length} independent ways without straining a bar; one of them: ${first.words}`;
-  return finding('moves-freely', message, advise(truss, first, group.length), where);
+  return finding('moves-freely', message, advise(truss, first.remedy, first.order, group.length), where);
 }
 
 function whereOf(truss: Truss, group: readonly Mode[]) {
@@ -64,8 +82,7 @@ const capitalised = (text: string): string => text.charAt(0).toUpperCase() + tex
 /** Alike: of one kind, as many nodes, moving the same ways by the same amounts. */
 function likenessOf(mode: Mode): string {
   const moves = mode.movement.map((v) => v.map((c) => Math.abs(c).toFixed(2)).join(' ')).sort();
-  // Where the whole or a part moves, no two are the same cause.
-  return [mode.kind, mode.order, mode.nodes.length, ...(mode.kind === 'local' ? moves : [mode.words])].join('|');
+  return [mode.kind, mode.order, ...moves].join('|');
 }
 
 function indexOfMost(mode: Mode): number {
@@ -77,10 +94,10 @@ function indexOfMost(mode: Mode): number {
   return best;
 }
 
-function advise(truss: Truss, mode: Mode, places: number): string {
-  const what = mode.remedy.map((remedy) => remedyInWords(truss, remedy)).join(' and ');
+function advise(truss: Truss, remedies: readonly Remedy[], order: Mode['order'], places: number): string {
+  const what = remedies.map((remedy) => remedyInWords(truss, remedy)).join(' and ');
   const each = places > 1 ? `, and likewise for each of the ${places}` : '';
-  const stiffens = mode.order === 'infinitesimal' ? ' It is stiffened only by prestress.' : '';
+  const stiffens = order === 'infinitesimal' ? ' It is stiffened only by prestress.' : '';
   return `Hold ${what}${each}, or add bars that do; or say in the brief what holds it and is not in the model.${stiffens}`;
 }
 

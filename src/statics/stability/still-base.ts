@@ -1,19 +1,29 @@
 import type { Vec3 } from '../../domain/vector.ts';
 import type { Problem } from '../model/system.ts';
-import type { Restraint } from '../types.ts';
 import { movingNodes } from './localise.ts';
-import { reduceModes } from './reduce.ts';
+import { type ReducedModes, reduceModes } from './reduce.ts';
 import { movementAt, type RigidMotion } from './rigid.ts';
 
 /** Triangles tried as the base that stands still while something moves against it. */
 const TRIED = 40;
 
 /** Three directions a node, held so that the part cannot move as one body. */
-export function holdRigid(problem: Problem, motions: readonly RigidMotion[], base: readonly number[]): Restraint[] {
+export function holdRigid(problem: Problem, motions: readonly RigidMotion[], base: readonly number[]): ReducedModes {
   const moves = motions.map((m) => m.moves);
   const atBase = reduceModes(problem.truss, moves, base);
-  if (atBase.pivots.length === motions.length) return atBase.pivots;
-  return reduceModes(problem.truss, moves).pivots;
+  return atBase.pivots.length === motions.length ? atBase : reduceModes(problem.truss, moves);
+}
+
+/** The mode less what of the rigid motions it makes at their pivots: it leaves all of those at rest. */
+export function withoutRigid(rigid: ReducedModes, mode: Float64Array): Float64Array {
+  const out = mode.slice();
+  rigid.pivots.forEach(({ node, direction }, r) => {
+    let k = 0;
+    for (let axis = 0; axis < 3; axis++) k += direction[axis]! * mode[3 * node + axis]!;
+    const motion = rigid.modes[r]!;
+    if (k !== 0) for (let i = 0; i < out.length; i++) out[i] = out[i]! - k * motion[i]!;
+  });
+  return out;
 }
 
 /** Triangles of bars spread over the part; pairs of joined nodes where there is none. */
@@ -39,19 +49,22 @@ export function baseCandidates(problem: Problem, part: number): number[][] {
   return triangles.length > 0 ? triangles : pairs.slice(0, TRIED);
 }
 
-/** The base against which the modes move the fewest nodes, and the modes with their base at rest. */
+/** The base against which the modes move the fewest nodes. */
 export function bestBase(
   problem: Problem,
   motions: readonly RigidMotion[],
   candidates: readonly (readonly number[])[],
   modes: readonly Float64Array[],
-): { readonly base: readonly number[]; readonly modes: Float64Array[] } {
-  let best = { base: candidates[0] ?? [], modes: [...modes], moving: Number.POSITIVE_INFINITY };
+): readonly number[] {
+  let best: readonly number[] = candidates[0] ?? [];
+  let least = Number.POSITIVE_INFINITY;
   for (const base of candidates) {
-    const rest = modes.map((mode) => atRest(motions, base, mode));
     let moving = 0;
-    for (const mode of rest) moving += movingNodes(problem.truss, mode).length;
-    if (moving < best.moving) best = { base, modes: rest, moving };
+    for (const mode of modes) moving += movingNodes(problem.truss, atRest(motions, base, mode)).length;
+    if (moving < least) {
+      best = base;
+      least = moving;
+    }
   }
   return best;
 }
