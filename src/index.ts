@@ -1,5 +1,6 @@
 /** The public library: the whole run, and each stage by itself. */
 
+export { briefJsonSchema } from './brief/json-schema.ts';
 export { parseBrief } from './brief/parse-brief.ts';
 export { applyScope } from './brief/scope.ts';
 export { selectMembers } from './brief/selectors/select-members.ts';

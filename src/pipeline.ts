@@ -55,13 +55,13 @@ export interface Run {
  * Reads a model and takes it through the stages. Everything but the clock of `seconds` follows from the bytes and the
  * options alone. Throws ModelError where the bytes cannot be read as a model.
  */
-export function runModel(bytes: Uint8Array, options: Partial<RunOptions> = {}): Run {
+export async function runModel(bytes: Uint8Array, options: Partial<RunOptions> = {}): Promise<Run> {
   const { fileName, extent, brief, onStage } = { ...RUN_DEFAULTS, ...options };
   const clock = stageClock(onStage);
 
   clock.enter('import');
   const file = openStep(bytes);
-  const imported = importModel(file, {
+  const imported = await importModel(file, {
     classes: classesNamed(brief),
     axes: brief.axes,
     defaultMaterial: brief.materials.default,

@@ -40,7 +40,7 @@ export async function runCommand(model: string, extent: RunOptions['extent'], fl
   const progress = makeProgress(flags.quiet === true);
   let run: Run;
   try {
-    run = runModel(bytes, {
+    run = await runModel(bytes, {
       fileName: basename(model),
       extent,
       brief,

@@ -179,9 +179,5 @@ export const resultSchema = z.object({
 
 export type Result = z.infer<typeof resultSchema>;
 export type ResultMember = Result['members'][number];
-export type ResultNode = Result['nodes'][number];
 export type ResultBar = Result['bars'][number];
 export type ResultFinding = Result['findings'][number];
-export type ResultStability = Result['stability'];
-export type ResultCase = Result['cases'][number];
-export type ResultCombination = Result['combinations'][number];

@@ -15,9 +15,6 @@ import { StepInstances } from './instances.ts';
 import { DataScanner } from './scan-data.ts';
 import type { StepValue } from './values.ts';
 
-export type { StepRecord } from './parameters.ts';
-export type { StepProblem, StepProblemKind } from './problems.ts';
-
 /** What stands between the comments of our own block, read apart from the model. */
 export interface StepBlock {
   /** Offset of the first byte of its first comment. */

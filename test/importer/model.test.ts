@@ -1,7 +1,7 @@
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import { ModelError, RequestError } from '../../src/domain/errors.ts';
-import { importModel } from '../../src/importer/import-model.ts';
+import { readPhysicalModel } from '../../src/importer/read-physical-model.ts';
 import { openStep } from '../../src/step/step-file.ts';
 import { beamWith, COMMON, importText, stepText } from './support/model-text.ts';
 
@@ -312,8 +312,10 @@ describe('order', () => {
 #${id + 4}=IFCPRODUCTDEFINITIONSHAPE($,$,(#91));`;
     });
     const rest = `${COMMON}\n#17=IFCDIRECTION((0.,0.,-1.));\n#91=IFCSHAPEREPRESENTATION(#10,'Body','SweptSolid',(#100));\n${BODY}`;
-    const one = importModel(openStep(new TextEncoder().encode(stepText(`${rest}\n${beams.join('\n')}`))));
-    const other = importModel(openStep(new TextEncoder().encode(stepText(`${beams.reverse().join('\n')}\n${rest}`))));
+    const one = readPhysicalModel(openStep(new TextEncoder().encode(stepText(`${rest}\n${beams.join('\n')}`))));
+    const other = readPhysicalModel(
+      openStep(new TextEncoder().encode(stepText(`${beams.reverse().join('\n')}\n${rest}`))),
+    );
     expect(one.members.map((m) => m.axis[0][0])).toEqual([1, 2, 3, 4, 5]);
     expect(one.members.map((m) => m.axis[0][2] < m.axis[1][2])).toEqual([true, true, true, true, true]);
     expect(JSON.stringify(other.members)).toBe(JSON.stringify(one.members));

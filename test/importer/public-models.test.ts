@@ -1,14 +1,14 @@
 import { readFileSync } from 'node:fs';
 import { describe, expect, it } from 'vitest';
 import { norm, subtract } from '../../src/domain/vector.ts';
-import { importModel } from '../../src/importer/import-model.ts';
-import type { ImportOptions } from '../../src/importer/options.ts';
+import { IMPORT_DEFAULTS, type ImportOptions } from '../../src/importer/options.ts';
+import { readPhysicalModel } from '../../src/importer/read-physical-model.ts';
 import type { ImportedModel } from '../../src/importer/types.ts';
 import { openStep } from '../../src/step/step-file.ts';
 import { publicModel } from '../support/shared.ts';
 
 const read = (path: string | null, options: Partial<ImportOptions> = {}): ImportedModel =>
-  importModel(openStep(readFileSync(path!)), options);
+  readPhysicalModel(openStep(readFileSync(path!)), { ...IMPORT_DEFAULTS, ...options });
 
 function expectSound(model: ImportedModel): void {
   for (const member of model.members) {

@@ -10,13 +10,15 @@ import { fixture } from '../support/shared.ts';
 import { spellPoint } from '../support/spell-point.ts';
 
 const brief = parseBrief(readFileSync(fixture('boat-hall.yaml')), 'boat-hall.yaml');
-const analysed = (name: string): Run => runModel(readFileSync(fixture(name)), { fileName: name, brief });
+const analysed = (name: string): Promise<Run> => runModel(readFileSync(fixture(name)), { fileName: name, brief });
 
-describe.each([
-  ['boat-hall-a.ifc', REVISION_A],
-  ['boat-hall-b.ifc', REVISION_B],
-] as const)('%s', (name, revision) => {
-  const run = analysed(name);
+const runs = {
+  'boat-hall-a.ifc': { revision: REVISION_A, run: await analysed('boat-hall-a.ifc') },
+  'boat-hall-b.ifc': { revision: REVISION_B, run: await analysed('boat-hall-b.ifc') },
+};
+const faulty = await analysed('boat-hall-faults.ifc');
+
+describe.each(Object.entries(runs))('%s', (_, { revision, run }) => {
   const { result } = run;
   const expected = expectedTruss(hallModel(revision));
 
@@ -58,7 +60,7 @@ describe.each([
 });
 
 describe('the planted faults', () => {
-  const { result } = analysed('boat-hall-faults.ifc');
+  const { result } = faulty;
 
   it.each(plantedFaults().map((fault) => [fault.code, fault] as const))('%s is found', (code, fault) => {
     const found = result.findings.filter((finding) => finding.code === code);

@@ -15,7 +15,7 @@ import { joinMembers } from '../../src/topology/join-members.ts';
 import { fixture } from '../support/shared.ts';
 import { spellPoint } from '../support/spell-point.ts';
 
-const drawn = importModel(openStep(readFileSync(fixture('boat-hall-a.ifc')))).members;
+const drawn = (await importModel(openStep(readFileSync(fixture('boat-hall-a.ifc'))))).members;
 const brief = parseBrief(readFileSync(fixture('boat-hall.yaml')), 'boat-hall.yaml');
 
 type Move = (p: Vec3) => Vec3;

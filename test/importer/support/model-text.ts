@@ -1,5 +1,5 @@
-import { importModel } from '../../../src/importer/import-model.ts';
-import type { ImportOptions } from '../../../src/importer/options.ts';
+import { IMPORT_DEFAULTS, type ImportOptions } from '../../../src/importer/options.ts';
+import { readPhysicalModel } from '../../../src/importer/read-physical-model.ts';
 import type { ImportedModel } from '../../../src/importer/types.ts';
 import { openStep } from '../../../src/step/step-file.ts';
 
@@ -24,7 +24,7 @@ export const stepText = (data: string, schema = 'IFC4'): string =>
   `FILE_SCHEMA(('${schema}'));\nENDSEC;\nDATA;\n${data}\nENDSEC;\nEND-ISO-10303-21;\n`;
 
 export const importText = (data: string, schema = 'IFC4', options: Partial<ImportOptions> = {}): ImportedModel =>
-  importModel(openStep(new TextEncoder().encode(stepText(data, schema))), options);
+  readPhysicalModel(openStep(new TextEncoder().encode(stepText(data, schema))), { ...IMPORT_DEFAULTS, ...options });
 
 /** COMMON and one beam with the items of its body and axis (references, as in "#100,#101"); `more` defines them. */
 export function beamWith(parts: { body?: string; axis?: string; more: string; placement?: string }): string {
