@@ -8,9 +8,9 @@ const text = z.string();
 const textOrNull = text.nullable();
 const forcePerBar = z.array(z.number().nullable()).describe('N, tension positive, one per bar in the order of bars');
 const displacementPerNode = z.array(vector.nullable()).describe('m, one per node in the order of nodes');
-const nodeForces = z.array(z.object({ node: text, force: vector.describe('N, global axes') }));
+const nodeForces = z.array(z.strictObject({ node: text, force: vector.describe('N, global axes') }));
 
-const sectionSchema = z.object({
+const sectionSchema = z.strictObject({
   name: text,
   shape: text,
   area: z.number().describe('m2'),
@@ -24,7 +24,7 @@ const sectionSchema = z.object({
   from: z.enum(['profile', 'name', 'properties', 'brief', 'mesh']),
 });
 
-const materialSchema = z.object({
+const materialSchema = z.strictObject({
   name: text,
   elasticModulus: z.number().describe('Pa'),
   density: z.number().describe('kg/m3'),
@@ -34,7 +34,7 @@ const materialSchema = z.object({
   from: text,
 });
 
-const memberSchema = z.object({
+const memberSchema = z.strictObject({
   id: text,
   globalId: text,
   part: z.number().int(),
@@ -55,16 +55,16 @@ const memberSchema = z.object({
   material: materialSchema.nullable(),
 });
 
-const nodeSchema = z.object({
+const nodeSchema = z.strictObject({
   id: text,
   at: vector.describe('m, world axes'),
   members: z.array(text).describe('GlobalIds'),
   fixed: text.describe('letters of the rigidly held directions; "" for a free node'),
   place: textOrNull,
-  carriedBy: z.object({ bar: text, t: z.number() }).nullable(),
+  carriedBy: z.strictObject({ bar: text, t: z.number() }).nullable(),
 });
 
-const barSchema = z.object({
+const barSchema = z.strictObject({
   id: text,
   name: text,
   member: text.describe('GlobalId'),
@@ -74,7 +74,7 @@ const barSchema = z.object({
   length: z.number(),
 });
 
-const findingSchema = z.object({
+const findingSchema = z.strictObject({
   code: z.enum(Object.keys(FINDING_SEVERITY) as [FindingCode, ...FindingCode[]]),
   severity: z.enum(['error', 'warning', 'note']),
   message: text,
@@ -86,16 +86,18 @@ const findingSchema = z.object({
   advice: text,
 });
 
-const modeSchema = z.object({
+const modeSchema = z.strictObject({
   kind: z.enum(['local', 'part', 'whole']),
   nodes: z.array(text),
   movement: z.array(vector),
   order: z.enum(['infinitesimal', 'finite', 'undecided']),
   words: text,
-  remedy: z.array(z.union([z.object({ node: text, direction: vector }), z.object({ bar: z.tuple([text, text]) })])),
+  remedy: z.array(
+    z.union([z.strictObject({ node: text, direction: vector }), z.strictObject({ bar: z.tuple([text, text]) })]),
+  ),
 });
 
-const stabilitySchema = z.object({
+const stabilitySchema = z.strictObject({
   nodes: z.number().int(),
   bars: z.number().int(),
   restraints: z.number().int(),
@@ -110,7 +112,7 @@ const stabilitySchema = z.object({
   modesOmitted: z.number().int().optional(),
 });
 
-const caseSchema = z.object({
+const caseSchema = z.strictObject({
   name: text,
   nature: z.enum(['permanent', 'imposed', 'snow', 'wind', 'thermal', 'accidental']),
   refused: text.optional(),
@@ -122,7 +124,7 @@ const caseSchema = z.object({
   residual: z.number().nullable().describe('largest out-of-balance joint force over the largest force'),
 });
 
-const combinationSchema = z.object({
+const combinationSchema = z.strictObject({
   name: text,
   limit: z.enum(['strength', 'equilibrium', 'accidental', 'characteristic', 'frequent', 'quasi-permanent']),
   factors: z.record(text, z.number()),
@@ -132,9 +134,9 @@ const combinationSchema = z.object({
   reactions: nodeForces,
 });
 
-const extreme = z.object({ force: z.number(), from: text }).nullable();
+const extreme = z.strictObject({ force: z.number(), from: text }).nullable();
 
-const checkSchema = z.object({
+const checkSchema = z.strictObject({
   bar: text,
   member: text,
   utilisation: z.number().nullable(),
@@ -153,13 +155,13 @@ const checkSchema = z.object({
   assumptions: z.array(text),
 });
 
-export const resultSchema = z.object({
+export const resultSchema = z.strictObject({
   format: z.literal('pinwright-result'),
   version: z.literal(1),
-  generator: z.object({ name: text, version: text }),
+  generator: z.strictObject({ name: text, version: text }),
   caution: text,
-  units: z.object({ length: z.literal('m'), force: z.literal('N'), stress: z.literal('Pa') }),
-  model: z.object({
+  units: z.strictObject({ length: z.literal('m'), force: z.literal('N'), stress: z.literal('Pa') }),
+  model: z.strictObject({
     file: text,
     sha256: text.describe("of the model's bytes without our own block"),
     schema: text,
@@ -173,7 +175,7 @@ export const resultSchema = z.object({
   stability: stabilitySchema,
   cases: z.array(caseSchema),
   combinations: z.array(combinationSchema),
-  envelope: z.array(z.object({ bar: text, tension: extreme, compression: extreme })),
+  envelope: z.array(z.strictObject({ bar: text, tension: extreme, compression: extreme })),
   checks: z.array(checkSchema),
 });
 

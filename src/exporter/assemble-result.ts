@@ -58,7 +58,7 @@ export function assembleResult(run: RunRecord): Result {
     bars: truss.bars.map((bar, index) => resultBar(bar, index, members)),
     findings: run.findings.map((finding) => ({
       ...finding,
-      members: [...finding.members],
+      members: concerned(finding, truss, members),
       nodes: finding.nodes.map(nodeId),
       at: finding.at && point(finding.at),
     })),
@@ -72,6 +72,13 @@ export function assembleResult(run: RunRecord): Result {
     })),
     checks: [],
   };
+}
+
+/** A finding of statics names nodes; the reader of the model knows members. */
+function concerned({ members: named, nodes }: Finding, truss: Truss, members: readonly Member[]): string[] {
+  if (named.length > 0) return [...named];
+  const met = nodes.flatMap((node) => truss.nodes[node].members.map((member) => members[member].globalId));
+  return [...new Set(met)];
 }
 
 const point = (at: Vec3): [number, number, number] => [at[0], at[1], at[2]];
@@ -123,11 +130,19 @@ function fixedLetters({ restraints }: Supports): Map<number, string> {
 }
 
 function resultStability(stability: Stability): Result['stability'] {
-  const { modes, setAside, findings, ...counts } = stability;
+  const { modes, setAside } = stability;
   const listed = modes.slice(0, MODES_LISTED);
   const omitted = stability.mechanisms - listed.length;
   return {
-    ...counts,
+    nodes: stability.nodes,
+    bars: stability.bars,
+    restraints: stability.restraints,
+    springs: stability.springs,
+    rank: stability.rank,
+    mechanisms: stability.mechanisms,
+    selfStressStates: stability.selfStressStates,
+    freeBody: stability.freeBody,
+    gap: stability.gap,
     setAside: setAside.map(barId),
     modes: listed.map(resultMode),
     ...(omitted > 0 ? { modesOmitted: omitted } : {}),

@@ -61,7 +61,7 @@ export interface Stability {
   readonly gap: number | null;
   /** Bars of parts that nothing supports, by index. */
   readonly setAside: readonly number[];
-  /** All modes, however many; outputs list the first hundred. */
+  /** The whole motions first, then the others up to a few hundred: where there are more, fewer than `mechanisms`. */
   readonly modes: readonly Mode[];
   readonly findings: readonly Finding[];
 }

@@ -1,6 +1,5 @@
 import { ModelError } from '../domain/errors.ts';
 
-const TAB = 0x09;
 export const LINE_FEED = 0x0a;
 export const CARRIAGE_RETURN = 0x0d;
 export const SPACE = 0x20;

@@ -20,9 +20,7 @@ export function combine(cases: readonly SolvedCase[], rules: readonly Combinatio
         name,
         limit,
         factors,
-        refused: missing
-          ? `there is no load case ${missing.caseName}`
-          : `load case ${bad!.caseName} is not carried: ${bad!.one!.refused}`,
+        refused: missing ? `there is no load case ${missing.caseName}` : `load case ${bad!.caseName} is refused`,
         axialForce: new Array<null>(bars).fill(null),
         displacement: new Array<null>(nodes).fill(null),
         reactions: [],

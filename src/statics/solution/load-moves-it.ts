@@ -19,15 +19,20 @@ export function loadMovesIt(
   const direction = moved?.direction ?? pivot.direction;
   const where = `at ${nodeInWords(truss, node)} ${directionInWords(direction)}`;
   const sentence = moved
-    ? `load case ${one.name} moves the truss instead of straining it: ${moved.mode.words}; the load does work on that, most ${where}`
-    : `load case ${one.name} moves the truss instead of straining it: one of its ${stability.mechanisms} mechanisms has nothing to hold it ${where}`;
+    ? `the load does work on a mechanism, most ${where}: ${moved.mode.words}`
+    : `the load does work on one of ${stability.mechanisms} mechanisms: nothing holds it ${where}`;
   return {
     sentence,
-    finding: finding('load-moves-it', sentence, `Hold the node ${where}, or add bars that do, or mend the load.`, {
-      nodes: [node],
-      at: truss.nodes[node]!.at,
-      place: truss.nodes[node]!.place,
-    }),
+    finding: finding(
+      'load-moves-it',
+      `Load case ${one.name} moves the truss: ${sentence}.`,
+      `Hold the node ${where}, or add bars that do, or mend the load.`,
+      {
+        nodes: [node],
+        at: truss.nodes[node]!.at,
+        place: truss.nodes[node]!.place,
+      },
+    ),
   };
 }
 

@@ -3,6 +3,7 @@ import type { Truss } from '../../domain/truss.ts';
 import type { Mode, Remedy } from '../types.ts';
 import { groupByNodes } from './localise.ts';
 import type { StabilityOptions } from './options.ts';
+import { tidyDirection } from './reduce.ts';
 import type { Rung, Spectrum } from './slicing.ts';
 import { count, directionInWords, nodeInWords } from './words.ts';
 
@@ -47,12 +48,12 @@ function groupBy<T>(items: readonly T[], keyOf: (item: T) => string): T[][] {
 function aboutAlike(truss: Truss, group: readonly Bundle[]): Finding {
   const bundle = group[0]!;
   const first = bundle[0]!;
-  const ways = bundle.slice(1).map((mode) => directionInWords(mode.movement[indexOfMost(mode)]!));
+  const ways = bundle.slice(1).map((mode) => directionInWords(tidyDirection(mode.movement[indexOfMost(mode)]!)));
   const also = ways.length > 0 ? `; and in ${count(ways.length, 'more way')}: ${ways.join(', ')}` : '';
   const others = group.length > 1 ? `; the same at ${group.length} places in all` : '';
   return finding(
     'moves-freely',
-    capitalised(first.words) + also + others,
+    `${capitalised(first.words)}${also}${others}.`,
     advise(
       truss,
       bundle.flatMap((mode) => mode.remedy),
@@ -66,7 +67,7 @@ function aboutAlike(truss: Truss, group: readonly Bundle[]): Finding {
 function aboutTangle(truss: Truss, group: readonly Mode[]): Finding {
   const first = group.reduce((least, mode) => (mode.nodes.length < least.nodes.length ? mode : least));
   const where = whereOf(truss, [first, ...group]);
-  const message = `${where.nodes.length} nodes can move in ${group.length} independent ways without straining a bar; one of them: ${first.words}`;
+  const message = `${where.nodes.length} nodes can move in ${group.length} independent ways without straining a bar; one of them: ${first.words}.`;
   return finding('moves-freely', message, advise(truss, first.remedy, first.order, group.length), where);
 }
 

@@ -5,11 +5,16 @@ import type { FoundMode } from './find-modes.ts';
 import { movingNodes } from './localise.ts';
 import { tidyDirection } from './reduce.ts';
 
+/** Movements that stretch bars by more than this share are told with it: less is rounding of the model's coordinates. */
+const WORTH_SAYING = 1e-6;
+
+/** Nodes that a sentence names one by one. */
+const FEW = 3;
+
 /** A node in words: its place in the building, or its coordinates to the millimetre. */
 export function nodeInWords(truss: Truss, node: number): string {
   const { at, place } = truss.nodes[node]!;
-  const point = `(${at.map((v) => plain(v, 3)).join(', ')})`;
-  return place === null ? point : `${place} ${point}`;
+  return place ?? `(${at.map((v) => plain(v, 3)).join(', ')})`;
 }
 
 /** "up and down (along z)", "sideways (along y)", "along (0.60, 0.80, 0.00)". */
@@ -24,9 +29,7 @@ export function directionInWords(direction: Vec3): string {
 export function modeInWords(truss: Truss, mode: FoundMode, kind: Mode['kind']): string {
   const nodes = movingNodes(truss, mode.moves);
   const note =
-    mode.stretch > 1e-9
-      ? ` (stretching bars by ${mode.stretch.toExponential(0)} of the movement: rounded coordinates)`
-      : '';
+    mode.stretch > WORTH_SAYING ? ` (stretching bars by ${mode.stretch.toExponential(0)} of the movement)` : '';
   if (mode.rigid !== null) return rigidInWords(truss, mode, kind, nodes) + note;
   const directions = nodes.map((i) => movementDirection(mode.moves, i));
   const common = directions.every(
@@ -36,7 +39,7 @@ export function modeInWords(truss: Truss, mode: FoundMode, kind: Mode['kind']): 
   const who = listNodes(truss, nodes);
   if (kind === 'part') {
     const how = directionInWords(movementDirection(mode.moves, most));
-    return `${count(nodes.length, 'node')} can move as one body against the rest, ${nodeInWords(truss, most)} ${how}${note}`;
+    return `${count(nodes.length, 'node')} can move as one body against the rest, the node at ${nodeInWords(truss, most)} ${how}${note}`;
   }
   if (common) {
     const way = directionInWords(directions[0]!);
@@ -44,7 +47,8 @@ export function modeInWords(truss: Truss, mode: FoundMode, kind: Mode['kind']): 
     return `the nodes at ${who} can move ${way} together: no bar holds them in that direction${note}`;
   }
   const way = directionInWords(movementDirection(mode.moves, most));
-  return `the nodes at ${who} can move together without straining a bar, ${nodeInWords(truss, most)} most, ${way}${note}`;
+  const others = nodes.length > FEW ? count(nodes.length, 'node') : `the nodes at ${who}`;
+  return `${others} can move together without straining a bar, the one at ${nodeInWords(truss, most)} most, ${way}${note}`;
 }
 
 function rigidInWords(truss: Truss, mode: FoundMode, kind: Mode['kind'], nodes: readonly number[]): string {
@@ -68,8 +72,8 @@ function rigidInWords(truss: Truss, mode: FoundMode, kind: Mode['kind'], nodes: 
 }
 
 function listNodes(truss: Truss, nodes: readonly number[]): string {
-  const shown = nodes.slice(0, 3).map((i) => nodeInWords(truss, i));
-  if (nodes.length > 3) return `${shown.join(', ')} and ${count(nodes.length - 3, 'more', 'more')}`;
+  const shown = nodes.slice(0, FEW).map((i) => nodeInWords(truss, i));
+  if (nodes.length > FEW) return `${shown.join(', ')} and ${nodes.length - FEW} more`;
   return shown.length === 1 ? shown[0]! : `${shown.slice(0, -1).join(', ')} and ${shown[shown.length - 1]}`;
 }
 
