@@ -1,7 +1,10 @@
-// Part of the build: the JSON Schemas that ship with the package, from the schemas the program itself reads by.
-import { mkdirSync, writeFileSync } from 'node:fs';
+// The end of the build: makes the command executable, and writes the JSON Schemas that ship with the package from the
+// schemas that the program itself reads by.
+import { chmodSync, mkdirSync, writeFileSync } from 'node:fs';
 import { briefJsonSchema } from '../dist/brief/json-schema.js';
 import { resultJsonSchema } from '../dist/exporter/json.js';
+
+chmodSync(new URL('../dist/cli/main.js', import.meta.url), 0o755);
 
 const folder = new URL('../dist/schemas/', import.meta.url);
 mkdirSync(folder, { recursive: true });
