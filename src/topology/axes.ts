@@ -6,6 +6,8 @@ import { TOLERANCE } from './options.ts';
 export interface Axis {
   /** Index into the members. */
   readonly member: number;
+  /** The other member of a pair that is one axis. */
+  readonly also: readonly number[];
   readonly start: Vec3;
   readonly finish: Vec3;
   /** Unit, from start to finish. */
@@ -29,6 +31,7 @@ export function makeAxes(members: readonly Member[]): (Axis | null)[] {
     if (direction === null || length < TOLERANCE.zeroLength) return null;
     return {
       member: index,
+      also: [],
       start,
       finish,
       direction,

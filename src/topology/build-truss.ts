@@ -1,9 +1,10 @@
-import { pushTo } from '../domain/group.ts';
 import type { Member } from '../domain/member.ts';
 import type { PlaceNamer } from '../domain/place.ts';
 import type { Truss, TrussBar, TrussNode } from '../domain/truss.ts';
 import { between, distance, dot, subtract, type Vec3 } from '../domain/vector.ts';
 import type { Axis } from './axes.ts';
+import { nameBars } from './bar-names.ts';
+import { barProperties, membersOfPiece } from './bar-properties.ts';
 import { faithOf } from './faith.ts';
 import { endsOf, type PieceRun } from './pieces.ts';
 import type { VertexGraph } from './vertices.ts';
@@ -30,6 +31,7 @@ export function buildTruss(
   const names = nameBars(
     draft.map(({ run }) => run),
     members,
+    axes,
   );
   const bars = draft.map(({ run, ends }, bar) => makeBar(run, ends, names[bar]));
   const nodes = ordered.map((vertex) => makeNode(vertex));
@@ -59,17 +61,17 @@ export function buildTruss(
   }
 
   function makeBar(run: PieceRun, [from, to]: readonly [number, number], name: string): TrussBar {
-    const own = [...new Set(run.map((piece) => piece.member))];
+    const own = [...new Set(run.flatMap((piece) => membersOfPiece(axes, piece.member)))];
     const length = distance(positionOf(ordered[from]), positionOf(ordered[to]));
-    return { name, members: own, from, to, length, ...properties(run, members, graph) };
+    return { name, members: own, from, to, length, ...barProperties(run, members, axes, graph) };
   }
 
   function makeNode(vertex: number): TrussNode {
     const at = positionOf(vertex);
     const run = carriedIn.get(vertex);
     const carriedBy = run === undefined ? null : { bar: barOfRun.get(run) as number, t: alongBar(vertex, run) };
-    const own = graph.vertices[vertex].stations.map((station) => station.member).sort((p, q) => p - q);
-    return { at, members: own, carriedBy, overhangMass: 0, place: placeOf(at) };
+    const met = graph.vertices[vertex].stations.flatMap(({ member }) => membersOfPiece(axes, member));
+    return { at, members: met.sort((p, q) => p - q), carriedBy, overhangMass: 0, place: placeOf(at) };
   }
 
   function alongBar(vertex: number, run: number): number {
@@ -98,49 +100,4 @@ function comparePoints(p: Vec3, q: Vec3): number {
     if (difference !== 0) return difference;
   }
   return 0;
-}
-
-/** EA of members in a row act in series; mass and expansion are weighted by length. */
-function properties(run: PieceRun, members: readonly Member[], graph: VertexGraph) {
-  let total = 0;
-  let flexibility = 0;
-  let mass = 0;
-  let expansion = 0;
-  let known = true;
-  for (const piece of run) {
-    const { section, material } = members[piece.member];
-    const length = distance(graph.vertices[piece.from].at, graph.vertices[piece.to].at);
-    total += length;
-    expansion += length * material.expansion;
-    if (section === null) {
-      known = false;
-      continue;
-    }
-    flexibility += length / (material.elasticModulus * section.area);
-    mass += length * section.area * material.density;
-  }
-  return {
-    stiffnessEA: known && total > 0 ? total / flexibility : null,
-    massPerLength: total > 0 ? mass / total : 0,
-    expansion: total > 0 ? expansion / total : 0,
-  };
-}
-
-/** A bar bears its member's mark; where a member is several bars they are numbered along it. */
-function nameBars(runs: readonly PieceRun[], members: readonly Member[]): string[] {
-  const ofMember = new Map<number, number[]>();
-  runs.forEach((run, bar) => {
-    pushTo(ofMember, run[0].member, bar);
-  });
-  const names: string[] = [];
-  for (const [member, bars] of ofMember) {
-    const { tag, name, globalId } = members[member];
-    const mark = tag || name || globalId;
-    bars.forEach((bar, i) => {
-      const others = [...new Set(runs[bar].map((piece) => piece.member))].slice(1);
-      const spliced = others.map((other) => `+${members[other].tag || members[other].name || members[other].globalId}`);
-      names[bar] = (bars.length > 1 ? `${mark}.${i + 1}` : mark) + spliced.join('');
-    });
-  }
-  return names;
 }

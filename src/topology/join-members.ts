@@ -7,6 +7,7 @@ import { type Axis, makeAxes } from './axes.ts';
 import { buildTruss } from './build-truss.ts';
 import { findCarriers } from './carriers.ts';
 import { findContacts } from './contacts.ts';
+import { resolveDoubles } from './doubles.ts';
 import { makeJoints } from './joints.ts';
 import { labelOf, millimetres } from './labels.ts';
 import { looseEndFindings } from './loose-ends.ts';
@@ -15,7 +16,6 @@ import { cutOverhangs } from './overhangs.ts';
 import { partFindings } from './parts.ts';
 import { cutPieces, joinSplices } from './pieces.ts';
 import { findStations } from './stations.ts';
-import { findTwins } from './twins.ts';
 import { makeVertices } from './vertices.ts';
 
 export interface JoinContext {
@@ -38,15 +38,15 @@ export function joinMembers(
   const chosen = { ...JOIN_DEFAULTS, ...options };
   const { placeOf, supportedNodes } = { ...NO_CONTEXT, ...context };
   const drawn = makeAxes(members);
-  const twins = findTwins(members, drawn, placeOf);
-  const axes = drawn.map((axis, member) => (twins.leftOut.has(member) ? null : axis));
+  const doubles = resolveDoubles(members, drawn, chosen, placeOf);
+  const { axes } = doubles;
 
   const whole = trussOf(members, axes, chosen, placeOf);
   const cut = cutOverhangs(whole, supportedNodes(whole));
   const supported = supportedNodes(cut);
   const findings = [
     ...zeroLengthFindings(members, drawn, placeOf),
-    ...twins.findings,
+    ...doubles.findings,
     ...looseEndFindings(cut, members, axes, supported, chosen, placeOf),
     ...partFindings(cut, members, axes, supported, placeOf),
     ...axisMovedFindings(members, cut, placeOf),

@@ -1,4 +1,5 @@
 import { type Finding, finding } from '../domain/finding.ts';
+import { pushTo } from '../domain/group.ts';
 import type { Member } from '../domain/member.ts';
 import type { PlaceNamer } from '../domain/place.ts';
 import type { Truss } from '../domain/truss.ts';
@@ -7,6 +8,7 @@ import { type Axis, distanceToAxis } from './axes.ts';
 import { boxAround, judgePair, largestReach } from './contacts.ts';
 import { labelOf, millimetres } from './labels.ts';
 import { type JoinOptions, TOLERANCE } from './options.ts';
+import { isFreeEnd } from './overhangs.ts';
 import { indexBoxes, searchBoxes } from './spatial-index.ts';
 
 const STEEP = Math.sin(Math.PI / 3);
@@ -21,16 +23,23 @@ export function looseEndFindings(
   placeOf: PlaceNamer,
 ): Finding[] {
   const search = nearMissSearch(axes, options);
-  const barsOfMember = countBars(truss);
+  const ends = freeEnds(truss, axes);
+  const endsOf = new Map<Axis, FreeEnd[]>();
+  for (const end of ends) pushTo(endsOf, end.axis, end);
   const findings: Finding[] = [];
-  for (const end of freeEnds(truss, axes)) {
-    if (supported.has(end.node) || (barsOfMember.get(end.axis.member) ?? 0) === 0) continue;
+  for (const end of ends) {
+    if (supported.has(end.node)) continue;
     const miss = search(end);
     const isFoot = end.axis.direction[2] * (end.atStart ? 1 : -1) > STEEP && supported.size === 0;
     if (miss !== null) findings.push(nearMiss(end, miss, members, placeOf));
-    else if (!isFoot && !isLone(truss, end.axis.member)) findings.push(looseEnd(end, members, placeOf));
+    else if (!isFoot && !isLone(end)) findings.push(looseEnd(end, members, placeOf));
   }
   return findings;
+
+  /** Both ends of a lone bar are free; that is one finding of its own. */
+  function isLone({ axis }: FreeEnd): boolean {
+    return endsOf.get(axis)?.length === 2;
+  }
 }
 
 interface FreeEnd {
@@ -47,23 +56,19 @@ interface Miss {
 }
 
 function freeEnds(truss: Truss, axes: readonly (Axis | null)[]): FreeEnd[] {
-  const ends: FreeEnd[] = [];
-  truss.nodes.forEach(({ members, at, carriedBy }, node) => {
-    const axis = members.length === 1 && carriedBy === null ? axes[members[0]] : null;
-    if (axis) ends.push({ axis, node, at, atStart: distance(at, axis.start) < distance(at, axis.finish) });
-  });
-  return ends;
-}
-
-function countBars(truss: Truss): Map<number, number> {
-  const count = new Map<number, number>();
-  for (const bar of truss.bars) for (const member of bar.members) count.set(member, (count.get(member) ?? 0) + 1);
-  return count;
-}
-
-/** Both ends of a lone member are free; that is one finding of its own. */
-function isLone(truss: Truss, member: number): boolean {
-  return truss.nodes.every((node) => !node.members.includes(member) || node.members.length === 1);
+  const count = new Int32Array(truss.nodes.length);
+  for (const { from, to } of truss.bars) {
+    count[from]++;
+    count[to]++;
+  }
+  return truss.bars.flatMap((bar) =>
+    [bar.from, bar.to].flatMap((node) => {
+      if (count[node] !== 1 || !isFreeEnd(truss, node, bar)) return [];
+      const { at, members } = truss.nodes[node];
+      const axis = members.map((member) => axes[member]).find((one) => one !== null);
+      return axis ? [{ axis, node, at, atStart: distance(at, axis.start) < distance(at, axis.finish) }] : [];
+    }),
+  );
 }
 
 function nearMissSearch(axes: readonly (Axis | null)[], options: JoinOptions): (end: FreeEnd) => Miss | null {

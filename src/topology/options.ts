@@ -8,6 +8,8 @@ export interface JoinOptions {
   readonly crossings: 'apart' | 'joined';
   /** Members that sit on others (purlins on chords). */
   readonly seated: 'node' | 'apart';
+  /** Members that run side by side, as back-to-back angles do. */
+  readonly pairs: 'one' | 'apart';
   /** `strict` splits a through member at every joint; `pinned` only where something triangulates. */
   readonly chords: 'pinned' | 'strict';
 }
@@ -17,6 +19,7 @@ export const JOIN_DEFAULTS: JoinOptions = {
   offset: null,
   crossings: 'apart',
   seated: 'node',
+  pairs: 'one',
   chords: 'pinned',
 };
 

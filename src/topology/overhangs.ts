@@ -13,9 +13,8 @@ export function cutOverhangs(truss: Truss, supported: ReadonlySet<number>): Trus
   const carrying = new Set(truss.nodes.flatMap((node) => (node.carriedBy ? [node.carriedBy.bar] : [])));
   const isTail = (bar: TrussBar, free: number): boolean =>
     barsAt[free].length === 1 &&
-    truss.nodes[free].members.length === 1 &&
+    isFreeEnd(truss, free, bar) &&
     !supported.has(free) &&
-    bar.members.length === 1 &&
     barsAt[free === bar.from ? bar.to : bar.from].some(
       (other) => truss.bars[other] !== bar && truss.bars[other].members.includes(bar.members[0]),
     );
@@ -26,6 +25,12 @@ export function cutOverhangs(truss: Truss, supported: ReadonlySet<number>): Trus
     else if (isTail(bar, bar.to)) tails.set(index, bar.to);
   });
   return tails.size === 0 ? truss : without(truss, tails);
+}
+
+/** Whether nothing but the bar itself is at the node. Members spliced into the bar count as the bar. */
+export function isFreeEnd(truss: Truss, node: number, bar: TrussBar): boolean {
+  const { members, carriedBy } = truss.nodes[node];
+  return carriedBy === null && members.every((member) => bar.members.includes(member));
 }
 
 function without(truss: Truss, tails: ReadonlyMap<number, number>): Truss {

@@ -137,6 +137,28 @@ describe('joining members', () => {
     expect(truss.bars[0].stiffnessEA).toBeCloseTo(5 / flexibility, -3);
   });
 
+  it('makes one bar of two members side by side: their areas add, and both stand in it', () => {
+    const post = (mark: string, y: number) => cutBack(mark, [6, y, 0], [6, y, 2], 0.09, { section: hollow(0.06) });
+    const members = [...pitchedTruss().filter(({ tag }) => tag !== 'P'), post('P1', -0.035), post('P2', 0.035)];
+    const { truss, findings } = joinMembers(members);
+    const bar = truss.bars.find(({ name }) => name === 'P1/P2')!;
+    expect(bar.members.map((i) => members[i].tag)).toEqual(['P1', 'P2']);
+    expect(bar.stiffnessEA).toBeCloseTo(2 * 2.1e11 * hollow(0.06).area, -1);
+    expect(truss.nodes[bar.from].members.map((i) => members[i].tag)).toEqual(
+      expect.arrayContaining(['P1', 'P2', 'BC']),
+    );
+    expect(truss.nodes).toHaveLength(6);
+    expect(codes(findings)).toEqual(['pair-joined']);
+    expect(findings[0].severity).toBe('note');
+  });
+
+  it('keeps a pair as two bars where the brief says so', () => {
+    const post = (mark: string, y: number) => cutBack(mark, [6, y, 0], [6, y, 2], 0.09, { section: hollow(0.06) });
+    const members = [...pitchedTruss().filter(({ tag }) => tag !== 'P'), post('P1', -0.035), post('P2', 0.035)];
+    const { truss } = joinMembers(members, { pairs: 'apart' });
+    expect(truss.bars.filter(({ name }) => name.startsWith('P'))).toHaveLength(2);
+  });
+
   it('cuts an overhang off and leaves its weight at the last joint', () => {
     const eaves = pitchedTruss().map((m) =>
       m.tag === 'TL' ? { ...m, axis: [[-1.5, 0, -0.5], m.axis[1]] as const } : m,
@@ -217,6 +239,14 @@ describe('findings of joining', () => {
   it('finds a twin in the very same place on a sloping axis', () => {
     const { findings } = joinMembers([...pitchedTruss(), member('TL copy', [0, 0, 0], [6, 0, 2])]);
     expect(codes(findings)).toEqual(['twin-members']);
+  });
+
+  it('says where two members in line run in one another, and keeps both', () => {
+    const { truss, findings } = joinMembers([member('A', [0, 0, 0], [4, 0, 0]), member('B', [3.4, 0, 0], [8, 0, 0])]);
+    const [overlap] = findings.filter(({ code }) => code === 'overlap');
+    expect(overlap.members).toEqual(['A', 'B']);
+    expect(overlap.gap).toBeCloseTo(0.6);
+    expect(truss.bars).toHaveLength(2);
   });
 
   it('leaves out a member without length', () => {

@@ -1,0 +1,168 @@
+import { type Finding, finding } from '../domain/finding.ts';
+import type { Member } from '../domain/member.ts';
+import type { PlaceNamer } from '../domain/place.ts';
+import { along, between, dot, meanOf, norm, scale, subtract, unit, type Vec3 } from '../domain/vector.ts';
+import { type Axis, sineBetween } from './axes.ts';
+import { boxAround } from './contacts.ts';
+import { labelOf, millimetres } from './labels.ts';
+import type { JoinOptions } from './options.ts';
+import { indexBoxes, searchBoxes } from './spatial-index.ts';
+
+const PARALLEL = 0.02;
+/** Bodies that share more than this of their length are one member drawn twice, or a pair side by side. */
+const MOST_OF_LENGTH = 0.5;
+/** Bodies whose axes are nearer than this share of their touching distance interpenetrate. */
+const INTERPENETRATION = 0.5;
+/** Axes nearer than this, m, have no direction between them worth asking for. */
+const COINCIDENT = 1e-4;
+/** Two of a pair are cut alike: their ends differ by less than this share of their depth. */
+const SAME_LENGTH = 0.5;
+/** Members in line may run into each other by this share of their depth, as mitred and notched ends do. */
+const NOTCH = 1.5;
+
+type Relation = 'twins' | 'pair' | 'overlap';
+
+export interface Doubles {
+  /** The axes to join: twins left out, pairs as one axis that stands for both. */
+  readonly axes: (Axis | null)[];
+  readonly findings: Finding[];
+}
+
+/** Members side by side or in one another: drawn twice, meant as a pair, or overlapping by mistake. */
+export function resolveDoubles(
+  members: readonly Member[],
+  axes: readonly (Axis | null)[],
+  options: JoinOptions,
+  placeOf: PlaceNamer,
+): Doubles {
+  const joined = [...axes];
+  const findings: Finding[] = [];
+  for (const { a, b, relation } of relatedPairs(axes)) {
+    const [first, second] = [joined[a.member], joined[b.member]];
+    if (first === null || second === null || first.also.length > 0) continue;
+    if (relation === 'twins') {
+      const [kept, out] = dataOf(members[b.member]) > dataOf(members[a.member]) ? [b, a] : [a, b];
+      joined[out.member] = null;
+      findings.push(twinFinding(members[kept.member], members[out.member], middleOf(out), placeOf));
+    } else if (relation === 'overlap') {
+      findings.push(overlapFinding(members[a.member], members[b.member], sharedMiddle(a, b), overlapOf(a, b), placeOf));
+    } else if (options.pairs === 'one' && alike(members[a.member], members[b.member])) {
+      joined[a.member] = asOne(a, b);
+      joined[b.member] = null;
+      findings.push(pairFinding(members[a.member], members[b.member], middleOf(a), placeOf));
+    }
+  }
+  return { axes: joined, findings };
+}
+
+/** Pairs of parallel axes with bodies that touch or nearly do: twins first, in the order of the members. */
+function relatedPairs(axes: readonly (Axis | null)[]) {
+  const present = axes.filter((axis) => axis !== null);
+  const boxes = new Float64Array(6 * present.length);
+  present.forEach((axis, i) => {
+    boxes.set(boxAround(axis, axis.depth), 6 * i);
+  });
+  const index = indexBoxes(boxes);
+  const found: { a: Axis; b: Axis; relation: Relation }[] = [];
+  present.forEach((a, i) => {
+    searchBoxes(index, boxes.subarray(6 * i, 6 * i + 6), (j) => {
+      const b = present[j];
+      const relation = j > i ? relationOf(a, b) : null;
+      if (relation !== null) found.push({ a, b, relation });
+    });
+  });
+  const rank = { twins: 0, pair: 1, overlap: 2 };
+  return found.sort(
+    (p, q) => rank[p.relation] - rank[q.relation] || p.a.member - q.a.member || p.b.member - q.b.member,
+  );
+}
+
+function relationOf(a: Axis, b: Axis): Relation | null {
+  if (sineBetween(a, b) > PARALLEL) return null;
+  const overlap = overlapOf(a, b);
+  const depth = Math.max(a.depth, b.depth);
+  if (overlap < NOTCH * depth) return null;
+  const aside = asideOf(a, b);
+  const distance = norm(aside);
+  const touching =
+    distance < COINCIDENT ? Number.POSITIVE_INFINITY : touchingDistance(a, b, scale(aside, 1 / distance));
+  const mostly = overlap > MOST_OF_LENGTH * Math.max(a.length, b.length);
+  if (distance < INTERPENETRATION * touching) return mostly ? 'twins' : 'overlap';
+  const cutAlike = Math.max(Math.abs(a.length - b.length), a.length - overlap) < SAME_LENGTH * depth;
+  return cutAlike && distance < touching + depth ? 'pair' : null;
+}
+
+const touchingDistance = (a: Axis, b: Axis, normal: Vec3): number => a.halfExtent(normal) + b.halfExtent(normal);
+
+/** Length over which two parallel axes run side by side, m. */
+function overlapOf(a: Axis, b: Axis): number {
+  const stations = [b.start, b.finish].map((p) => dot(subtract(p, a.start), a.direction));
+  return Math.min(Math.max(...stations), a.length) - Math.max(Math.min(...stations), 0);
+}
+
+/** From the line of `a`, square to it, to the middle of `b`. */
+function asideOf(a: Axis, b: Axis): Vec3 {
+  const arm = subtract(middleOf(b), a.start);
+  return subtract(arm, scale(a.direction, dot(arm, a.direction)));
+}
+
+const middleOf = (axis: Axis): Vec3 => between(axis.start, axis.finish, 0.5);
+
+function sharedMiddle(a: Axis, b: Axis): Vec3 {
+  const stations = [b.start, b.finish].map((p) => dot(subtract(p, a.start), a.direction));
+  const from = Math.max(Math.min(...stations), 0);
+  const to = Math.min(Math.max(...stations), a.length);
+  return along(a.start, a.direction, (from + to) / 2);
+}
+
+const alike = (a: Member, b: Member): boolean =>
+  a.section !== null && b.section !== null && Math.abs(a.section.area - b.section.area) < 0.01 * a.section.area;
+
+/** The axis halfway between two of a pair. */
+function asOne(a: Axis, b: Axis): Axis {
+  const sameWay = dot(a.direction, b.direction) > 0;
+  const start = meanOf([a.start, sameWay ? b.start : b.finish]);
+  const finish = meanOf([a.finish, sameWay ? b.finish : b.start]);
+  const half = scale(asideOf(a, b), 0.5);
+  const line = subtract(finish, start);
+  return {
+    ...a,
+    also: [b.member],
+    start,
+    finish,
+    direction: unit(line) ?? a.direction,
+    length: norm(line),
+    halfExtent: (direction) =>
+      Math.abs(dot(half, direction)) + Math.max(a.halfExtent(direction), b.halfExtent(direction)),
+  };
+}
+
+const dataOf = (member: Member): number =>
+  Object.values(member).filter((value) => value !== null).length + (member.material.from === 'default' ? 0 : 1);
+
+function twinFinding(kept: Member, out: Member, at: Vec3, placeOf: PlaceNamer): Finding {
+  return finding(
+    'twin-members',
+    `${labelOf(out)} is drawn over ${labelOf(kept)}: one member twice. Only ${labelOf(kept)} is in the truss.`,
+    `Delete ${labelOf(out)}, or move it to where it belongs.`,
+    { members: [kept.globalId, out.globalId], at, place: placeOf(at) },
+  );
+}
+
+function overlapFinding(a: Member, b: Member, at: Vec3, overlap: number, placeOf: PlaceNamer): Finding {
+  return finding(
+    'overlap',
+    `${labelOf(a)} and ${labelOf(b)} run in one another for ${millimetres(overlap)}.`,
+    'Cut them back to meet end to end, or delete the one that is too much.',
+    { members: [a.globalId, b.globalId], at, place: placeOf(at), gap: overlap },
+  );
+}
+
+function pairFinding(a: Member, b: Member, at: Vec3, placeOf: PlaceNamer): Finding {
+  return finding(
+    'pair-joined',
+    `${labelOf(a)} and ${labelOf(b)} run side by side and are one bar: their areas add.`,
+    'Say `joints: {pairs: apart}` in the brief where they are two bars.',
+    { members: [a.globalId, b.globalId], at, place: placeOf(at) },
+  );
+}
