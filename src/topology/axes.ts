@@ -89,3 +89,10 @@ export function distanceToAxis(point: Vec3, axis: Axis): { readonly distance: nu
   const s = Math.min(Math.max(dot(w, axis.direction), 0), axis.length);
   return { distance: norm(subtract(w, scale(axis.direction, s))), s };
 }
+
+/** Two members alike that cross near the middle of both, at `s` and `t` along them, are crossed bracing laid back to back. */
+export function looksCrossed(a: Axis, b: Axis, s: number, t: number): boolean {
+  const alike = a.sectionName === b.sectionName && Math.abs(a.depth - b.depth) < 1e-6;
+  const nearMiddle = (x: number, axis: Axis) => Math.abs(x / axis.length - 0.5) < 0.2;
+  return alike && nearMiddle(s, a) && nearMiddle(t, b);
+}

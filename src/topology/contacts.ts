@@ -1,5 +1,5 @@
 import { along, between, dot, scale, subtract, type Vec3 } from '../domain/vector.ts';
-import { type Axis, approach, approachDirection, sineBetween } from './axes.ts';
+import { type Axis, approach, approachDirection, looksCrossed, sineBetween } from './axes.ts';
 import { type JoinOptions, TOLERANCE } from './options.ts';
 import { indexBoxes, searchBoxes } from './spatial-index.ts';
 
@@ -133,13 +133,8 @@ const beyondEnds = (s: number, axis: Axis): number => Math.max(0, -s, s - axis.l
 
 const isInside = (s: number, axis: Axis, reach: number): boolean => s > reach && s < axis.length - reach;
 
-/**
- * Two members that both run on: a continuous purlin over a continuous chord sits; two alike that cross near the
- * middle of both are crossed bracing laid back to back, and a thin rod that passes a deep member only passes it.
- */
+/** A continuous purlin over a continuous chord sits; a thin rod that passes a deep member only passes it. */
 function looksLikeSeat(a: Axis, b: Axis, s: number, t: number): boolean {
-  const alike = a.sectionName === b.sectionName && Math.abs(a.depth - b.depth) < 1e-6;
-  const middle = (x: number, axis: Axis) => Math.abs(x / axis.length - 0.5) < 0.2;
   const slender = Math.min(a.depth, b.depth) < 0.4 * Math.max(a.depth, b.depth);
-  return !slender && !(alike && middle(s, a) && middle(t, b));
+  return !slender && !looksCrossed(a, b, s, t);
 }

@@ -6,9 +6,10 @@ import { between } from '../domain/vector.ts';
 import { type Axis, makeAxes } from './axes.ts';
 import { buildTruss } from './build-truss.ts';
 import { findCarriers } from './carriers.ts';
-import { findContacts } from './contacts.ts';
+import { type Contact, findContacts } from './contacts.ts';
 import { resolveDoubles } from './doubles.ts';
-import { makeJoints } from './joints.ts';
+import { carriedFindings, crossingFindings, crowdedFindings } from './joint-findings.ts';
+import { makeJoints, type Refusal } from './joints.ts';
 import { labelOf, millimetres } from './labels.ts';
 import { looseEndFindings } from './loose-ends.ts';
 import { JOIN_DEFAULTS, type JoinOptions } from './options.ts';
@@ -41,7 +42,8 @@ export function joinMembers(
   const doubles = resolveDoubles(members, drawn, chosen, placeOf);
   const { axes } = doubles;
 
-  const whole = trussOf(members, axes, chosen, placeOf);
+  const contacts = findContacts(axes, chosen);
+  const { truss: whole, refused } = trussOf(members, axes, contacts, chosen, placeOf);
   const cut = cutOverhangs(whole, supportedNodes(whole));
   const supported = supportedNodes(cut);
   const findings = [
@@ -49,6 +51,9 @@ export function joinMembers(
     ...doubles.findings,
     ...looseEndFindings(cut, members, axes, supported, chosen, placeOf),
     ...partFindings(cut, members, axes, supported, placeOf),
+    ...crossingFindings(contacts, members, axes, cut, placeOf),
+    ...crowdedFindings(refused, members, cut, placeOf),
+    ...carriedFindings(cut, members),
     ...axisMovedFindings(members, cut, placeOf),
   ];
   return { truss: cut, findings };
@@ -57,17 +62,16 @@ export function joinMembers(
 function trussOf(
   members: readonly Member[],
   axes: readonly (Axis | null)[],
+  contacts: readonly Contact[],
   options: JoinOptions,
   placeOf: PlaceNamer,
-): Truss {
-  const contacts = findContacts(axes, options).filter(
-    ({ kind }) => kind !== 'crossing' || options.crossings === 'joined',
-  );
-  const { joints } = makeJoints(axes, contacts, findStations(axes, contacts));
+): { truss: Truss; refused: readonly Refusal[] } {
+  const joining = contacts.filter(({ kind }) => kind !== 'crossing' || options.crossings === 'joined');
+  const { joints, refused } = makeJoints(axes, joining, findStations(axes, joining));
   const graph = makeVertices(axes, joints);
   const carriers = findCarriers(graph, axes, options);
   const runs = joinSplices(cutPieces(graph, carriers), graph.vertices);
-  return buildTruss(graph, runs, members, axes, placeOf);
+  return { truss: buildTruss(graph, runs, members, axes, placeOf), refused };
 }
 
 function zeroLengthFindings(
