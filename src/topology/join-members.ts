@@ -8,6 +8,7 @@ import { buildTruss } from './build-truss.ts';
 import { findCarriers } from './carriers.ts';
 import { type Contact, findContacts } from './contacts.ts';
 import { resolveDoubles } from './doubles.ts';
+import { offsetJointFindings } from './eccentricity.ts';
 import { carriedFindings, crossingFindings, crowdedFindings } from './joint-findings.ts';
 import { makeJoints, type Refusal } from './joints.ts';
 import { labelOf, millimetres } from './labels.ts';
@@ -17,7 +18,7 @@ import { cutOverhangs } from './overhangs.ts';
 import { partFindings } from './parts.ts';
 import { cutPieces, joinSplices } from './pieces.ts';
 import { findStations } from './stations.ts';
-import { makeVertices } from './vertices.ts';
+import { makeVertices, type VertexGraph } from './vertices.ts';
 
 export interface JoinContext {
   readonly placeOf: PlaceNamer;
@@ -43,7 +44,7 @@ export function joinMembers(
   const { axes } = doubles;
 
   const contacts = findContacts(axes, chosen);
-  const { truss: whole, refused } = trussOf(members, axes, contacts, chosen, placeOf);
+  const { truss: whole, refused, graph } = trussOf(members, axes, contacts, chosen, placeOf);
   const cut = cutOverhangs(whole, supportedNodes(whole));
   const supported = supportedNodes(cut);
   const findings = [
@@ -53,6 +54,7 @@ export function joinMembers(
     ...partFindings(cut, members, axes, supported, placeOf),
     ...crossingFindings(contacts, members, axes, cut, placeOf),
     ...crowdedFindings(refused, members, cut, placeOf),
+    ...offsetJointFindings(graph, members, axes, placeOf),
     ...carriedFindings(cut, members),
     ...axisMovedFindings(members, cut, placeOf),
   ];
@@ -65,13 +67,13 @@ function trussOf(
   contacts: readonly Contact[],
   options: JoinOptions,
   placeOf: PlaceNamer,
-): { truss: Truss; refused: readonly Refusal[] } {
+): { truss: Truss; refused: readonly Refusal[]; graph: VertexGraph } {
   const joining = contacts.filter(({ kind }) => kind !== 'crossing' || options.crossings === 'joined');
   const { joints, refused } = makeJoints(axes, joining, findStations(axes, joining));
   const graph = makeVertices(axes, joints);
   const carriers = findCarriers(graph, axes, options);
   const runs = joinSplices(cutPieces(graph, carriers), graph.vertices);
-  return { truss: buildTruss(graph, runs, members, axes, placeOf), refused };
+  return { truss: buildTruss(graph, runs, members, axes, placeOf), refused, graph };
 }
 
 function zeroLengthFindings(

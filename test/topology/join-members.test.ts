@@ -241,6 +241,25 @@ describe('findings of joining', () => {
     expect(codes(findings)).toEqual(['twin-members']);
   });
 
+  it('says where braces meet too far beyond the axis of the chord, by EN 1993-1-8 5.1.5(5)', () => {
+    const drawn = (beyond: number) =>
+      pitchedTruss().map((m): Member => {
+        if (m.tag === 'DL') return cutBack('DL', [6 + 3 * beyond, 0, 0], [3, 0, 1], 0.09);
+        return m.tag === 'DR' ? cutBack('DR', [6 - 3 * beyond, 0, 0], [9, 0, 1], 0.09) : m;
+      });
+    const offsets = (beyond: number) =>
+      joinMembers(drawn(beyond)).findings.filter(({ code }) => code === 'offset-joint');
+    // The chord is 100 mm deep; the diagonals rise by about 1 in 3, so they cross `beyond` before its axis.
+    expect(offsets(0.02)).toEqual([]);
+    expect(offsets(0.05)).toEqual([]);
+    expect(offsets(-0.02)).toEqual([]);
+    const [outside] = offsets(-0.03);
+    expect(outside.members[0]).toBe('BC');
+    expect(outside.members).toHaveLength(3);
+    expect(outside.gap).toBeCloseTo(0.03, 2);
+    expect(outside.message).toContain('beyond the axis of BC');
+  });
+
   it('says where two members in line run in one another, and keeps both', () => {
     const { truss, findings } = joinMembers([member('A', [0, 0, 0], [4, 0, 0]), member('B', [3.4, 0, 0], [8, 0, 0])]);
     const [overlap] = findings.filter(({ code }) => code === 'overlap');
