@@ -1,22 +1,29 @@
 import { createHash } from 'node:crypto';
 import { DEFAULT_BRIEF } from './brief/default-brief.ts';
+import { type MemberKind, memberKinds } from './brief/member-kinds.ts';
 import { applyScope } from './brief/scope.ts';
-import { resolveSupports } from './brief/supports.ts';
+import { applySections, withoutSettled } from './brief/sections.ts';
+import { resolveGivenSupports, resolveSupports } from './brief/supports.ts';
 import type { Brief } from './brief/types.ts';
 import { type Finding, finding } from './domain/finding.ts';
 import { GENERATOR } from './domain/generator.ts';
+import type { Member } from './domain/member.ts';
 import type { Result } from './domain/result.ts';
 import type { Truss } from './domain/truss.ts';
 import { assembleResult } from './exporter/assemble-result.ts';
+import { hasAnalysisView, readAnalysisModel } from './importer/analysis/read-analysis-model.ts';
+import { openModel } from './importer/files/open-model.ts';
 import { importModel } from './importer/import-model.ts';
+import type { ImportedModel } from './importer/types.ts';
 import { type BuiltCases, buildCases, type Coverage } from './statics/loads/build-cases.ts';
+import { buildGivenCases } from './statics/loads/given-cases.ts';
 import { combine } from './statics/solution/combine.ts';
 import { envelope } from './statics/solution/envelope.ts';
 import { solveCases } from './statics/solution/solve-cases.ts';
 import { assessStability } from './statics/stability/assess-stability.ts';
 import type { Supports } from './statics/types.ts';
 import { withoutBlock } from './step/splice.ts';
-import { openStep, type StepFile } from './step/step-file.ts';
+import type { StepFile } from './step/step-file.ts';
 import { joinMembers } from './topology/join-members.ts';
 import type { JoinOptions } from './topology/options.ts';
 
@@ -45,6 +52,8 @@ export interface Run {
   readonly elementCount: number;
   /** kg, of the bars between their nodes. */
   readonly mass: number;
+  /** The members that were read, in scope or not. */
+  readonly kinds: readonly MemberKind[];
   /** What each area load of the brief covers. */
   readonly coverage: readonly Coverage[];
   /** Seconds spent in each stage. */
@@ -60,18 +69,17 @@ export async function runModel(bytes: Uint8Array, options: Partial<RunOptions> =
   const clock = stageClock(onStage);
 
   clock.enter('import');
-  const file = openStep(bytes);
-  const imported = await importModel(file, {
-    classes: classesNamed(brief),
-    axes: brief.axes,
-    defaultMaterial: brief.materials.default,
-  });
-  const scope = applyScope(imported.members, brief.scope);
-  const { members } = scope;
+  const { file, findings: fileFindings } = await openModel(bytes);
+  const { imported, scope } = await readInScope(file, brief);
+  const { members, findings: sectionFindings } = applySections(scope.members, brief.sections);
+  const { given } = imported;
 
   clock.enter('topology');
-  const supportsOf = (truss: Truss) => resolveSupports(truss, members, brief);
-  const joined = joinMembers(members, joinOptions(brief), {
+  const supportsOf = (truss: Truss) =>
+    given === null || brief.supports.length > 0
+      ? resolveSupports(truss, members, brief)
+      : resolveGivenSupports(truss, given.supports);
+  const joined = joinMembers(given === null ? members : members.map(asLine), joinOptions(brief, given !== null), {
     placeOf: imported.placeOf,
     supportedNodes: (truss) => nodesOf(supportsOf(truss).supports),
   });
@@ -82,15 +90,22 @@ export async function runModel(bytes: Uint8Array, options: Partial<RunOptions> =
   const stability = assessStability(truss, supports);
 
   clock.enter('solve');
-  const loaded = extent === 'analyse' ? buildCases(truss, members, brief) : NO_LOADS;
+  const usesGivenCases = given !== null && brief.cases.length === 0;
+  const loadOn = usesGivenCases
+    ? () => buildGivenCases(truss, members, given.cases)
+    : () => buildCases(truss, members, brief);
+  const loaded = extent === 'analyse' ? loadOn() : NO_LOADS;
   const solved = solveCases(truss, supports, stability, loaded.cases);
-  const combinations = extent === 'analyse' ? combine(solved.cases, brief.combinations) : [];
+  const combinations =
+    extent === 'analyse' ? combine(solved.cases, usesGivenCases ? given.combinations : brief.combinations) : [];
   const forces = envelope(truss, solved.cases, combinations);
 
   const isCarried = solved.cases.length > 0 && solved.cases.every(({ refused }) => refused === null);
   const findings = [
-    ...imported.findings,
+    ...fileFindings,
+    ...withoutSettled(imported.findings, members),
     ...scope.findings,
+    ...sectionFindings,
     ...joined.findings,
     ...supportFindings,
     ...supportFinding(supports, extent, members.length),
@@ -121,6 +136,7 @@ export async function runModel(bytes: Uint8Array, options: Partial<RunOptions> =
     file,
     elementCount: imported.elementCount,
     mass: truss.bars.reduce((sum, bar) => sum + bar.massPerLength * bar.length, 0),
+    kinds: memberKinds(imported.members, members),
     coverage: loaded.coverage,
     seconds: clock.stop(),
   };
@@ -128,13 +144,64 @@ export async function runModel(bytes: Uint8Array, options: Partial<RunOptions> =
 
 const NO_LOADS: BuiltCases = { cases: [], coverage: [], findings: [] };
 
+/**
+ * The model's physical elements, or its structural analysis view: where the brief asks for it, and where it does not say and
+ * no physical element is in scope.
+ */
+async function readInScope(file: StepFile, brief: Brief) {
+  const options = { classes: classesNamed(brief), axes: brief.axes, defaultMaterial: brief.materials.default };
+  const ofView = () => {
+    const imported = readAnalysisModel(file, options);
+    return { imported, scope: applyScope(imported.members, brief.scope) };
+  };
+  if (brief.source === 'analysis') return ofView();
+  const imported = await importModel(file, options);
+  const physical = { imported, scope: applyScope(imported.members, brief.scope) };
+  if (brief.source !== null || physical.scope.members.length > 0 || !hasAnalysisView(file)) return physical;
+  const view = ofView();
+  if (view.scope.members.length === 0) return physical;
+  return { ...view, scope: { ...view.scope, findings: [...view.scope.findings, ...elementsLeft(imported)] } };
+}
+
+/** What the physical half of a model held where its analysis view was read instead. */
+function elementsLeft({ elementCount }: ImportedModel): Finding[] {
+  if (elementCount === 0) return [];
+  const what =
+    elementCount === 1
+      ? 'The physical element of the model is'
+      : `The ${elementCount} physical elements of the model are`;
+  return [
+    finding(
+      'out-of-scope',
+      `${what} not in scope; its structural analysis view is read instead.`,
+      'Name the elements under scope: include in the brief, or say source: physical, if they are the truss.',
+    ),
+  ];
+}
+
 /** Classes that the brief's scope names are read besides the usual ones. */
 function classesNamed(brief: Brief): string[] {
   return [...new Set(brief.scope.include.flatMap((selector) => (selector.class ? [selector.class] : [])))];
 }
 
-function joinOptions({ joints, chords }: Brief): Partial<JoinOptions> {
-  return { ...joints, chords };
+/** m; members of an analysis view meet in shared points, which are written with fewer digits than they have. */
+const SHARED_POINT = 1e-3;
+
+function joinOptions({ joints, chords }: Brief, isAnalysisView: boolean): Partial<JoinOptions> {
+  if (!isAnalysisView) return { ...joints, chords };
+  return {
+    reach: joints.reach ?? SHARED_POINT,
+    offset: joints.offset ?? SHARED_POINT,
+    crossings: joints.crossings,
+    seated: 'apart',
+    chords,
+  };
+}
+
+/** In an analysis view the depth of a section says nothing of how near two joints may be. */
+function asLine(member: Member): Member {
+  const { section } = member;
+  return section === null ? member : { ...member, section: { ...section, depth: SHARED_POINT, width: SHARED_POINT } };
 }
 
 function nodesOf({ restraints, springs }: Supports): ReadonlySet<number> {

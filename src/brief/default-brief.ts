@@ -10,6 +10,7 @@ export const DEFAULT_BRIEF: Brief = {
   chords: 'pinned',
   supports: [],
   materials: { default: null },
+  sections: [],
   cases: [],
   combinations: [],
 };

@@ -116,6 +116,8 @@ function saySomethingElseIsDue(issue: Issue, value: unknown): string {
       return `a list of ${issue.maximum} is due`;
     case 'invalid_union':
       return issue.message === 'Invalid input' ? 'a mapping (key: value), or a list of such, is due' : issue.message;
+    case 'invalid_key':
+      return issue.issues[0]?.message ?? issue.message;
     default:
       return issue.message;
   }

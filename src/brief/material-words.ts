@@ -44,6 +44,7 @@ const WORDS: ReadonlySet<string> = new Set([
     'mdf',
     'pvc',
     'upvc',
+    'pu',
     'oak',
     'pine',
     'spruce',
@@ -61,10 +62,14 @@ const STEEL: ReadonlySet<string> = new Set([
   ...['steel', 'stahl', 'acier', 'acero', 'acciaio', 'staal', 'stål', 'aço', 'stal', 'ocel', 'teräs', 'сталь'],
 ]);
 
+// Bearing pads and gaskets, which detailers file under steel.
+const RUBBER: readonly string[] = ['neopren', 'elastomer', 'rubber', 'gummi', 'caoutchouc'];
+
 /** Whether a material's name plainly says something else than steel: a foreign word in it and no word for steel alone. */
 export function isPlainlyNotSteel(name: string): boolean {
   const text = name.normalize('NFC').toLowerCase();
   const words = text.split(/[^\p{L}\p{N}]+/u);
+  if (RUBBER.some((stem) => text.includes(stem))) return true;
   if (words.some((word) => STEEL.has(word))) return false;
   return (
     words.some((word) => WORDS.has(word)) ||

@@ -23,6 +23,11 @@ export function normaliseBrief(written: WrittenBrief, lineAt: LineAt): Brief {
     chords: written.chords ?? DEFAULT_BRIEF.chords,
     supports: (written.supports ?? []).map((rule, i) => toSupport(rule, ['supports', i], lineAt)),
     materials: { default: materials?.default ?? DEFAULT_BRIEF.materials.default },
+    sections: (written.sections ?? []).map(({ on, use }, i) => ({
+      line: lineAt(['sections', i]),
+      on: toMemberSelectors(on, ['sections', i, 'on'], lineAt),
+      use: { ...use, from: 'brief' },
+    })),
     cases: (written.cases ?? []).map((rule, i) => toCase(rule, ['cases', i], lineAt)),
     combinations: toCombinations(written.combinations ?? 'none', lineAt),
   };

@@ -1,7 +1,6 @@
 /** What the brief will be able to say and this version cannot honour: refused by name, never passed over. */
 const KEYS: ReadonlySet<string> = new Set([
   'holds',
-  'sections',
   'pairs',
   'settle',
   'temperature',
@@ -13,12 +12,9 @@ const KEYS: ReadonlySet<string> = new Set([
   'alternative',
   'altitude',
   'imperfections',
-  'group',
-  'property',
 ]);
 
 const VALUES: readonly { readonly path: string; readonly value: RegExp }[] = [
-  { path: 'source', value: /^analysis$/u },
   { path: 'chords', value: /^continuous$/u },
   { path: 'combinations', value: /^(EN1990|ASCE7)(\b.*)?$/u },
   { path: 'checks', value: /^(EN1993-1-1|AISC360)(\b.*)?$/u },

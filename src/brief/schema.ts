@@ -8,6 +8,9 @@ import {
   wordsFor,
 } from '../domain/units.ts';
 import { unit, type Vec3 } from '../domain/vector.ts';
+import { gradeIn } from '../importer/materials/grades.ts';
+import { knownDesignations } from '../importer/sections/designations/known-designations.ts';
+import { sectionFromDesignation } from '../importer/sections/designations/section-from-designation.ts';
 import { didYouMean } from './nearest-word.ts';
 import type { Range } from './types.ts';
 
@@ -108,6 +111,19 @@ const anyNumber = <I, O extends object>(item: z.ZodType<O, I>) =>
 const text = z.string().min(1);
 const pattern = text.describe('text; * stands for anything; upper and lower case are the same');
 
+const plainEnd = z.union([z.number(), z.null()], { error: 'a number in SI, or null for an open end, is due' });
+
+/** What the model's own properties are to be, by "Set.Property". */
+const properties = z
+  .record(
+    z.string().regex(/^[^.]+\../u, 'write the set and the property, such as Pset_MemberCommon.LoadBearing'),
+    z.union([z.boolean(), z.number(), text, z.tuple([plainEnd, plainEnd])], {
+      error: 'true, false, a number in SI, a text, or a range [from, to] is due',
+    }),
+  )
+  .refine((wanted) => Object.keys(wanted).length > 0, 'name a property: {Pset_MemberCommon.LoadBearing: true}')
+  .describe('"Set.Property": true, false, a number or range [from, to] in SI, or a text with *; the set may be *');
+
 const memberKeys = z.strictObject({
   class: pattern.optional().describe('IFC class; IfcBeam takes IfcBeamStandardCase too'),
   predefinedType: pattern.optional(),
@@ -118,6 +134,8 @@ const memberKeys = z.strictObject({
   assembly: pattern.optional(),
   storey: pattern.optional(),
   layer: pattern.optional(),
+  group: pattern.optional().describe('name of a group, system or zone'),
+  property: properties.optional(),
   section: pattern.optional(),
   material: pattern.optional(),
   level: range('length').optional().describe("world z of the member's middle"),
@@ -238,6 +256,23 @@ const combination = z.strictObject({
   factors: z.record(z.string(), z.number()).describe('factor of each case, by its name'),
 });
 
+const steelGrade = text
+  .refine((name) => gradeIn(name) !== null, 'this is no steel grade that is known: name one like S355, S275J2H or A992')
+  .describe('a steel grade, such as S355 or A992');
+
+const sectionDesignation = text
+  .transform((written, context) => {
+    const section = sectionFromDesignation(written);
+    if (section !== null) return section;
+    const near = didYouMean(written, knownDesignations());
+    context.addIssue({
+      code: 'custom',
+      message: `this section is not known${near === '' ? ', or its dimensions make none; write it like "HEA 200" or "CHS 88.9x4"' : near}`,
+    });
+    return z.NEVER;
+  })
+  .describe('a designation, such as "HEA 200", "CHS 88.9x4" or "W12X26"');
+
 /** A list that may stand in a brief and may not catch anything in this version. */
 const nothingYet = z
   .array(z.unknown())
@@ -246,7 +281,7 @@ const nothingYet = z
 export const briefInputSchema = z.strictObject({
   pinwright: z.literal(1),
   title: z.string().optional(),
-  source: z.enum(['physical']).optional(),
+  source: z.enum(['physical', 'analysis']).optional(),
   axes: z.enum(['given', 'centroid']).optional(),
   scope: z
     .strictObject({
@@ -264,7 +299,11 @@ export const briefInputSchema = z.strictObject({
     .optional(),
   chords: z.enum(['pinned', 'strict']).optional(),
   supports: z.array(support).optional(),
-  materials: z.strictObject({ default: text.optional() }).optional(),
+  materials: z.strictObject({ default: steelGrade.optional() }).optional(),
+  sections: z
+    .array(z.strictObject({ on: members, use: sectionDesignation }))
+    .optional()
+    .describe('sections that go before those of the model; of several rules on a member the last counts'),
   tensionOnly: nothingYet.optional(),
   compressionOnly: nothingYet.optional(),
   cases: z.array(loadCase).optional(),

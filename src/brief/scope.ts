@@ -8,6 +8,9 @@ import type { Brief } from './types.ts';
 
 const STRUCTURAL_CLASSES: ReadonlySet<string> = new Set(['ifcbeam', 'ifccolumn', 'ifcmember']);
 
+/** Members of an analysis view are structure because the model says so. */
+const ANALYSIS_CLASSES: ReadonlySet<string> = new Set(['ifcstructuralcurvemember', 'ifcstructuralcurvemembervarying']);
+
 const ASSEMBLY = 'ifcelementassembly';
 
 const SECONDARY_OWNERS: ReadonlySet<string> = new Set([
@@ -18,6 +21,12 @@ const SECONDARY_OWNERS: ReadonlySet<string> = new Set([
 const SECONDARY_TYPES: ReadonlySet<string> = new Set([
   ...['MULLION', 'STUD', 'PLATE', 'STRINGER', 'HOLLOWCORE', 'HATSTONE', 'CORNICE', 'PIERCAP'],
 ]);
+
+/** m. Detailers mark recesses, edges and pasted-on texts by bars of 1 x 1 mm; no bar of a roof is thinner than this. */
+const DUMMY_BELOW = 0.003;
+
+/** m. Of flats: surfaces are drawn as flats of 1 mm; sheet that carries is not modelled as a member. */
+const DUMMY_FLAT_BELOW = 0.0015;
 
 /**
  * The members that the brief is about. With `include` these are exactly the members it catches; without, beams, columns and
@@ -30,49 +39,85 @@ export function applyScope(
 ): { members: Member[]; findings: Finding[] } {
   const included = scope.include.map(memberTest);
   const excluded = scope.exclude.map((selector) => ({ selector, holds: memberTest(selector) }));
-  const leftOut = new Map<string, Member[]>();
+  const leftOut = new Map<string, LeftOut>();
   const kept = members.filter((member) => {
     const byInclude = included.some((holds) => holds(member));
     const exclusion = excluded.find(({ holds }) => holds(member));
-    const reason =
+    const reason: Reason | null =
       included.length > 0 && !byInclude
-        ? 'not caught by the include of the brief'
+        ? { kind: 'not caught by the include of the brief' }
         : exclusion !== undefined
-          ? `caught by the exclude of line ${exclusion.selector.line} of the brief, ${describeSelector(exclusion.selector)}`
+          ? {
+              kind: `caught by the exclude of line ${exclusion.selector.line} of the brief, ${describeSelector(exclusion.selector)}`,
+            }
           : included.length > 0
             ? null
             : whySecondary(member);
     if (reason === null) return true;
-    const others = leftOut.get(reason);
-    if (others === undefined) leftOut.set(reason, [member]);
-    else others.push(member);
+    const group = leftOut.get(reason.kind) ?? { members: [], examples: new Map<string, number>() };
+    leftOut.set(reason.kind, group);
+    group.members.push(member);
+    if (reason.example !== undefined) {
+      group.examples.set(reason.example, (group.examples.get(reason.example) ?? 0) + 1);
+    }
     return false;
   });
   const findings = findEmptyMemberSelectors(members, [...scope.include, ...scope.exclude]);
-  for (const [reason, group] of leftOut) findings.push(sayLeftOut(reason, group));
+  for (const [kind, group] of leftOut) findings.push(sayLeftOut(kind, group));
   if (kept.length === 0) findings.push(sayNothingLeft(members.length));
   return { members: kept, findings };
 }
 
-function whySecondary(member: Member): string | null {
+/** Why a member is left out: one note a kind, which lists its examples with their numbers. */
+interface Reason {
+  readonly kind: string;
+  readonly example?: string;
+}
+
+interface LeftOut {
+  readonly members: Member[];
+  readonly examples: Map<string, number>;
+}
+
+function whySecondary(member: Member): Reason | null {
+  if (ANALYSIS_CLASSES.has(member.class.toLowerCase())) return null;
   const owner = member.partOf;
-  if (owner !== null && SECONDARY_OWNERS.has(owner.toLowerCase())) return `part of ${owner}`;
+  if (owner !== null && SECONDARY_OWNERS.has(owner.toLowerCase())) return { kind: `part of ${owner}` };
   if (!STRUCTURAL_CLASSES.has(withoutStandardCase(member.class).toLowerCase()) && owner?.toLowerCase() !== ASSEMBLY) {
-    return `of class ${member.class}`;
+    return { kind: `of class ${member.class}` };
   }
   const type = member.predefinedType?.toUpperCase();
-  if (type !== undefined && SECONDARY_TYPES.has(type)) return `of predefined type ${type}`;
-  if (isPlainlyNotSteel(member.material.name)) return `of material ${member.material.name}, not steel`;
+  if (type !== undefined && SECONDARY_TYPES.has(type)) return { kind: `of predefined type ${type}` };
+  if (isPlainlyNotSteel(member.material.name)) return { kind: 'not of steel', example: member.material.name };
+  if (isDummy(member)) return { kind: 'too thin to be bars', example: member.section?.name ?? '' };
   return null;
 }
 
-function sayLeftOut(reason: string, group: readonly Member[]): Finding {
+function isDummy({ section }: Member): boolean {
+  if (section === null) return false;
+  const [greater, lesser] = [Math.max(section.depth, section.width), Math.min(section.depth, section.width)];
+  return greater < DUMMY_BELOW || (section.shape === 'rectangle' && lesser < DUMMY_FLAT_BELOW);
+}
+
+const EXAMPLES_LISTED = 4;
+
+function sayLeftOut(kind: string, { members, examples }: LeftOut): Finding {
+  const count = members.length;
   return finding(
     'out-of-scope',
-    `${group.length} ${group.length === 1 ? 'member' : 'members'} left out: ${reason}.`,
+    `${count} ${count === 1 ? 'member' : 'members'} left out: ${kind}${listed(examples)}.`,
     'Name them under scope: include in the brief if they belong to the truss.',
-    { members: [...new Set(group.map((member) => member.globalId))] },
+    { members: [...new Set(members.map((member) => member.globalId))] },
   );
+}
+
+/** " (Concrete: 12, Timber: 3 and 2 more)", the most frequent first. */
+function listed(examples: ReadonlyMap<string, number>): string {
+  if (examples.size === 0) return '';
+  const ordered = [...examples].sort(([a, m], [b, n]) => n - m || (a < b ? -1 : 1));
+  const words = ordered.slice(0, EXAMPLES_LISTED).map(([name, count]) => `${name}: ${count}`);
+  const more = ordered.length - words.length;
+  return ` (${words.join(', ')}${more > 0 ? ` and ${more} more` : ''})`;
 }
 
 function sayNothingLeft(count: number): Finding {

@@ -1,8 +1,10 @@
-import type { Finding } from '../domain/finding.ts';
+import { type Finding, finding } from '../domain/finding.ts';
 import type { Member } from '../domain/member.ts';
 import type { Truss } from '../domain/truss.ts';
 import type { Vec3 } from '../domain/vector.ts';
+import type { GivenSupport } from '../importer/given.ts';
 import { freeSprings, orthonormalSpan, type Spring } from './held-directions.ts';
+import { nodeFinder } from './point-finder.ts';
 import { findEmptyNodeSelectors } from './selector-empty.ts';
 import { selectNodes } from './selectors/select-nodes.ts';
 import type { Brief } from './types.ts';
@@ -21,14 +23,48 @@ export function resolveSupports(
   members: readonly Member[],
   brief: Pick<Brief, 'supports'>,
 ): { supports: ResolvedSupports; findings: Finding[] } {
+  const placed = brief.supports.flatMap(({ at, fix, springs }) =>
+    selectNodes(truss, members, at).map((node) => ({ node, fix, springs })),
+  );
+  return {
+    supports: combineSupports(placed),
+    findings: findEmptyNodeSelectors(
+      truss,
+      members,
+      brief.supports.flatMap((rule) => rule.at),
+    ),
+  };
+}
+
+/** The supports that the model itself gives, at the nodes nearest to its points; one that meets no node is a finding. */
+export function resolveGivenSupports(
+  truss: Truss,
+  given: readonly GivenSupport[],
+): { supports: ResolvedSupports; findings: Finding[] } {
+  const nodeAt = nodeFinder(truss);
+  const placed: PlacedSupport[] = [];
+  const findings: Finding[] = [];
+  for (const { globalId, name, at, fix, springs } of given) {
+    const node = nodeAt(at);
+    if (node === null) findings.push(sayMeetsNoNode(globalId, name, at));
+    else placed.push({ node, fix, springs });
+  }
+  return { supports: combineSupports(placed), findings };
+}
+
+interface PlacedSupport {
+  readonly node: number;
+  readonly fix: readonly Vec3[];
+  readonly springs: readonly Spring[];
+}
+
+function combineSupports(placed: readonly PlacedSupport[]): ResolvedSupports {
   const byNode = new Map<number, { fix: Vec3[]; springs: Spring[] }>();
-  for (const rule of brief.supports) {
-    for (const node of selectNodes(truss, members, rule.at)) {
-      const support = byNode.get(node) ?? { fix: [], springs: [] };
-      byNode.set(node, support);
-      support.fix.push(...rule.fix);
-      support.springs.push(...rule.springs);
-    }
+  for (const { node, fix, springs } of placed) {
+    const support = byNode.get(node) ?? { fix: [], springs: [] };
+    byNode.set(node, support);
+    support.fix.push(...fix);
+    support.springs.push(...springs);
   }
   const nodes = [...byNode]
     .toSorted(([a], [b]) => a - b)
@@ -37,14 +73,16 @@ export function resolveSupports(
       return { node, held, springs: freeSprings(springs, held) };
     });
   return {
-    supports: {
-      restraints: nodes.flatMap(({ node, held }) => held.map((direction) => ({ node, direction }))),
-      springs: nodes.flatMap(({ node, springs }) => springs.map((spring) => ({ node, ...spring }))),
-    },
-    findings: findEmptyNodeSelectors(
-      truss,
-      members,
-      brief.supports.flatMap((rule) => rule.at),
-    ),
+    restraints: nodes.flatMap(({ node, held }) => held.map((direction) => ({ node, direction }))),
+    springs: nodes.flatMap(({ node, springs }) => springs.map((spring) => ({ node, ...spring }))),
   };
+}
+
+function sayMeetsNoNode(globalId: string, name: string, at: Vec3): Finding {
+  return finding(
+    'selector-empty',
+    `The model's support ${name} meets no node of the truss within 1 mm and holds nothing.`,
+    'Look whether a member ends there, or give the supports in the brief.',
+    { members: [globalId], at },
+  );
 }

@@ -1,9 +1,11 @@
+import type { Section } from '../domain/member.ts';
 import type { Vec3 } from '../domain/vector.ts';
 
 /** A validated brief: SI throughout, defaults filled in. Each rule keeps its line in the file, for findings. */
 export interface Brief {
   readonly title: string | null;
-  readonly source: 'physical' | null;
+  /** null: the analysis view where no physical element is in scope. */
+  readonly source: 'physical' | 'analysis' | null;
   readonly axes: 'given' | 'centroid';
   readonly scope: { readonly include: readonly MemberSelector[]; readonly exclude: readonly MemberSelector[] };
   readonly joints: {
@@ -16,6 +18,7 @@ export interface Brief {
   readonly chords: 'pinned' | 'strict';
   readonly supports: readonly SupportRule[];
   readonly materials: { readonly default: string | null };
+  readonly sections: readonly SectionRule[];
   readonly cases: readonly CaseRule[];
   readonly combinations: readonly CombinationRule[];
 }
@@ -35,6 +38,10 @@ export interface MemberSelector {
   readonly assembly?: string;
   readonly storey?: string;
   readonly layer?: string;
+  /** Name of a group it is assigned to. */
+  readonly group?: string;
+  /** By "Set.Property"; numbers in SI. */
+  readonly property?: Readonly<Record<string, boolean | number | string | Range>>;
   readonly section?: string;
   readonly material?: string;
   /** World z of the member's middle, m. */
@@ -62,6 +69,13 @@ export interface NodeSelector {
   /** Such a member meets the node, wherever along it. */
   readonly joins?: readonly MemberSelector[];
   readonly not?: NodeSelector;
+}
+
+/** The section that members have, whatever the model says. */
+export interface SectionRule {
+  readonly line: number;
+  readonly on: readonly MemberSelector[];
+  readonly use: Section;
 }
 
 export interface SupportRule {

@@ -13,8 +13,13 @@ const program = new Command('pinwright')
   .showHelpAfterError('(pinwright --help shows the commands)')
   .addHelpText(
     'after',
-    `\nExit codes: 0 done; 1 done, with faults found; 2 wrong command or brief; 3 unreadable model.\n\n${CAUTION}`,
+    `\nExit codes: 0 done; 1 done, with faults found; 2 wrong command or brief; 3 unreadable model; 70 a fault of our own.\n\n${CAUTION}`,
   );
+
+// A reader that has seen enough (`| head`) closes the pipe; that is no fault.
+process.stdout.on('error', (error: NodeJS.ErrnoException) => {
+  if (error.code !== 'EPIPE') throw error;
+});
 
 let exitCode: number = EXIT.done;
 

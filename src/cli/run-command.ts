@@ -56,7 +56,9 @@ export async function runCommand(model: string, extent: RunOptions['extent'], fl
   if (flags.timings) reportTimings(run, (performance.now() - analysed) / 1000);
   if (!flags.quiet && !plan.stdout) {
     const { elementCount, mass, coverage } = run;
-    process.stdout.write(summarise(run.result, { extras: { elementCount, mass, coverage } }));
+    // Before there are loads the reader is still choosing what belongs to the truss.
+    const kinds = extent === 'survey' ? run.kinds : [];
+    process.stdout.write(summarise(run.result, { extras: { elementCount, mass, coverage, kinds } }));
     if (outputs.length > 0) process.stdout.write(`\nWritten: ${outputs.join(', ')}\n`);
   }
   return hasFaults(run) ? EXIT.faultsFound : EXIT.done;

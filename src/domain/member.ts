@@ -23,6 +23,8 @@ export interface Section {
   readonly depth: number;
   /** Extent of the outline along y, m. */
   readonly width: number;
+  /** Of the thickest part, m: strengths fall with it. */
+  readonly thickness: number;
 }
 
 /** SI: Pa, kg/m3, 1/K. Yield and ultimate strength are null where the grade is not known. */
@@ -34,6 +36,17 @@ export interface Material {
   readonly yieldStrength: number | null;
   readonly ultimateStrength: number | null;
   readonly from: 'properties' | 'name' | 'brief' | 'default';
+}
+
+/** What else the model says of an element; read from the file when it is asked for, since most is never wanted. */
+export interface ElementFacts {
+  /** Names of the groups, systems and zones it is assigned to. */
+  readonly groups: readonly string[];
+  /**
+   * The values of "Pset_MemberCommon.Reference" or "Qto_BeamBaseQuantities.Length" ("*.Reference": of any set), the
+   * element's own before its type's; numbers in SI; empty where there is none.
+   */
+  property(name: string): readonly (string | number | boolean)[];
 }
 
 /** An element of the model read as a line of force. All lengths in metres, in the model's own world axes. */
@@ -55,8 +68,11 @@ export interface Member {
   readonly place: string | null;
   readonly axisFrom: 'axis' | 'extrusion' | 'swept' | 'mesh' | 'analysis-view';
   readonly axis: readonly [Vec3, Vec3];
+  /** The centroid line of the body, where `axis` is drawn apart from the body and a body shows it. */
+  readonly centroidAxis?: readonly [Vec3, Vec3] | null;
   /** Unit direction of the section's z axis; at right angles to the member's axis. */
   readonly zAxis: Vec3;
   readonly section: Section | null;
   readonly material: Material;
+  readonly facts?: ElementFacts;
 }

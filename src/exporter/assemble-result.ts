@@ -87,21 +87,30 @@ const nodalForces = (forces: readonly NodalForce[]) =>
   forces.map(({ node, force }) => ({ node: nodeId(node), force: point(force) }));
 
 function resultMember(member: Member, index: number, truss: Truss): Result['members'][number] {
-  const { section, material, axis, zAxis, layer, partOf, ...told } = member;
   const { shift, turn } = truss.faith[index];
   return {
     id: memberId(index),
-    ...told,
-    axis: [point(axis[0]), point(axis[1])],
-    zAxis: point(zAxis),
+    globalId: member.globalId,
+    part: member.part,
+    name: member.name,
+    tag: member.tag,
+    class: member.class,
+    predefinedType: member.predefinedType,
+    type: member.type,
+    assembly: member.assembly,
+    storey: member.storey,
+    place: member.place,
+    axisFrom: member.axisFrom,
+    axis: [point(member.axis[0]), point(member.axis[1])],
+    zAxis: point(member.zAxis),
     shift,
     turn,
-    section: section && resultSection(section),
-    material: { ...material },
+    section: member.section && resultSection(member.section),
+    material: { ...member.material },
   };
 }
 
-function resultSection({ depth, width, ...section }: NonNullable<Member['section']>) {
+function resultSection({ depth, width, thickness, ...section }: NonNullable<Member['section']>) {
   return section;
 }
 

@@ -1,8 +1,10 @@
 import type { Result } from '../domain/result.ts';
+import { millimetres } from '../domain/words.ts';
 import { worstBars } from './summary/bars.ts';
 import { loadCases } from './summary/cases.ts';
 import { findings } from './summary/findings.ts';
-import { degrees, harmless, millimetres, wrapped } from './summary/layout.ts';
+import { memberKinds } from './summary/kinds.ts';
+import { degrees, harmless, wrapped } from './summary/layout.ts';
 import { SUMMARY_DEFAULTS, type SummaryOptions } from './summary/options.ts';
 import { reactions } from './summary/reactions.ts';
 import { count, verdict } from './verdict.ts';
@@ -13,6 +15,7 @@ export function summarise(result: Result, options: Partial<SummaryOptions> = {})
   const paragraphs = [
     [title(result)],
     readAndJoined(result, chosen),
+    memberKinds(chosen),
     findings(result, chosen),
     standing(result, chosen),
     loadCases(result, chosen),

@@ -49,12 +49,14 @@ function unclear({ stability }: Result): string {
 function aside({ stability }: Result): string | null {
   const bars = stability.setAside.length;
   if (bars === 0) return null;
-  return `${count(bars, 'bar')} of parts that nothing supports ${bars === 1 ? 'is' : 'are'} left out of this.`;
+  return `${count(bars, 'bar')} of parts that nothing supports ${bars === 1 ? 'is' : 'are'} left out, with the loads on them.`;
 }
 
-function carried({ cases }: Result): string | null {
+function carried({ cases, stability }: Result): string | null {
   if (cases.length === 0) return null;
   const refused = cases.filter((loadCase) => loadCase.refused !== undefined).length;
+  if (refused === 0 && stability.mechanisms > 0)
+    return 'The load cases are carried because none of them pushes it that way; whether that balance is stable is not judged.';
   if (refused === 0) return cases.length === 1 ? 'The load case is carried.' : 'All load cases are carried.';
   return `${refused} of ${count(cases.length, 'load case')} cannot be carried.`;
 }

@@ -32,6 +32,8 @@ const WRITTEN = [
   'IfcSpace',
   'IfcStair',
   'IfcStairFlight',
+  'IfcStructuralCurveMember',
+  'IfcStructuralCurveMemberVarying',
   'IfcTendon',
   'IfcWall',
   'IfcWallStandardCase',

@@ -1,5 +1,5 @@
 import { asString } from '../step/values.ts';
-import type { Reading } from './reading.ts';
+import { type Reading, unitMissing } from './reading.ts';
 
 /** Findings about the file as a whole. */
 
@@ -13,13 +13,7 @@ export function noteGuessedSchema(reading: Reading, schema: string): void {
 }
 
 export function noteMissingLengthUnit(reading: Reading): void {
-  reading.note({
-    code: 'units-missing',
-    key: 'length',
-    say: () => 'The file does not say its length unit; its numbers are read as metres.',
-    advice:
-      'Assign a length unit to the project and export again; check the size of the model before using any result.',
-  });
+  if (!reading.units.lengthStated) reading.note(unitMissing(reading.units, 'length'));
 }
 
 export function noteRepeatedGlobalIds(reading: Reading, elements: readonly number[]): void {

@@ -1,5 +1,5 @@
 import type { Section } from '../domain/member.ts';
-import { cross, distance, dot, subtract, unit, type Vec3 } from '../domain/vector.ts';
+import { cross, distance, dot, norm, subtract, unit, type Vec3 } from '../domain/vector.ts';
 import { type BodyAxis, lengthOf } from './geometry/body-axis.ts';
 import { type Chord, isStraight } from './geometry/curve-piece.ts';
 import { NotRead, noSection } from './not-read.ts';
@@ -8,14 +8,24 @@ import { across, firstAcross, type Transform } from './transform.ts';
 
 /** A member's line with its section, before anything is said of the element it comes from. */
 export interface MemberAxis {
-  readonly axisFrom: 'axis' | 'extrusion' | 'swept';
+  readonly axisFrom: 'axis' | 'extrusion' | 'swept' | 'mesh';
   readonly ends: readonly [Vec3, Vec3];
   readonly zAxis: Vec3;
   readonly section: Section | null;
   /** Why there is no section. */
   readonly noSection: NotRead | null;
   readonly isBent: boolean;
+  /** One of several straight runs of a line with bends. */
+  readonly isRun: boolean;
   readonly isTapered: boolean;
+  /** Of a mesh: part of the cuts through it that agree, 0..1; null for all else. */
+  readonly confidence: number | null;
+  /** Of a mesh: an end is no single face across the axis, so that its place is that of the farthest corner. */
+  readonly hasRaggedEnd: boolean;
+  /** Of a drawn line: the centroid line of the one body that runs along it. */
+  readonly centroidEnds: readonly [Vec3, Vec3] | null;
+  /** Whether the drawn line lies clearly elsewhere than the centroid line. */
+  readonly isBeside: boolean;
 }
 
 /** Shorter than this is no member: the order of what rounded coordinates leave. */
@@ -50,7 +60,12 @@ export function axisOfBody(book: SectionBook, body: BodyAxis, profiles: readonly
     axisFrom: body.from,
     ends,
     isBent: !isStraight({ from: body.start, to: body.end, rise: body.rise }, lengthOf(body)),
+    isRun: body.isRun,
     isTapered: body.endProfile !== null,
+    centroidEnds: null,
+    isBeside: false,
+    confidence: body.measured?.confidence ?? null,
+    hasRaggedEnd: body.measured !== null && body.measured.squareness === null,
   } as const;
   return { ...common, ...sectionAcross(book, body, along, profiles) };
 }
@@ -66,15 +81,36 @@ export function axisOfLine(
   const ends = inOrder(line.from, line.to);
   const along = directionOf(ends);
   const isBent = !isStraight(line, distance(line.from, line.to));
+  const isRun = line.isRun ?? false;
+  const beside = againstCentroid(bodies, line, along);
+  const common = { axisFrom: 'axis', ends, isBent, isRun, hasRaggedEnd: false, ...beside } as const;
   const body = alongside(bodies, along);
   if (body !== null) {
     const seen = axisOfBody(book, body, profiles);
     const zAxis = firstAcross(along, dot(seen.zAxis, along) ** 2 < 0.99 ? seen.zAxis : upOf(world, along));
-    return { ...seen, axisFrom: 'axis', ends, zAxis, isBent };
+    return { ...seen, ...common, zAxis };
   }
   const zAxis = firstAcross(along, upOf(world, along));
-  const found = sectionOfProfiles(book, profiles, along, zAxis);
-  return { axisFrom: 'axis', ends, zAxis, isBent, isTapered: false, ...found };
+  return { ...common, zAxis, isTapered: false, confidence: null, ...sectionOfProfiles(book, profiles, along, zAxis) };
+}
+
+/** A drawn axis this far beside the centroid line, in metres, makes moments that a modeller should know of. */
+export const FARTHEST_BESIDE = 0.02;
+
+/** The line and the centroid line of the body it stands for: the only one that is nearly as long as the longest. */
+function againstCentroid(
+  bodies: readonly BodyAxis[],
+  line: Chord,
+  along: Vec3,
+): Pick<MemberAxis, 'centroidEnds' | 'isBeside'> {
+  const longest = Math.max(0, ...bodies.map(lengthOf));
+  const [body, ...more] = bodies.filter((each) => lengthOf(each) > 0.8 * longest);
+  const isComparable = body !== undefined && more.length === 0 && line.isRun !== true && !(line.rise > FARTHEST_BESIDE);
+  if (!isComparable || body.rise > FARTHEST_BESIDE || !isSound(body.start) || !isSound(body.end)) {
+    return { centroidEnds: null, isBeside: false };
+  }
+  const beside = Math.max(...[body.start, body.end].map((p) => norm(across(subtract(p, line.from), along))));
+  return { centroidEnds: inOrder(body.start, body.end), isBeside: beside > FARTHEST_BESIDE };
 }
 
 /** @throws NotRead where the ends are no points of a building or no line lies between them. */
@@ -117,8 +153,13 @@ function upOf(world: Transform, along: Vec3): Vec3 {
 type SectionFound = Pick<MemberAxis, 'section' | 'noSection' | 'zAxis'>;
 
 function sectionAcross(book: SectionBook, body: BodyAxis, along: Vec3, profiles: readonly number[]): SectionFound {
+  const { measured, profile } = body;
+  if (measured !== null) {
+    return { section: measured.section, zAxis: firstAcross(along, measured.zAxis), noSection: null };
+  }
   try {
-    const seen = book.seenAlong(body.profile, along, body.x, body.y);
+    if (profile === null) throw noSection('only its bounding box is drawn');
+    const seen = book.seenAlong(profile, along, body.x, body.y);
     if (body.endProfile === null) return { ...seen, noSection: null };
     const far = book.seenAlong(body.endProfile, along, body.x, body.y);
     // The lesser end of a tapered member is the safe one.

@@ -21,3 +21,10 @@ const AXIS_ADVICE = 'Export the member as a profile extruded along its length, o
 
 /** The line of force is not found; `reason` completes "... has no line of force: ". */
 export const noAxis = (reason: string): NotRead => new NotRead('no-axis', reason, AXIS_ADVICE);
+
+/** A body whose shape only a geometry parser can tell. */
+export class NeedsParser extends NotRead {
+  constructor(reason: string) {
+    super('no-axis', reason, AXIS_ADVICE);
+  }
+}

@@ -1,6 +1,8 @@
-import { asRef } from '../step/values.ts';
-import { axesById, type Grid, type GridAxis, readGridPlacement } from './grids.ts';
-import { NotRead } from './not-read.ts';
+import { asRef, type StepValue } from '../step/values.ts';
+import { gridsByAxis, readGridPlacement } from './grid-placement.ts';
+import type { Grid } from './grids.ts';
+import { readLinearAxes } from './linear-placement.ts';
+import { NotRead, noAxis } from './not-read.ts';
 import { readAxes } from './placement-axes.ts';
 import type { Reading } from './reading.ts';
 import { compose, IDENTITY, type Transform } from './transform.ts';
@@ -16,12 +18,12 @@ export class Placements {
   private readonly reading: Reading;
   private readonly root: Transform;
   private readonly world = new Map<number, Transform | NotRead>();
-  private readonly gridAxes: ReadonlyMap<number, { grid: Grid; axis: GridAxis }>;
+  private readonly gridOf: ReadonlyMap<number, Grid>;
 
   constructor(reading: Reading, grids: readonly Grid[]) {
     this.reading = reading;
     this.root = worldCoordinateSystem(reading);
-    this.gridAxes = axesById(grids);
+    this.gridOf = gridsByAxis(grids);
   }
 
   /**
@@ -68,17 +70,12 @@ export class Placements {
     const type = reading.typeOf(id);
     if (type === 'IFCLOCALPLACEMENT') return { relative: readAxes(reading, args[1]), parent: asRef(args[0]) };
     if (type === 'IFCGRIDPLACEMENT') {
-      try {
-        const { grid, relative } = readGridPlacement(reading, args, this.gridAxes);
+      return orRefusal(() => {
+        const { grid, relative } = readGridPlacement(reading, args, this.gridOf);
         return { relative, parent: grid.placement };
-      } catch (problem) {
-        if (problem instanceof NotRead) return problem;
-        throw problem;
-      }
+      });
     }
-    if (type === 'IFCLINEARPLACEMENT' && asRef(args[2]) !== null) {
-      return { relative: readAxes(reading, args[2]), parent: asRef(args[0]) };
-    }
+    if (type === 'IFCLINEARPLACEMENT') return this.linearLink(args);
     // What a missing parent would have moved is not known; the rest of the chain still holds.
     if (type === '') return { relative: IDENTITY, parent: null };
     return new NotRead(
@@ -86,6 +83,33 @@ export class Placements {
       `its placement is of the class ${type}, which is not read`,
       'Export the model with local placements.',
     );
+  }
+
+  /** By the curve it lies along; where that is not read, by the position that the file gives beside it. */
+  private linearLink(args: readonly StepValue[]): Link | NotRead {
+    const { reading } = this;
+    const parent = asRef(args[0]);
+    const along = asRef(args[1]);
+    const read = orRefusal(() => {
+      if (along === null) throw noAxis('it is placed along no curve');
+      return { relative: readLinearAxes(reading, along), parent };
+    });
+    if (!(read instanceof NotRead)) return read;
+    if (asRef(args[2]) !== null) return { relative: readAxes(reading, args[2]), parent };
+    return new NotRead(
+      'unreadable-element',
+      `its placement along a curve cannot be read: ${read.message}`,
+      'Export the model with local placements.',
+    );
+  }
+}
+
+function orRefusal(read: () => Link): Link | NotRead {
+  try {
+    return read();
+  } catch (problem) {
+    if (problem instanceof NotRead) return problem;
+    throw problem;
   }
 }
 

@@ -31,8 +31,8 @@ export interface Surroundings {
 
 /** "C/4, +6.20" by the grid; without one "Roof, 12.3 m x and 4.5 m y from the corner, +6.20". */
 export function placeNamer(around: Surroundings): PlaceNamer {
-  const families = gridFamilies(around);
-  if (families.length > 0) return (at) => `${nearestCrossing(families, at)}, ${signedLevel(at[2])}`;
+  const grids = planGrids(around);
+  if (grids.length > 0) return (at) => `${crossingAt(grids, at)}, ${signedLevel(at[2])}`;
   const storeys = [...around.storeys].sort((a, b) => a.level - b.level || (a.name < b.name ? -1 : 1));
   const { corner } = around;
   if (corner === null) return () => null;
@@ -49,30 +49,40 @@ const signedLevel = (z: number): string => {
   return z > 0 ? `+${level}` : level;
 };
 
+/** Storeys and grids are drawn on the floor; what is set into it belongs to it still. */
+const FLOOR = 0.3;
+
 /** The storey a point belongs to: the highest whose floor is not above it, give or take a slab. */
 function storeyAt(storeys: readonly Storey[], z: number): string | null {
-  const below = storeys.filter((storey) => storey.level <= z + 0.3);
+  const below = storeys.filter((storey) => storey.level <= z + FLOOR);
   return (below.at(-1) ?? storeys[0])?.name ?? null;
 }
 
-type GridFamilies = readonly (readonly Line[])[];
+/** A grid in plan: families of axes, and the levels it is drawn on. */
+interface PlanGrid {
+  readonly families: readonly (readonly Line[])[];
+  readonly levels: number[];
+}
 
-/** Each grid's axis families in plan; a grid drawn again on another level counts once. */
-function gridFamilies({ grids, placements }: Surroundings): GridFamilies[] {
-  const found = new Map<string, GridFamilies>();
+/** The grids that name places; one that is drawn again on another level counts once. */
+function planGrids({ grids, placements }: Surroundings): PlanGrid[] {
+  const found = new Map<string, PlanGrid>();
   for (const grid of grids) {
-    const families = worldLines(grid, placements);
-    if (families.filter((family) => family.length > 0).length < 2) continue;
+    const world = worldLines(grid, placements);
+    const families = world.families.filter((family) => family.length > 0);
+    if (families.length < 2) continue;
     const key = JSON.stringify(families, (_, value) => (typeof value === 'number' ? Math.round(value * 1e3) : value));
-    if (!found.has(key)) found.set(key, lettersFirst(families.filter((family) => family.length > 0)));
+    const same = found.get(key);
+    if (same === undefined) found.set(key, { families: lettersFirst(families), levels: [world.level] });
+    else same.levels.push(world.level);
   }
   return [...found.values()];
 }
 
-function worldLines(grid: Grid, placements: Placements): Line[][] {
+function worldLines(grid: Grid, placements: Placements): { families: Line[][]; level: number } {
   try {
     const world = placements.worldOf(grid.placement);
-    return grid.families.map((family) => {
+    const families = grid.families.map((family) => {
       let reference: Vec3 | null = null;
       return family.flatMap((axis): Line[] => {
         const from = mapPosition(world, axis.from);
@@ -85,8 +95,9 @@ function worldLines(grid: Grid, placements: Placements): Line[][] {
         return [{ tag: axis.tag, at: [from[0], from[1], 0], left: [-forward[1], forward[0], 0] }];
       });
     });
+    return { families, level: world.origin[2] };
   } catch (problem) {
-    if (problem instanceof NotRead) return [];
+    if (problem instanceof NotRead) return { families: [], level: 0 };
     throw problem;
   }
 }
@@ -97,22 +108,50 @@ function lettersFirst(families: readonly (readonly Line[])[]): readonly (readonl
   return [...families.filter((f) => !isNumbered(f)), ...families.filter(isNumbered)];
 }
 
-function nearestCrossing(grids: readonly GridFamilies[], at: Vec3): string {
-  let best = '';
-  let least = Number.POSITIVE_INFINITY;
-  for (const families of grids) {
-    const words = families.map((family) => alongFamily(family, at));
-    const away = Math.hypot(...words.map((word) => word.away));
-    if (away < least) {
-      least = away;
-      best = words.map((word) => word.text).join('/');
-    }
+/**
+ * By the grid that a reader would take the drawing of: one whose axes run round the point before one it lies outside of, then
+ * the one on the level below it, then the one with the nearest crossing.
+ */
+function crossingAt(grids: readonly PlanGrid[], at: Vec3): string {
+  let best: { words: string; rank: readonly number[] } | null = null;
+  for (const { families, levels } of grids) {
+    const crossing = nearestTwo(families.map((family) => alongFamily(family, at)));
+    const outside = Math.hypot(...crossing.map(({ beyond }) => Math.max(0, beyond - ON_AXIS)));
+    const above = Math.min(...levels.map((level) => (level <= at[2] + FLOOR ? at[2] - level : ABOVE + level - at[2])));
+    const rank = [outside, above, Math.hypot(...crossing.map(({ away }) => away))];
+    if (best === null || isBefore(rank, best.rank)) best = { words: crossing.map(({ text }) => text).join('/'), rank };
   }
-  return best;
+  return best?.words ?? '';
+}
+
+/** m; any grid below a point comes before any above it. */
+const ABOVE = 1e6;
+
+function isBefore(a: readonly number[], b: readonly number[]): boolean {
+  const first = a.findIndex((value, i) => Math.abs(value - b[i]!) > 1e-9);
+  return first >= 0 && a[first]! < b[first]!;
+}
+
+/** Two axes make a crossing; of a third family (the W axes of a triangular grid) the nearer two are named. */
+function nearestTwo(families: readonly AlongFamily[]): readonly AlongFamily[] {
+  if (families.length <= 2) return families;
+  const nearest = families.map((_, i) => i).sort((i, j) => families[i]!.away - families[j]!.away || i - j);
+  return nearest
+    .slice(0, 2)
+    .sort((i, j) => i - j)
+    .map((i) => families[i]!);
+}
+
+interface AlongFamily {
+  readonly text: string;
+  /** m to the nearest axis. */
+  readonly away: number;
+  /** m outside the outermost axis; 0 between axes. */
+  readonly beyond: number;
 }
 
 /** Where a point lies among the axes of one family: on "C", between "C-D", or beyond the last one. */
-function alongFamily(family: readonly Line[], at: Vec3): { text: string; away: number } {
+function alongFamily(family: readonly Line[], at: Vec3): AlongFamily {
   let left: { line: Line; distance: number } | null = null;
   let right: { line: Line; distance: number } | null = null;
   for (const line of family) {
@@ -122,12 +161,13 @@ function alongFamily(family: readonly Line[], at: Vec3): { text: string; away: n
     if (side < 0 && (left === null || distance < left.distance)) left = { line, distance };
   }
   const [near, far] = [left, right].sort((a, b) => (a?.distance ?? Infinity) - (b?.distance ?? Infinity));
-  if (near === null || near === undefined) return { text: '', away: 0 };
-  if (near.distance <= ON_AXIS) return { text: near.line.tag, away: near.distance };
-  if (far === null || far === undefined) {
-    return { text: `${near.line.tag} (${near.distance.toFixed(1)} m outside)`, away: near.distance };
-  }
-  return { text: inOrder(near.line.tag, far.line.tag), away: near.distance };
+  if (near === null || near === undefined) return { text: '', away: 0, beyond: 0 };
+  const away = near.distance;
+  const isOutside = far === null || far === undefined;
+  const beyond = isOutside ? away : 0;
+  if (away <= ON_AXIS) return { text: near.line.tag, away, beyond };
+  if (isOutside) return { text: `${near.line.tag} (${away.toFixed(1)} m outside)`, away, beyond };
+  return { text: inOrder(near.line.tag, far.line.tag), away, beyond };
 }
 
 const byTag = new Intl.Collator('en', { numeric: true });

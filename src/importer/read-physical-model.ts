@@ -1,102 +1,30 @@
-import { between, type Vec3 } from '../domain/vector.ts';
 import type { StepFile } from '../step/step-file.ts';
-import { asRef, asString } from '../step/values.ts';
-import { noteFileProblems, noteGuessedSchema, noteMissingLengthUnit, noteRepeatedGlobalIds } from './file-remarks.ts';
-import { FindingsLog } from './findings-log.ts';
-import { readGrids } from './grids.ts';
-import { MaterialBook } from './materials/material-book.ts';
-import { compareRounded } from './member-axis.ts';
-import { NotRead } from './not-read.ts';
+import { type BodyMeshes, WantedMeshes } from './body-meshes.ts';
 import { IMPORT_DEFAULTS, type ImportOptions } from './options.ts';
-import { Placements } from './placements.ts';
-import { placeNamer, type Storey } from './places.ts';
-import { type PlacelessMember, readElement, type Sources } from './read-element.ts';
-import { Reading } from './reading.ts';
-import { readRelations } from './relations.ts';
-import { knownSchema } from './schema.ts';
-import { SectionBook } from './sections/section-book.ts';
+import { finish, prepare } from './prepare.ts';
+import { readElement } from './read-element.ts';
 import type { ImportedModel } from './types.ts';
-import { readUnits } from './units.ts';
 
 const MEMBER_CLASSES = ['IfcBeam', 'IfcColumn', 'IfcMember'].flatMap((name) => [name, `${name}StandardCase`]);
 
 /**
  * The members of a physical model: elements of the member classes and of those in `options.classes`, each as a line of
  * force in world metres with section and material. What cannot be read is a finding, never silence.
+ * Bodies that only a parser can mesh are asked of `meshes`.
  * @throws ModelError where the schema is not one that is read; RequestError where the default material is unknown.
  */
-export function readPhysicalModel(file: StepFile, chosen: ImportOptions = IMPORT_DEFAULTS): ImportedModel {
-  const schema = knownSchema(file.schema);
-  const log = new FindingsLog();
-  const units = readUnits(file);
-  const reading = new Reading(file, schema.family, units, log);
-  const grids = readGrids(reading);
-  const placements = new Placements(reading, grids);
-  const sources: Sources = {
-    reading,
-    placements,
-    relations: readRelations(file),
-    sections: new SectionBook(reading),
-    materials: new MaterialBook(reading, chosen.defaultMaterial),
-    options: chosen,
-  };
-
+export function readPhysicalModel(
+  file: StepFile,
+  chosen: ImportOptions = IMPORT_DEFAULTS,
+  meshes: BodyMeshes = new WantedMeshes(),
+): ImportedModel {
+  const prepared = prepare(file, chosen);
   const elements = elementsOf(file, chosen.classes);
-  const found = elements.flatMap((id) => readElement(sources, id)).sort(byGeometry);
-
-  if (schema.guessed) noteGuessedSchema(reading, file.schema);
-  if (!units.lengthStated) noteMissingLengthUnit(reading);
-  noteRepeatedGlobalIds(reading, elements);
-  const storeys = readStoreys(sources);
-  noteFileProblems(reading);
-
-  const placeOf = placeNamer({ grids, placements, storeys, corner: cornerOf(found) });
-  for (const member of found) member.place = placeOf(between(...member.axis, 0.5));
-  return {
-    schema: file.schema,
-    lengthUnit: units.lengthName,
-    source: 'physical',
-    members: found,
-    findings: log.findings(placeOf),
-    placeOf,
-    elementCount: elements.length,
-  };
+  const members = elements.flatMap((id) => readElement(prepared.sources, id, meshes));
+  return { ...finish(prepared, 'physical', elements, members), given: null };
 }
 
 function elementsOf(file: StepFile, extra: readonly string[]): number[] {
   const classes = new Set([...MEMBER_CLASSES, ...extra].map((name) => name.toUpperCase()));
   return [...classes].flatMap((name) => [...file.idsOf(name)]);
-}
-
-function byGeometry(a: PlacelessMember, b: PlacelessMember): number {
-  const ends = compareRounded(a.axis[0], b.axis[0]) || compareRounded(a.axis[1], b.axis[1]);
-  if (ends !== 0) return ends;
-  if (a.globalId !== b.globalId) return a.globalId < b.globalId ? -1 : 1;
-  return a.part - b.part;
-}
-
-function cornerOf(members: readonly PlacelessMember[]): Vec3 | null {
-  if (members.length === 0) return null;
-  let [x, y] = [Number.POSITIVE_INFINITY, Number.POSITIVE_INFINITY];
-  for (const { axis } of members) {
-    for (const end of axis) {
-      x = Math.min(x, end[0]);
-      y = Math.min(y, end[1]);
-    }
-  }
-  return [x, y, 0];
-}
-
-function readStoreys({ reading, placements }: Sources): Storey[] {
-  return reading.file.idsOf('IFCBUILDINGSTOREY').flatMap((id): Storey[] => {
-    const args = reading.file.args(id);
-    const name = asString(args[2]) ?? asString(args[7]);
-    if (name === null) return [];
-    try {
-      return [{ name, level: placements.worldOf(asRef(args[5])).origin[2] }];
-    } catch (problem) {
-      if (problem instanceof NotRead) return [];
-      throw problem;
-    }
-  });
 }

@@ -4,6 +4,7 @@ import { asNumber, asRef, type StepValue } from '../step/values.ts';
 import type { FindingsLog, Remark } from './findings-log.ts';
 import { whose } from './findings-log.ts';
 import type { SchemaFamily } from './schema.ts';
+import { kindOf, type UnitKind } from './unit-kinds.ts';
 import type { Units } from './units.ts';
 
 /** One run over one file: the file, what its numbers mean, and whose part of it is being read. */
@@ -57,8 +58,20 @@ export class Reading {
   /** The plane angle in `value`, radians. */
   angle(value: StepValue | undefined): number {
     const number = asNumber(value) ?? 0;
-    if (!this.units.angleStated && number !== 0) this.note(ANGLE_UNIT_MISSING);
+    if (!this.units.angleStated && number !== 0) this.note(unitMissing(this.units, 'angle'));
     return number * this.units.angle;
+  }
+
+  /**
+   * The number in `value` in SI, by the project's unit for its kind, with a finding where the file leaves that open;
+   * null where there is no number.
+   */
+  quantity(value: StepValue | undefined, kind: UnitKind): number | null {
+    const number = asNumber(value);
+    if (number === null) return null;
+    const { factor, stated } = this.units.unit(kind);
+    if (!stated && number !== 0) this.note(unitMissing(this.units, kind));
+    return number * factor;
   }
 
   /** A cartesian point in metres; a point of two coordinates lies at z = 0. */
@@ -95,9 +108,18 @@ export class Reading {
   }
 }
 
-const ANGLE_UNIT_MISSING: Remark = {
-  code: 'units-missing',
-  key: 'angle',
-  say: () => 'The file uses angles and does not say their unit; they are read as radians.',
-  advice: 'Assign a plane angle unit to the project and export again.',
-};
+/** The file uses numbers of a kind and does not say their unit, or one that cannot be taken. */
+export function unitMissing(units: Units, kind: UnitKind): Remark {
+  const { words, si } = kindOf(kind);
+  const { factor, fault } = units.unit(kind);
+  const why = fault === null ? 'The file does not say' : `As ${fault}, the file does not say`;
+  return {
+    code: 'units-missing',
+    key: kind,
+    say: () => `${why} its unit of ${words}; such numbers are read in ${inSi(factor, si)}.`,
+    advice: `Assign a unit of ${words} to the project and export again; check such values before using any result.`,
+  };
+}
+
+const inSi = (factor: number, si: string): string =>
+  factor === 1 ? si : `units of ${Number(factor.toPrecision(7))} ${si}`;

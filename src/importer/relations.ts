@@ -1,3 +1,4 @@
+import { pushTo } from '../domain/group.ts';
 import type { StepFile } from '../step/step-file.ts';
 import { asRef, asRefs, asString } from '../step/values.ts';
 
@@ -10,6 +11,8 @@ export interface Relations {
   readonly typeOf: ReadonlyMap<number, number>;
   /** What IfcRelAssociatesMaterial gives an element or a type. */
   readonly materialOf: ReadonlyMap<number, number>;
+  /** The groups, systems and zones that an element is assigned to. */
+  readonly groupsOf: ReadonlyMap<number, readonly number[]>;
   /** Name of the layer that a representation or an item is on. */
   readonly layerOf: ReadonlyMap<number, string>;
 }
@@ -23,7 +26,19 @@ export function readRelations(file: StepFile): Relations {
   toMany(file, 'IFCRELDEFINESBYTYPE', 5, 4, typeOf);
   const materialOf = new Map<number, number>();
   toMany(file, 'IFCRELASSOCIATESMATERIAL', 5, 4, materialOf);
-  return { wholeOf, containerOf, typeOf, materialOf, layerOf: readLayers(file) };
+  return { wholeOf, containerOf, typeOf, materialOf, groupsOf: readGroups(file), layerOf: readLayers(file) };
+}
+
+function readGroups(file: StepFile): Map<number, number[]> {
+  const groups = new Map<number, number[]>();
+  for (const type of ['IFCRELASSIGNSTOGROUP', 'IFCRELASSIGNSTOGROUPBYFACTOR']) {
+    for (const id of file.idsOf(type)) {
+      const args = file.args(id);
+      const group = asRef(args[6]);
+      if (group !== null && file.has(group)) for (const object of asRefs(args[4])) pushTo(groups, object, group);
+    }
+  }
+  return groups;
 }
 
 /** Files the one at attribute `one` under each of those in the list at attribute `many`; the first relationship stands. */

@@ -8,10 +8,13 @@ export interface Shape {
 }
 
 /** Representations that show something else than the solid or its line. */
-const ASIDE = new Set(['BOX', 'FOOTPRINT', 'ANNOTATION', 'PROFILE', 'CLEARANCE', 'SURFACE', 'LIGHTING', 'COG', 'PLAN']);
+const ASIDE = new Set(['FOOTPRINT', 'ANNOTATION', 'PROFILE', 'CLEARANCE', 'SURFACE', 'LIGHTING', 'COG', 'PLAN']);
 
 /** The best body first; what exporters call it varies. */
 const BODY_RANK = ['BODY', '', 'BODY-FALLBACK', 'FACETATION', 'TESSELLATION', 'REFERENCE'];
+
+/** The bounding box: better than nothing, and than nothing only. */
+const LAST = 'BOX';
 
 export function readShape(reading: Reading, id: number | null): Shape {
   let axis: readonly number[] = [];
@@ -28,7 +31,7 @@ export function readShape(reading: Reading, id: number | null): Shape {
       continue;
     }
     const rank = BODY_RANK.indexOf(name);
-    const place = rank < 0 ? BODY_RANK.length : rank;
+    const place = rank >= 0 ? rank : BODY_RANK.length + (name === LAST ? 1 : 0);
     if (place < best) {
       best = place;
       body = items;

@@ -1,6 +1,7 @@
 import type { Finding } from '../domain/finding.ts';
 import type { Member } from '../domain/member.ts';
 import type { PlaceNamer } from '../domain/place.ts';
+import type { Given } from './given.ts';
 
 /** What was read of a model, before any scope is applied. */
 export interface ImportedModel {
@@ -14,4 +15,6 @@ export interface ImportedModel {
   readonly placeOf: PlaceNamer;
   /** Elements of the classes asked for, whether or not they could be read. */
   readonly elementCount: number;
+  /** The model's own supports, loads and combinations; null where its physical elements were read. */
+  readonly given: Given | null;
 }

@@ -15,8 +15,8 @@ const WORDS: Readonly<Record<string, string>> = {
   IFCSECTIONEDSOLIDHORIZONTAL: 'a sectioned solid',
   IFCSECTIONEDSPINE: 'a sectioned spine',
   IFCREVOLVEDAREASOLIDTAPERED: 'a tapered revolved profile',
-  IFCCOMPOSITEPROFILEDEF: 'a composite of several profiles',
-  IFCCENTERLINEPROFILEDEF: 'a centre line with a thickness',
+  IFCCRANERAILASHAPEPROFILEDEF: 'a crane rail',
+  IFCCRANERAILFSHAPEPROFILEDEF: 'a crane rail',
   IFCARBITRARYOPENPROFILEDEF: 'an open line',
   IFCPROFILEDEF: 'a mere name',
 };

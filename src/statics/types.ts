@@ -31,6 +31,8 @@ export interface LoadCase {
   readonly name: string;
   readonly nature: Nature;
   readonly loads: readonly NodalForce[];
+  /** What of the case could not be put on the truss: the case is refused, since without it its forces would be too small. */
+  readonly incomplete?: string;
 }
 
 /** One independent way the truss can move without straining a bar. */

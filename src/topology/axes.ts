@@ -1,4 +1,4 @@
-import type { Member } from '../domain/member.ts';
+import type { Member, SectionShape } from '../domain/member.ts';
 import { cross, dot, norm, scale, subtract, unit, type Vec3 } from '../domain/vector.ts';
 import { TOLERANCE } from './options.ts';
 
@@ -19,6 +19,8 @@ export interface Axis {
   readonly sectionName: string | null;
   /** Half the section's extent in a unit direction. */
   readonly halfExtent: (direction: Vec3) => number;
+  /** How far the centroid may lie from the middle of the section, as a share of the half extent. */
+  readonly lean: number;
 }
 
 /** The axes of all members that have a length, in the members' order; null for the others. */
@@ -40,9 +42,13 @@ export function makeAxes(members: readonly Member[]): (Axis | null)[] {
       assembly: member.partOf === 'IfcElementAssembly' ? member.assembly : null,
       sectionName: member.section?.name ?? null,
       halfExtent: halfExtentOf(member, direction),
+      lean: LEANING.has(member.section?.shape ?? 'other') ? 0.5 : 0,
     };
   });
 }
+
+/** Sections whose centroid lies off their middle: an equal angle's at 0.28 of its leg, a tee's at about 0.25 of its depth. */
+const LEANING: ReadonlySet<SectionShape> = new Set(['L', 'T', 'U', 'C', 'Z', 'other']);
 
 function halfExtentOf(member: Member, axis: Vec3): (direction: Vec3) => number {
   const section = member.section;

@@ -69,8 +69,10 @@ export function judgePair(a: Axis, b: Axis, options: JoinOptions): JudgedContact
 function judgeSkew(a: Axis, b: Axis, sine: number, options: JoinOptions): JudgedContact | null {
   const { s, t, distance, normal } = approach(a, b);
   const widening = wideningFor(a, b);
-  const reachA = (options.reach ?? reachOf(a, b.halfExtent(approachDirection(a, b)), sine)) * widening;
-  const reachB = (options.reach ?? reachOf(b, a.halfExtent(approachDirection(b, a)), sine)) * widening;
+  const [acrossB, acrossA] = [approachDirection(a, b), approachDirection(b, a)];
+  const cosine = Math.abs(dot(a.direction, b.direction));
+  const reachA = (options.reach ?? reachOf(a, b.halfExtent(acrossB) + a.halfExtent(acrossA) * cosine, sine)) * widening;
+  const reachB = (options.reach ?? reachOf(b, a.halfExtent(acrossA) + b.halfExtent(acrossB) * cosine, sine)) * widening;
   const extensionA = beyondEnds(s, a);
   const extensionB = beyondEnds(t, b);
   const lengthwise = Math.max(extensionA / reachA, extensionB / reachB);
@@ -78,12 +80,14 @@ function judgeSkew(a: Axis, b: Axis, sine: number, options: JoinOptions): Judged
 
   const offset = (options.offset ?? offsetOf(a, b)) * widening;
   const seatHeight = normal === null ? 0 : a.halfExtent(normal) + b.halfExtent(normal);
+  const lean = normal === null ? 0 : a.lean * a.halfExtent(normal) + b.lean * b.halfExtent(normal);
+  const seatGap = Math.max(0, Math.abs(distance - seatHeight) - lean);
   const maySit = options.seated === 'node' && (!bothRunThrough || looksLikeSeat(a, b, s, t));
-  const seatMiss = maySit ? Math.abs(distance - seatHeight) / TOLERANCE.seatPacking : Number.POSITIVE_INFINITY;
+  const seatMiss = maySit ? seatGap / TOLERANCE.seatPacking : Number.POSITIVE_INFINITY;
   const sits = distance > offset && seatMiss < distance / offset;
   const sideways = sits ? seatMiss : distance / offset;
   const kind = sits ? 'seat' : bothRunThrough ? 'crossing' : 'meets';
-  const cost = extensionA + extensionB + (sits ? Math.abs(distance - seatHeight) : distance);
+  const cost = extensionA + extensionB + (sits ? seatGap : distance);
   const point = between(along(a.start, a.direction, s), along(b.start, b.direction, t), 0.5);
   return { contact: { a: a.member, b: b.member, s, t, point, kind, cost }, ratio: Math.max(lengthwise, sideways) };
 }
@@ -133,8 +137,14 @@ const beyondEnds = (s: number, axis: Axis): number => Math.max(0, -s, s - axis.l
 
 const isInside = (s: number, axis: Axis, reach: number): boolean => s > reach && s < axis.length - reach;
 
-/** A continuous purlin over a continuous chord sits; a thin rod that passes a deep member only passes it. */
+/**
+ * A continuous purlin over a continuous chord lies square to it and sits; bracing that slants by under a purlin, or a thin
+ * rod by a deep member, only passes.
+ */
 function looksLikeSeat(a: Axis, b: Axis, s: number, t: number): boolean {
   const slender = Math.min(a.depth, b.depth) < 0.4 * Math.max(a.depth, b.depth);
-  return !slender && !looksCrossed(a, b, s, t);
+  return sineBetween(a, b) > SQUARE && !slender && !looksCrossed(a, b, s, t);
 }
+
+/** Sine of 64 degrees: purlins on the skew lie that slanting at the most. */
+const SQUARE = 0.9;

@@ -2,9 +2,10 @@ import { type Finding, finding } from '../domain/finding.ts';
 import type { Member } from '../domain/member.ts';
 import type { PlaceNamer } from '../domain/place.ts';
 import { along, between, dot, meanOf, norm, scale, subtract, unit, type Vec3 } from '../domain/vector.ts';
+import { millimetres } from '../domain/words.ts';
 import { type Axis, sineBetween } from './axes.ts';
 import { boxAround } from './contacts.ts';
-import { labelOf, millimetres } from './labels.ts';
+import { labelOf } from './labels.ts';
 import type { JoinOptions } from './options.ts';
 import { indexBoxes, searchBoxes } from './spatial-index.ts';
 
@@ -17,6 +18,8 @@ const INTERPENETRATION = 0.5;
 const COINCIDENT = 1e-4;
 /** Two of a pair are cut alike: their ends differ by less than this share of their depth. */
 const SAME_LENGTH = 0.5;
+/** Depths of one section, named or rounded in two ways. */
+const SAME_DEPTH = 0.9;
 /** Members in line may run into each other by this share of their depth, as mitred and notched ends do. */
 const NOTCH = 1.5;
 
@@ -87,10 +90,14 @@ function relationOf(a: Axis, b: Axis): Relation | null {
   const touching =
     distance < COINCIDENT ? Number.POSITIVE_INFINITY : touchingDistance(a, b, scale(aside, 1 / distance));
   const mostly = overlap > MOST_OF_LENGTH * Math.max(a.length, b.length);
-  if (distance < INTERPENETRATION * touching) return mostly ? 'twins' : 'overlap';
+  if (distance < INTERPENETRATION * touching) return mostly && depthsAgree(a, b) ? 'twins' : 'overlap';
   const cutAlike = Math.max(Math.abs(a.length - b.length), a.length - overlap) < SAME_LENGTH * depth;
   return cutAlike && distance < touching + depth ? 'pair' : null;
 }
+
+/** One member drawn twice has one section: anything else in the same place is another part. */
+const depthsAgree = (a: Axis, b: Axis): boolean =>
+  a.sectionName === b.sectionName || Math.min(a.depth, b.depth) > SAME_DEPTH * Math.max(a.depth, b.depth);
 
 const touchingDistance = (a: Axis, b: Axis, normal: Vec3): number => a.halfExtent(normal) + b.halfExtent(normal);
 

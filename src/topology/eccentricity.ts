@@ -2,8 +2,9 @@ import { type Finding, finding } from '../domain/finding.ts';
 import type { Member } from '../domain/member.ts';
 import type { PlaceNamer } from '../domain/place.ts';
 import { along, cross, dot, scale, subtract, unit, type Vec3 } from '../domain/vector.ts';
+import { millimetres } from '../domain/words.ts';
 import { type Axis, approach, sineBetween } from './axes.ts';
-import { labelOf, millimetres } from './labels.ts';
+import { labelOf } from './labels.ts';
 import { TOLERANCE } from './options.ts';
 import type { Vertex, VertexGraph } from './vertices.ts';
 

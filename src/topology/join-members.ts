@@ -3,6 +3,7 @@ import type { Member } from '../domain/member.ts';
 import type { PlaceNamer } from '../domain/place.ts';
 import type { Truss } from '../domain/truss.ts';
 import { between } from '../domain/vector.ts';
+import { millimetres } from '../domain/words.ts';
 import { type Axis, makeAxes } from './axes.ts';
 import { buildTruss } from './build-truss.ts';
 import { findCarriers } from './carriers.ts';
@@ -11,8 +12,8 @@ import { resolveDoubles } from './doubles.ts';
 import { offsetJointFindings } from './eccentricity.ts';
 import { carriedFindings, crossingFindings, crowdedFindings } from './joint-findings.ts';
 import { makeJoints, type Refusal } from './joints.ts';
-import { labelOf, millimetres } from './labels.ts';
-import { looseEndFindings } from './loose-ends.ts';
+import { labelOf } from './labels.ts';
+import { looseEndFindings, overhangFindings } from './loose-ends.ts';
 import { JOIN_DEFAULTS, type JoinOptions } from './options.ts';
 import { cutOverhangs } from './overhangs.ts';
 import { partFindings } from './parts.ts';
@@ -45,11 +46,12 @@ export function joinMembers(
 
   const contacts = findContacts(axes, chosen);
   const { truss: whole, refused, graph } = trussOf(members, axes, contacts, chosen, placeOf);
-  const cut = cutOverhangs(whole, supportedNodes(whole));
+  const { truss: cut, cut: tails } = cutOverhangs(whole, supportedNodes(whole));
   const supported = supportedNodes(cut);
   const findings = [
     ...zeroLengthFindings(members, drawn, placeOf),
     ...doubles.findings,
+    ...overhangFindings(tails, members, placeOf),
     ...looseEndFindings(cut, members, axes, supported, chosen, placeOf),
     ...partFindings(cut, members, axes, supported, placeOf),
     ...crossingFindings(contacts, members, axes, cut, placeOf),

@@ -3,10 +3,11 @@ import type { Member } from '../domain/member.ts';
 import type { PlaceNamer } from '../domain/place.ts';
 import type { Truss } from '../domain/truss.ts';
 import { distance, meanOf } from '../domain/vector.ts';
+import { millimetres } from '../domain/words.ts';
 import { type Axis, looksCrossed } from './axes.ts';
 import type { Contact } from './contacts.ts';
 import type { Refusal } from './joints.ts';
-import { labelOf, millimetres } from './labels.ts';
+import { labelOf } from './labels.ts';
 
 /** Axes that run through each other and were left apart, but for bracing that is plainly crossed. */
 export function crossingFindings(

@@ -4,11 +4,12 @@ import type { Member } from '../domain/member.ts';
 import type { PlaceNamer } from '../domain/place.ts';
 import type { Truss } from '../domain/truss.ts';
 import { distance, type Vec3 } from '../domain/vector.ts';
+import { millimetres } from '../domain/words.ts';
 import { type Axis, distanceToAxis } from './axes.ts';
 import { boxAround, judgePair, largestReach } from './contacts.ts';
-import { labelOf, millimetres } from './labels.ts';
+import { labelOf } from './labels.ts';
 import { type JoinOptions, TOLERANCE } from './options.ts';
-import { isFreeEnd } from './overhangs.ts';
+import { isFreeEnd, type Overhang } from './overhangs.ts';
 import { indexBoxes, searchBoxes } from './spatial-index.ts';
 
 const STEEP = Math.sin(Math.PI / 3);
@@ -90,6 +91,7 @@ function nearMissSearch(axes: readonly (Axis | null)[], options: JoinOptions): (
       const { s } = judged.contact;
       if (s < axis.length / 2 !== atStart) return;
       const { distance: gap } = distanceToAxis(at, other);
+      if (gap > TOLERANCE.nearMiss * largestGap(axis, other, options)) return;
       if (
         best === null ||
         judged.ratio < best.ratio ||
@@ -99,6 +101,11 @@ function nearMissSearch(axes: readonly (Axis | null)[], options: JoinOptions): (
     });
     return best;
   };
+}
+
+/** What a joint of the two could bridge straight across, however slanting they meet. */
+function largestGap(own: Axis, other: Axis, options: JoinOptions): number {
+  return Math.max(options.reach ?? 0, own.depth, other.depth) + TOLERANCE.detailingGap;
 }
 
 function nearMiss(end: FreeEnd, miss: Miss, members: readonly Member[], placeOf: PlaceNamer): Finding {
@@ -125,5 +132,21 @@ function looseEnd(end: FreeEnd, members: readonly Member[], placeOf: PlaceNamer)
     `An end of ${labelOf(own)} joins nothing, and no other member is near.`,
     `Join it to what it should meet, or name a support there in the brief.`,
     { members: [own.globalId], nodes: [end.node], at: end.at, place: placeOf(end.at) },
+  );
+}
+
+/** A tail past the last joint carries nothing: it may be meant (an eaves overhang), or an end drawn too long. */
+export function overhangFindings(
+  tails: readonly Overhang[],
+  members: readonly Member[],
+  placeOf: PlaceNamer,
+): Finding[] {
+  return tails.map(({ members: own, length, at }) =>
+    finding(
+      'loose-end',
+      `${labelOf(members[own[0]])} runs ${millimetres(length)} past its last joint and ends there; the tail is cut off, its weight stays.`,
+      'Shorten it to its joint, or join its end to what it should meet; an overhang that is meant needs nothing.',
+      { members: own.map((member) => members[member].globalId), at, place: placeOf(at), gap: length },
+    ),
   );
 }

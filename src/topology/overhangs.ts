@@ -1,10 +1,20 @@
 import type { Truss, TrussBar, TrussNode } from '../domain/truss.ts';
+import type { Vec3 } from '../domain/vector.ts';
+
+/** A tail that was cut off. */
+export interface Overhang {
+  readonly members: readonly number[];
+  /** m past the last joint. */
+  readonly length: number;
+  /** The free end. */
+  readonly at: Vec3;
+}
 
 /**
  * Cuts off tails: a bar of a through member that ends free beyond the member's last joint, unless its end is supported.
  * A tail carries no axial force, but its weight stays, on the joint it hangs from.
  */
-export function cutOverhangs(truss: Truss, supported: ReadonlySet<number>): Truss {
+export function cutOverhangs(truss: Truss, supported: ReadonlySet<number>): { truss: Truss; cut: Overhang[] } {
   const barsAt = truss.nodes.map(() => [] as number[]);
   truss.bars.forEach((bar, index) => {
     barsAt[bar.from].push(index);
@@ -24,7 +34,11 @@ export function cutOverhangs(truss: Truss, supported: ReadonlySet<number>): Trus
     if (isTail(bar, bar.from)) tails.set(index, bar.from);
     else if (isTail(bar, bar.to)) tails.set(index, bar.to);
   });
-  return tails.size === 0 ? truss : without(truss, tails);
+  const cut = [...tails].map(([bar, free]): Overhang => {
+    const { members, length } = truss.bars[bar];
+    return { members, length, at: truss.nodes[free].at };
+  });
+  return { truss: tails.size === 0 ? truss : without(truss, tails), cut };
 }
 
 /** Whether nothing but the bar itself is at the node. Members spliced into the bar count as the bar. */

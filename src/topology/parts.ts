@@ -3,9 +3,10 @@ import { pushTo } from '../domain/group.ts';
 import type { Member } from '../domain/member.ts';
 import type { PlaceNamer } from '../domain/place.ts';
 import type { Truss } from '../domain/truss.ts';
+import { millimetres } from '../domain/words.ts';
 import type { Axis } from './axes.ts';
 import { distanceToAxis } from './axes.ts';
-import { labelOf, millimetres } from './labels.ts';
+import { labelOf } from './labels.ts';
 
 /** A piece of the truss that no bar connects with the others. */
 export interface Part {

@@ -97,9 +97,30 @@ function assignRoles(
     const inside = middles[i] > 0 && middles[i] < axis.length;
     if (!isStart && !isFinish && !inside) return;
     const role = isStart ? 'start' : isFinish ? 'finish' : 'through';
-    stations.push({ member: axis.member, s: middles[i], role, contacts: cluster.map((place) => place.contact) });
+    const own = cluster.map((place) => place.contact);
+    const meant = role === 'through' ? own : withoutPassersBy(axis.member, axes, contacts, own);
+    stations.push({ member: axis.member, s: middles[i], role, contacts: meant });
   });
   return stations.filter((station) => isBetweenEnds(station, stations));
+}
+
+/** An end is cut for one member that runs on there; others that run by within its reach only pass (bracing at a sag rod). */
+function withoutPassersBy(
+  member: number,
+  axes: readonly (Axis | null)[],
+  contacts: readonly Contact[],
+  own: readonly number[],
+): number[] {
+  const runsOn = (contact: Contact): boolean => {
+    const other = contact.a === member ? contact.b : contact.a;
+    const s = stationOf(contact, other);
+    const axis = axes[other];
+    const margin = Math.max(axis?.depth ?? 0, axes[member]?.depth ?? 0) + TOLERANCE.detailingGap;
+    return axis !== null && contact.kind === 'meets' && s > margin && s < axis.length - margin;
+  };
+  const costs = own.filter((index) => runsOn(contacts[index])).map((index) => contacts[index].cost);
+  const least = Math.min(...costs);
+  return own.filter((index) => !runsOn(contacts[index]) || contacts[index].cost <= least + TOLERANCE.leastOffset);
 }
 
 /** What lies on the far side of the chosen end is cut off with the overhang. */
@@ -127,12 +148,12 @@ function trimLimit(
   contacts: readonly Contact[],
   cluster: readonly Place[],
 ): number {
-  let limit = Math.max(TOLERANCE.detailingGap, TOLERANCE.ownDepthShare * axis.depth);
+  let limit: number = TOLERANCE.overrun;
   for (const place of cluster) {
     const { a, b } = contacts[place.contact];
     const other = axes[a === axis.member ? b : a];
     const beyond = Math.max(-place.s, place.s - axis.length);
-    limit = Math.max(limit, (other?.depth ?? 0) + TOLERANCE.detailingGap, beyond);
+    limit = Math.max(limit, (other?.depth ?? 0) + TOLERANCE.overrun, beyond);
   }
   return limit;
 }

@@ -228,9 +228,7 @@ describe('a brief that is wrong', () => {
     ['holds: []', '2:1: "holds": this key'],
     ['tensionOnly: [{name: "X*"}]', '2:14:'],
     ['compressionOnly: [{name: "X*"}]', '2:18:'],
-    ['sections: [{on: {name: "D*"}, use: "CHS 88.9x4"}]', '2:1: "sections": this key'],
     ['joints: {pairs: one}', '2:10: "pairs": this key'],
-    ['source: analysis', '2:9: "analysis": this'],
     ['chords: continuous', '2:9: "continuous": this'],
     ['combinations: EN1990', '2:15: "EN1990": this'],
     ['combinations: ASCE7-22', '2:15: "ASCE7-22": this'],
@@ -242,13 +240,22 @@ describe('a brief that is wrong', () => {
     ],
     ['cases: [{name: a, nature: thermal, loads: [{misfit: 2 mm, on: {globalId: x}}]}]', '"misfit": this key'],
     ['cases: [{name: a, nature: wind, alternative: wind, loads: []}]', '"alternative": this key'],
-    ['scope: {include: [{group: roof}]}', '"group": this key'],
-    ['scope: {include: {property: {a: b}}}', '"property": this key'],
   ])('is told that %s is not available yet, and nothing else', (line, expected) => {
     const problems = problemsOf(`pinwright: 1\n${line}\n`);
     expect(problems).toHaveLength(1);
     expect(problems[0]).toContain(expected);
     expect(problems[0]).toContain('is not available yet');
+  });
+
+  it.each([
+    ['scope: {include: {property: {Span: 3}}}', 'write the set and the property'],
+    ['scope: {include: {property: {}}}', 'name a property'],
+    ['scope: {include: {property: {A.B: {}}}}', 'true, false, a number in SI, a text, or a range'],
+    ['scope: {include: {property: {A.B: [1]}}}', 'is due'],
+  ])('is told how a property is selected: %s', (line, expected) => {
+    const problems = problemsOf(`pinwright: 1\n${line}\n`);
+    expect(problems).toHaveLength(1);
+    expect(problems[0]).toContain(expected);
   });
 
   it('is refused where it is not UTF-8, with the place of the first wrong byte', () => {

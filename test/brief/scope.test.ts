@@ -1,6 +1,7 @@
 import { describe, expect, it } from 'vitest';
 import { isPlainlyNotSteel } from '../../src/brief/material-words.ts';
 import { applyScope } from '../../src/brief/scope.ts';
+import { hollow } from '../support/members.ts';
 import { makeMember } from './make-truss.ts';
 
 const NONE = { include: [], exclude: [] };
@@ -33,9 +34,44 @@ describe('the default scope', () => {
     expect(findings.map(({ code, severity, message, members: named }) => [code, severity, message, named])).toEqual([
       ['out-of-scope', 'note', '2 members left out: part of IfcRailing.', ['b', 'c']],
       ['out-of-scope', 'note', '1 member left out: of predefined type MULLION.', ['d']],
-      ['out-of-scope', 'note', '1 member left out: of material Brettschichtholz GL24h, not steel.', ['e']],
+      ['out-of-scope', 'note', '1 member left out: not of steel (Brettschichtholz GL24h: 1).', ['e']],
       ['out-of-scope', 'note', '1 member left out: of class IfcPile.', ['f']],
     ]);
+  });
+
+  it('counts all that is not steel in one note, by material', () => {
+    const others = ['Beton C25/30', 'Beton C25/30', 'Holz', 'Glass', 'Brick', 'STEEL/NEOPRENE', 'PVC'];
+    const { findings } = applyScope([member('s'), ...others.map((name, i) => member(`o${i}`, material(name)))], NONE);
+    expect(findings.map(({ message }) => message)).toEqual([
+      '7 members left out: not of steel (Beton C25/30: 2, Brick: 1, Glass: 1, Holz: 1 and 2 more).',
+    ]);
+  });
+
+  it('leaves out bars too thin to be any', () => {
+    const flat = (depth: number, width: number, shape: 'rectangle' | 'circle' = 'rectangle') => ({
+      section: { ...hollow(0.1), name: `${depth * 1000}x${width * 1000}`, shape, depth, width },
+    });
+    const { members, findings } = applyScope(
+      [
+        member('mark', flat(0.001, 0.001)),
+        member('mark too', flat(0.001, 0.001)),
+        member('surface', flat(0.2, 0.001)),
+        member('strip', flat(0.04, 0.003)),
+        member('rod', flat(0.006, 0.006, 'circle')),
+        member('wire', flat(0.002, 0.002, 'circle')),
+        member('unknown', { section: null }),
+      ],
+      NONE,
+    );
+    expect(members.map(({ globalId }) => globalId)).toEqual(['strip', 'rod', 'unknown']);
+    expect(findings.map(({ message }) => message)).toEqual([
+      '4 members left out: too thin to be bars (1x1: 2, 200x1: 1, 2x2: 1).',
+    ]);
+  });
+
+  it('takes the members of an analysis view, whatever they are made of', () => {
+    const view = member('v', { class: 'IfcStructuralCurveMember', ...material('Concrete') });
+    expect(applyScope([view], NONE).members).toEqual([view]);
   });
 
   it('says so where nothing is left', () => {

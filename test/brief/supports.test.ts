@@ -1,7 +1,7 @@
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import { orthonormalSpan } from '../../src/brief/held-directions.ts';
-import { resolveSupports } from '../../src/brief/supports.ts';
+import { resolveGivenSupports, resolveSupports } from '../../src/brief/supports.ts';
 import type { SupportRule } from '../../src/brief/types.ts';
 import { dot, unit, type Vec3 } from '../../src/domain/vector.ts';
 import type { Supports } from '../../src/statics/types.ts';
@@ -87,5 +87,35 @@ describe('supports', () => {
         }
       }),
     );
+  });
+});
+
+describe('supports that the model gives', () => {
+  const given = (point: Vec3, fix: readonly Vec3[], name = 'foot') => ({
+    globalId: name,
+    name,
+    at: point,
+    fix,
+    springs: [],
+  });
+
+  it('stand on the node within a millimetre of their point, and add up', () => {
+    const { supports, findings } = resolveGivenSupports(truss, [
+      given([6.0005, 0, 0], [Z]),
+      given([6, 0, 0.0005], [X]),
+      given([0, 0, 0], [Y]),
+    ]);
+    expect(supports.restraints).toEqual([
+      { node: 0, direction: Y },
+      { node: 1, direction: X },
+      { node: 1, direction: Z },
+    ]);
+    expect(findings).toEqual([]);
+  });
+
+  it('that meet no node hold nothing, which is said', () => {
+    const { supports, findings } = resolveGivenSupports(truss, [given([1, 0, 0], [Z], 'lost')]);
+    expect(supports.restraints).toEqual([]);
+    expect(findings).toMatchObject([{ code: 'selector-empty', members: ['lost'], at: [1, 0, 0] }]);
   });
 });

@@ -52,6 +52,6 @@ describe.each(MODELS)('the public model %s', (name) => {
     expect(stderr).toBe('');
     expect(runChecker(resultChecker!, [json])).toEqual({ code: 0, output: '0 problems\n' });
     expect(runChecker(ifcChecker!, [ifc, '--block', 'Pinwright results: begin']).output).toMatch(/^0 problems in/m);
-    expect(readFileSync(ifc).length).toBeGreaterThanOrEqual(readFileSync(model!).length);
+    if (name.endsWith('.ifc')) expect(readFileSync(ifc).length).toBeGreaterThanOrEqual(readFileSync(model!).length);
   });
 });

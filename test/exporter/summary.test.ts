@@ -1,6 +1,7 @@
 import { describe, expect, it } from 'vitest';
 import type { Result } from '../../src/domain/result.ts';
-import { columns, kilonewtons, millimetres, wrapped } from '../../src/exporter/summary/layout.ts';
+import { millimetres } from '../../src/domain/words.ts';
+import { columns, kilonewtons, wrapped } from '../../src/exporter/summary/layout.ts';
 import { summarise } from '../../src/exporter/summary.ts';
 import { someResult } from './support.ts';
 
@@ -82,7 +83,7 @@ describe('the summary', () => {
   });
 
   it('gives the reactions as what the supports bear', () => {
-    expect(text).toMatch(/n1 +C\/4, \+6\.20 +1\.35 +0\.50 +0\.10\n/);
+    expect(text).toMatch(/n1 +C\/4, \+6\.20 +-?\d+\.\d +-?\d+\.\d +1\.35 +0\.50 +0\.10\n/);
     expect(text).toContain('and 20 more supports');
   });
 
@@ -188,5 +189,30 @@ describe('the layout', () => {
   it('breaks lines between words and lets a word that is too long stand', () => {
     expect(wrapped('one two three four', 9, '- ', '  ')).toEqual(['- one two', '  three', '  four']);
     expect(wrapped('incomprehensible', 5, '- ')).toEqual(['- incomprehensible']);
+  });
+});
+
+describe('members by section and material', () => {
+  const kind = (i: number, inScope: number) => ({
+    class: 'IfcBuildingElementProxy',
+    section: i === 0 ? null : `A section with a very long name ${i}`,
+    material: `Some material ${i}`,
+    count: 1000 + i,
+    inScope,
+    length: 123_456.7,
+  });
+  const kinds = Array.from({ length: 15 }, (_, i) => kind(i, i === 0 ? 7 : 0));
+  const text = summarise(busyResult(), { extras: { kinds } });
+
+  it('are told a row a kind, at most twelve, within 80 columns', () => {
+    expect(text).toContain('Members by section and material');
+    expect(text).toContain('  and 3 more, 3039 members');
+    for (const line of text.split('\n')) expect([...line].length).toBeLessThanOrEqual(80);
+    expect(flat(text)).toContain('1000 7 IfcBuildingEleme… no section Some material… 123456.7');
+    expect(flat(text)).toContain('1001 - IfcBuildingEleme…');
+  });
+
+  it('are left out where nobody counted them', () => {
+    expect(summarise(busyResult())).not.toContain('Members by section');
   });
 });

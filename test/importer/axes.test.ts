@@ -5,7 +5,7 @@ import { beamWith, importText } from './support/model-text.ts';
 
 function only(data: string, schema = 'IFC4', options: Partial<ImportOptions> = {}) {
   const model = importText(data, schema, options);
-  expect(model.findings.filter((f) => f.code !== 'no-material')).toEqual([]);
+  expect(model.findings.filter((f) => f.code !== 'no-material' && f.code !== 'axis-moved')).toEqual([]);
   expect(model.members).toHaveLength(1);
   return model.members[0]!;
 }
@@ -254,9 +254,10 @@ ${extrusion(102, '$', '#13', '3000.')}
   });
 
   it.each([
-    ['IFCFACETEDBREP(#101)', 'a boundary representation'],
-    ['IFCTRIANGULATEDFACESET(#101,$,.T.,$,$)', 'a triangulated mesh'],
-  ])('says of %s that there is no line of force, and what the body is', (item, words) => {
+    ['IFCFACETEDBREP(#101)', 'its mesh has no faces'],
+    ['IFCTRIANGULATEDFACESET(#101,$,.T.,$,$)', 'its mesh has no faces'],
+    ['IFCSPHERE(#11,100.)', 'of the class IFCSPHERE'],
+  ])('says of %s that there is no line of force, and why', (item, words) => {
     const model = importText(beamWith({ body: '#100', more: `#100=${item};\n#101=IFCCLOSEDSHELL(());` }));
     expect(model.members).toEqual([]);
     expect(model.findings).toHaveLength(1);
@@ -362,7 +363,8 @@ describe('a drawn Axis', () => {
     // No body: the section is the one of the material profile set.
     expect(member.section?.name).toBe('Flat');
     expect(member.section?.depth).toBeCloseTo(0.2, 12);
-    expect(member.material).toMatchObject({ name: 'S355', yieldStrength: 355e6, from: 'name' });
+    // 100 mm thick: EN 10025-2, from memory.
+    expect(member.material).toMatchObject({ name: 'S355', yieldStrength: 315e6, from: 'name' });
   });
 
   it('that is kinked or an arc becomes its chord with a finding', () => {

@@ -25,6 +25,7 @@ export function hollow(depth: number, width = depth): Section {
     from: 'profile',
     depth,
     width,
+    thickness: t,
   };
 }
 
@@ -42,6 +43,7 @@ export function round(diameter: number): Section {
     inertiaMajor: inertia,
     inertiaMinor: inertia,
     torsion: 2 * inertia,
+    thickness: diameter,
   };
 }
 

@@ -2,6 +2,7 @@ import type { Member } from '../../domain/member.ts';
 import { distance } from '../../domain/vector.ts';
 import type { MemberSelector } from '../types.ts';
 import { exactTest, textTest } from './pattern.ts';
+import { valueTest } from './value-test.ts';
 import { ANGLE_PRECISION, isWithin, LENGTH_PRECISION } from './within-range.ts';
 
 type MemberTest = (member: Member) => boolean;
@@ -60,6 +61,14 @@ export function memberTest(selector: MemberSelector): MemberTest {
   if (selector.class !== undefined) {
     const fits = textTest(selector.class);
     tests.push((member) => fits(member.class) || fits(withoutStandardCase(member.class)));
+  }
+  if (selector.group !== undefined) {
+    const fits = textTest(selector.group);
+    tests.push((member) => member.facts?.groups.some(fits) ?? false);
+  }
+  for (const [name, wanted] of Object.entries(selector.property ?? {})) {
+    const fits = valueTest(wanted);
+    tests.push((member) => member.facts?.property(name).some(fits) ?? false);
   }
   if (selector.not !== undefined) {
     const holds = memberTest(selector.not);

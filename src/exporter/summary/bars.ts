@@ -1,5 +1,5 @@
 import type { Result } from '../../domain/result.ts';
-import { envelopeTitle } from '../verdict.ts';
+import { count, envelopeTitle } from '../verdict.ts';
 import { columns, harmless, kilonewtons, wrapped } from './layout.ts';
 import type { SummaryOptions } from './options.ts';
 
@@ -23,6 +23,7 @@ export function worstBars(result: Result, options: SummaryOptions): string[] {
   const rows = shown.map(({ bar: id, tension, compression }) => {
     const bar = barOf.get(id);
     return [
+      id,
       harmless(bar?.name ?? id),
       harmless(memberOf.get(bar?.member ?? '')?.section?.name ?? '-'),
       inKilonewtons(tension?.force ?? null),
@@ -33,8 +34,9 @@ export function worstBars(result: Result, options: SummaryOptions): string[] {
   });
   const table = columns(
     [
-      { head: 'bar', align: 'left', most: 14 },
-      { head: 'section', align: 'left', most: 15 },
+      { head: 'bar', align: 'left' },
+      { head: 'name', align: 'left', most: 14 },
+      { head: 'section', align: 'left', most: 17 },
       { head: 'tension', align: 'right' },
       { head: 'from', align: 'left' },
       { head: 'compression', align: 'right' },
@@ -43,10 +45,11 @@ export function worstBars(result: Result, options: SummaryOptions): string[] {
     rows,
   );
   const more = loaded.length - shown.length;
+  const idle = result.envelope.length - loaded.length;
   return [
     `Worst bars, kN (${envelopeTitle(result)})`,
     ...table,
-    ...(more > 0 ? [`  and ${more} more bars`] : []),
+    ...(more > 0 || idle > 0 ? [`  and ${count(more, 'more bar')}${idle > 0 ? `, ${idle} of no force` : ''}`] : []),
     ...names.flatMap((name, i) => wrapped(`(${i + 1}) ${described(name, result)}`, options.width, '  ', '      ')),
   ];
 }

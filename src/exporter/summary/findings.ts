@@ -1,7 +1,20 @@
 import type { Result, ResultFinding } from '../../domain/result.ts';
+import { millimetres } from '../../domain/words.ts';
 import { count } from '../verdict.ts';
-import { harmless, millimetres, wrapped } from './layout.ts';
+import { harmless, wrapped } from './layout.ts';
 import type { SummaryOptions } from './options.ts';
+
+/** What is wrong with the file itself is told first: much of the rest may follow from it. */
+const FAULTS_OF_FILE: ReadonlySet<string> = new Set([
+  'unreadable-element',
+  'cyclic-placement',
+  'dangling-reference',
+  'doubled-id',
+  'doubled-globalid',
+  'units-missing',
+  'schema-guessed',
+  'encoding-broken',
+]);
 
 const SEVERITIES = ['error', 'warning', 'note'] as const;
 
@@ -12,8 +25,16 @@ export function findings(result: Result, options: SummaryOptions): string[] {
     count(all.filter((found) => found.severity === severity).length, severity),
   );
   const lines = [`Found    ${totals.join(', ')}`];
-  for (const severity of SEVERITIES) {
-    const ofSeverity = all.filter((found) => found.severity === severity);
+  const grouped = [
+    ...SEVERITIES.map((severity) =>
+      all.filter((found) => found.severity === severity && FAULTS_OF_FILE.has(found.code)),
+    ),
+    ...SEVERITIES.map((severity) =>
+      all.filter((found) => found.severity === severity && !FAULTS_OF_FILE.has(found.code)),
+    ),
+  ];
+  for (const ofSeverity of grouped) {
+    const severity = ofSeverity[0]?.severity ?? 'note';
     for (const code of new Set(ofSeverity.map((found) => found.code))) {
       const group = ofSeverity.filter((found) => found.code === code);
       lines.push(`  ${severity.padEnd(9)}${code}${group.length > 1 ? `, ${group.length} times` : ''}`);
@@ -25,11 +46,16 @@ export function findings(result: Result, options: SummaryOptions): string[] {
 
 function told(group: readonly ResultFinding[], severity: string, { width, findingsOfACode }: SummaryOptions): string[] {
   const shown = severity === 'note' ? 1 : findingsOfACode;
-  const lines = group.slice(0, shown).flatMap((found) => wrapped(sentence(found), width, '         - ', '           '));
+  const told = group.slice(0, shown);
+  const lines = told.flatMap((found, i) => {
+    const isSaid = severity === 'note' || found.advice === told[i + 1]?.advice;
+    return [
+      ...wrapped(sentence(found), width, '         - ', '           '),
+      ...(isSaid ? [] : wrapped(`To do: ${harmless(found.advice)}`, width, '           ', '           ')),
+    ];
+  });
   const more = group.length - shown;
   if (more > 0) lines.push(`         - and ${more} more`);
-  const advice = severity === 'note' ? '' : harmless(group[0]!.advice);
-  if (advice !== '') lines.push(...wrapped(`To do: ${advice}`, width, '         ', '         '));
   return lines;
 }
 

@@ -60,12 +60,6 @@ export function kilonewtons(forces: readonly (number | null)[]): (force: number 
   return (force) => (force === null ? '-' : withoutMinusZero((force / 1000).toFixed(decimals)));
 }
 
-/** A length (m) in mm: whole from 10 mm on, with one decimal below. */
-export function millimetres(length: number): string {
-  const mm = length * 1000;
-  return `${withoutMinusZero(mm.toFixed(Math.abs(mm) >= 10 || mm === 0 ? 0 : 1))} mm`;
-}
-
 export function degrees(angle: number): string {
   return `${withoutMinusZero(((angle * 180) / Math.PI).toFixed(2))} deg`;
 }

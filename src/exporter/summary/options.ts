@@ -1,9 +1,13 @@
+import type { MemberKind } from '../../brief/member-kinds.ts';
+
 /** What the pipeline knows besides the result and the reader wants to see. */
 export interface SummaryExtras {
   /** Elements of the classes asked for, whether or not they could be read. */
   readonly elementCount?: number;
   /** kg, of the bars between their nodes. */
   readonly mass?: number;
+  /** Members that were read, by what a scope would name. */
+  readonly kinds?: readonly MemberKind[];
   /** m2 that each area load of the brief covers, on the slope and in plan. */
   readonly coverage?: readonly { readonly case: string; readonly area: number; readonly planArea: number }[];
 }
@@ -15,6 +19,7 @@ export interface SummaryOptions {
   readonly bars: number;
   readonly reactions: number;
   readonly modes: number;
+  readonly kinds: number;
 }
 
 export const SUMMARY_DEFAULTS: SummaryOptions = {
@@ -24,4 +29,5 @@ export const SUMMARY_DEFAULTS: SummaryOptions = {
   bars: 10,
   reactions: 10,
   modes: 5,
+  kinds: 12,
 };

@@ -16,19 +16,22 @@ export function reactions(result: Result, options: SummaryOptions): string[] {
   if (bearings.length === 0) return [];
   const greatest = (bearing: Bearing): number => Math.max(bearing.down, bearing.uplift, bearing.horizontal);
   const shown = bearings.sort((a, b) => greatest(b) - greatest(a)).slice(0, options.reactions);
-  const placeOf = new Map(result.nodes.map((node) => [node.id, node.place]));
+  const nodeOf = new Map(result.nodes.map((node) => [node.id, node]));
   const inKilonewtons = kilonewtons(shown.map(greatest));
   const table = columns(
     [
       { head: 'node', align: 'left', most: 10 },
-      { head: 'place', align: 'left', most: 28 },
+      { head: 'place', align: 'left', most: 22 },
+      { head: 'x m', align: 'right' },
+      { head: 'y m', align: 'right' },
       { head: 'down', align: 'right' },
       { head: 'uplift', align: 'right' },
       { head: 'horizontal', align: 'right' },
     ],
     shown.map(({ node, down, uplift, horizontal }) => [
       node,
-      harmless(placeOf.get(node) ?? ''),
+      harmless(nodeOf.get(node)?.place ?? ''),
+      ...[0, 1].map((k) => nodeOf.get(node)?.at[k]?.toFixed(1) ?? ''),
       ...[down, uplift, horizontal].map((force) => inKilonewtons(force === 0 ? null : force)),
     ]),
   );

@@ -3,13 +3,15 @@ import { noAxis } from '../not-read.ts';
 import type { Reading } from '../reading.ts';
 import { compose, type Transform } from '../transform.ts';
 import { readCurve } from './curve.ts';
-import { type Chord, chordOf, mapPiece } from './curve-piece.ts';
+import { type Chord, mapPiece } from './curve-piece.ts';
 import { mappedItems } from './mapped-item.ts';
+import { straightRuns } from './straight-runs.ts';
 
 const DEEPEST = 16;
 
 /**
- * The lines drawn in an Axis representation, in world metres. One curve gives one line, bent or not.
+ * The lines drawn in an Axis representation, in world metres. A straight curve or a bow gives one line, a polygon
+ * its straight runs.
  * @throws NotRead (no-axis) where an item cannot be read.
  */
 export function readAxisLines(reading: Reading, items: readonly number[], world: Transform, depth = 0): Chord[] {
@@ -25,7 +27,6 @@ export function readAxisLines(reading: Reading, items: readonly number[], world:
       const ids = Array.isArray(elements) ? elements.map(asRef).filter((id) => id !== null) : [];
       return readAxisLines(reading, ids, world, depth + 1);
     }
-    const chord = chordOf(readCurve(reading, item).map((piece) => mapPiece(world, piece)));
-    return chord === null ? [] : [chord];
+    return straightRuns(readCurve(reading, item).map((piece) => mapPiece(world, piece)));
   });
 }

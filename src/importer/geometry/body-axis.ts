@@ -1,20 +1,36 @@
+import type { Section } from '../../domain/member.ts';
 import { along, cross, distance, dot, norm, subtract, unit, type Vec3 } from '../../domain/vector.ts';
 import { across } from '../transform.ts';
 
-/** The centroid line of one swept solid, world metres. */
+/** What was measured on a mesh, beside its axis. */
+export interface Measured {
+  readonly section: Section;
+  /** Unit direction of the section's z axis, across the member. */
+  readonly zAxis: Vec3;
+  /** Part of the cuts that show this same section, 0..1. */
+  readonly confidence: number;
+  /** The lesser of both ends' cosines between the axis and the end face's normal; null where an end has no one face. */
+  readonly squareness: number | null;
+}
+
+/** The centroid line of one solid, world metres. */
 export interface BodyAxis {
-  readonly from: 'extrusion' | 'swept';
+  readonly from: 'extrusion' | 'swept' | 'mesh';
   readonly start: Vec3;
   readonly end: Vec3;
   /** What the swept plane's two axes have become in the world. */
   readonly x: Vec3;
   readonly y: Vec3;
-  /** The profile, as the section book knows it. */
-  readonly profile: number;
+  /** The profile, as the section book knows it; null for a mesh. */
+  readonly profile: number | null;
   /** A second profile at the far end, where the solid tapers. */
   readonly endProfile: number | null;
   /** How far the true axis leaves the straight line, metres. */
   readonly rise: number;
+  /** One of several straight runs of a body that bends between them. */
+  readonly isRun: boolean;
+  /** Of a mesh: what its cuts show. */
+  readonly measured: Measured | null;
 }
 
 export const lengthOf = (axis: { start: Vec3; end: Vec3 }): number => distance(axis.start, axis.end);

@@ -1,21 +1,26 @@
 import { between } from '../../domain/vector.ts';
 import { asEnum, asRef } from '../../step/values.ts';
-import { NotRead, noAxis } from '../not-read.ts';
+import { type Remark, whose } from '../findings-log.ts';
+import { NeedsParser, NotRead, noAxis } from '../not-read.ts';
 import type { Reading } from '../reading.ts';
 import type { SectionBook } from '../sections/section-book.ts';
-import { compose, type Transform } from '../transform.ts';
+import { compose, IDENTITY, type Transform } from '../transform.ts';
 import { inWords } from '../words.ts';
 import { type BodyAxis, joinedInLine } from './body-axis.ts';
 import { cutEnds, type Span, spansWithin } from './cutters.ts';
 import { extrusionAxis, readExtrusion } from './extrusion.ts';
+import { blockFaces, readFaces } from './face-sets.ts';
 import { mappedItems } from './mapped-item.ts';
+import { meshAxes } from './mesh-axis.ts';
 import { revolutionAxis } from './revolution.ts';
-import { sweptDiskAxis } from './swept-disk.ts';
+import { sectionedAxis, sweptAreaAxes } from './swept-area.ts';
+import { cylinderAxis, sweptDiskAxes } from './swept-disk.ts';
 
 const DEEPEST = 64;
 
 /**
- * The axes of the solids in a body's items, world metres. Items that give none are passed over where another gives one.
+ * The axes of the solids in a body's items, world metres. Items that give none are passed over where another gives one,
+ * with a note.
  * @throws NotRead (no-axis) where no item gives an axis, saying what the body is.
  */
 export function readBody(
@@ -36,8 +41,18 @@ export function readBody(
     }
   }
   if (axes.length === 0) throw refusal ?? noAxis('its shape is empty');
+  if (refusal !== null) reading.note(passedOver(refusal));
   return axes;
 }
+
+const passedOver = ({ message }: NotRead): Remark => ({
+  code: 'many-in-one',
+  key: `passed ${message}`,
+  severity: 'note',
+  say: (count, first) =>
+    `${whose(count, first, 'hold', 'holds')} several shapes, of which some give no line of force and are left out: ${message}.`,
+  advice: 'Where one of them is a member, export it as an element of its own.',
+});
 
 function readSolid(reading: Reading, book: SectionBook, id: number, world: Transform, depth: number): BodyAxis[] {
   if (depth > DEEPEST) throw noAxis('its body refers to itself');
@@ -48,8 +63,20 @@ function readSolid(reading: Reading, book: SectionBook, id: number, world: Trans
       return [extrusionAxis(book, readExtrusion(reading, id, world))];
     case 'IFCSWEPTDISKSOLID':
     case 'IFCSWEPTDISKSOLIDPOLYGONAL':
-      return [sweptDiskAxis(reading, book, id, world)];
+      return sweptDiskAxes(reading, book, id, world);
+    case 'IFCFIXEDREFERENCESWEPTAREASOLID':
+    case 'IFCDIRECTRIXDERIVEDREFERENCESWEPTAREASOLID':
+    case 'IFCSURFACECURVESWEPTAREASOLID':
+      return sweptAreaAxes(reading, book, id, world);
+    case 'IFCSECTIONEDSOLIDHORIZONTAL':
+    case 'IFCSECTIONEDSPINE':
+      return [sectionedAxis(reading, book, id, world)];
+    case 'IFCRIGHTCIRCULARCYLINDER':
+      return [cylinderAxis(reading, book, id, world)];
+    case 'IFCBOUNDINGBOX':
+      return boundingBoxAxis(reading, id, world);
     case 'IFCREVOLVEDAREASOLID':
+    case 'IFCREVOLVEDAREASOLIDTAPERED':
       return [revolutionAxis(reading, book, id, world)];
     case 'IFCMAPPEDITEM': {
       const mapped = mappedItems(reading, id);
@@ -65,9 +92,20 @@ function readSolid(reading: Reading, book: SectionBook, id: number, world: Trans
     }
     case '':
       throw noAxis('the body it refers to is missing');
-    default:
-      throw noAxis(`its body is ${inWords(type)}`);
+    default: {
+      const faces = readFaces(reading, id, world);
+      if (faces === null) throw new NeedsParser(`its body is ${inWords(type)}`);
+      return meshAxes(faces, world.z);
+    }
   }
+}
+
+/** All that is drawn is how large the member is: its line along the longest edge, and no section. */
+function boundingBoxAxis(reading: Reading, id: number, world: Transform): BodyAxis[] {
+  const args = reading.args(id);
+  const corner = compose(world, { ...IDENTITY, origin: reading.point(args[0]) });
+  const sizes = [1, 2, 3].map((i) => reading.length(args[i]));
+  return meshAxes(blockFaces(corner, sizes), world.z).map((axis) => ({ ...axis, measured: null }));
 }
 
 /** The first operand is the member; the second cuts its ends or lengthens it, and never makes a member of its own. */
@@ -84,9 +122,17 @@ function readBoolean(reading: Reading, book: SectionBook, id: number, world: Tra
     if (axis.rise > 0) return axis;
     const spans = spansWithin(reading, book, second, world, axis);
     if (spans === null) return axis;
+    if (operator === 'DIFFERENCE' && !isHalfSpace(reading, second) && spans.some(coversAll)) {
+      throw new NeedsParser('a boolean cut hollows it out along its whole length');
+    }
     return trimmed(axis, operator === 'INTERSECTION' ? keptWithin(spans) : cutEnds(spans));
   });
 }
+
+/** A half-space that would take the whole member is one whose side is told wrongly. */
+const isHalfSpace = (reading: Reading, id: number): boolean => reading.typeOf(id).endsWith('HALFSPACESOLID');
+
+const coversAll = ([from, to]: Span): boolean => from <= 0 && to >= 1;
 
 function operandAxes(reading: Reading, book: SectionBook, id: number, world: Transform, depth: number): BodyAxis[] {
   try {

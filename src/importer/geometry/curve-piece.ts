@@ -66,6 +66,8 @@ export interface Chord {
   readonly to: Vec3;
   /** Greatest distance of the curve from the chord, metres. */
   readonly rise: number;
+  /** One of several straight runs of a line that bends between them. */
+  readonly isRun?: boolean;
 }
 
 export function chordOf(pieces: readonly CurvePiece[]): Chord | null {

@@ -1,4 +1,4 @@
-import { norm, subtract, type Vec3 } from '../../domain/vector.ts';
+import { along, dot, norm, subtract, type Vec3 } from '../../domain/vector.ts';
 import { asEnum, asRef } from '../../step/values.ts';
 import { NotRead } from '../not-read.ts';
 import { readAxes } from '../placement-axes.ts';
@@ -8,6 +8,8 @@ import type { SectionBook } from '../sections/section-book.ts';
 import { compose, inverse, mapDirection, mapPosition, type Transform } from '../transform.ts';
 import { readCurve } from './curve.ts';
 import { readExtrusion } from './extrusion.ts';
+import { readFaces } from './face-sets.ts';
+import { type Face, type Mesh, meshOf, type Polygon } from './mesh.ts';
 
 /** Part of a straight axis, as fractions of the way from its start (0) to its end (1). */
 export type Span = readonly [from: number, to: number];
@@ -55,17 +57,84 @@ export function spansWithin(
     }
     case 'IFCEXTRUDEDAREASOLID':
       return extrusionSpans(reading, book, id, world, line);
+    case 'IFCCSGSOLID': {
+      const root = asRef(args[0]);
+      return root === null ? null : spansWithin(reading, book, root, world, line, depth + 1);
+    }
     case 'IFCBOOLEANRESULT':
     case 'IFCBOOLEANCLIPPINGRESULT': {
-      if (asEnum(args[0]) !== 'UNION') return null;
-      const parts = [asRef(args[1]), asRef(args[2])].map((part) =>
+      const [first, second] = [asRef(args[1]), asRef(args[2])].map((part) =>
         part === null ? null : spansWithin(reading, book, part, world, line, depth + 1),
       );
-      return parts.every((part) => part === null) ? null : parts.flatMap((part) => part ?? []);
+      return combined(asEnum(args[0]), first ?? null, second ?? null);
     }
     default:
-      return null;
+      return meshSpans(reading, id, world, line);
   }
+}
+
+/** What a boolean of two cutters covers; a part that cuts nothing across the axis takes nothing away and adds nothing. */
+function combined(operator: string | null, first: Span[] | null, second: Span[] | null): Span[] | null {
+  if (first === null) return operator === 'UNION' ? second : null;
+  if (second === null) return first;
+  if (operator === 'UNION') return [...first, ...second];
+  return both(first, operator === 'INTERSECTION' ? second : outside(second));
+}
+
+function outside(spans: readonly Span[]): Span[] {
+  const gaps: Span[] = [];
+  let from = Number.NEGATIVE_INFINITY;
+  for (const [a, b] of [...spans].sort((s, t) => s[0] - t[0])) {
+    if (a > from) gaps.push([from, a]);
+    from = Math.max(from, b);
+  }
+  gaps.push([from, Number.POSITIVE_INFINITY]);
+  return gaps;
+}
+
+/** Where the line is within a cutter drawn by its faces: it enters and leaves by turns. */
+function meshSpans(reading: Reading, id: number, world: Transform, line: AxisLine): Span[] | null {
+  const faces = facesOrNone(reading, id, world);
+  if (faces === null) return null;
+  const mesh = meshOf(faces);
+  const [start, d] = [subtract(line.start, mesh.base), subtract(line.end, line.start)];
+  const crossings = mesh.faces
+    .flatMap((face) => {
+      const slope = dot(face.area, d);
+      if (Math.abs(slope) < 1e-9 * norm(face.area) * norm(d)) return [];
+      const t = dot(subtract(mesh.points[face.rings[0]![0]!]!, start), face.area) / slope;
+      return isOnFace(mesh, face, along(start, d, t)) ? [t] : [];
+    })
+    .sort((a, b) => a - b);
+  const spans: Span[] = [];
+  for (let i = 0; i + 1 < crossings.length; i += 2) spans.push([crossings[i]!, crossings[i + 1]!]);
+  return spans;
+}
+
+function facesOrNone(reading: Reading, id: number, world: Transform): readonly Polygon[] | null {
+  try {
+    return readFaces(reading, id, world);
+  } catch (problem) {
+    if (problem instanceof NotRead) return null;
+    throw problem;
+  }
+}
+
+/** Seen along the normal's greatest part, so that no face is seen on edge. */
+function isOnFace(mesh: Mesh, { rings, area }: Face, p: Vec3): boolean {
+  const sizes = area.map(Math.abs);
+  const [i, j] = sizes[2]! >= Math.max(sizes[0]!, sizes[1]!) ? [0, 1] : sizes[1]! >= sizes[0]! ? [0, 2] : [1, 2];
+  const flat = (q: Vec3): Point2 => [q[i]!, q[j]!];
+  return (
+    rings.filter((ring) =>
+      isInside(
+        ring.map((corner) => flat(mesh.points[corner]!)),
+        flat(p),
+      ),
+    ).length %
+      2 ===
+    1
+  );
 }
 
 function halfSpaceSpan(reading: Reading, id: number, world: Transform, line: AxisLine): Span | null {

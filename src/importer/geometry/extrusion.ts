@@ -48,5 +48,7 @@ export function extrusionAxis(book: SectionBook, extrusion: Extrusion): BodyAxis
     profile,
     endProfile,
     rise: 0,
+    isRun: false,
+    measured: null,
   };
 }

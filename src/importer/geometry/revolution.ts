@@ -8,7 +8,7 @@ import { compose, mapDirection, type Transform } from '../transform.ts';
 import type { BodyAxis } from './body-axis.ts';
 import { chordOf, mapPiece } from './curve-piece.ts';
 
-/** IfcRevolvedAreaSolid: the chord of the arc that the profile's centroid runs through. */
+/** IfcRevolvedAreaSolid and its tapered form: the chord of the arc that the profile's centroid runs through. */
 export function revolutionAxis(reading: Reading, book: SectionBook, id: number, world: Transform): BodyAxis {
   const args = reading.args(id);
   const profile = asRef(args[0]);
@@ -26,14 +26,17 @@ export function revolutionAxis(reading: Reading, book: SectionBook, id: number, 
   const arc = { kind: 'arc', centre, u, v: cross(turnAxis, u), start: 0, end: angle } as const;
   const chord = chordOf([mapPiece(plane, arc)]);
   if (chord === null || unit(subtract(chord.to, chord.from)) === null) throw noAxis('its revolved body has no length');
+  const isTapered = reading.file.typeOf(id) === 'IFCREVOLVEDAREASOLIDTAPERED';
   return {
     from: 'swept',
     start: chord.from,
     end: chord.to,
     ...sectionAxesAtMiddle(plane, turnAxis, angle),
     profile,
-    endProfile: null,
+    endProfile: isTapered ? asRef(args[4]) : null,
     rise: chord.rise,
+    isRun: false,
+    measured: null,
   };
 }
 

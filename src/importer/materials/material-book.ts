@@ -1,21 +1,27 @@
 import { RequestError } from '../../domain/errors.ts';
-import type { Material } from '../../domain/member.ts';
+import type { Material, Section } from '../../domain/member.ts';
 import { asRef, asRefs, asString } from '../../step/values.ts';
 import type { Remark } from '../findings-log.ts';
 import { whose } from '../findings-log.ts';
 import type { Reading } from '../reading.ts';
+import { strengthOf } from './grade.ts';
 import { gradeIn, statedYield } from './grades.ts';
-import { kindIn, STEEL } from './kinds.ts';
+import { type Kind, kindIn, STEEL } from './kinds.ts';
+import { plausibleNumbers } from './plausible.ts';
+import { readStatedMaterials, type StatedNumbers } from './stated-properties.ts';
 
 /** What an element is made of, and the profiles that its material sets name. */
 export interface MadeOf {
   readonly material: Material;
   /** Why the material is the default one; null where the file says enough. */
   readonly remark: Remark | null;
+  /** Numbers of the file that cannot be true and are set aside. */
+  readonly doubts: readonly Remark[];
   readonly profiles: readonly number[];
 }
 
 interface Named {
+  readonly id: number;
   readonly name: string;
   readonly category: string;
 }
@@ -28,6 +34,8 @@ export class MaterialBook {
   /** The brief's grade, for what the file leaves open. */
   private readonly fallback: Material | null;
   private readonly known = new Map<number | null, MadeOf>();
+  private readonly strengthened = new Map<Material, Map<string, Material>>();
+  private stated: ReadonlyMap<number, StatedNumbers> | null = null;
 
   /** @throws RequestError where `defaultMaterial` names no grade that is known. */
   constructor(reading: Reading, defaultMaterial: string | null) {
@@ -47,6 +55,17 @@ export class MaterialBook {
     return found;
   }
 
+  /** `material` with the strengths of a part as thick as the section's thickest. */
+  inSection(material: Material, section: Section | null): Material {
+    if (section === null) return material;
+    const byShape = this.strengthened.get(material) ?? new Map<string, Material>();
+    this.strengthened.set(material, byShape);
+    const key = `${section.shape} ${section.thickness.toFixed(5)}`;
+    const found = byShape.get(key) ?? strengthened(material, section);
+    byShape.set(key, found);
+    return found;
+  }
+
   /** Walks sets, lists and usages down to materials and profiles, in the order of the file. */
   private gather(id: number, parts: Named[], profiles: number[], depth: number): void {
     if (depth > DEEPEST) return;
@@ -57,7 +76,7 @@ export class MaterialBook {
     };
     switch (this.reading.typeOf(id)) {
       case 'IFCMATERIAL':
-        parts.push({ name: (asString(args[0]) ?? '').trim(), category: asString(args[2]) ?? '' });
+        parts.push({ id, name: (asString(args[0]) ?? '').trim(), category: asString(args[2]) ?? '' });
         return;
       case 'IFCMATERIALLIST':
       case 'IFCMATERIALLAYERSET':
@@ -88,36 +107,69 @@ export class MaterialBook {
     }
   }
 
-  /** The first part with a steel grade; else the first whose kind is known; else the default steel. */
+  /**
+   * The first part with a steel grade; else the first whose kind is known; else the first whose stiffness is stated; else
+   * the default steel. What the file states of the part goes before what its name says.
+   */
   private choose(parts: readonly Named[]): Omit<MadeOf, 'profiles'> {
     for (const part of parts) {
       const graded = gradedSteel(part.name);
-      if (graded !== null) return { material: graded, remark: null };
+      if (graded !== null) return this.withStated(part, graded, STEEL);
     }
-    for (const { name, category } of parts) {
-      const kind = kindIn(name) ?? kindIn(category);
-      if (kind === null) continue;
-      if (kind === STEEL && this.fallback !== null && statedYield(name) === null) {
-        return { material: this.fallback, remark: null };
-      }
-      const { elasticModulus, density, expansion } = kind;
-      const yieldStrength = kind === STEEL ? statedYield(name) : null;
-      return {
-        material: { name, elasticModulus, density, expansion, yieldStrength, ultimateStrength: null, from: 'name' },
-        remark: null,
-      };
+    for (const part of parts) {
+      const kind = kindIn(part.name) ?? kindIn(part.category);
+      if (kind !== null) return this.withStated(part, this.ofKind(part.name, kind), kind);
     }
-    if (this.fallback !== null) return { material: this.fallback, remark: null };
-    return defaultSteel(parts[0]?.name ?? '');
+    for (const part of parts) {
+      const stated = this.withStated(part, plainSteel(part.name), null);
+      if (stated.material.from === 'properties') return stated;
+    }
+    const { material, remark } = this.fallback === null ? defaultSteel(parts[0]?.name ?? '') : ofBrief(this.fallback);
+    return { material, remark, doubts: parts.flatMap((part) => this.withStated(part, material, null).doubts) };
+  }
+
+  private ofKind(name: string, kind: Kind): Material {
+    if (kind === STEEL && this.fallback !== null && statedYield(name) === null) return this.fallback;
+    const { elasticModulus, density, expansion } = kind;
+    const yieldStrength = kind === STEEL ? statedYield(name) : null;
+    return { name, elasticModulus, density, expansion, yieldStrength, ultimateStrength: null, from: 'name' };
+  }
+
+  /** `from` tells where the strength comes from; where there is none, where the stiffness does. */
+  private withStated({ id, name }: Named, material: Material, kind: Kind | null): Omit<MadeOf, 'profiles'> {
+    this.stated ??= readStatedMaterials(this.reading);
+    const { numbers, doubts } = plausibleNumbers(name, this.stated.get(id) ?? {}, kind);
+    const isStated =
+      numbers.yieldStrength !== undefined || (material.yieldStrength === null && numbers.elasticModulus !== undefined);
+    // A name that grades the steel keeps its ultimate strength only beside its own yield strength.
+    const ultimateStrength = numbers.yieldStrength === undefined ? material.ultimateStrength : null;
+    return {
+      material: { ...material, ultimateStrength, ...numbers, ...(isStated ? { name, from: 'properties' } : {}) },
+      remark: null,
+      doubts,
+    };
   }
 }
+
+const ofBrief = (material: Material) => ({ material, remark: null });
 
 function gradedSteel(name: string): Material | null {
   const grade = gradeIn(name);
   if (grade === null) return null;
-  return { name, ...grade, density: STEEL.density, expansion: STEEL.expansion, from: 'name' };
+  const { elasticModulus } = grade;
+  return { ...plainSteel(name), elasticModulus, ...strengthOf(grade, null), from: 'name' };
 }
 
+/**
+ * `material` with the strengths that its grade has in the thickest part of `section`; as it is where its strength is stated
+ * or its name says no grade.
+ */
+export function strengthened(material: Material, section: Section): Material {
+  const grade = material.from === 'properties' ? null : gradeIn(material.name, section.shape);
+  return grade === null ? material : { ...material, ...strengthOf(grade, section.thickness) };
+}
+
+/** @throws RequestError where `name` is no steel grade that is known. */
 function gradeFromBrief(name: string): Material {
   const graded = gradedSteel(name.trim());
   if (graded === null) {
@@ -125,14 +177,18 @@ function gradeFromBrief(name: string): Material {
       `The default material '${name}' is no steel grade that is known. Name one like S355 or A992.`,
     );
   }
-  return { ...graded, from: 'brief' };
+  return { ...graded, name: name.trim(), from: 'brief' };
 }
 
-function defaultSteel(name: string): Omit<MadeOf, 'profiles'> {
+function plainSteel(name: string): Material {
   const { elasticModulus, density, expansion } = STEEL;
   const steel = { elasticModulus, density, expansion, yieldStrength: null, ultimateStrength: null } as const;
+  return { name: name === '' ? 'Steel' : name, ...steel, from: 'default' };
+}
+
+function defaultSteel(name: string): Pick<MadeOf, 'material' | 'remark'> {
   return {
-    material: { name: name === '' ? 'Steel' : name, ...steel, from: 'default' },
+    material: plainSteel(name),
     remark: {
       code: 'no-material',
       key: name,

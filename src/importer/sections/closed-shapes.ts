@@ -26,6 +26,7 @@ export function rhs(name: string | null, d: RhsDimensions): ProfileShape {
     },
     torsion: torsionOfRhs(depth, width, wall, outer, inner),
     warping: 0,
+    thickness: wall,
   };
 }
 
@@ -39,6 +40,7 @@ export function chs(name: string | null, radius: number, wall: number): ProfileS
     outline: { outer: ellipseRing(radius, radius), voids: [ellipseRing(inside, inside)] },
     torsion: (Math.PI / 2) * (radius ** 4 - inside ** 4),
     warping: 0,
+    thickness: wall,
   };
 }
 
@@ -50,6 +52,7 @@ export function circle(name: string | null, radius: number): ProfileShape {
     outline: { outer: ellipseRing(radius, radius), voids: [] },
     torsion: (Math.PI / 2) * radius ** 4,
     warping: 0,
+    thickness: 2 * radius,
   };
 }
 
@@ -72,6 +75,7 @@ export function rectangle(name: string | null, width: number, depth: number, rad
     outline: { outer: rectangleRing(width, depth, radius), voids: [] },
     torsion: radius > 0 ? null : torsionOfRectangle(width, depth),
     warping: 0,
+    thickness: Math.min(width, depth),
   };
 }
 

@@ -1,7 +1,7 @@
 import type { Point2 } from './outline.ts';
 import { inMillimetres, type ProfileShape, requirePositive, requireShape } from './profile-shape.ts';
 import { corner, roundedRing } from './rounded-ring.ts';
-import { MiddleLine } from './thin-wall.ts';
+import { MiddleLine, type Sectorial } from './thin-wall.ts';
 
 /** Cold-formed channels with lips, and Z shapes; the origin is the middle of the bounding box. Metres. */
 
@@ -33,20 +33,22 @@ export function cShape(name: string | null, d: CDimensions): ProfileShape {
     corner(-x, y, outer),
   ];
   const lower = upper.map(({ at, radius }) => corner(at[0], -at[1], radius)).reverse();
+  const [far, near, head, tip] = [x - t / 2, t / 2 - x, y - t / 2, y - girth];
   const middle: Point2[] = [
-    [width - t, girth - t / 2],
-    [width - t, 0],
-    [0, 0],
-    [0, depth - t],
-    [width - t, depth - t],
-    [width - t, depth - girth - t / 2],
+    [far, -tip],
+    [far, -head],
+    [near, -head],
+    [near, head],
+    [far, head],
+    [far, tip],
   ];
   return {
     name: name ?? `C ${inMillimetres(depth, width, girth, t)}`,
     shape: 'C',
     outline: { outer: roundedRing([...lower, ...upper]), voids: [] },
     torsion: (stripLength(middle) * t ** 3) / 3,
-    warping: warpingOfStrip(middle, t),
+    thickness: t,
+    ...sectorialOfStrip(middle, t),
   };
 }
 
@@ -77,26 +79,28 @@ export function zShape(name: string | null, d: ZDimensions): ProfileShape {
   const opposite = half.map(({ at, radius }) => corner(-at[0], -at[1], radius));
   const b = width - web / 2;
   const h = depth - flange;
-  const line = new MiddleLine([0, 0]);
-  line.wall(0, [b, 0], flange);
-  line.wall(line.wall(0, [0, h], web), [-b, h], flange);
+  const line = new MiddleLine([0, -h / 2]);
+  line.wall(0, [b, -h / 2], flange);
+  line.wall(line.wall(0, [0, h / 2], web), [-b, h / 2], flange);
   return {
     name: name ?? `Z ${inMillimetres(depth, width, web, flange)}`,
     shape: 'Z',
     outline: { outer: roundedRing([...half, ...opposite]), voids: [] },
     torsion: ((depth - 2 * flange) * web ** 3 + 2 * width * flange ** 3) / 3,
-    warping: line.warpingConstant(),
+    thickness: Math.max(web, flange),
+    ...line.sectorial(),
   };
 }
 
-function warpingOfStrip(points: readonly Point2[], thickness: number): number {
+/** Of a strip of even thickness bent along `points`. */
+export function sectorialOfStrip(points: readonly Point2[], thickness: number): Sectorial {
   const line = new MiddleLine(points[0]!);
   let node = 0;
   for (const point of points.slice(1)) node = line.wall(node, point, thickness);
-  return line.warpingConstant();
+  return line.sectorial();
 }
 
-function stripLength(points: readonly Point2[]): number {
+export function stripLength(points: readonly Point2[]): number {
   let length = 0;
   for (let i = 1; i < points.length; i++) {
     length += Math.hypot(points[i]![0] - points[i - 1]![0], points[i]![1] - points[i - 1]![1]);

@@ -1,6 +1,6 @@
 import { inMillimetres, type ProfileShape, requirePositive, requireShape } from './profile-shape.ts';
 import { type Corner, corner, roundedRing } from './rounded-ring.ts';
-import { MiddleLine } from './thin-wall.ts';
+import { MiddleLine, type Sectorial } from './thin-wall.ts';
 import { torsionOfI } from './torsion.ts';
 
 /** One flange of an I, metres and radians. */
@@ -38,7 +38,8 @@ export function iShape(name: string | null, d: IDimensions): ProfileShape {
     shape: 'I',
     outline: { outer: roundedRing([...right, ...left]), voids: [] },
     torsion: torsionOfI(depth, top, bottom, web, (top.fillet + bottom.fillet) / 2),
-    warping: warpingOfI(d),
+    thickness: Math.max(web, top.thickness, bottom.thickness),
+    ...sectorialOfI(d),
   };
 }
 
@@ -61,7 +62,7 @@ function taper(flange: IFlange, web: number): readonly [tip: number, root: numbe
   return [tip, flange.thickness + rise * (flange.width / 4 - web / 2)];
 }
 
-function warpingOfI({ depth, web, top, bottom }: IDimensions): number {
+function sectorialOfI({ depth, web, top, bottom }: IDimensions): Sectorial {
   const line = new MiddleLine([0, -(depth - bottom.thickness) / 2]);
   const head = line.wall(0, [0, (depth - top.thickness) / 2], web);
   for (const [node, flange] of [[0, bottom] as const, [head, top] as const]) {
@@ -71,5 +72,5 @@ function warpingOfI({ depth, web, top, bottom }: IDimensions): number {
     line.wall(node, [-flange.width / 2, z], root, tip);
     line.wall(node, [flange.width / 2, z], root, tip);
   }
-  return line.warpingConstant();
+  return line.sectorial();
 }

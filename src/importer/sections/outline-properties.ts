@@ -4,6 +4,7 @@ import {
   endOf,
   type Outline,
   type Point2,
+  piecesOf,
   pointOnArc,
   type Ring,
   startOf,
@@ -41,13 +42,14 @@ export function outlineProperties(outline: Outline): PlaneProperties | null {
   if (first === undefined) return null;
   // Moments are taken about a point of the outline itself, so that a profile drawn far from its origin loses no digits.
   const base = startOf(first);
-  const sum = ringIntegrals(outline.outer, base);
-  for (const hole of outline.voids) {
-    const cut = ringIntegrals(hole, base);
-    for (const key of Object.keys(sum) as (keyof Integrals)[]) sum[key] -= cut[key];
+  const sum: Integrals = { area: 0, x: 0, y: 0, xx: 0, yy: 0, xy: 0 };
+  const pieces = piecesOf(outline);
+  for (const { outer, voids } of pieces) {
+    addTo(sum, ringIntegrals(outer, base), 1);
+    for (const hole of voids) addTo(sum, ringIntegrals(hole, base), -1);
   }
   const { area } = sum;
-  const { min, max } = extent(outline.outer);
+  const { min, max } = extent(pieces.flatMap(({ outer }) => outer));
   const span = (max[0] - min[0]) * (max[1] - min[1]);
   if (!(area > 1e-9 * span) || !(area > 0) || !Number.isFinite(area)) return null;
   const cx = sum.x / area;
@@ -65,6 +67,10 @@ export function outlineProperties(outline: Outline): PlaneProperties | null {
     min,
     max,
   };
+}
+
+function addTo(sum: Integrals, part: Integrals, sign: 1 | -1): void {
+  for (const key of Object.keys(sum) as (keyof Integrals)[]) sum[key] += sign * part[key];
 }
 
 function ringIntegrals(ring: Ring, base: Point2): Integrals {

@@ -24,7 +24,15 @@ export type Ring = readonly Edge[];
 export interface Outline {
   readonly outer: Ring;
   readonly voids: readonly Ring[];
+  /** Further pieces beside the first, of a composite section. */
+  readonly besides?: readonly Outline[];
 }
+
+/** An outline and the pieces beside it, one by one. */
+export const piecesOf = (outline: Outline): readonly Outline[] => [
+  outline,
+  ...(outline.besides ?? []).flatMap(piecesOf),
+];
 
 /** The plane map `origin + x px + y py`. */
 export interface PlaneMap {
@@ -49,7 +57,8 @@ export function composeMaps(outer: PlaneMap, inner: PlaneMap): PlaneMap {
 
 export function mapOutline(m: PlaneMap, outline: Outline): Outline {
   const ring = (edges: Ring): Ring => edges.map((edge) => mapEdge(m, edge));
-  return { outer: ring(outline.outer), voids: outline.voids.map(ring) };
+  const besides = outline.besides?.map((piece) => mapOutline(m, piece));
+  return { outer: ring(outline.outer), voids: outline.voids.map(ring), ...(besides === undefined ? {} : { besides }) };
 }
 
 function mapEdge(m: PlaneMap, edge: Edge): Edge {

@@ -1,6 +1,6 @@
 import type { Section, SectionShape } from '../../domain/member.ts';
 import { noSection } from '../not-read.ts';
-import type { Outline, Point2 } from './outline.ts';
+import { type Outline, type Point2, piecesOf } from './outline.ts';
 import { outlineProperties, type PlaneProperties, ringSize } from './outline-properties.ts';
 import { torsionOfSolid, torsionOfTube } from './torsion.ts';
 
@@ -13,6 +13,10 @@ export interface ProfileShape {
   readonly torsion: number | null;
   /** Warping constant (m6); 0 for closed, solid and unknown shapes, which is the safe side in torsional buckling. */
   readonly warping: number;
+  /** Of the thickest part, m; left out where it is to be estimated from the outline. */
+  readonly thickness?: number;
+  /** In the shape's own plane; left out where it is the centroid, as of closed and solid shapes, or unknown. */
+  readonly shearCentre?: Point2;
 }
 
 /** @throws NotRead (no-section) where the outline encloses no area. */
@@ -41,6 +45,7 @@ export function sectionOf(shape: ProfileShape): Section {
     from: 'profile',
     depth: plane.max[1] - plane.min[1],
     width: plane.max[0] - plane.min[0],
+    thickness: shape.thickness ?? meanThickness(shape.outline, area),
   };
 }
 
@@ -50,6 +55,13 @@ function estimatedTorsion(outline: Outline, area: number, polar: number): number
   const hole = outline.voids[0];
   if (outline.voids.length === 1 && hole !== undefined) return torsionOfTube(ringSize(outline.outer), ringSize(hole));
   return torsionOfSolid(area, polar);
+}
+
+/** That of a strip as long as half the outline's way round: exact for bent strips and for tubes. */
+function meanThickness(outline: Outline, area: number): number {
+  const rings = piecesOf(outline).flatMap(({ outer, voids }) => [outer, ...voids]);
+  const around = rings.reduce((sum, ring) => sum + ringSize(ring).length, 0);
+  return (2 * area) / around;
 }
 
 /** '200x100x6.3' of metres: as sections are called. */

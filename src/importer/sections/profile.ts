@@ -5,9 +5,10 @@ import { NotRead, noSection } from '../not-read.ts';
 import { planeOf, readOperator, readPlaneAxes } from '../placement-axes.ts';
 import type { Reading } from '../reading.ts';
 import { inWords } from '../words.ts';
-import { composeMaps, type Edge, type PlaneMap, type Point2, type Ring, SAME_PLANE } from './outline.ts';
+import { composeMaps, type Edge, mapOutline, type PlaneMap, type Point2, type Ring, SAME_PLANE } from './outline.ts';
 import { parametricShape } from './parametric-profile.ts';
-import type { ProfileShape } from './profile-shape.ts';
+import { type ProfileShape, sectionOf } from './profile-shape.ts';
+import { stripShape } from './strip-shape.ts';
 
 /** A profile definition of the file. */
 export interface Profile {
@@ -31,6 +32,12 @@ export function readProfile(reading: Reading, id: number, depth = 0): Profile {
   }
   if (type === 'IFCARBITRARYCLOSEDPROFILEDEF' || type === 'IFCARBITRARYPROFILEDEFWITHVOIDS') {
     return { id, shape: arbitraryShape(reading, args, name), map: SAME_PLANE };
+  }
+  if (type === 'IFCCOMPOSITEPROFILEDEF') {
+    return { id, shape: compositeShape(reading, args, name, depth), map: SAME_PLANE };
+  }
+  if (type === 'IFCCENTERLINEPROFILEDEF') {
+    return { id, shape: centreLineShape(reading, args, name), map: SAME_PLANE };
   }
   const shape = parametricShape(reading, type, args, name);
   if (shape !== null) return { id, shape, map: readPlaneAxes(reading, args[2]) };
@@ -57,6 +64,33 @@ function derivedProfile(
     shape: name === null ? parent.shape : { ...parent.shape, name },
     map: composeMaps(operator, parent.map),
   };
+}
+
+/** Pieces that keep apart between their connectors: they twist side by side, and do not warp as one. */
+function compositeShape(
+  reading: Reading,
+  args: readonly StepValue[],
+  name: string | null,
+  depth: number,
+): ProfileShape {
+  const parts = asRefs(args[2]).map((part) => readProfile(reading, part, depth + 1));
+  const sections = parts.map(({ shape }) => sectionOf(shape));
+  const [first, ...besides] = parts.map(({ shape, map }) => mapOutline(map, shape.outline));
+  if (first === undefined) throw noSection('its composite profile has no parts');
+  return {
+    name: name ?? parts.map(({ shape }) => shape.name).join(' + '),
+    shape: 'other',
+    outline: { ...first, besides: [...(first.besides ?? []), ...besides] },
+    torsion: sections.reduce((sum, { torsion }) => sum + torsion, 0),
+    warping: 0,
+    thickness: Math.max(...sections.map(({ thickness }) => thickness)),
+  };
+}
+
+function centreLineShape(reading: Reading, args: readonly StepValue[], name: string | null): ProfileShape {
+  const curve = asRef(args[2]);
+  if (curve === null) throw noSection('its profile has no centre line');
+  return stripShape(name, readRing(reading, curve), reading.length(args[3]));
 }
 
 function arbitraryShape(reading: Reading, args: readonly StepValue[], name: string | null): ProfileShape {

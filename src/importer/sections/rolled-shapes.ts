@@ -1,6 +1,6 @@
 import { inMillimetres, type ProfileShape, requirePositive, requireShape } from './profile-shape.ts';
 import { corner, roundedRing } from './rounded-ring.ts';
-import { MiddleLine } from './thin-wall.ts';
+import { MiddleLine, type Sectorial } from './thin-wall.ts';
 import { torsionOfL, torsionOfT, torsionOfU } from './torsion.ts';
 
 /** Rolled U, L and T shapes; the origin is the middle of the bounding box. Metres and radians. */
@@ -42,18 +42,20 @@ export function uShape(name: string | null, d: UDimensions): ProfileShape {
     shape: 'U',
     outline: { outer: ring, voids: [] },
     torsion: torsionOfU(d.depth, { width: d.width, thickness: d.flange }, d.web, d.fillet),
-    warping: warpingOfU(d, root, tip),
+    thickness: Math.max(d.web, d.flange),
+    ...sectorialOfU(d, root, tip),
   };
 }
 
-function warpingOfU({ depth, width, web }: UDimensions, root: number, tip: number): number {
+function sectorialOfU({ depth, width, web }: UDimensions, root: number, tip: number): Sectorial {
   const b = width - web / 2;
   const h = depth - (root + tip) / 2;
-  const line = new MiddleLine([0, 0]);
-  line.wall(0, [b, 0], root, tip);
-  const head = line.wall(0, [0, h], web);
-  line.wall(head, [b, h], root, tip);
-  return line.warpingConstant();
+  const x = (web - width) / 2;
+  const line = new MiddleLine([x, -h / 2]);
+  line.wall(0, [x + b, -h / 2], root, tip);
+  const head = line.wall(0, [x, h / 2], web);
+  line.wall(head, [x + b, h / 2], root, tip);
+  return line.sectorial();
 }
 
 export interface LDimensions {
@@ -91,6 +93,9 @@ export function lShape(name: string | null, d: LDimensions): ProfileShape {
     torsion: torsionOfL(depth, width, t, d.fillet),
     // Across the thickness alone: Timoshenko & Gere, Theory of elastic stability, angles (from memory).
     warping: (t ** 3 * ((depth - t / 2) ** 3 + (width - t / 2) ** 3)) / 36,
+    thickness: t,
+    // Where the middles of the legs meet.
+    shearCentre: [(t - width) / 2, (t - depth) / 2],
   };
 }
 
@@ -137,5 +142,8 @@ export function tShape(name: string | null, d: TDimensions): ProfileShape {
     torsion: torsionOfT(depth, { width, thickness: flange }, web, d.fillet),
     // Across the thickness alone: Timoshenko & Gere, Theory of elastic stability, tees (from memory).
     warping: (width ** 3 * flange ** 3) / 144 + ((depth - flange / 2) ** 3 * web ** 3) / 36,
+    thickness: Math.max(web, flange),
+    // Where the middles of web and flange meet.
+    shearCentre: [0, (depth - flange) / 2],
   };
 }

@@ -1,12 +1,17 @@
 import type { Section } from '../../domain/member.ts';
 import { cross, dot, norm, unit, type Vec3 } from '../../domain/vector.ts';
+import { asString } from '../../step/values.ts';
+import type { Remark } from '../findings-log.ts';
 import { NotRead, noSection } from '../not-read.ts';
 import type { Reading } from '../reading.ts';
-import { across } from '../transform.ts';
+import { across, firstAcross } from '../transform.ts';
 import { chs, circle } from './closed-shapes.ts';
+import { sectionNamedIn } from './designations/section-from-designation.ts';
+import { knownByName } from './known-outline.ts';
 import { mapOutline, mapPoint, type PlaneMap, type Point2, SAME_PLANE } from './outline.ts';
 import { type Profile, readProfile } from './profile.ts';
 import { centroidOf, type ProfileShape, sectionOf } from './profile-shape.ts';
+import { disagreement, readStatedSections, type StatedSection, sectionOfNumbers } from './stated-sections.ts';
 
 /** A section as it stands across a member. */
 export interface SeenSection {
@@ -22,6 +27,9 @@ export class SectionBook {
   private readonly centroids = new Map<number, Point2>();
   private readonly sections = new Map<string, Section>();
   private readonly disks = new Map<string, number>();
+  private readonly withoutOutline = new Map<number, Section | null>();
+  private readonly contradictions = new Map<number, Remark | null>();
+  private stated: ReadonlyMap<number, StatedSection> | null = null;
 
   constructor(reading: Reading) {
     this.reading = reading;
@@ -29,15 +37,19 @@ export class SectionBook {
 
   /** @throws NotRead (no-section), the same one whenever the profile is asked for. */
   profile(id: number): Profile {
-    const found = this.profiles.get(id) ?? this.keep(id, () => readProfile(this.reading, id));
+    const found = this.profileOrRefusal(id);
     if (found instanceof NotRead) throw found;
     return found;
+  }
+
+  private profileOrRefusal(id: number): Profile | NotRead {
+    return this.profiles.get(id) ?? this.keep(id, () => readProfile(this.reading, id));
   }
 
   private keep(id: number, read: () => Profile): Profile | NotRead {
     let found: Profile | NotRead;
     try {
-      found = read();
+      found = this.withWhatIsKnown(id, read());
       this.centroids.set(id, mapPoint(found.map, centroidOf(found.shape)));
     } catch (problem) {
       if (!(problem instanceof NotRead)) throw problem;
@@ -45,6 +57,34 @@ export class SectionBook {
     }
     this.profiles.set(id, found);
     return found;
+  }
+
+  /** What an outline alone does not tell, from the profile's name and from the numbers that the file states of it. */
+  private withWhatIsKnown(id: number, profile: Profile): Profile {
+    const shape = knownByName(profile.shape);
+    const stated = this.statedOf(id);
+    if (stated === null) return { ...profile, shape };
+    this.contradictions.set(id, disagreement(sectionOf(shape), stated));
+    const warping = shape.shape === 'other' && shape.warping === 0 ? (stated.warping ?? 0) : shape.warping;
+    return { ...profile, shape: { ...shape, torsion: shape.torsion ?? stated.torsion ?? null, warping } };
+  }
+
+  private statedOf(id: number): StatedSection | null {
+    this.stated ??= readStatedSections(this.reading);
+    return this.stated.get(id) ?? null;
+  }
+
+  /** Of a profile that has no outline: by the numbers stated of it, else by the designation that is its name. */
+  private sectionWithoutOutline(id: number): Section | null {
+    let section = this.withoutOutline.get(id);
+    if (section === undefined) {
+      const name = asString(this.reading.file.args(id)[1])?.trim() ?? '';
+      const called = sectionNamedIn(name);
+      const stated = this.statedOf(id);
+      section = (stated === null ? null : sectionOfNumbers(name === '' ? 'Unnamed profile' : name, stated)) ?? called;
+      this.withoutOutline.set(id, section);
+    }
+    return section;
   }
 
   /** The centroid in the plane that is swept, metres; its origin where the profile cannot be read. */
@@ -78,7 +118,15 @@ export class SectionBook {
    * stretched copy gives its true section.
    */
   seenAlong(id: number, along: Vec3, x: Vec3, y: Vec3): SeenSection {
-    const { shape, map } = this.profile(id);
+    const profile = this.profileOrRefusal(id);
+    if (profile instanceof NotRead) {
+      const section = this.sectionWithoutOutline(id);
+      if (section === null) throw profile;
+      return { section, zAxis: firstAcross(along, across(y, along)) };
+    }
+    const contradiction = this.contradictions.get(id) ?? null;
+    if (contradiction !== null) this.reading.note(contradiction);
+    const { shape, map } = profile;
     const own = (d: Point2): Vec3 => [x[0] * d[0] + y[0] * d[1], x[1] * d[0] + y[1] * d[1], x[2] * d[0] + y[2] * d[1]];
     const sideways = across(own(map.x), along);
     const upwards = across(own(map.y), along);
@@ -112,16 +160,29 @@ function viewedShape(shape: ProfileShape, view: PlaneMap): ProfileShape {
   const size = view.y[1];
   const isSimilar = near(Math.abs(view.x[0]), size) && Math.abs(view.x[1]) < TRUE_VIEW * size;
   if (isSimilar && near(size, 1)) {
-    return view.x[0] > 0 ? shape : { ...shape, outline: mapOutline(mirror, shape.outline) };
+    return view.x[0] > 0
+      ? shape
+      : { ...shape, outline: mapOutline(mirror, shape.outline), ...shearCentre(mirror, shape) };
   }
   const outline = mapOutline(view, shape.outline);
   if (isSimilar) {
-    const torsion = shape.torsion === null ? null : shape.torsion * size ** 4;
-    return { ...shape, name: scaledName(shape, size, size), outline, torsion, warping: shape.warping * size ** 6 };
+    return {
+      ...shape,
+      ...shearCentre(view, shape),
+      name: scaledName(shape, size, size),
+      outline,
+      torsion: shape.torsion === null ? null : shape.torsion * size ** 4,
+      warping: shape.warping * size ** 6,
+      ...(shape.thickness === undefined ? {} : { thickness: shape.thickness * size }),
+    };
   }
   // A distorted I is still an I, but no closed form holds for it.
-  return { ...shape, name: scaledName(shape, view.x[0], size), outline, torsion: null, warping: 0 };
+  const name = scaledName(shape, view.x[0], size);
+  return { name, shape: shape.shape, outline, torsion: null, warping: 0 };
 }
+
+const shearCentre = (view: PlaneMap, { shearCentre: centre }: ProfileShape) =>
+  centre === undefined ? {} : { shearCentre: mapPoint(view, centre) };
 
 const mirror: PlaneMap = { x: [-1, 0], y: [0, 1], origin: [0, 0] };
 

@@ -32,17 +32,24 @@ export class MiddleLine {
     return last;
   }
 
-  warpingConstant(): number {
-    return warpingConstant(this.nodes, this.walls);
+  sectorial(): Sectorial {
+    return sectorial(this.nodes, this.walls);
   }
 }
 
+export interface Sectorial {
+  /** About the shear centre, m6. */
+  readonly warping: number;
+  /** In the plane the line is drawn in, m. */
+  readonly shearCentre: Point2;
+}
+
 /**
- * Warping constant (m6) of an open thin-walled section about its shear centre, by sectorial coordinates along the
- * middle line: EN 1993-1-3:2006 Annex C.1, formulas from memory. `walls` is a tree: each starts at a node that an
+ * Warping constant and shear centre of an open thin-walled section, by sectorial coordinates along the middle line:
+ * EN 1993-1-3:2006 Annex C.1, formulas from memory. `walls` is a tree: each starts at a node that an
  * earlier one reached, the first at node 0.
  */
-function warpingConstant(nodes: readonly Point2[], walls: readonly Wall[]): number {
+function sectorial(nodes: readonly Point2[], walls: readonly Wall[]): Sectorial {
   const area = walls.map((w) => w.thickness * distance(nodes[w.from]!, nodes[w.to]!));
   const total = sum(area);
   const mean = (f: (n: number) => number) => sum(walls.map((w, i) => ((f(w.from) + f(w.to)) / 2) * area[i]!)) / total;
@@ -70,10 +77,14 @@ function warpingConstant(nodes: readonly Point2[], walls: readonly Wall[]): numb
   const izw = product(z, omega);
   const iww = product(omega, omega);
   const determinant = iy * iz - iyz * iyz;
-  if (!(determinant > 1e-12 * iy * iz)) return 0;
+  // A straight strip has its shear centre in its middle and does not warp.
+  if (!(determinant > 1e-12 * iy * iz)) return { warping: 0, shearCentre: [cy, cz] };
   const ySheared = (izw * iz - iyw * iyz) / determinant;
   const zSheared = (-iyw * iy + izw * iyz) / determinant;
-  return Math.max(0, iww + zSheared * iyw - ySheared * izw);
+  return {
+    warping: Math.max(0, iww + zSheared * iyw - ySheared * izw),
+    shearCentre: [cy + ySheared, cz + zSheared],
+  };
 }
 
 const distance = (a: Point2, b: Point2): number => Math.hypot(b[0] - a[0], b[1] - a[1]);

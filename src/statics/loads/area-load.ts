@@ -4,6 +4,7 @@ import type { Truss } from '../../domain/truss.ts';
 import { add, ORIGIN, scale, type Vec3 } from '../../domain/vector.ts';
 import type { NodeForces } from './node-forces.ts';
 import { formSurface, type NoSurface } from './surface/form-surface.ts';
+import { planArea } from './surface/plan.ts';
 import { sharePatch } from './surface/share-patch.ts';
 
 export type AreaRule = Extract<LoadRule, { kind: 'area' }>;
@@ -19,6 +20,8 @@ export interface AreaCoverage {
   readonly force: Vec3;
   /** Chosen nodes at no corner of the surface: nothing was put on them. */
   readonly unloaded: readonly number[];
+  /** Cells taken as openings: corners and m2 in plan. */
+  readonly openings: readonly { readonly corners: readonly number[]; readonly planArea: number }[];
 }
 
 /**
@@ -36,18 +39,29 @@ export function addAreaLoad(
   if ('fault' in surface) return surface;
   const points = truss.nodes.map((node) => node.at);
   const shares = surface.patches.flatMap((patch) => sharePatch(points, patch));
-  let [area, planArea, resultant] = [0, 0, ORIGIN];
+  let [area, plan, resultant] = [0, 0, ORIGIN];
   const loaded = new Set<number>();
   for (const share of shares) {
     const force = pressOn(share, rule);
     forces.add(share.node, force);
     loaded.add(share.node);
     area += share.area;
-    planArea += share.normalArea[2];
+    plan += share.normalArea[2];
     resultant = add(resultant, force);
   }
   const unloaded = nodes.filter((node) => !loaded.has(node));
-  return { formedBy: surface.formedBy, patches: surface.patches.length, area, planArea, force: resultant, unloaded };
+  return {
+    formedBy: surface.formedBy,
+    patches: surface.patches.length,
+    area,
+    planArea: plan,
+    force: resultant,
+    unloaded,
+    openings: surface.openings.map((corners) => ({
+      corners,
+      planArea: planArea(corners.map((node) => points[node]!)),
+    })),
+  };
 }
 
 function pressOn(share: { readonly normalArea: Vec3; readonly area: number }, { pressure, acts, per }: AreaRule): Vec3 {

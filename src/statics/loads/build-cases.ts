@@ -42,6 +42,7 @@ function buildCase(truss: Truss, members: readonly Member[], rule: CaseRule) {
   const forces = new NodeForces();
   const coverage: Coverage[] = [];
   const findings: Finding[] = [];
+  const notPut: string[] = [];
   for (const load of rule.loads) {
     findings.push(...findEmptySelectors(truss, members, load));
     if (load.kind === 'selfWeight') addSelfWeight(forces, truss, load.factor);
@@ -49,19 +50,24 @@ function buildCase(truss: Truss, members: readonly Member[], rule: CaseRule) {
     else if (load.kind === 'line') {
       const chosen = selectMembers(members, load.on);
       const bars = addLineLoad(forces, truss, chosen, load.force, load.per);
-      if (chosen.length > 0 && bars === 0)
-        findings.push(sayNotPut(rule, load, 'its members have no bar in the truss', []));
+      if (chosen.length > 0 && bars === 0) {
+        const why = 'its members have no bar in the truss';
+        findings.push(sayNotPut(rule, load, why, []));
+        notPut.push(`line ${load.line} of the brief: ${why}`);
+      }
     } else {
       const covered = coverArea(forces, truss, members, rule, load);
       if (covered.coverage !== null) coverage.push(covered.coverage);
       findings.push(...covered.findings);
+      if (covered.fault !== null) notPut.push(`line ${load.line} of the brief: ${covered.fault}`);
     }
   }
   const loads = forces.toLoads();
   // Where a load could not be put on the truss, that has been said.
   const isSaid = findings.some(({ code }) => code === 'no-load');
   if (loads.length === 0 && !isSaid) findings.push(sayEmpty(rule));
-  return { loadCase: { name: rule.name, nature: rule.nature, loads }, coverage, findings };
+  const incomplete = notPut.length === 0 ? {} : { incomplete: notPut.join('; ') };
+  return { loadCase: { name: rule.name, nature: rule.nature, loads, ...incomplete }, coverage, findings };
 }
 
 function findEmptySelectors(truss: Truss, members: readonly Member[], load: LoadRule): Finding[] {
@@ -76,13 +82,17 @@ function coverArea(
   members: readonly Member[],
   rule: CaseRule,
   load: AreaRule,
-): { coverage: Coverage | null; findings: Finding[] } {
+): { coverage: Coverage | null; fault: string | null; findings: Finding[] } {
   const nodes = selectNodes(truss, members, load.over);
-  if (nodes.length === 0) return { coverage: null, findings: [] };
+  if (nodes.length === 0) return { coverage: null, fault: null, findings: [] };
   const covered = addAreaLoad(forces, truss, members, nodes, load);
-  if ('fault' in covered) return { coverage: null, findings: [sayNotPut(rule, load, covered.fault, covered.nodes)] };
+  if ('fault' in covered) {
+    const { fault, nodes: shown } = covered;
+    return { coverage: null, fault, findings: [sayNotPut(rule, load, fault, shown)] };
+  }
   const findings = covered.formedBy === 'bars' ? [] : [saySharedWithinOutline(rule, load, covered)];
-  return { coverage: { case: rule.name, line: load.line, ...covered }, findings };
+  for (const opening of covered.openings) findings.push(sayOpening(truss, rule, load, opening));
+  return { coverage: { case: rule.name, line: load.line, ...covered }, fault: null, findings };
 }
 
 function sayNotPut(rule: CaseRule, load: LoadRule, why: string, nodes: readonly number[]): Finding {
@@ -99,6 +109,23 @@ function saySharedWithinOutline(rule: CaseRule, load: LoadRule, covered: AreaCov
     `The bars between the nodes of line ${load.line} of the brief, case ${rule.name}, close too few cells; the load was shared over ` +
       `the convex outline of the nodes instead, ${area} m2 in plan.`,
     'Compare the area with the drawing; if it is wrong, choose nodes that bars join all round.',
+    { severity: 'warning' },
+  );
+}
+
+function sayOpening(
+  truss: Truss,
+  rule: CaseRule,
+  load: LoadRule,
+  { corners, planArea }: AreaCoverage['openings'][number],
+): Finding {
+  const first = truss.nodes[corners[0]!]!;
+  return finding(
+    'surface-skipped',
+    `A field of ${planArea.toFixed(0)} m2 in plan with ${corners.length} corners, far larger than the panels round it, was taken as an ` +
+      `opening: the load of line ${load.line} of the brief, case ${rule.name}, is not on it.`,
+    'If it is covered, put its load on by another rule, as point or line loads on what carries it.',
+    { severity: 'warning', nodes: corners, at: first.at, place: first.place },
   );
 }
 

@@ -1,5 +1,6 @@
 import { GRAVITY } from '../../domain/constants.ts';
 import type { Truss } from '../../domain/truss.ts';
+import { scale, type Vec3 } from '../../domain/vector.ts';
 import type { NodeForces } from './node-forces.ts';
 
 /**
@@ -7,10 +8,13 @@ import type { NodeForces } from './node-forces.ts';
  * section weigh nothing.
  */
 export function addSelfWeight(forces: NodeForces, truss: Truss, factor: number): void {
-  for (const bar of truss.bars) {
-    forces.addToEnds(bar, [0, 0, -bar.massPerLength * bar.length * GRAVITY * factor]);
-  }
+  addWeight(forces, truss, [0, 0, -factor]);
+}
+
+/** As self weight, pulled along a vector of any length and direction: (0, 0, -1) is self weight. */
+export function addWeight(forces: NodeForces, truss: Truss, factors: Vec3): void {
+  for (const bar of truss.bars) forces.addToEnds(bar, scale(factors, bar.massPerLength * bar.length * GRAVITY));
   truss.nodes.forEach(({ overhangMass }, node) => {
-    if (overhangMass !== 0) forces.add(node, [0, 0, -overhangMass * GRAVITY * factor]);
+    if (overhangMass !== 0) forces.add(node, scale(factors, overhangMass * GRAVITY));
   });
 }

@@ -3,7 +3,10 @@ import type { Vec3 } from '../../domain/vector.ts';
 import type { NodalForce, SolvedCase, SolvedCombination } from '../types.ts';
 
 /** Sums of solved cases times their factors. A combination with a refused or unknown case in it is refused, naming it. */
-export function combine(cases: readonly SolvedCase[], rules: readonly CombinationRule[]): SolvedCombination[] {
+export function combine(
+  cases: readonly SolvedCase[],
+  rules: readonly Omit<CombinationRule, 'line'>[],
+): SolvedCombination[] {
   const byName = new Map(cases.map((one) => [one.name, one]));
   return rules.map(({ name, limit, factors }): SolvedCombination => {
     const terms = Object.entries(factors).map(([caseName, factor]) => ({

@@ -1,4 +1,4 @@
-import type { Finding } from '../../domain/finding.ts';
+import { type Finding, finding } from '../../domain/finding.ts';
 import type { Truss } from '../../domain/truss.ts';
 import type { Vec3 } from '../../domain/vector.ts';
 import { factorise } from '../engine/factor.ts';
@@ -34,29 +34,29 @@ export function solveCases(
   truss: Truss,
   supports: Supports,
   stability: Judgement,
-  cases: readonly LoadCase[],
+  asked: readonly LoadCase[],
   options: Partial<SolveOptions> = {},
 ): Solution {
   const { workTolerance } = { ...SOLVE_DEFAULTS, ...options };
   const problem: Problem = { truss, supports, parts: findParts(truss, supports) };
+  const { cases, findings } = leaveOutSetAside(problem, asked);
   const { pivots } = stability;
   const stiffnessOf = realStiffness(truss);
   const base = buildSystem(problem, [], stiffnessOf);
   const held = pivots.length === 0 ? base : buildSystem(problem, pivots, stiffnessOf, base);
   const factor = factorise(held.matrix);
   const sections = judgeSections(problem, stability);
-  const nodeLoads = cases.map((one) => liveLoads(problem, one.loads));
+  const nodeLoads = cases.map((one) => componentsOf(problem, one.loads));
   const answers = solveRefined(
     held,
     factor,
     nodeLoads.map((loads) => gatherForces(held.movement, loads)),
   );
-  const findings: Finding[] = [];
   const solved = cases.map((one, i): SolvedCase => {
     const loads = nodeLoads[i]!;
     const { q, axial } = answers[i]!;
-    const unsectioned = sections.refuse(one);
-    if (unsectioned !== null) return refusedCase(truss, one, unsectioned);
+    const reason = one.incomplete ? `a load could not be put on the truss (${one.incomplete})` : sections.refuse(one);
+    if (reason !== null) return refusedCase(truss, one, reason);
     const balance = balanceJoints(base, held, pivots, axial, loads);
     if (balance.pivotForces.some((force) => Math.abs(force) > workTolerance * balance.largestForce)) {
       const moved = loadMovesIt(truss, stability, one, loads, balance.pivotForces);
@@ -99,12 +99,37 @@ function refusedCase(truss: Truss, one: LoadCase, refused: string): SolvedCase {
   };
 }
 
-/** Loads on what is solved, three components a node; those on parts set aside go with them. */
-function liveLoads({ truss, parts }: Problem, loads: readonly NodalForce[]): Float64Array {
+/** Loads on parts that nothing supports go with them, and how much that is is said. */
+function leaveOutSetAside({ truss, parts }: Problem, asked: readonly LoadCase[]) {
+  const findings: Finding[] = [];
+  const cases = asked.map((one): LoadCase => {
+    const loads = one.loads.filter(({ node }) => parts.liveNode[node]);
+    const lost = one.loads.filter(({ node }) => !parts.liveNode[node]);
+    if (lost.length > 0) {
+      const size = lost.reduce((sum, { force }) => sum + Math.hypot(...force), 0);
+      findings.push(
+        finding(
+          'no-load',
+          `Of load case ${one.name}, ${(size / 1000).toPrecision(3)} kN lie on parts that nothing supports and are not carried.`,
+          'Join the parts to the rest or support them, or leave them out of the scope.',
+          {
+            nodes: lost.map(({ node }) => node),
+            at: truss.nodes[lost[0]!.node]!.at,
+            place: truss.nodes[lost[0]!.node]!.place,
+          },
+        ),
+      );
+    }
+    return { ...one, loads };
+  });
+  return { cases, findings };
+}
+
+/** Three components a node. */
+function componentsOf({ truss }: Problem, loads: readonly NodalForce[]): Float64Array {
   const out = new Float64Array(3 * truss.nodes.length);
   for (const { node, force } of loads)
-    if (parts.liveNode[node])
-      for (let axis = 0; axis < 3; axis++) out[3 * node + axis] = out[3 * node + axis]! + force[axis]!;
+    for (let axis = 0; axis < 3; axis++) out[3 * node + axis] = out[3 * node + axis]! + force[axis]!;
   return out;
 }
 

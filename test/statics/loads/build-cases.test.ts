@@ -119,6 +119,7 @@ describe('an area load', () => {
         planArea: expect.closeTo(48, 9),
         force: [0, 0, expect.closeTo(-4800, 8)],
         unloaded: [],
+        openings: [],
       },
     ]);
   });
@@ -237,13 +238,42 @@ describe('an area load', () => {
     expect(coverage[0]).toMatchObject({ planArea: expect.closeTo(27, 9), formedBy: 'bars' });
   });
 
-  it('over nodes that no bars close goes to their convex outline, and a note says so', () => {
+  it('leaves out a court that bars close round, and says so with its area', () => {
+    const lines = Array.from({ length: 14 }, (_, i) => 3 * i);
+    const { at, runs, index } = makeGrid(lines, lines);
+    const inCourt = (k: number) => k > 2 && k < 11;
+    const gone = new Set(
+      lines.flatMap((_, i) => lines.flatMap((_, j) => (inCourt(i) && inCourt(j) ? [index(i, j)] : []))),
+    );
+    const court = makeTruss(
+      at.map((p, i): Vec3 => (gone.has(i) ? [p[0], p[1], -50] : p)),
+      runs.flatMap((run) => {
+        const kept: [number, number][] = [];
+        for (let k = 1; k < run.length; k++)
+          if (!gone.has(run[k - 1]!) && !gone.has(run[k]!)) kept.push([run[k - 1]!, run[k]!]);
+        return kept;
+      }),
+    );
+    const { coverage, findings } = build(court, area(1, 'down', 'plan', { line: 8, level: [-1, 1] }));
+    expect(coverage[0]).toMatchObject({ formedBy: 'bars', planArea: expect.closeTo(39 ** 2 - 27 ** 2, 6) });
+    expect(findings.map(({ code, severity }) => [code, severity])).toEqual([['surface-skipped', 'warning']]);
+    expect(findings[0]!.message).toContain('729 m2 in plan with 36 corners');
+  });
+
+  it('refuses nodes at heights too different to be one surface', () => {
+    const at = [0, 3, 6, 9].flatMap((x) => [0, 3, 6].map((y): Vec3 => [x, y, (x + y) % 2 === 0 ? 0 : 9]));
+    const { cases, findings } = build(makeTruss(at, []), area(1, 'down', 'slope'));
+    expect(cases[0]!.incomplete).toContain('too different heights');
+    expect(findings.map(({ code }) => code)).toEqual(['no-load']);
+  });
+
+  it('over nodes that no bars close goes to their convex outline, and a warning says so', () => {
     const at: Vec3[] = [0, 6].flatMap((y) => [0, 3, 6, 9].map((x): Vec3 => [x, y, 0]));
     const made = makeTruss(at, [{ nodes: [0, 1, 2, 3] }, { nodes: [4, 5, 6, 7] }]);
     const { cases, coverage, findings } = build(made, area(10, 'down', 'plan'));
     expect(coverage[0]).toMatchObject({ formedBy: 'outline', planArea: expect.closeTo(54, 9) });
     expect(downAt(made, cases[0]!.loads)).toEqual([45, 90, 90, 45, 45, 90, 90, 45].map((f) => expect.closeTo(f, 9)));
-    expect(findings.map(({ code, severity }) => [code, severity])).toEqual([['surface-skipped', 'note']]);
+    expect(findings.map(({ code, severity }) => [code, severity])).toEqual([['surface-skipped', 'warning']]);
     expect(findings[0]!.message).toContain('line 7 of the brief');
     expect(findings[0]!.message).toContain('54.0 m2 in plan');
   });
@@ -304,6 +334,7 @@ describe('an area load', () => {
     ];
     faults.forEach(({ cases, coverage, findings }, i) => {
       expect(cases[0]!.loads).toEqual([]);
+      expect(cases[0]!.incomplete).toContain(words[i]);
       expect(coverage).toEqual([]);
       expect(findings.map(({ code }) => code)).toEqual(['no-load']);
       expect(findings[0]!.message).toContain(words[i]);

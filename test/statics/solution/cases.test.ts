@@ -22,7 +22,7 @@ const LEGS: [number, number][] = [
 const FEET = fix({ 0: 'xyz', 1: 'xyz', 2: 'xyz' });
 
 describe('solving cases', () => {
-  test('parts that nothing supports are set aside and get nulls', () => {
+  test('parts that nothing supports are set aside and get nulls, and the load on them is said and left out', () => {
     const truss = trussOf({
       points: [...TRIPOD, [9, 9, 0], [9, 9, 3]],
       bars: [...LEGS, [4, 5]],
@@ -34,11 +34,26 @@ describe('solving cases', () => {
       { node: 3, force: [0, 0, -6e3] },
       { node: 5, force: [0, 0, -1e3] },
     ] as const;
-    const one = solveCases(truss, FEET, judged, [caseOf(loads)]).cases[0]!;
+    const { cases, findings } = solveCases(truss, FEET, judged, [caseOf(loads)]);
+    const one = cases[0]!;
     expect(one.axialForce[3]).toBeNull();
     expect(one.displacement.slice(4)).toEqual([null, null]);
-    expect(one.loadSum).toEqual([0, 0, -7e3]);
+    expect(one.loadSum).toEqual([0, 0, -6e3]);
+    expect(findings.map(({ code, nodes }) => [code, nodes])).toEqual([['no-load', [5]]]);
+    expect(findings[0]!.message).toContain('1.00 kN');
     expect(one.reactions.reduce((sum, r) => sum + r.force[2], 0)).toBeCloseTo(6e3, 6);
+  });
+
+  test('a case that could not be put on the truss whole is refused, the others are not', () => {
+    const truss = trussOf({ points: TRIPOD, bars: LEGS });
+    const load = caseOf([{ node: 3, force: [0, 0, -6e3] }]);
+    const { cases } = solveCases(truss, FEET, assessStability(truss, FEET), [
+      load,
+      { ...load, name: 'snow', incomplete: 'line 9 of the brief: its nodes span no area' },
+    ]);
+    expect(cases[0]!.refused).toBeNull();
+    expect(cases[1]!.refused).toContain('line 9 of the brief');
+    expect(cases[1]!.axialForce).toEqual([null, null, null]);
   });
 
   test('a determinate truss with a bar without section keeps its forces and has no displacements', () => {

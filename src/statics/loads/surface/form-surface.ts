@@ -4,8 +4,9 @@ import type { Vec3 } from '../../../domain/vector.ts';
 import { removeCrossings } from './crossings.ts';
 import { findFaces } from './faces.ts';
 import { convexHull } from './hull.ts';
-import { planDistance, SAME_PLACE, turn } from './plan.ts';
+import { planArea, planDistance, SAME_PLACE, turn } from './plan.ts';
 import { planEdges } from './plan-edges.ts';
+import { sharePatch } from './share-patch.ts';
 import { Triangulation } from './triangulation.ts';
 
 /** A surface over nodes: convex patches that do not overlap in plan, corners going round to the left. */
@@ -13,6 +14,8 @@ export interface Surface {
   readonly patches: readonly (readonly number[])[];
   /** `bars`: the cells that bars close; `outline`: too few do, and the nodes were joined within their convex outline. */
   readonly formedBy: 'bars' | 'outline';
+  /** Cells that no cladding spans, by their corners: taken as openings. */
+  readonly openings: readonly (readonly number[])[];
 }
 
 /** Why there is no surface, in a clause, and the nodes that show it. */
@@ -23,6 +26,15 @@ export interface NoSurface {
 
 /** Below this share of the nodes at corners of cells, the bars do not show the surface. */
 const ENOUGH_CORNERS = 0.5;
+
+/**
+ * A cell with more corners than this and this many times larger than the usual one is no panel: a court, a void between
+ * roofs. Common practice has no number for it; panels have four corners, now and then eight.
+ */
+const OPENING = { corners: 8, timesUsualArea: 8 };
+
+/** Beyond this ratio of true area to plan area (some 48 degrees all over) joined nodes are no roof. */
+const STEEPEST = 1.5;
 
 /** The surface that the chosen nodes and the bars between them form, seen in plan. */
 export function formSurface(truss: Truss, members: readonly Member[], nodes: readonly number[]): Surface | NoSurface {
@@ -37,13 +49,15 @@ export function formSurface(truss: Truss, members: readonly Member[], nodes: rea
   if (islands.length > 0)
     return { fault: 'some of its nodes stand alone inside a larger cell of bars', nodes: islands };
   if (new Set(cells.flat()).size < ENOUGH_CORNERS * nodes.length) return formWithinOutline(points, nodes);
+  const openings = findOpenings(points, cells);
   const patches: number[][] = [];
   for (const cell of cells) {
+    if (openings.includes(cell)) continue;
     const divided = divide(points, cell);
     if (divided === null) return { fault: 'a cell of its bars touches itself', nodes: cell };
     patches.push(...divided);
   }
-  return { patches, formedBy: 'bars' };
+  return { patches, formedBy: 'bars', openings };
 }
 
 function formWithinOutline(points: readonly Vec3[], nodes: readonly number[]): Surface | NoSurface {
@@ -52,7 +66,17 @@ function formWithinOutline(points: readonly Vec3[], nodes: readonly number[]): S
   const inner = nodes.filter((node) => !onOutline.has(node));
   const triangulation = outline.length < 3 ? null : Triangulation.of(points, outline, inner);
   if (triangulation === null) return { fault: 'its nodes span no area in plan', nodes: [...nodes] };
-  return { patches: triangulation.patches(), formedBy: 'outline' };
+  const patches = triangulation.patches();
+  const shares = patches.flatMap((patch) => sharePatch(points, patch));
+  const [area, plan] = shares.reduce(([sum, flat], share) => [sum + share.area, flat + share.normalArea[2]], [0, 0]);
+  if (area > STEEPEST * plan) return { fault: 'its nodes lie at too different heights to be one surface', nodes };
+  return { patches, formedBy: 'outline', openings: [] };
+}
+
+function findOpenings(points: readonly Vec3[], cells: readonly (readonly number[])[]): (readonly number[])[] {
+  const areas = cells.map((cell) => planArea(cell.map((node) => points[node]!)));
+  const usual = [...areas].sort((a, b) => a - b)[areas.length >> 1] ?? 0;
+  return cells.filter((cell, i) => cell.length > OPENING.corners && areas[i]! > OPENING.timesUsualArea * usual);
 }
 
 /** A cell of four true corners stays whole; others are cut into triangles and polygons inscribed in a circle. */

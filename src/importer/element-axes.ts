@@ -1,0 +1,125 @@
+import { distance, dot, subtract, unit } from '../domain/vector.ts';
+import { FITTINGS } from './element-remarks.ts';
+import { readAxisLines } from './geometry/axis-representation.ts';
+import { readBody } from './geometry/body.ts';
+import { type BodyAxis, distinctAxes, lengthOf } from './geometry/body-axis.ts';
+import type { Chord } from './geometry/curve-piece.ts';
+import type { Polygon } from './geometry/mesh.ts';
+import { meshAxes } from './geometry/mesh-axis.ts';
+import { axisOfBody, axisOfLine, type MemberAxis, SHORTEST } from './member-axis.ts';
+import { NeedsParser, NotRead, noAxis } from './not-read.ts';
+import type { ImportOptions } from './options.ts';
+import type { Reading } from './reading.ts';
+import type { Shape } from './representations.ts';
+import type { SectionBook } from './sections/section-book.ts';
+import type { Transform } from './transform.ts';
+
+interface Sources {
+  readonly reading: Reading;
+  readonly sections: SectionBook;
+  readonly options: ImportOptions;
+}
+
+/**
+ * The lines that one element is read as: its drawn Axis or the centroid lines of its solids, whichever is asked for; of a
+ * lattice drawn as one element its solids, whatever its Axis. `profiles` are those its material gives,
+ * `parsedMesh` asks a parser for the body's mesh.
+ * @throws NotRead where there is none.
+ */
+export function elementAxes(
+  { reading, sections, options }: Sources,
+  shape: Shape,
+  world: Transform,
+  profiles: readonly number[],
+  parsedMesh: () => readonly Polygon[] | null,
+): MemberAxis[] {
+  const lines = orRefusal<Chord>(() => readAxisLines(reading, shape.axis, world));
+  const read = orRefusal<BodyAxis>(() => readBody(reading, sections, shape.body, world));
+  const bodies = isUnknown(reading, sections, read) ? meshed(read, parsedMesh(), world) : read;
+  const drawn = Array.isArray(lines) ? lines.filter((line) => !(distance(line.from, line.to) < SHORTEST)) : [];
+  const solids = Array.isArray(bodies) ? distinctAxes(bodies) : [];
+  const members = solids.length === 0 ? [] : memberSolids(sections, solids, profiles);
+  const isGiven = options.axes === 'given' && !isLattice(drawn, members);
+  if (drawn.length > 0 && (isGiven || members.length === 0)) {
+    return drawn.map((line) => axisOfLine(sections, line, solids, profiles, world));
+  }
+  if (members.length > 0) {
+    if (members.length < solids.length) reading.note(FITTINGS);
+    return members.map((solid) => axisOfBody(sections, solid, profiles));
+  }
+  if (bodies instanceof NotRead && shape.body.length > 0) throw bodies;
+  if (lines instanceof NotRead) throw lines;
+  throw noAxis('it has no shape');
+}
+
+/** Whether a body is of a kind that only a parser can tell of, or has a drawn profile that is not read. */
+function isUnknown(reading: Reading, sections: SectionBook, read: readonly BodyAxis[] | NotRead): boolean {
+  if (read instanceof NotRead) return read instanceof NeedsParser;
+  return read.some(({ profile }) => profile !== null && isDrawn(reading, profile) && !canRead(sections, profile));
+}
+
+/** A profile that is a mere name has no shape to be meshed. */
+const isDrawn = (reading: Reading, profile: number): boolean =>
+  profile > 0 && !['', 'IFCPROFILEDEF', 'IFCPARAMETERIZEDPROFILEDEF'].includes(reading.file.typeOf(profile));
+
+function canRead(sections: SectionBook, profile: number): boolean {
+  return Array.isArray(orRefusal(() => [sections.profile(profile)]));
+}
+
+/** What the parser's mesh shows, where there is one and it shows something. */
+function meshed(read: BodyAxis[] | NotRead, mesh: readonly Polygon[] | null, world: Transform): BodyAxis[] | NotRead {
+  if (mesh === null) return read;
+  const fitted = orRefusal<BodyAxis>(() => meshAxes(mesh, world.z));
+  return fitted instanceof NotRead && !(read instanceof NotRead) ? read : fitted;
+}
+
+function orRefusal<T>(read: () => T[]): T[] | NotRead {
+  try {
+    return read();
+  } catch (problem) {
+    if (problem instanceof NotRead) return problem;
+    throw problem;
+  }
+}
+
+/** Plates and cleats drawn with a member are both far shorter than it and stout; a lattice's web bars are slender. */
+const FITTING_LENGTH = 1 / 4;
+const FITTING_SLENDER = 6;
+
+function memberSolids(
+  sections: SectionBook,
+  solids: readonly BodyAxis[],
+  profiles: readonly number[],
+): readonly BodyAxis[] {
+  const longest = Math.max(...solids.map(lengthOf));
+  return solids.filter((solid) => {
+    if (!(lengthOf(solid) < longest * FITTING_LENGTH)) return true;
+    const extent = extentOf(sections, solid, profiles);
+    return extent !== null && lengthOf(solid) >= FITTING_SLENDER * extent;
+  });
+}
+
+function extentOf(sections: SectionBook, solid: BodyAxis, profiles: readonly number[]): number | null {
+  try {
+    const { section } = axisOfBody(sections, solid, profiles);
+    return section === null ? null : Math.max(section.depth, section.width);
+  } catch (problem) {
+    if (problem instanceof NotRead) return null;
+    throw problem;
+  }
+}
+
+/** A solid that runs this much across a drawn line (10 degrees) is none that the line stands for. */
+const ALONGSIDE = Math.cos((10 * Math.PI) / 180);
+
+/** One drawn line for several bars, some of them across it: the line of a joist as a whole, not of its bars. */
+function isLattice(drawn: readonly Chord[], solids: readonly BodyAxis[]): boolean {
+  const [line, ...more] = drawn;
+  if (line === undefined || more.length > 0) return false;
+  const along = unit(subtract(line.to, line.from));
+  const across = solids.filter((solid) => {
+    const direction = unit(subtract(solid.end, solid.start));
+    return along !== null && direction !== null && Math.abs(dot(along, direction)) < ALONGSIDE;
+  });
+  return across.length >= 2 && solids.length >= 3;
+}

@@ -1,0 +1,20 @@
+import { cross, subtract, unit } from '../domain/vector.ts';
+import type { Remark } from './findings-log.ts';
+import type { MemberAxis } from './member-axis.ts';
+import { namedSection } from './sections/named-section.ts';
+
+/**
+ * The axis with the section that `texts` name, the first that names one, where its profile is not known; what is said of
+ * that. A section that is named and measured alike is no guess.
+ */
+export function namedAxis(
+  axis: MemberAxis,
+  texts: readonly (string | null)[],
+): { readonly axis: MemberAxis; readonly remark: Remark | null } {
+  const named = namedSection(axis.section, texts);
+  if (named === null) return { axis, remark: null };
+  const { section, remark, isTurned } = named;
+  const along = unit(subtract(axis.ends[1], axis.ends[0]));
+  const zAxis = isTurned && along !== null ? cross(along, axis.zAxis) : axis.zAxis;
+  return { axis: { ...axis, section, zAxis, noSection: null, confidence: null }, remark };
+}

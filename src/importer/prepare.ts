@@ -1,0 +1,110 @@
+import { between, type Vec3 } from '../domain/vector.ts';
+import type { StepFile } from '../step/step-file.ts';
+import { asRef, asString } from '../step/values.ts';
+import { FactsBook } from './facts.ts';
+import { noteFileProblems, noteGuessedSchema, noteMissingLengthUnit, noteRepeatedGlobalIds } from './file-remarks.ts';
+import { FindingsLog } from './findings-log.ts';
+import { type Grid, readGrids } from './grids.ts';
+import { MaterialBook } from './materials/material-book.ts';
+import { compareRounded } from './member-axis.ts';
+import { NotRead } from './not-read.ts';
+import type { ImportOptions } from './options.ts';
+import { Placements } from './placements.ts';
+import { placeNamer, type Storey } from './places.ts';
+import type { PlacelessMember, Sources } from './read-element.ts';
+import { Reading } from './reading.ts';
+import { readRelations } from './relations.ts';
+import { knownSchema } from './schema.ts';
+import { SectionBook } from './sections/section-book.ts';
+import type { ImportedModel } from './types.ts';
+import { readUnits } from './units.ts';
+
+/** A file made ready for reading, whichever of its views is read. */
+export interface Prepared {
+  readonly sources: Sources;
+  readonly grids: readonly Grid[];
+  readonly log: FindingsLog;
+}
+
+/** @throws ModelError where the schema is not one that is read; RequestError where the default material is unknown. */
+export function prepare(file: StepFile, options: ImportOptions): Prepared {
+  const schema = knownSchema(file.schema);
+  const log = new FindingsLog();
+  const units = readUnits(file);
+  const reading = new Reading(file, schema.family, units, log);
+  const grids = readGrids(reading);
+  const relations = readRelations(file);
+  const sources: Sources = {
+    reading,
+    placements: new Placements(reading, grids),
+    relations,
+    sections: new SectionBook(reading),
+    materials: new MaterialBook(reading, options.defaultMaterial),
+    facts: new FactsBook(file, units, relations),
+    options,
+  };
+  if (schema.guessed) noteGuessedSchema(reading, file.schema);
+  noteMissingLengthUnit(reading);
+  return { sources, grids, log };
+}
+
+/**
+ * Puts the members in order, names their places and gathers the findings.
+ * @param elements the instances they were read from, and those that could not be read
+ */
+export function finish(
+  { sources, grids, log }: Prepared,
+  source: ImportedModel['source'],
+  elements: readonly number[],
+  members: readonly PlacelessMember[],
+): Omit<ImportedModel, 'given'> {
+  const { reading, placements } = sources;
+  const found = [...members].sort(byGeometry);
+  noteRepeatedGlobalIds(reading, elements);
+  const storeys = readStoreys(sources);
+  noteFileProblems(reading);
+  const placeOf = placeNamer({ grids, placements, storeys, corner: cornerOf(found) });
+  for (const member of found) member.place = placeOf(between(...member.axis, 0.5));
+  return {
+    schema: reading.file.schema,
+    lengthUnit: reading.units.lengthName,
+    source,
+    members: found,
+    findings: log.findings(placeOf),
+    placeOf,
+    elementCount: elements.length,
+  };
+}
+
+function byGeometry(a: PlacelessMember, b: PlacelessMember): number {
+  const ends = compareRounded(a.axis[0], b.axis[0]) || compareRounded(a.axis[1], b.axis[1]);
+  if (ends !== 0) return ends;
+  if (a.globalId !== b.globalId) return a.globalId < b.globalId ? -1 : 1;
+  return a.part - b.part;
+}
+
+function cornerOf(members: readonly PlacelessMember[]): Vec3 | null {
+  if (members.length === 0) return null;
+  let [x, y] = [Number.POSITIVE_INFINITY, Number.POSITIVE_INFINITY];
+  for (const { axis } of members) {
+    for (const end of axis) {
+      x = Math.min(x, end[0]);
+      y = Math.min(y, end[1]);
+    }
+  }
+  return [x, y, 0];
+}
+
+function readStoreys({ reading, placements }: Sources): Storey[] {
+  return reading.file.idsOf('IFCBUILDINGSTOREY').flatMap((id): Storey[] => {
+    const args = reading.file.args(id);
+    const name = asString(args[2]) ?? asString(args[7]);
+    if (name === null) return [];
+    try {
+      return [{ name, level: placements.worldOf(asRef(args[5])).origin[2] }];
+    } catch (problem) {
+      if (problem instanceof NotRead) return [];
+      throw problem;
+    }
+  });
+}
