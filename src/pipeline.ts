@@ -81,6 +81,7 @@ export async function runModel(bytes: Uint8Array, options: Partial<RunOptions> =
       : resolveGivenSupports(truss, given.supports);
   const joined = joinMembers(given === null ? members : members.map(asLine), joinOptions(brief, given !== null), {
     placeOf: imported.placeOf,
+    evidence: imported.evidence,
     supportedNodes: (truss) => nodesOf(supportsOf(truss).supports),
   });
   const { truss } = joined;
@@ -194,6 +195,7 @@ function joinOptions({ joints, chords }: Brief, isAnalysisView: boolean): Partia
     offset: joints.offset ?? SHARED_POINT,
     crossings: joints.crossings,
     seated: 'apart',
+    pairs: 'apart',
     chords,
   };
 }

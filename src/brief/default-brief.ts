@@ -6,7 +6,7 @@ export const DEFAULT_BRIEF: Brief = {
   source: null,
   axes: 'given',
   scope: { include: [], exclude: [] },
-  joints: { reach: null, offset: null, crossings: 'apart', seated: 'node' },
+  joints: { reach: null, offset: null, crossings: 'apart', seated: 'node', pairs: 'one' },
   chords: 'pinned',
   supports: [],
   materials: { default: null },

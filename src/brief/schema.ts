@@ -295,6 +295,7 @@ export const briefInputSchema = z.strictObject({
       offset: positive('length').optional(),
       crossings: z.enum(['apart', 'joined']).optional(),
       seated: z.enum(['node', 'apart']).optional(),
+      pairs: z.enum(['one', 'apart']).optional(),
     })
     .optional(),
   chords: z.enum(['pinned', 'strict']).optional(),

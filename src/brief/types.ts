@@ -14,6 +14,7 @@ export interface Brief {
     readonly offset: number | null;
     readonly crossings: 'apart' | 'joined';
     readonly seated: 'node' | 'apart';
+    readonly pairs: 'one' | 'apart';
   };
   readonly chords: 'pinned' | 'strict';
   readonly supports: readonly SupportRule[];

@@ -57,7 +57,7 @@ export function finish(
   source: ImportedModel['source'],
   elements: readonly number[],
   members: readonly PlacelessMember[],
-): Omit<ImportedModel, 'given'> {
+): Omit<ImportedModel, 'given' | 'evidence'> {
   const { reading, placements } = sources;
   const found = [...members].sort(byGeometry);
   noteRepeatedGlobalIds(reading, elements);

@@ -1,5 +1,6 @@
 import type { StepFile } from '../step/step-file.ts';
 import { type BodyMeshes, WantedMeshes } from './body-meshes.ts';
+import { readEvidence } from './evidence/read-evidence.ts';
 import { IMPORT_DEFAULTS, type ImportOptions } from './options.ts';
 import { finish, prepare } from './prepare.ts';
 import { readElement } from './read-element.ts';
@@ -21,7 +22,7 @@ export function readPhysicalModel(
   const prepared = prepare(file, chosen);
   const elements = elementsOf(file, chosen.classes);
   const members = elements.flatMap((id) => readElement(prepared.sources, id, meshes));
-  return { ...finish(prepared, 'physical', elements, members), given: null };
+  return { ...finish(prepared, 'physical', elements, members), given: null, evidence: readEvidence(prepared.sources) };
 }
 
 function elementsOf(file: StepFile, extra: readonly string[]): number[] {

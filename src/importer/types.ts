@@ -1,6 +1,7 @@
 import type { Finding } from '../domain/finding.ts';
 import type { Member } from '../domain/member.ts';
 import type { PlaceNamer } from '../domain/place.ts';
+import type { Evidence } from './evidence/types.ts';
 import type { Given } from './given.ts';
 
 /** What was read of a model, before any scope is applied. */
@@ -17,4 +18,6 @@ export interface ImportedModel {
   readonly elementCount: number;
   /** The model's own supports, loads and combinations; null where its physical elements were read. */
   readonly given: Given | null;
+  /** What is fastened to what, besides the members' own lines; null for an analysis view. */
+  readonly evidence: Evidence | null;
 }

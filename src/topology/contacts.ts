@@ -1,5 +1,6 @@
 import { along, between, dot, scale, subtract, type Vec3 } from '../domain/vector.ts';
 import { type Axis, approach, approachDirection, looksCrossed, sineBetween } from './axes.ts';
+import { type PairEvidence, pairKey } from './evidence.ts';
 import { type JoinOptions, TOLERANCE } from './options.ts';
 import { indexBoxes, searchBoxes } from './spatial-index.ts';
 
@@ -25,7 +26,11 @@ export interface JudgedContact {
 }
 
 /** All pairs of axes that meet, sit or cross. */
-export function findContacts(axes: readonly (Axis | null)[], options: JoinOptions): Contact[] {
+export function findContacts(
+  axes: readonly (Axis | null)[],
+  options: JoinOptions,
+  evidence: PairEvidence = new Map(),
+): Contact[] {
   const present = axes.filter((axis) => axis !== null);
   const boxes = new Float64Array(6 * present.length);
   present.forEach((axis, i) => {
@@ -36,11 +41,19 @@ export function findContacts(axes: readonly (Axis | null)[], options: JoinOption
   present.forEach((axis, i) => {
     searchBoxes(index, boxes.subarray(6 * i, 6 * i + 6), (j) => {
       if (j <= i) return;
-      const judged = judgePair(axis, present[j], options);
-      if (judged !== null && judged.ratio <= 1) contacts.push(judged.contact);
+      if (!evidence.has(pairKey(axis.member, present[j].member, axes.length))) accept(axis, present[j], 1);
     });
   });
+  for (const key of evidence.keys()) {
+    const [a, b] = [axes[Math.floor(key / axes.length)], axes[key % axes.length]];
+    if (a !== null && b !== null) accept(a, b, TOLERANCE.withEvidence);
+  }
   return contacts.sort((p, q) => p.a - q.a || p.b - q.b);
+
+  function accept(a: Axis, b: Axis, widening: number): void {
+    const judged = judgePair(a, b, options, widening);
+    if (judged !== null && judged.ratio <= 1) contacts.push(judged.contact);
+  }
 }
 
 /** The box of an axis, widened on all sides. */
@@ -60,15 +73,15 @@ export function largestReach(axis: Axis, options: JoinOptions): number {
   return Math.max(TOLERANCE.sameAssembly * bySections + TOLERANCE.seatPacking, options.reach ?? 0, options.offset ?? 0);
 }
 
-/** How two axes come together, if they do at all. */
-export function judgePair(a: Axis, b: Axis, options: JoinOptions): JudgedContact | null {
+/** How two axes come together, if they do at all. Reach and offset are multiplied by `widening`. */
+export function judgePair(a: Axis, b: Axis, options: JoinOptions, widening = 1): JudgedContact | null {
   const sine = sineBetween(a, b);
-  return sine < TOLERANCE.parallelSine ? judgeParallel(a, b, options) : judgeSkew(a, b, sine, options);
+  const wide = Math.max(widening, wideningFor(a, b));
+  return sine < TOLERANCE.parallelSine ? judgeParallel(a, b, options, wide) : judgeSkew(a, b, sine, options, wide);
 }
 
-function judgeSkew(a: Axis, b: Axis, sine: number, options: JoinOptions): JudgedContact | null {
+function judgeSkew(a: Axis, b: Axis, sine: number, options: JoinOptions, widening: number): JudgedContact | null {
   const { s, t, distance, normal } = approach(a, b);
-  const widening = wideningFor(a, b);
   const [acrossB, acrossA] = [approachDirection(a, b), approachDirection(b, a)];
   const cosine = Math.abs(dot(a.direction, b.direction));
   const reachA = (options.reach ?? reachOf(a, b.halfExtent(acrossB) + a.halfExtent(acrossA) * cosine, sine)) * widening;
@@ -93,7 +106,7 @@ function judgeSkew(a: Axis, b: Axis, sine: number, options: JoinOptions): Judged
 }
 
 /** Parallel axes meet where two ends face each other: splices, a chord's ridge, a bar run on by the next. */
-function judgeParallel(a: Axis, b: Axis, options: JoinOptions): JudgedContact | null {
+function judgeParallel(a: Axis, b: Axis, options: JoinOptions, widening: number): JudgedContact | null {
   const sameWay = dot(a.direction, b.direction) > 0;
   let best: JudgedContact | null = null;
   for (const endA of [0, 1]) {
@@ -105,7 +118,6 @@ function judgeParallel(a: Axis, b: Axis, options: JoinOptions): JudgedContact | 
     const lengthwise = dot(gap, outward);
     const sideways = subtract(gap, scale(outward, lengthwise));
     const aside = Math.hypot(...sideways);
-    const widening = wideningFor(a, b);
     const reach = (options.reach ?? reachOf(a, 0, 1) + reachOf(b, 0, 1)) * widening;
     const offset = (options.offset ?? offsetOf(a, b)) * widening;
     const ratio = Math.max(Math.abs(lengthwise) / reach, aside / offset);
@@ -125,10 +137,12 @@ function judgeParallel(a: Axis, b: Axis, options: JoinOptions): JudgedContact | 
 /** How far an end of `own` may be carried to a member that has this half extent on its way (METHODS 2.2). */
 function reachOf(own: Axis, halfExtentMet: number, sine: number): number {
   const notch = Math.max(TOLERANCE.detailingGap, TOLERANCE.ownDepthShare * own.depth);
-  return halfExtentMet / Math.max(sine, TOLERANCE.leastSine) + notch;
+  const reach = halfExtentMet / Math.max(sine, TOLERANCE.leastSine) + notch;
+  return Math.min(reach, TOLERANCE.mostOfLength * own.length);
 }
 
-const offsetOf = (a: Axis, b: Axis): number => Math.max(TOLERANCE.leastOffset, Math.max(a.depth, b.depth) / 2);
+const offsetOf = (a: Axis, b: Axis): number =>
+  Math.min(Math.max(TOLERANCE.leastOffset, Math.max(a.depth, b.depth) / 2), TOLERANCE.mostOffset);
 
 const wideningFor = (a: Axis, b: Axis): number =>
   a.assembly !== null && a.assembly === b.assembly ? TOLERANCE.sameAssembly : 1;

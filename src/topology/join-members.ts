@@ -4,12 +4,14 @@ import type { PlaceNamer } from '../domain/place.ts';
 import type { Truss } from '../domain/truss.ts';
 import { between } from '../domain/vector.ts';
 import { millimetres } from '../domain/words.ts';
+import type { Evidence } from '../importer/evidence/types.ts';
 import { type Axis, makeAxes } from './axes.ts';
 import { buildTruss } from './build-truss.ts';
 import { findCarriers } from './carriers.ts';
 import { type Contact, findContacts } from './contacts.ts';
 import { resolveDoubles } from './doubles.ts';
 import { offsetJointFindings } from './eccentricity.ts';
+import { type PairEvidence, relatedMembers, touchingPlates } from './evidence.ts';
 import { carriedFindings, crossingFindings, crowdedFindings } from './joint-findings.ts';
 import { makeJoints, type Refusal } from './joints.ts';
 import { labelOf } from './labels.ts';
@@ -19,15 +21,18 @@ import { cutOverhangs } from './overhangs.ts';
 import { partFindings } from './parts.ts';
 import { cutPieces, joinSplices } from './pieces.ts';
 import { findStations } from './stations.ts';
+import { withoutTwisting } from './twisted.ts';
 import { makeVertices, type VertexGraph } from './vertices.ts';
 
 export interface JoinContext {
   readonly placeOf: PlaceNamer;
   /** Nodes of a truss that stand on supports: a free end there is a bearing, not a fault. */
   readonly supportedNodes: (truss: Truss) => ReadonlySet<number>;
+  /** Plates and relationships in the file that say what is joined. */
+  readonly evidence: Pick<Evidence, 'plates' | 'related'> | null;
 }
 
-const NO_CONTEXT: JoinContext = { placeOf: () => null, supportedNodes: () => new Set() };
+const NO_CONTEXT: JoinContext = { placeOf: () => null, supportedNodes: () => new Set(), evidence: null };
 
 /**
  * Makes a truss of members: finds where axes meet, joins them into work points, and splits members into bars.
@@ -39,12 +44,12 @@ export function joinMembers(
   context: Partial<JoinContext> = {},
 ): { truss: Truss; findings: Finding[] } {
   const chosen = { ...JOIN_DEFAULTS, ...options };
-  const { placeOf, supportedNodes } = { ...NO_CONTEXT, ...context };
+  const { placeOf, supportedNodes, evidence } = { ...NO_CONTEXT, ...context };
   const drawn = makeAxes(members);
   const doubles = resolveDoubles(members, drawn, chosen, placeOf);
   const { axes } = doubles;
 
-  const contacts = findContacts(axes, chosen);
+  const contacts = findContacts(axes, chosen, pairEvidence(members, axes, evidence));
   const { truss: whole, refused, graph } = trussOf(members, axes, contacts, chosen, placeOf);
   const { truss: cut, cut: tails } = cutOverhangs(whole, supportedNodes(whole));
   const supported = supportedNodes(cut);
@@ -71,8 +76,7 @@ function trussOf(
   placeOf: PlaceNamer,
 ): { truss: Truss; refused: readonly Refusal[]; graph: VertexGraph } {
   const joining = contacts.filter(({ kind }) => kind !== 'crossing' || options.crossings === 'joined');
-  const { joints, refused } = makeJoints(axes, joining, findStations(axes, joining));
-  const graph = makeVertices(axes, joints);
+  const { graph, refused } = untwisted(axes, joining);
   const carriers = findCarriers(graph, axes, options);
   const runs = joinSplices(cutPieces(graph, carriers), graph.vertices);
   return { truss: buildTruss(graph, runs, members, axes, placeOf), refused, graph };
@@ -94,6 +98,28 @@ function zeroLengthFindings(
       { members: [member.globalId], at, place: placeOf(at) },
     );
   });
+}
+
+/** Joints, without those that would turn a member far from its drawn axis. */
+function untwisted(axes: readonly (Axis | null)[], contacts: readonly Contact[]) {
+  let joining = contacts;
+  for (;;) {
+    const { joints, refused } = makeJoints(axes, joining, findStations(axes, joining));
+    const graph = makeVertices(axes, joints);
+    const fewer = withoutTwisting(joining, axes, graph);
+    if (fewer === null) return { graph, refused };
+    joining = fewer;
+  }
+}
+
+function pairEvidence(
+  members: readonly Member[],
+  axes: readonly (Axis | null)[],
+  evidence: JoinContext['evidence'],
+): PairEvidence {
+  if (evidence === null) return new Map();
+  const globalIds = members.map((member) => member.globalId);
+  return new Map([...touchingPlates(evidence.plates, axes), ...relatedMembers(evidence.related, globalIds)]);
 }
 
 /** Beyond this turn (5 degrees) the truss is no longer what was drawn. */

@@ -33,10 +33,16 @@ export const TOLERANCE = {
   overrun: 0.06,
   leastSine: 0.3,
   leastOffset: 0.02,
+  /** A sheet or a wall is as deep as a storey; axes do not meet across it. */
+  mostOffset: 0.3,
+  /** An end is not carried on by more than this share of its member: a cleat does not become a brace. */
+  mostOfLength: 0.5,
   /** Packing, cleat thickness and camber under a seat. */
   seatPacking: 0.025,
   /** Members of one assembly were drawn to belong together. */
   sameAssembly: 1.5,
+  /** A plate both touch, or a relationship in the file, says that they are joined. */
+  withEvidence: 2.5,
   leastJoint: 0.05,
   /** Below this sine two axes count as parallel: where their lines cross says nothing about where they meet. */
   parallelSine: 0.17,

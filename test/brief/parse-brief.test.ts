@@ -56,7 +56,7 @@ checks: none
 describe('a brief that is right', () => {
   it('comes out in SI, with defaults and with the line of every rule', () => {
     const brief = parseBrief(FULL, 'brief.yaml');
-    expect(brief.joints).toEqual({ reach: 0.15, offset: 0.06, crossings: 'apart', seated: 'node' });
+    expect(brief.joints).toEqual({ reach: 0.15, offset: 0.06, crossings: 'apart', seated: 'node', pairs: 'one' });
     expect(brief.scope.include).toEqual([
       { line: 6, class: 'IfcMember' },
       { line: 6, assembly: 'Truss *' },
@@ -228,7 +228,6 @@ describe('a brief that is wrong', () => {
     ['holds: []', '2:1: "holds": this key'],
     ['tensionOnly: [{name: "X*"}]', '2:14:'],
     ['compressionOnly: [{name: "X*"}]', '2:18:'],
-    ['joints: {pairs: one}', '2:10: "pairs": this key'],
     ['chords: continuous', '2:9: "continuous": this'],
     ['combinations: EN1990', '2:15: "EN1990": this'],
     ['combinations: ASCE7-22', '2:15: "ASCE7-22": this'],

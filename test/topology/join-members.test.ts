@@ -159,6 +159,31 @@ describe('joining members', () => {
     expect(truss.bars.filter(({ name }) => name.startsWith('P'))).toHaveLength(2);
   });
 
+  it('takes a gusset that two members touch, or a relationship in the file, for evidence of a joint', () => {
+    const members = pitchedTruss().map((m) => (m.tag === 'P' ? { ...m, axis: [m.axis[0], [6, 0, 1.72]] as const } : m));
+    const gusset = {
+      globalId: 'G',
+      name: 'GP-1',
+      class: 'IfcPlate',
+      centre: [6, 0, 1.8] as const,
+      axes: [
+        [1, 0, 0],
+        [0, 1, 0],
+        [0, 0, 1],
+      ] as const,
+      halfSizes: [0.3, 0.005, 0.25] as const,
+      assembly: null,
+    };
+    const related = ['TL', 'TR'].map((b) => ({ a: 'P', b, by: 'IfcRelConnectsElements' as const, realising: [] }));
+    const topNode = (evidence: object | null) => {
+      const { truss } = joinMembers(members, {}, { evidence: evidence as never });
+      return truss.nodes[nodeAt(truss, [6, 0, 2])].members.map((i) => members[i].tag);
+    };
+    expect(topNode(null)).not.toContain('P');
+    expect(topNode({ plates: [gusset], related: [] })).toContain('P');
+    expect(topNode({ plates: [], related })).toContain('P');
+  });
+
   it('cuts an overhang off and leaves its weight at the last joint', () => {
     const eaves = pitchedTruss().map((m) =>
       m.tag === 'TL' ? { ...m, axis: [[-1.5, 0, -0.5], m.axis[1]] as const } : m,
@@ -178,6 +203,13 @@ describe('joining members', () => {
     const { truss, findings } = joinMembers(members, {}, context);
     expect(nodeAt(truss, [0, 0, -4])).toBeGreaterThanOrEqual(0);
     expect(codes(findings)).not.toContain('loose-end');
+  });
+
+  it('does not turn a short member far from its axis for the sake of a joint', () => {
+    const cleat = member('CL', [2.9, 0.02, 0.85], [2.9, 0.3, 0.85], { section: hollow(0.1) });
+    const { truss } = joinMembers([...pitchedTruss(), ...pitchedTruss(0.32, 'far '), cleat]);
+    expect(truss.faith[truss.faith.length - 1].turn).toBeLessThan((21 * Math.PI) / 180);
+    for (const { turn } of truss.faith) expect(turn).toBeLessThan((21 * Math.PI) / 180);
   });
 
   it('never merges the two ends of one member', () => {

@@ -28,7 +28,7 @@ export function readAnalysisModel(file: StepFile, options: Partial<ImportOptions
   noteConnections(sources.reading, members);
   noteSurfaces(sources.reading);
   const read = [...members.values()].map(({ member }) => member);
-  return { ...finish(prepared, 'analysis', ids, read), given: { supports, cases, combinations } };
+  return { ...finish(prepared, 'analysis', ids, read), given: { supports, cases, combinations }, evidence: null };
 }
 
 /** Whether the file has a structural analysis view with members. */
