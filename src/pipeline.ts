@@ -3,6 +3,7 @@ import { DEFAULT_BRIEF } from './brief/default-brief.ts';
 import { type MemberKind, memberKinds } from './brief/member-kinds.ts';
 import { applyScope } from './brief/scope.ts';
 import { applySections, withoutSettled } from './brief/sections.ts';
+import { type TopLevel, topLevels } from './brief/selectors/top-levels.ts';
 import { resolveGivenSupports, resolveSupports } from './brief/supports.ts';
 import type { Brief } from './brief/types.ts';
 import { type Finding, finding } from './domain/finding.ts';
@@ -54,6 +55,8 @@ export interface Run {
   readonly mass: number;
   /** The members that were read, in scope or not. */
   readonly kinds: readonly MemberKind[];
+  /** The nodes that `top: true` would catch, for whoever writes the brief; only of a survey. */
+  readonly topLevels: readonly TopLevel[];
   /** What each area load of the brief covers. */
   readonly coverage: readonly Coverage[];
   /** Seconds spent in each stage. */
@@ -138,6 +141,7 @@ export async function runModel(bytes: Uint8Array, options: Partial<RunOptions> =
     elementCount: imported.elementCount,
     mass: truss.bars.reduce((sum, bar) => sum + bar.massPerLength * bar.length, 0),
     kinds: memberKinds(imported.members, members),
+    topLevels: extent === 'survey' ? topLevels(truss) : [],
     coverage: loaded.coverage,
     seconds: clock.stop(),
   };

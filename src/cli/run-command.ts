@@ -55,10 +55,10 @@ export async function runCommand(model: string, extent: RunOptions['extent'], fl
   await writeOutputs(plan, contentOf(run.result, run.file));
   if (flags.timings) reportTimings(run, (performance.now() - analysed) / 1000);
   if (!flags.quiet && !plan.stdout) {
-    const { elementCount, mass, coverage } = run;
+    const { elementCount, mass, coverage, topLevels } = run;
     // Before there are loads the reader is still choosing what belongs to the truss.
     const kinds = extent === 'survey' ? run.kinds : [];
-    process.stdout.write(summarise(run.result, { extras: { elementCount, mass, coverage, kinds } }));
+    process.stdout.write(summarise(run.result, { extras: { elementCount, mass, coverage, kinds, topLevels } }));
     if (outputs.length > 0) process.stdout.write(`\nWritten: ${outputs.join(', ')}\n`);
   }
   return hasFaults(run) ? EXIT.faultsFound : EXIT.done;

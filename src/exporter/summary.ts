@@ -36,7 +36,7 @@ function title({ generator, model }: Result): string {
 
 function readAndJoined(result: Result, { extras, width }: SummaryOptions): string[] {
   const { members, nodes, bars } = result;
-  const { elementCount, mass } = extras;
+  const { elementCount, mass, topLevels = [] } = extras;
   const of = elementCount === undefined ? '' : ` of ${count(elementCount, 'element')}`;
   const classes = tally(members.map((member) => member.class));
   const read = `${count(members.length, 'member')}${of}${classes === '' ? '' : `: ${classes}`}`;
@@ -45,7 +45,7 @@ function readAndJoined(result: Result, { extras, width }: SummaryOptions): strin
 
   const shapes = tally(members.map((member) => SHAPE_WORDS.get(member.section?.shape ?? 'none') ?? 'other shapes'));
   lines.push(...wrapped(`sections: ${shapes}`, width, '         '));
-  if (mass !== undefined) lines.push(`         steel ${(mass / 1000).toFixed(mass < 10_000 ? 2 : 1)} t`);
+  if (mass !== undefined) lines.push(`         ${(mass / 1000).toFixed(mass < 10_000 ? 2 : 1)} t between the nodes`);
 
   const carried = nodes.filter((node) => node.carriedBy !== null).length;
   const between = carried === 0 ? '' : `; ${count(carried, 'node')} carried between the ends of a bar`;
@@ -57,10 +57,29 @@ function readAndJoined(result: Result, { extras, width }: SummaryOptions): strin
       '         ',
     ),
   );
-  const shift = members.reduce((most, member) => Math.max(most, member.shift), 0);
-  const turn = members.reduce((most, member) => Math.max(most, member.turn), 0);
-  lines.push(`         axes moved at most ${millimetres(shift)}, turned at most ${degrees(turn)}`);
+  lines.push(...wrapped(faith(members), width, '         '));
+  if (topLevels.length > 0) lines.push(...wrapped(topWords(topLevels), width, '         '));
   return lines;
+}
+
+/** How far joining moved the axes off what was drawn. */
+function faith(members: Result['members']): string {
+  const greatest = (pick: (member: Result['members'][number]) => number) =>
+    members.reduce((most, member) => Math.max(most, pick(member)), 0);
+  const mean = members.reduce((sum, { shift }) => sum + shift, 0) / members.length;
+  const [shift, turn] = [greatest((member) => member.shift), greatest((member) => member.turn)];
+  return `axes moved at most ${millimetres(shift)} (${millimetres(mean)} in the mean), turned at most ${degrees(turn)}`;
+}
+
+const LEVELS_TOLD = 6;
+
+function topWords(levels: NonNullable<SummaryOptions['extras']['topLevels']>): string {
+  const total = levels.reduce((sum, { count: here }) => sum + here, 0);
+  const told = levels
+    .slice(0, LEVELS_TOLD)
+    .map(({ level, count: here }) => `${here} at ${level < 0 ? '' : '+'}${level.toFixed(2)}`);
+  const more = levels.length - told.length;
+  return `${count(total, 'node')} on top: ${told.join(', ')}${more > 0 ? `, and ${count(more, 'more level')}` : ''}`;
 }
 
 const SHAPE_WORDS: ReadonlyMap<string, string> = new Map([

@@ -31,12 +31,12 @@ describe('the summary', () => {
   it('says what was read, by class and by kind of section', () => {
     expect(text).toContain('30 members of 31 elements: 29 IfcBeam, 1 IfcColumn');
     expect(text).toContain('sections: 29 circular hollow, 1 unknown');
-    expect(text).toContain('steel 24.3 t');
+    expect(text).toContain('24.3 t between the nodes');
   });
 
   it('says what was joined and how far axes were moved', () => {
     expect(text).toContain('75 nodes, 45 bars');
-    expect(text).toContain('axes moved at most 12 mm, turned at most 0.06 deg');
+    expect(text).toContain('axes moved at most 12 mm (12 mm in the mean), turned at most 0.06 deg');
   });
 
   it('tells the first few findings of a code with place and gap, and counts the rest', () => {

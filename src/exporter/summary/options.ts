@@ -8,6 +8,8 @@ export interface SummaryExtras {
   readonly mass?: number;
   /** Members that were read, by what a scope would name. */
   readonly kinds?: readonly MemberKind[];
+  /** Nodes that nothing lies above, by level (m). */
+  readonly topLevels?: readonly { readonly level: number; readonly count: number }[];
   /** m2 that each area load of the brief covers, on the slope and in plan. */
   readonly coverage?: readonly { readonly case: string; readonly area: number; readonly planArea: number }[];
 }
