@@ -1,5 +1,6 @@
 import type { Axis } from './axes.ts';
 import type { JoinOptions } from './options.ts';
+import { straightLines } from './straight-lines.ts';
 import { isFreeEnd, type Vertex, type VertexGraph } from './vertices.ts';
 
 /** Slope above which a member that frames in from below and ends free is a column standing on the ground: 60 degrees. */
@@ -15,20 +16,27 @@ export function findCarriers(
   axes: readonly (Axis | null)[],
   options: JoinOptions,
 ): (number | null)[] {
-  const carriers = graph.vertices.map((vertex, index) =>
-    options.chords === 'strict' ? null : carrierOf(vertex, index, graph, axes),
-  );
+  const frame: Frame = { graph, axes, lines: straightLines(graph, axes) };
+  const carriers = graph.vertices.map((_, index) => (options.chords === 'strict' ? null : carrierOf(index, frame)));
   breakCycles(graph, carriers);
   return carriers;
 }
 
-function carrierOf(vertex: Vertex, index: number, graph: VertexGraph, axes: readonly (Axis | null)[]): number | null {
+interface Frame {
+  readonly graph: VertexGraph;
+  readonly axes: readonly (Axis | null)[];
+  /** For each member the vertices of its line. */
+  readonly lines: readonly (readonly number[])[];
+}
+
+function carrierOf(index: number, frame: Frame): number | null {
+  const vertex = frame.graph.vertices[index];
   const through = vertex.stations.filter(({ role }) => role === 'through').map(({ member }) => member);
   if (through.length === 0) return null;
-  if (through.some((member) => isTriangulated(member, index, graph, axes))) return null;
+  if (through.some((member) => isTriangulated(member, index, frame))) return null;
   const supporting = through.filter((member) => !vertex.seated.has(member));
   if (supporting.length === 0) return null;
-  const depth = (member: number) => axes[member]?.depth ?? 0;
+  const depth = (member: number) => frame.axes[member]?.depth ?? 0;
   return supporting.reduce((best, member) => (depth(member) > depth(best) ? member : best));
 }
 
@@ -36,18 +44,18 @@ function carrierOf(vertex: Vertex, index: number, graph: VertexGraph, axes: read
  * Whether some member that frames in at the vertex closes a triangle on `runner`: its far end is tied, by a third
  * member, back to the runner elsewhere. A column that stands on the ground holds its vertex as well.
  */
-function isTriangulated(runner: number, index: number, graph: VertexGraph, axes: readonly (Axis | null)[]): boolean {
+function isTriangulated(runner: number, index: number, { graph, axes, lines }: Frame): boolean {
   const { vertices, chains } = graph;
   const vertex = vertices[index];
-  const onRunner = new Set(chains[runner]);
+  const onRunner = new Set(lines[runner]);
   onRunner.delete(index);
   for (const { member } of vertex.stations) {
     if (member === runner || vertex.seated.has(member)) continue;
     for (const far of neighboursOn(chains[member], index)) {
       if (isFoot(vertices[far], vertex, axes[member])) return true;
       for (const { member: third } of vertices[far].stations) {
-        if (third === member || third === runner) continue;
-        if (chains[third].some((other) => onRunner.has(other))) return true;
+        if (third === member || lines[third] === lines[runner]) continue;
+        if (lines[third].some((other) => onRunner.has(other))) return true;
       }
     }
   }

@@ -116,13 +116,25 @@ function seatedMembers(
       .map(({ cost }) => cost);
     return costs.length === 0 ? Number.POSITIVE_INFINITY : costs.reduce((sum, cost) => sum + cost, 0) / costs.length;
   };
-  return new Set(
-    seats.map(({ a, b, s, t }) => {
-      const [first, second] = [drawnTo(a), drawnTo(b)];
-      if (first !== second) return first > second ? a : b;
-      return heightAt(axes[a], s) > heightAt(axes[b], t) ? a : b;
-    }),
-  );
+  const sitters = seats.map(({ a, b, s, t }) => {
+    const [first, second] = [drawnTo(a), drawnTo(b)];
+    if (first !== second) return first > second ? a : b;
+    return heightAt(axes[a], s) > heightAt(axes[b], t) ? a : b;
+  });
+  const framed = framedIn(group, inside);
+  return new Set(sitters.filter((member) => !framed.has(member)));
+}
+
+/** Members that end on one that runs through: angles back to back on a gusset touch each other, but neither sits. */
+function framedIn(group: readonly Station[], inside: readonly Contact[]): Set<number> {
+  const through = new Set(group.filter(({ role }) => role === 'through').map(({ member }) => member));
+  const framed = new Set<number>();
+  for (const { a, b, kind } of inside) {
+    if (kind !== 'meets') continue;
+    if (through.has(a)) framed.add(b);
+    if (through.has(b)) framed.add(a);
+  }
+  return framed;
 }
 
 const heightAt = (axis: Axis | null, s: number): number => (axis ? axis.start[2] + axis.direction[2] * s : 0);

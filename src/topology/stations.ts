@@ -116,11 +116,13 @@ function withoutPassersBy(
     const s = stationOf(contact, other);
     const axis = axes[other];
     const margin = Math.max(axis?.depth ?? 0, axes[member]?.depth ?? 0) + TOLERANCE.detailingGap;
-    return axis !== null && contact.kind === 'meets' && s > margin && s < axis.length - margin;
+    return axis !== null && s > margin && s < axis.length - margin;
   };
-  const costs = own.filter((index) => runsOn(contacts[index])).map((index) => contacts[index].cost);
-  const least = Math.min(...costs);
-  return own.filter((index) => !runsOn(contacts[index]) || contacts[index].cost <= least + TOLERANCE.leastOffset);
+  const met = own.filter((index) => contacts[index].kind === 'meets' && runsOn(contacts[index]));
+  if (met.length === 0) return [...own];
+  const least = Math.min(...met.map((index) => contacts[index].cost));
+  const isMeant = ({ kind, cost }: Contact) => kind === 'meets' && cost <= least + TOLERANCE.leastOffset;
+  return own.filter((index) => !runsOn(contacts[index]) || isMeant(contacts[index]));
 }
 
 /** What lies on the far side of the chosen end is cut off with the overhang. */

@@ -49,7 +49,8 @@ export function bracingPlan(
     roofCrosses: crosses(shape, shape.topNodes, spacing),
     bottomCrosses,
     gap: chance.between(0.02, most),
-    level: chance.pick([0, 0, 1, -1]) * Math.min(0.06, 0.25 * design.topChord.profile.depth),
+    // With the distance between the two of a cross it stays within 60 mm.
+    level: chance.pick([0, 0, 1, -1]) * Math.min(0.06 - apartIn(profile), 0.25 * design.topChord.profile.depth),
     cutCrossing: !isRod && chance.happens(0.4),
     // Where bottom bracing is, ties stand only at its nodes: elsewhere they would run through it.
     ties: inner.filter((n) => (bottomBays.length === 0 || ends.has(n)) && chance.happens(0.5)).slice(0, 4),
@@ -57,6 +58,11 @@ export function bracingPlan(
     tieGap: chance.between(0.01, 0.06),
     eavesBeams: chance.happens(0.6),
   };
+}
+
+/** Half the distance between two that cross: rods touch, angles lie back to back. */
+function apartIn(profile: Profile): number {
+  return profile.shape === 'circle' ? profile.depth / 2 + 0.001 : profile.heel;
 }
 
 /** Pairs of nodes about as far apart as the frames, so that the diagonals run near 45 degrees. */
@@ -105,11 +111,7 @@ function drawCross(
       : chord.pairGap / 2 + chord.profile.width * (chord.profile.shape === 'L' ? 0.5 : 1);
   const toFace = edge / Math.max(0.3, Math.abs(direction[1]));
   const cut = toFace + plan.gap;
-  const apart = plan.cutCrossing
-    ? 0
-    : plan.profile.shape === 'circle'
-      ? plan.profile.depth / 2 + 0.001
-      : plan.profile.heel;
+  const apart = plan.cutCrossing ? 0 : apartIn(plan.profile);
   const key = `${role === 'roof bracing' ? 'RB' : 'BB'}${bay}-${a}${b}`;
   const shift = (side: number): readonly [Vec3, Vec3] => {
     const off = scale(up, plan.level + side * apart);

@@ -1,4 +1,5 @@
 import { add, along, distance, scale, subtract, UP, type Vec3 } from '../../../src/domain/vector.ts';
+import type { Chance } from './chance.ts';
 import { believableGap } from './design.ts';
 import type { DrawnMember, Role } from './drawing-board.ts';
 import {
@@ -96,18 +97,28 @@ const overlapping: Plant = (_roof, drawn, chance) => {
   return { fault, drawn: [...replaced(drawn, new Map([[one.mark, one]])), other] };
 };
 
+/** A truss, the purlins of a bay with their sag rods, or the bracing of a bay. */
+function partOf(drawn: readonly DrawnMember[], chance: Chance): DrawnMember[] {
+  const frame = chance.whole(0, Math.max(...drawn.map((m) => m.frame ?? 0)));
+  const truss: readonly Role[] = ['top chord', 'bottom chord', 'web'];
+  const bracing: readonly Role[] = ['roof bracing', 'bottom bracing', 'tie'];
+  const purlins = drawn.filter((m) => m.role === 'purlin');
+  switch (chance.whole(0, 2)) {
+    case 0:
+      return drawn.filter((m) => m.frame === frame && truss.includes(m.role));
+    case 1:
+      return drawn.filter((m) => bracing.includes(m.role) && m.mark.slice(2).startsWith(`${frame}-`));
+    default: {
+      if (purlins.length === 0) return [];
+      const [from, to] = chance.pick(purlins).mark.split('-')[1]!;
+      const bays = drawn.filter((m) => m.role === 'sag rod' && m.mark.slice(2) >= from! && m.mark.slice(2) < to!);
+      return [...purlins.filter((m) => m.mark.endsWith(`-${from}${to}`)), ...bays];
+    }
+  }
+}
+
 const movedPart: Plant = (roof, drawn, chance) => {
-  const frames = Math.max(...drawn.map((m) => m.frame ?? 0));
-  const frame = chance.whole(0, frames);
-  const ofTruss: readonly Role[] = ['top chord', 'bottom chord', 'web'];
-  const hasColumns = drawn.some((m) => m.role === 'column');
-  const chosen =
-    chance.happens(0.5) && hasColumns
-      ? (m: DrawnMember) => m.frame === frame && ofTruss.includes(m.role)
-      : chance.happens(0.5)
-        ? (m: DrawnMember) => m.role === 'purlin' || m.role === 'sag rod'
-        : (m: DrawnMember) => ['roof bracing', 'tie', 'bottom bracing'].includes(m.role);
-  const group = drawn.filter(chosen);
+  const group = partOf(drawn, chance);
   if (group.length < 3) return null;
   const by = scale(UP, (chance.happens(0.6) ? 1 : -1) * chance.between(0.5, 0.9));
   const marks = new Set(group.map((m) => m.mark));

@@ -1,7 +1,7 @@
 import { distance } from '../../../src/domain/vector.ts';
 import { chanceOf } from './chance.ts';
 import { PLANTS } from './fault-kinds.ts';
-import { FAULT_KINDS, type Fault } from './fault-tools.ts';
+import { FAULT_KINDS, type Fault, type FaultKind } from './fault-tools.ts';
 import type { Roof } from './random-roof.ts';
 
 export interface FaultyRoof {
@@ -19,7 +19,9 @@ export function plantFaults(roof: Roof, seed: number, count: number): FaultyRoof
   const chance = chanceOf(seed * 31 + 5);
   const faults: Fault[] = [];
   let drawn = roof.drawn;
-  for (const kind of [...chance.shuffled(FAULT_KINDS), ...chance.shuffled(FAULT_KINDS)]) {
+  // A part that is moved off touches much of the roof: it has room only while the roof is sound.
+  const first: readonly FaultKind[] = chance.happens(0.6) ? ['moved part'] : [];
+  for (const kind of [...first, ...chance.shuffled(FAULT_KINDS), ...chance.shuffled(FAULT_KINDS)]) {
     if (faults.length >= count) break;
     for (let attempt = 0; attempt < TRIES; attempt++) {
       const planted = PLANTS[kind](roof, drawn, chance);

@@ -146,8 +146,10 @@ function seatOf(plan: PurlinPlan, row: PurlinRow, shape: TrussShape, design: Des
   const isRidge = chords.length > 1 && shape.kind !== 'bowstring';
   const up = isRidge ? ([0, 0, 1] as const) : upright(slope);
   const part = partFor(design, row.run);
-  const face = faceTowards(part.profile, zAxisOf(row.run, part, slope), up);
-  const size = plan.style === 'flush' ? face - plan.profile.depth / 2 : face + plan.lift + plan.profile.heel;
+  const face = faceTowards(part.profile, zAxisOf(row.run, part, slope), upright(slope));
+  // On a ridge the purlin stands on the edge where the two chords' upper faces meet.
+  const top = isRidge ? face / Math.abs(slope[0]) : face;
+  const size = plan.style === 'flush' ? top - plan.profile.depth / 2 : top + plan.lift + plan.profile.heel;
   return { lift: scale(up, size), zAxis: up, slope, aside: isRidge ? 0 : plan.cleatShift };
 }
 

@@ -65,7 +65,7 @@ const spelling = ({ code, members, at }: Finding): string =>
   [code, [...members].sort().join(' '), at?.map((x) => x.toFixed(2)).join(' ')].join('|');
 
 /** What a sound roof may rightly be told: tails in the air, crossings left apart, carried nodes, pairs. */
-function isRight(finding: Finding, roof: Roof): boolean {
+export function isRight(finding: Finding, roof: Roof): boolean {
   if (finding.severity === 'note') return true;
   const free = [...roof.joints.values()].filter((joint) => joint.free);
   const names = (mark: string | undefined) => mark !== undefined && finding.members.includes(mark);

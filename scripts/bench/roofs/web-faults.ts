@@ -65,7 +65,12 @@ function offToOneSide(
   if (!isClear(stop, drawn, isOther)) return null;
   if (past && distanceToAxis(stop, partner) < CLEAR) return null;
   return {
-    fault: { kind, codes, marks: [...changed.keys()], places: [meeting, joint.at] },
+    fault: {
+      kind,
+      codes,
+      marks: [...changed.keys(), ...drawn.filter((m) => m.line === partner.line).map((m) => m.mark)],
+      places: [meeting, joint.at],
+    },
     drawn: replaced(drawn, changed),
   };
 }
