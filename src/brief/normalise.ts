@@ -1,6 +1,7 @@
 import { DEFAULT_BRIEF } from './default-brief.ts';
-import type { WrittenBrief, WrittenMemberSelector, WrittenNodeSelector } from './schema.ts';
+import type { WrittenBrief } from './schema.ts';
 import type { Brief, CaseRule, CombinationRule, LoadRule, MemberSelector, NodeSelector, SupportRule } from './types.ts';
+import type { WrittenMemberSelector, WrittenNodeSelector } from './written-selectors.ts';
 import type { Path } from './written-source.ts';
 
 type LineAt = (path: Path) => number;
