@@ -44,7 +44,7 @@ export function expectedTruss(model: HallModel): ExpectedTruss {
 
 function barsOf(part: Part): ExpectedBar[] {
   return part.through.slice(1).map((to, k) => {
-    const from = part.through[k]!;
+    const from = part.through[k];
     return {
       part: part.name,
       kind: part.kind,

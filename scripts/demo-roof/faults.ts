@@ -97,11 +97,11 @@ function partNamed(model: HallModel, name: string): Part {
 
 /** The lower end drawn back; what is left no longer passes through its lower work point. */
 function shortened(part: Part): Part {
-  const foot = part.through[1]!;
+  const foot = part.through[1];
   const [upper] = part.axis;
   const reached = distance(upper, foot.at) - SHORT_WEB.stopsShortBy;
   const end = along(upper, directionOf(upper, foot.at), reached);
-  return { ...part, axis: [upper, end], through: [part.through[0]!, { name: `${part.name} stray end`, at: end }] };
+  return { ...part, axis: [upper, end], through: [part.through[0], { name: `${part.name} stray end`, at: end }] };
 }
 
 function loneMember(): Part {
@@ -128,7 +128,7 @@ function canopyPoint(y: number, corner: CanopyCorner): WorkPoint {
 function canopy(): Part[] {
   const half = halfExtents(CANOPY_SECTION).width;
   const piece = (name: string, from: WorkPoint, to: WorkPoint, cut: readonly [number, number]) =>
-    span({ name: `CAN-${name}`, mark: name[0]!, kind: 'canopy frame', section: CANOPY_SECTION }, from, to, cut);
+    span({ name: `CAN-${name}`, mark: name[0], kind: 'canopy frame', section: CANOPY_SECTION }, from, to, cut);
   const frames = CANOPY_FRAMES.flatMap((y, k) => {
     const [lower, upper, tip] = [canopyPoint(y, 'lower'), canopyPoint(y, 'upper'), canopyPoint(y, 'tip')];
     const strut = directionOf(lower.at, tip.at);

@@ -65,7 +65,7 @@ export function purlins(): Part[] {
       const mark = last - first === 1 ? 'P1' : 'P2';
       const label = { name: `P${i}-${first}${last}`, mark, kind: 'purlin', section: PURLIN, zAxis } as const;
       const ends = [first === 1 ? -VERGE : PURLIN_GAP, last === HALL.trusses ? -VERGE : PURLIN_GAP] as const;
-      const atChordLevel = span(label, seats[0]!, seats.at(-1)!, ends, seats.slice(1, -1));
+      const atChordLevel = span(label, seats[0], seats.at(-1)!, ends, seats.slice(1, -1));
       const [from, to] = atChordLevel.axis;
       return { ...atChordLevel, axis: [along(from, lift, 1), along(to, lift, 1)] as const };
     }),

@@ -53,7 +53,7 @@ function chord(
   points: readonly WorkPoint[],
   overhang: number,
 ): Part {
-  const first = points[0]!;
+  const first = points[0];
   const last = points.at(-1)!;
   const zAxis = uprightOn(directionOf(first.at, last.at));
   const mark = `${position}-${section.replace(' ', '')}`;

@@ -110,7 +110,7 @@ export function splitQuantity(text: string, expected: QuantityKind): WrittenQuan
   if (match === null) throw new QuantityError(text, expected, 'this does not begin with a number');
   const value = Number(match[1]);
   if (!Number.isFinite(value)) throw new QuantityError(text, expected, 'the number is too large');
-  const unit = match[2]!.trim();
+  const unit = match[2].trim();
   if (/^[,']\d/u.test(unit)) throw new QuantityError(text, expected, 'write numbers with a decimal point');
   return { value, unit };
 }
@@ -138,8 +138,8 @@ function readUnit(text: string, unit: string, expected: QuantityKind): { size: n
   let powers = NONE;
   const parts = unit.split(/([/*·])/u);
   for (let i = 0; i < parts.length; i += 2) {
-    const match = /^([A-Za-z]+)\^?([1-4²³])?$/u.exec(parts[i]!.trim());
-    const name = match?.[1] ?? parts[i]!.trim();
+    const match = /^([A-Za-z]+)\^?([1-4²³])?$/u.exec(parts[i].trim());
+    const name = match?.[1] ?? parts[i].trim();
     const known = Object.hasOwn(UNITS, name) ? UNITS[name] : undefined;
     if (match === null || known === undefined) {
       throw new QuantityError(
@@ -152,7 +152,7 @@ function readUnit(text: string, unit: string, expected: QuantityKind): { size: n
     const sign = i > 0 && parts[i - 1] === '/' ? -1 : 1;
     const power = sign * exponent(match[2]);
     size *= known.size ** power;
-    powers = powers.map((p, k) => p + power * known.powers[k]!) as unknown as Powers;
+    powers = powers.map((p, k) => p + power * known.powers[k]) as unknown as Powers;
   }
   return { size, powers };
 }

@@ -30,11 +30,11 @@ describe.skipIf(!hasScipy)('against an independent linear solver (python3 with s
     let compared = 0;
     stable.forEach(({ truss, supports, cases }, i) => {
       // The reference has no digits to compare where its own system is nearly singular.
-      if (answers[i]!.condition > 1e6) return;
+      if (answers[i].condition > 1e6) return;
       compared++;
       const solved = solveCases(truss, supports, assessStability(truss, supports), cases).cases;
       solved.forEach((one, c) => {
-        const wanted = answers[i]!.cases[c]!;
+        const wanted = answers[i].cases[c];
         expect(one.refused).toBeNull();
         expect(one.residual!).toBeLessThan(1e-12);
         expect(difference(one.axialForce as number[], wanted.axial, 1), `truss ${i}`).toBeLessThan(1e-9);
@@ -70,5 +70,5 @@ function asInput({ truss, supports, cases }: RandomTruss) {
 /** `least` stands for the size of what comes to nothing (loads that go straight into supports). */
 function difference(got: readonly number[], wanted: readonly number[], least: number): number {
   const scale = Math.max(least, ...wanted.map(Math.abs));
-  return Math.max(...got.map((v, i) => Math.abs(v - wanted[i]!))) / scale;
+  return Math.max(...got.map((v, i) => Math.abs(v - wanted[i]))) / scale;
 }

@@ -7,7 +7,7 @@ import { alsoFlat, caseOf, fix, type Sketch, trussOf } from '../statics/support/
 
 function solve(sketch: Sketch, supports: Supports, loads: readonly NodalForce[]): SolvedCase {
   const truss = trussOf(sketch);
-  return solveCases(truss, supports, assessStability(truss, supports), [caseOf(loads)]).cases[0]!;
+  return solveCases(truss, supports, assessStability(truss, supports), [caseOf(loads)]).cases[0];
 }
 
 describe('closed-form trusses', () => {
@@ -54,12 +54,12 @@ describe('closed-form trusses', () => {
     const shear = (i: number) => reaction - load * i;
     const sine = height / Math.hypot(panel, height);
     [0, 1, 2].forEach((i) => {
-      expect(solved.axialForce[top[i]!]).toBeCloseTo(-moment(i + 1) / height, 5);
-      expect(solved.axialForce[bottom[i]!]).toBeCloseTo(moment(i) / height, 5);
-      expect(solved.axialForce[diagonal[i]!]).toBeCloseTo(shear(i) / sine, 5);
-      expect(solved.axialForce[post[i]!]).toBeCloseTo(-shear(i), 5);
+      expect(solved.axialForce[top[i]]).toBeCloseTo(-moment(i + 1) / height, 5);
+      expect(solved.axialForce[bottom[i]]).toBeCloseTo(moment(i) / height, 5);
+      expect(solved.axialForce[diagonal[i]]).toBeCloseTo(shear(i) / sine, 5);
+      expect(solved.axialForce[post[i]]).toBeCloseTo(-shear(i), 5);
     });
-    expect(solved.axialForce[post[3]!]).toBeCloseTo(0, 5);
+    expect(solved.axialForce[post[3]]).toBeCloseTo(0, 5);
   });
 
   // Source: symmetry and vertical balance by hand: N = -P L / (n h).
@@ -106,7 +106,7 @@ describe('benchmark trusses of the optimisation literature', () => {
     expect(weight(points, bars, areas)).toBeCloseTo(5061, -1);
     expect(largestMove(solved) / INCH).toBeCloseTo(2, 2);
     for (const [b, force] of solved.axialForce.entries())
-      expect(Math.abs(force!) / (areas[b]! * INCH ** 2) / PSI).toBeLessThan(25_100);
+      expect(Math.abs(force!) / (areas[b] * INCH ** 2) / PSI).toBeLessThan(25_100);
   });
 
   // Source, from memory: the 25-bar transmission tower (Schmit & Farshi 1974), two load cases, displacements of the two top nodes limited to 0.35 in;
@@ -129,7 +129,7 @@ describe('benchmark trusses of the optimisation literature', () => {
     );
     const groups = [1, 4, 4, 2, 2, 4, 4, 4];
     const group = [0.01, 1.987, 2.991, 0.01, 0.012, 0.683, 1.679, 2.664];
-    const areas = groups.flatMap((size, g) => new Array<number>(size).fill(group[g]!));
+    const areas = groups.flatMap((size, g) => new Array<number>(size).fill(group[g]));
     const cases: NodalForce[][] = [
       pounds({ 0: [0, 20e3, -5e3], 1: [0, -20e3, -5e3] }),
       pounds({ 0: [1e3, 10e3, -5e3], 1: [0, 10e3, -5e3], 2: [500, 0, 0], 5: [500, 0, 0] }),
@@ -230,7 +230,7 @@ function weight(
   bars: readonly (readonly [number, number])[],
   areas: readonly number[],
 ): number {
-  return bars.reduce((sum, [a, b], i) => sum + (0.1 * areas[i]! * between(points[a]!, points[b]!)) / INCH, 0);
+  return bars.reduce((sum, [a, b], i) => sum + (0.1 * areas[i] * between(points[a], points[b])) / INCH, 0);
 }
 
 function between(p: Vec3, q: Vec3): number {
@@ -265,6 +265,6 @@ const CUBE: Vec3[] = [-1, 1].flatMap((x) => [-1, 1].flatMap((y) => [-1, 1].map((
 function nearestPairs(points: readonly Vec3[]): [number, number][] {
   const pairs: [number, number][] = [];
   for (let a = 0; a < points.length; a++) for (let b = a + 1; b < points.length; b++) pairs.push([a, b]);
-  const least = Math.min(...pairs.map(([a, b]) => between(points[a]!, points[b]!)));
-  return pairs.filter(([a, b]) => between(points[a]!, points[b]!) < least * 1.01);
+  const least = Math.min(...pairs.map(([a, b]) => between(points[a], points[b])));
+  return pairs.filter(([a, b]) => between(points[a], points[b]) < least * 1.01);
 }

@@ -150,7 +150,7 @@ const someBar = fc
 function gapBetween({ centre, axes, halfSizes }: Plate, { start, finish }: EvidenceAxis): number {
   const gapAt = (t: number): number => {
     const away = subtract(along(start, subtract(finish, start), t), centre);
-    return Math.hypot(...axes.map((axis, k) => Math.max(0, Math.abs(dot(away, axis)) - halfSizes[k]!)));
+    return Math.hypot(...axes.map((axis, k) => Math.max(0, Math.abs(dot(away, axis)) - halfSizes[k])));
   };
   let [low, high] = [0, 1];
   for (let i = 0; i < 100; i++) {
@@ -237,7 +237,7 @@ describe('the gusset plates of the demo roof', () => {
       for (const [a, b, words] of pairsOf(pairs, members.length)) {
         for (const word of words) {
           const names = touched.get(word) ?? new Set();
-          touched.set(word, names.add(members[a]!.name).add(members[b]!.name));
+          touched.set(word, names.add(members[a].name).add(members[b].name));
         }
       }
       for (const gussetPlate of hall.plates) {

@@ -71,10 +71,10 @@ function crosses(shape: TrussShape, nodes: readonly string[], spacing: number): 
   const found: [string, string][] = [];
   let start = 0;
   for (let i = 1; i < nodes.length; i++) {
-    const reach = x(nodes[i]!) - x(nodes[start]!);
-    const isRidge = shape.runs.filter((r) => r.role === 'top chord' && r.nodes.includes(nodes[i]!)).length > 1;
+    const reach = x(nodes[i]) - x(nodes[start]);
+    const isRidge = shape.runs.filter((r) => r.role === 'top chord' && r.nodes.includes(nodes[i])).length > 1;
     if (reach < 0.8 * spacing && !isRidge && i < nodes.length - 1) continue;
-    if (reach > 0.3 * spacing) found.push([nodes[start]!, nodes[i]!]);
+    if (reach > 0.3 * spacing) found.push([nodes[start], nodes[i]]);
     start = i;
   }
   return found;

@@ -24,13 +24,13 @@ export function chanceOf(seed: number): Chance {
   return {
     between,
     whole,
-    pick: (choices) => choices[whole(0, choices.length - 1)]!,
+    pick: (choices) => choices[whole(0, choices.length - 1)],
     happens: (probability) => next() < probability,
     shuffled: (list) => {
       const result = [...list];
       for (let i = result.length - 1; i > 0; i--) {
         const j = whole(0, i);
-        [result[i], result[j]] = [result[j]!, result[i]!];
+        [result[i], result[j]] = [result[j], result[i]];
       }
       return result;
     },

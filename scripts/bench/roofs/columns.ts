@@ -39,8 +39,8 @@ function drawColumn(board: DrawingBoard, plan: FramePlan, side: 0 | 1): void {
 
 /** From a chord's axis down to its lower face. */
 function underside(board: DrawingBoard, { design, index }: FramePlan, run: Run): number {
-  const ends = [run.nodes.at(-1)!, run.nodes[0]!].map((node) => board.at(nodeKey(index, node)));
-  const direction = unit(subtract(ends[0]!, ends[1]!))!;
+  const ends = [run.nodes.at(-1)!, run.nodes[0]].map((node) => board.at(nodeKey(index, node)));
+  const direction = unit(subtract(ends[0], ends[1]))!;
   const part = partFor(design, run);
   return faceDistance({ direction, profile: part.profile, zAxis: zAxisOf(run, part, direction) }, [0, 0, -1]);
 }

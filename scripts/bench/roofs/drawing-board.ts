@@ -100,7 +100,7 @@ export class DrawingBoard {
   }
 
   draw(stroke: Stroke): void {
-    const start = this.at(stroke.joints[0]!);
+    const start = this.at(stroke.joints[0]);
     const end = this.at(stroke.joints.at(-1)!);
     const direction = unit(subtract(end, start))!;
     const length = distance(start, end);
@@ -109,7 +109,7 @@ export class DrawingBoard {
     const [shiftStart, shiftEnd] = stroke.shifts ?? [NOWHERE, NOWHERE];
     const halfGap = (stroke.spliceGap ?? 0) / 2;
     for (let i = 0; i + 1 < bounds.length; i++) {
-      const [from, to] = [bounds[i]!, bounds[i + 1]!];
+      const [from, to] = [bounds[i], bounds[i + 1]];
       const drawnFrom = i === 0 ? stroke.cuts[0] : from + halfGap;
       const drawnTo = i + 2 === bounds.length ? length - stroke.cuts[1] : to - halfGap;
       const point = (s: number): Vec3 => {

@@ -31,7 +31,7 @@ const shortEnd: Plant = (roof, drawn, chance) => {
   const changed = changeEnds(members, (m) => lengthened(m, end, -by));
   const tips = [...changed.values()].map((m) => tip(m, end));
   if (!tips.every((p) => isClear(p, drawn, (m) => m.line === member.line))) return null;
-  const fault = { kind: 'short end', codes: LOST, marks: [...changed.keys()], places: [joint.at, tips[0]!] } as const;
+  const fault = { kind: 'short end', codes: LOST, marks: [...changed.keys()], places: [joint.at, tips[0]] } as const;
   return { fault, drawn: replaced(drawn, changed) };
 };
 
@@ -44,7 +44,7 @@ const overshoot: Plant = (roof, drawn, chance) => {
   const tips = [...changed.values()].map((m) => tip(m, end));
   if (!tips.every((p) => isClear(p, drawn, (m) => m.line === member.line))) return null;
   const codes = ['loose-end', 'near-miss', 'crossing-apart'] as const;
-  const fault = { kind: 'overshoot', codes, marks: [...changed.keys()], places: [joint.at, tips[0]!] } as const;
+  const fault = { kind: 'overshoot', codes, marks: [...changed.keys()], places: [joint.at, tips[0]] } as const;
   return { fault, drawn: replaced(drawn, changed) };
 };
 
@@ -110,7 +110,7 @@ function partOf(drawn: readonly DrawnMember[], chance: Chance): DrawnMember[] {
       return drawn.filter((m) => bracing.includes(m.role) && m.mark.slice(2).startsWith(`${frame}-`));
     default: {
       if (purlins.length === 0) return [];
-      const [from, to] = chance.pick(purlins).mark.split('-')[1]!;
+      const [from, to] = chance.pick(purlins).mark.split('-')[1];
       const bays = drawn.filter((m) => m.role === 'sag rod' && m.mark.slice(2) >= from! && m.mark.slice(2) < to!);
       return [...purlins.filter((m) => m.mark.endsWith(`-${from}${to}`)), ...bays];
     }

@@ -56,7 +56,7 @@ export function frameDetail(chance: Chance, shape: TrussShape): FrameDetail {
 }
 
 const lengthOf = (shape: TrussShape, run: Run): number => {
-  const [a, b] = [shape.nodes.get(run.nodes[0]!)!, shape.nodes.get(run.nodes.at(-1)!)!];
+  const [a, b] = [shape.nodes.get(run.nodes[0])!, shape.nodes.get(run.nodes.at(-1)!)!];
   return Math.hypot(b[0] - a[0], b[1] - a[1]);
 };
 

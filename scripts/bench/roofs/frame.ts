@@ -41,13 +41,13 @@ export class FrameDrawing {
   }
 
   #pointOn(run: Run, x: number): Vec3 {
-    const [a, b] = [this.#at(run.nodes[0]!), this.#at(run.nodes.at(-1)!)];
+    const [a, b] = [this.#at(run.nodes[0]), this.#at(run.nodes.at(-1)!)];
     const t = (x - a[0]) / (b[0] - a[0]);
     return [x, a[1], a[2] + t * (b[2] - a[2])];
   }
 
   #directionOf(run: Run): Vec3 {
-    return unit(subtract(this.#at(run.nodes.at(-1)!), this.#at(run.nodes[0]!)))!;
+    return unit(subtract(this.#at(run.nodes.at(-1)!), this.#at(run.nodes[0])))!;
   }
 
   #drawRun(run: Run): void {
@@ -56,21 +56,21 @@ export class FrameDrawing {
     const direction = this.#directionOf(run);
     const isChord = run.role !== 'web';
     const names = [...run.nodes, ...(extra.get(run.key) ?? []).map((stop) => stop.name)];
-    const start = this.#at(run.nodes[0]!);
+    const start = this.#at(run.nodes[0]);
     names.sort((a, b) => norm(subtract(this.#at(a), start)) - norm(subtract(this.#at(b), start)));
-    const ends = [run.nodes[0]!, run.nodes.at(-1)!] as const;
+    const ends = [run.nodes[0], run.nodes.at(-1)!] as const;
     const cuts = isChord
       ? ends.map((name, end) => this.#chordCut(run, name, end))
       : ends.map((name, end) => this.#webCut(run, name, end === 0 ? direction : scale(direction, -1)));
     const length = norm(subtract(this.#at(ends[1]), start));
-    const total = Math.max(0, cuts[0]!) + Math.max(0, cuts[1]!);
+    const total = Math.max(0, cuts[0]) + Math.max(0, cuts[1]);
     const shrink = isChord ? 1 : Math.min(1, (0.6 * length) / Math.max(total, 1e-9));
     const joints = names.map((name) => this.#key(name));
     for (const [end, cut] of cuts.entries()) {
       if (!isChord || cut > -0.45) continue;
-      const free = `${this.#key(ends[end]!)}/${run.key}/free`;
+      const free = `${this.#key(ends[end])}/${run.key}/free`;
       const outward = end === 0 ? scale(direction, -1) : direction;
-      this.#board.joint(free, along(this.#at(ends[end]!), outward, -cut), { free: true });
+      this.#board.joint(free, along(this.#at(ends[end]), outward, -cut), { free: true });
       if (end === 0) joints.unshift(free);
       else joints.push(free);
       cuts[end] = 0;
@@ -83,9 +83,9 @@ export class FrameDrawing {
       zAxis: zAxisOf(run, part, direction),
       frame: index,
       joints,
-      cuts: [cuts[0]! * shrink, cuts[1]! * shrink],
+      cuts: [cuts[0] * shrink, cuts[1] * shrink],
       shifts: isChord ? [NOWHERE, NOWHERE] : [this.#webShift(run, ends[0]), this.#webShift(run, ends[1])],
-      splices: this.#splices(run, norm(subtract(this.#board.at(joints[0]!), start))),
+      splices: this.#splices(run, norm(subtract(this.#board.at(joints[0]), start))),
       spliceGap: this.#plan.detail.spliceGap,
       pair: offset,
       opens: scale(ACROSS, isPost(run) ? -1 : 1),
@@ -94,7 +94,7 @@ export class FrameDrawing {
 
   #splices(run: Run, ahead: number): number[] {
     const { detail, extra } = this.#plan;
-    const start = this.#at(run.nodes[0]!);
+    const start = this.#at(run.nodes[0]);
     const distanceTo = (name: string) => norm(subtract(this.#at(name), start));
     const length = distanceTo(run.nodes.at(-1)!);
     return detail.splices
@@ -108,7 +108,7 @@ export class FrameDrawing {
         if (atPanelPoint)
           return panels.reduce((best, s) => (Math.abs(s - wanted) < Math.abs(best - wanted) ? s : best));
         const after = stops.findIndex((s) => s > wanted);
-        return (stops[after - 1]! + stops[after]!) / 2;
+        return (stops[after - 1] + stops[after]) / 2;
       })
       .filter((s) => s > 1 && s < length - 1)
       .map((s) => s + ahead);
@@ -122,7 +122,7 @@ export class FrameDrawing {
     const through = shape.runs.filter((r) => r.role !== 'web' && r.nodes.includes(name));
     const isEnd = through.some((r) => r.nodes[0] === name || r.nodes.at(-1) === name);
     if (through.length !== 1 || isEnd) return aside;
-    const host = through[0]!;
+    const host = through[0];
     const outward = scale(upright(this.#directionOf(host)), host.role === 'top chord' ? 1 : -1);
     const size = Math.min(0.06, Math.abs(design.eccentricity) * partFor(design, host).profile.depth);
     const [x, y, z] = scale(outward, Math.sign(design.eccentricity) * size);

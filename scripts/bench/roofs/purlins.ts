@@ -44,7 +44,7 @@ export function purlinPlan(chance: Chance, shape: TrussShape, design: Design, sp
   const chord = design.topChord;
   const bearingWidth = (chord.turned ? chord.profile.depth : chord.profile.width) * (chord.pairGap === null ? 1 : 2);
   const rows = purlinRows(chance, shape, Math.max(0.4, 2.2 * (chord.profile.depth + profile.depth) * 0.5));
-  const slope = shape.nodes.get(shape.topNodes[1]!)![1] - shape.nodes.get(shape.topNodes[0]!)![1];
+  const slope = shape.nodes.get(shape.topNodes[1])![1] - shape.nodes.get(shape.topNodes[0])![1];
   return {
     style,
     profile,
@@ -65,7 +65,7 @@ function purlinRows(chance: Chance, shape: TrussShape, clear: number): PurlinRow
   const chords = shape.runs.filter((run) => run.role === 'top chord');
   const x = (name: string) => shape.nodes.get(name)![0];
   const runOf = (at: number) =>
-    chords.find((run) => x(run.nodes[0]!) <= at + 1e-9 && at <= x(run.nodes.at(-1)!) + 1e-9)!;
+    chords.find((run) => x(run.nodes[0]) <= at + 1e-9 && at <= x(run.nodes.at(-1)!) + 1e-9)!;
   const skipsEaves = shape.bearing === 'beside' || chance.happens(0.5);
   const inner = shape.topNodes.slice(skipsEaves ? 1 : 0, skipsEaves ? -1 : undefined);
   const rows = inner.map((node) => ({ node, run: runOf(x(node)), x: x(node) }));
@@ -74,7 +74,7 @@ function purlinRows(chance: Chance, shape: TrussShape, clear: number): PurlinRow
   const hasMore = chance.happens(0.5);
   const target = chance.between(1.2, 2.4);
   for (let i = 0; hasMore && i + 1 < shape.topNodes.length; i++) {
-    const [a, b] = [x(shape.topNodes[i]!), x(shape.topNodes[i + 1]!)];
+    const [a, b] = [x(shape.topNodes[i]), x(shape.topNodes[i + 1])];
     const between = Math.min(3, Math.round((b - a) / target) - 1);
     const taken = rows.filter((row) => row.x > a && row.x < b);
     for (let k = 1; k <= between; k++) {
@@ -90,7 +90,7 @@ function purlinRows(chance: Chance, shape: TrussShape, clear: number): PurlinRow
 function doubleRidge(rows: PurlinRow[], ridge: string, chords: readonly Run[], clear: number): void {
   const index = rows.findIndex((row) => row.node === ridge);
   const [left, right] = chords as [Run, Run];
-  const { x } = rows[index]!;
+  const { x } = rows[index];
   rows.splice(index, 1, { node: 'pL', run: left, x: x - clear }, { node: 'pR', run: right, x: x + clear });
 }
 
@@ -120,11 +120,11 @@ export function drawPurlins(
         const middle = scale(add(board.at(nodeKey(bay, row.node)), board.at(nodeKey(bay + 1, row.node))), 0.5);
         const bounds = boundsOf(plan, r, frames);
         const run = bounds.findLastIndex((bound) => bound <= bay);
-        board.joint(sagKey(r, bay), add(middle, axisShift(plan, seats[r]!, run)));
+        board.joint(sagKey(r, bay), add(middle, axisShift(plan, seats[r], run)));
       }
     }
   }
-  for (const [r, row] of plan.rows.entries()) drawRow(board, plan, r, row, seats[r]!, design, frames);
+  for (const [r, row] of plan.rows.entries()) drawRow(board, plan, r, row, seats[r], design, frames);
   if (plan.sagRods) drawSagRods(board, plan, frames);
 }
 
@@ -140,7 +140,7 @@ interface Seat {
 
 /** Purlins stand square to the roof on the chord's upper face; flush ones have their top at the chord's top. */
 function seatOf(plan: PurlinPlan, row: PurlinRow, shape: TrussShape, design: Design): Seat {
-  const [a, b] = [row.run.nodes[0]!, row.run.nodes.at(-1)!].map((n) => shape.nodes.get(n)!);
+  const [a, b] = [row.run.nodes[0], row.run.nodes.at(-1)!].map((n) => shape.nodes.get(n)!);
   const slope = unit([b![0] - a![0], 0, b![1] - a![1]])!;
   const chords = shape.runs.filter((run) => run.role === 'top chord' && run.nodes.includes(row.node));
   const isRidge = chords.length > 1 && shape.kind !== 'bowstring';
@@ -182,7 +182,7 @@ function drawRow(
   const chord = design.topChord;
   const half = (chord.turned ? chord.profile.depth : chord.profile.width) / 2 + (chord.pairGap ?? 0) + 0.01;
   for (let i = 0; i + 1 < bounds.length; i++) {
-    const [from, to] = [bounds[i]!, bounds[i + 1]!];
+    const [from, to] = [bounds[i], bounds[i + 1]];
     const joints: string[] = [];
     for (let f = from; f <= to; f++) {
       joints.push(nodeKey(f, row.node));
@@ -232,7 +232,7 @@ function drawBetween(
     frame: null,
     joints,
     cuts,
-    shifts: [off(joints[0]!), off(joints.at(-1)!)],
+    shifts: [off(joints[0]), off(joints.at(-1)!)],
     seated: plan.style === 'seated',
     opens: slope,
   });
@@ -246,7 +246,7 @@ function drawSagRods(board: DrawingBoard, plan: PurlinPlan, frames: number): voi
       board.draw({
         key: `SR${bay}-${r}`,
         role: 'sag rod',
-        profile: SAG_RODS[0]!,
+        profile: SAG_RODS[0],
         zAxis: [0, 1, 0],
         frame: null,
         joints: [sagKey(r, bay), sagKey(r + 1, bay)],

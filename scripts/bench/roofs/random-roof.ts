@@ -30,7 +30,7 @@ export interface Roof {
 /** The roof of this seed: the same on every machine. */
 export function randomRoof(seed: number): Roof {
   const chance = chanceOf(seed);
-  const kind = TRUSS_KINDS[seed % TRUSS_KINDS.length]!;
+  const kind = TRUSS_KINDS[seed % TRUSS_KINDS.length];
   const shape = trussShape(chance, kind);
   const design = randomDesign(chance, kind, shape.span);
   const frames = chance.whole(2, 6);

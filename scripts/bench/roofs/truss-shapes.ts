@@ -158,8 +158,8 @@ function splitTop(nodes: readonly string[], segment: number, ridge: number | nul
     if (i === 0 || i === nodes.length - 1) return false;
     return segment > 0 ? at(n) % segment === 0 : at(n) === ridge;
   });
-  const bounds = [nodes[0]!, ...breaks, nodes.at(-1)!];
-  return bounds.slice(1).map((end, i) => nodes.slice(nodes.indexOf(bounds[i]!), nodes.indexOf(end) + 1));
+  const bounds = [nodes[0], ...breaks, nodes.at(-1)!];
+  return bounds.slice(1).map((end, i) => nodes.slice(nodes.indexOf(bounds[i]), nodes.indexOf(end) + 1));
 }
 
 type Pattern =

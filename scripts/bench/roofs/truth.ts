@@ -66,7 +66,7 @@ function runsThrough(line: TrueLine, joint: string): boolean {
 function barsOf(line: TrueLine, carriers: ReadonlyMap<string, string | null>): TrueBar[] {
   const splits = line.stops.filter(({ joint }) => carriers.has(joint) && carriers.get(joint) !== line.key);
   return splits.slice(1).map((end, i) => {
-    const start = splits[i]!;
+    const start = splits[i];
     const marks = line.pieces.filter((p) => p.from < end.at - 1e-6 && p.to > start.at + 1e-6).map((p) => p.mark);
     return { nodes: [start.joint, end.joint], marks: marks.sort() };
   });
@@ -83,7 +83,7 @@ export interface Difference {
 /** Differences of sets of members per node, of what is carried, and of bars between equal nodes. */
 export function differences(roof: Roof, members: readonly Member[], truss: Truss): Difference[] {
   const truth = truthOf(roof);
-  const marksOf = (list: readonly number[]) => list.map((m) => members[m]!.globalId).sort();
+  const marksOf = (list: readonly number[]) => list.map((m) => members[m].globalId).sort();
   const found: Difference[] = [];
   const left = new Map<string, number[]>();
   for (const [i, node] of truss.nodes.entries()) {
@@ -99,7 +99,7 @@ export function differences(roof: Roof, members: readonly Member[], truss: Truss
     );
     if (nearest === null || apart(truss, nearest, node.at) > 1) {
       const near = truss.nodes.map((_, i) => i).filter((i) => apart(truss, i, node.at) < 0.5);
-      const there = near.map((i) => `{${marksOf(truss.nodes[i]!.members).join(' ')}}`).join(' ');
+      const there = near.map((i) => `{${marksOf(truss.nodes[i].members).join(' ')}}`).join(' ');
       found.push({
         kind: 'node missing',
         at: node.at,
@@ -110,7 +110,7 @@ export function differences(roof: Roof, members: readonly Member[], truss: Truss
     }
     same.splice(same.indexOf(nearest), 1);
     nameOf.set(nearest, node.key);
-    const isCarried = truss.nodes[nearest]!.carriedBy !== null;
+    const isCarried = truss.nodes[nearest].carriedBy !== null;
     if (isCarried === (node.carriedBy !== null)) continue;
     const words = (carried: boolean) => (carried ? 'carried' : 'split');
     found.push({
@@ -121,13 +121,13 @@ export function differences(roof: Roof, members: readonly Member[], truss: Truss
     });
   }
   for (const i of [...left.values()].flat()) {
-    const node = truss.nodes[i]!;
+    const node = truss.nodes[i];
     found.push({ kind: 'node too many', at: node.at, expected: '', found: `{${marksOf(node.members).join(' ')}}` });
   }
   return [...found, ...barDifferences(truth, truss, nameOf, marksOf)];
 }
 
-const apart = (truss: Truss, node: number, at: Vec3): number => distance(truss.nodes[node]!.at, at);
+const apart = (truss: Truss, node: number, at: Vec3): number => distance(truss.nodes[node].at, at);
 
 function barDifferences(
   truth: Truth,
@@ -144,7 +144,7 @@ function barDifferences(
     const name = (i: number) => nameOf.get(i) ?? `?${i}`;
     const key = keyOf([name(bar.from), name(bar.to)], marksOf(bar.members));
     if (expected.delete(key)) continue;
-    found.push({ kind: 'bar too many', at: truss.nodes[bar.from]!.at, expected: '', found: key });
+    found.push({ kind: 'bar too many', at: truss.nodes[bar.from].at, expected: '', found: key });
   }
   for (const [key, at] of expected) found.push({ kind: 'bar missing', at, expected: key, found: '' });
   return found;

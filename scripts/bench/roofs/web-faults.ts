@@ -77,7 +77,7 @@ function offToOneSide(
 
 const endsAt = (roof: Roof, m: DrawnMember, joint: string): boolean => {
   const { stops } = lineOf(roof, m);
-  return stops[0]!.joint === joint || stops.at(-1)!.joint === joint;
+  return stops[0].joint === joint || stops.at(-1)!.joint === joint;
 };
 
 const endShifted = (m: DrawnMember, end: 0 | 1, by: Vec3): DrawnMember =>

@@ -9,7 +9,7 @@ export function barRuns(truss: Truss): readonly (readonly number[])[] {
     if (nodes === undefined) carried.set(carriedBy.bar, [node]);
     else nodes.push(node);
   });
-  const fraction = (node: number): number => truss.nodes[node]!.carriedBy?.t ?? 0;
+  const fraction = (node: number): number => truss.nodes[node].carriedBy?.t ?? 0;
   return truss.bars.map(({ from, to }, bar) => {
     const between = (carried.get(bar) ?? []).toSorted((a, b) => fraction(a) - fraction(b));
     return [from, ...between, to];

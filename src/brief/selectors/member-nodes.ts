@@ -11,7 +11,7 @@ export function endNodes(truss: Truss, memberCount: number, chosen: readonly num
       bars.set(member, counts);
       for (const node of [bar.from, bar.to]) {
         // The far end of a spliced bar belongs to the other member: the node's own list tells.
-        if (bar.members.length > 1 && !truss.nodes[node]!.members.includes(member)) continue;
+        if (bar.members.length > 1 && !truss.nodes[node].members.includes(member)) continue;
         counts.set(node, (counts.get(node) ?? 0) + 1);
       }
     }
@@ -28,11 +28,11 @@ export function joinedNodes(truss: Truss, memberCount: number, chosen: readonly 
   truss.nodes.forEach((node, i) => {
     if (node.members.some((member) => isChosen[member] === 1)) joined.add(i);
     const carrier = node.carriedBy === null ? undefined : truss.bars[node.carriedBy.bar];
-    if (carrier?.members.length === 1 && isChosen[carrier.members[0]!] === 1) joined.add(i);
+    if (carrier?.members.length === 1 && isChosen[carrier.members[0]] === 1) joined.add(i);
   });
   for (const bar of truss.bars) {
     // Of a spliced bar each end belongs to one member only, and stands in the node's own list.
-    if (bar.members.length === 1 && isChosen[bar.members[0]!] === 1) joined.add(bar.from).add(bar.to);
+    if (bar.members.length === 1 && isChosen[bar.members[0]] === 1) joined.add(bar.from).add(bar.to);
   }
   return joined;
 }

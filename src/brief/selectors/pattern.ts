@@ -20,7 +20,7 @@ function fitTest(pattern: string, prepare: (text: string) => string): (text: str
     if (raw === null) return false;
     const text = prepare(raw);
     if (pieces.length === 1) return text === pattern;
-    const first = pieces[0]!;
+    const first = pieces[0];
     const last = pieces.at(-1)!;
     if (text.length < first.length + last.length || !text.startsWith(first) || !text.endsWith(last)) return false;
     let from = first.length;

@@ -41,11 +41,11 @@ export class PlanGrid {
 
   #sort(points: readonly Vec3[]): void {
     const cells = points.map(([x, y]) => this.#row(y) * this.#columns + this.#column(x));
-    for (const cell of cells) this.#starts[cell + 1]!++;
-    for (let cell = 1; cell < this.#starts.length; cell++) this.#starts[cell]! += this.#starts[cell - 1]!;
+    for (const cell of cells) this.#starts[cell + 1]++;
+    for (let cell = 1; cell < this.#starts.length; cell++) this.#starts[cell] += this.#starts[cell - 1];
     const free = this.#starts.slice();
     points.forEach(([x, y, z], point) => {
-      const position = free[cells[point]!]!++;
+      const position = free[cells[point]]++;
       this.#index[position] = point;
       this.#position[point] = position;
       this.#x[position] = x;
@@ -60,18 +60,18 @@ export class PlanGrid {
     const [low, high] = [box.low - margin, box.high + margin];
     const [firstColumn, lastColumn, lastRow] = [this.#column(left), this.#column(right), this.#row(high)];
     for (let row = this.#row(low); row <= lastRow; row++) {
-      const end = this.#starts[row * this.#columns + lastColumn + 1]!;
-      for (let i = this.#starts[row * this.#columns + firstColumn]!; i < end; i++) {
-        if (this.#z[i]! >= ceiling) continue;
-        const [x, y] = [this.#x[i]!, this.#y[i]!];
-        if (x >= left && x <= right && y >= low && y <= high) visit(this.#index[i]!);
+      const end = this.#starts[row * this.#columns + lastColumn + 1];
+      for (let i = this.#starts[row * this.#columns + firstColumn]; i < end; i++) {
+        if (this.#z[i] >= ceiling) continue;
+        const [x, y] = [this.#x[i], this.#y[i]];
+        if (x >= left && x <= right && y >= low && y <= high) visit(this.#index[i]);
       }
     }
   }
 
   /** Takes a point out: it is visited no more. */
   remove(index: number): void {
-    this.#z[this.#position[index]!] = Infinity;
+    this.#z[this.#position[index]] = Infinity;
   }
 
   #column(x: number): number {

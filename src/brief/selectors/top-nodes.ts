@@ -18,18 +18,18 @@ export function topNodes(truss: Truss): Uint8Array {
   const isTop = new Uint8Array(points.length).fill(1);
   const edges = barRuns(truss).flatMap(edgesOfRun);
   const grid = new PlanGrid(points, meanPlanLength(points, edges));
-  const upwards = points.map((_, node) => node).toSorted((a, b) => points[a]![2] - points[b]![2]);
+  const upwards = points.map((_, node) => node).toSorted((a, b) => points[a][2] - points[b][2]);
   let lowestTop = 0;
   /** Marks the nodes in the box of the corners, widened by `margin`, that are lower than a corner and pass the test. */
   const cover = (corners: readonly number[], margin: number, liesAbove: Test) => {
     const box = boxOf(points, corners);
     // Once the lower layer is marked, most faces have nothing left to lie above.
-    while (lowestTop < upwards.length && isTop[upwards[lowestTop]!] === 0) lowestTop++;
-    if (lowestTop === upwards.length || points[upwards[lowestTop]!]![2] + JOINT_SIZE >= box.highest) return;
+    while (lowestTop < upwards.length && isTop[upwards[lowestTop]] === 0) lowestTop++;
+    if (lowestTop === upwards.length || points[upwards[lowestTop]][2] + JOINT_SIZE >= box.highest) return;
     grid.visitBelow(box, margin, box.highest - JOINT_SIZE, (node) => {
       if (corners.length > 2 && corners.includes(node)) return;
-      const at = corners.map((corner) => points[corner]!);
-      if (!liesAbove(points[node]!, at)) return;
+      const at = corners.map((corner) => points[corner]);
+      if (!liesAbove(points[node], at)) return;
       isTop[node] = 0;
       grid.remove(node);
     });
@@ -44,7 +44,7 @@ type Test = (node: Vec3, corners: readonly Vec3[]) => boolean;
 function boxOf(points: readonly Vec3[], corners: readonly number[]): PlanBox & { highest: number } {
   const box = { left: Infinity, low: Infinity, right: -Infinity, high: -Infinity, highest: -Infinity };
   for (const corner of corners) {
-    const point = points[corner]!;
+    const point = points[corner];
     box.left = Math.min(box.left, point[0]);
     box.low = Math.min(box.low, point[1]);
     box.right = Math.max(box.right, point[0]);
@@ -58,15 +58,15 @@ type Edge = readonly [from: number, to: number];
 
 /** A bar that carries nodes closes faces as a whole and by the pieces between them. */
 function edgesOfRun(run: readonly number[]): Edge[] {
-  const whole: Edge = [run[0]!, run.at(-1)!];
-  const pieces = run.slice(1).map((node, i): Edge => [run[i]!, node]);
+  const whole: Edge = [run[0], run.at(-1)!];
+  const pieces = run.slice(1).map((node, i): Edge => [run[i], node]);
   return (pieces.length > 1 ? [whole, ...pieces] : [whole]).filter(([from, to]) => from !== to);
 }
 
 function meanPlanLength(points: readonly Vec3[], edges: readonly Edge[]): number {
   if (edges.length === 0) return 1;
   const total = edges.reduce((sum, [from, to]) => {
-    const [a, b] = [points[from]!, points[to]!];
+    const [a, b] = [points[from], points[to]];
     return sum + Math.hypot(b[0] - a[0], b[1] - a[1]);
   }, 0);
   return total / edges.length;
@@ -123,7 +123,7 @@ const turn = (a: Vec3, b: Vec3, c: Vec3): number => (b[0] - a[0]) * (c[1] - a[1]
 function isInPlan(point: Vec3, corners: readonly Vec3[]): boolean {
   let inside = false;
   corners.forEach((a, i) => {
-    const b = corners[(i + 1) % corners.length]!;
+    const b = corners[(i + 1) % corners.length];
     if (a[1] > point[1] === b[1] > point[1]) return;
     if (point[0] < a[0] + ((point[1] - a[1]) / (b[1] - a[1])) * (b[0] - a[0])) inside = !inside;
   });
@@ -142,30 +142,30 @@ function visitFaces(edges: readonly Edge[], nodeCount: number, visit: (corners: 
   const latestWay = new Int32Array(nodeCount).fill(-1);
   const isNext = new Uint8Array(nodeCount);
   for (let least = 0; least < nodeCount; least++) {
-    const sides = neighbours[least]!;
+    const sides = neighbours[least];
     const waySide: number[] = [];
     const wayBefore: number[] = [];
     const opposites: number[] = [];
     for (const side of sides) isNext[side] = 1;
     for (const side of sides) {
       if (side <= least) continue;
-      for (const opposite of neighbours[side]!) {
+      for (const opposite of neighbours[side]) {
         if (opposite <= least) continue;
         if (opposite > side && isNext[opposite] === 1) {
           [triangle[0], triangle[1], triangle[2]] = [least, side, opposite];
           visit(triangle);
         }
-        for (let way = latestWay[opposite]!; way >= 0; way = wayBefore[way]!) {
+        for (let way = latestWay[opposite]; way >= 0; way = wayBefore[way]) {
           [quadrilateral[0], quadrilateral[1], quadrilateral[2], quadrilateral[3]] = [
             least,
             side,
             opposite,
-            waySide[way]!,
+            waySide[way],
           ];
           visit(quadrilateral);
         }
         if (latestWay[opposite] === -1) opposites.push(opposite);
-        wayBefore.push(latestWay[opposite]!);
+        wayBefore.push(latestWay[opposite]);
         latestWay[opposite] = waySide.push(side) - 1;
       }
     }
@@ -177,8 +177,8 @@ function visitFaces(edges: readonly Edge[], nodeCount: number, visit: (corners: 
 function neighboursOf(edges: readonly Edge[], nodeCount: number): number[][] {
   const sets = Array.from({ length: nodeCount }, () => new Set<number>());
   for (const [from, to] of edges) {
-    sets[from]!.add(to);
-    sets[to]!.add(from);
+    sets[from].add(to);
+    sets[to].add(from);
   }
   return sets.map((set) => [...set]);
 }

@@ -51,7 +51,7 @@ function* blockLines(file: StepFile, result: Result): Generator<string> {
   for (const element of elements) {
     const forces = forcesOf(element.globalId);
     if (forces !== null) write('Pinwright_Forces', forceValues(forces, result), element);
-    const findings = findingsOf.get(element.globalId)?.map((k) => result.findings[k]!);
+    const findings = findingsOf.get(element.globalId)?.map((k) => result.findings[k]);
     if (findings !== undefined) write('Pinwright_Findings', findingValues(findings), element);
     yield* block.take();
   }

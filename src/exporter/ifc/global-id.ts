@@ -8,10 +8,10 @@ const NAMESPACE = uuidBytes('5d7f0c1e-8a4b-4e63-9c52-b0e6f4a1d937');
 
 /** 16 bytes in IFC's 22 characters; the first stands for two bits only and so is 0, 1, 2 or 3. */
 export function encodeGlobalId(bytes: Uint8Array): string {
-  let text = ALPHABET[bytes[0]! >> 6]! + ALPHABET[bytes[0]! & 63]!;
+  let text = ALPHABET[bytes[0] >> 6] + ALPHABET[bytes[0] & 63];
   for (let k = 1; k < 16; k += 3) {
-    const three = (bytes[k]! << 16) | (bytes[k + 1]! << 8) | bytes[k + 2]!;
-    for (let shift = 18; shift >= 0; shift -= 6) text += ALPHABET[(three >> shift) & 63]!;
+    const three = (bytes[k] << 16) | (bytes[k + 1] << 8) | bytes[k + 2];
+    for (let shift = 18; shift >= 0; shift -= 6) text += ALPHABET[(three >> shift) & 63];
   }
   return text;
 }
@@ -19,11 +19,11 @@ export function encodeGlobalId(bytes: Uint8Array): string {
 /** The 16 bytes of a GlobalId; null where it is none. */
 export function decodeGlobalId(text: string): Uint8Array | null {
   const digits = [...text].map((character) => ALPHABET.indexOf(character));
-  if (digits.length !== 22 || digits.includes(-1) || digits[0]! > 3) return null;
+  if (digits.length !== 22 || digits.includes(-1) || digits[0] > 3) return null;
   const bytes = new Uint8Array(16);
-  bytes[0] = (digits[0]! << 6) | digits[1]!;
+  bytes[0] = (digits[0] << 6) | digits[1];
   for (let k = 1, d = 2; k < 16; k += 3, d += 4) {
-    const three = (digits[d]! << 18) | (digits[d + 1]! << 12) | (digits[d + 2]! << 6) | digits[d + 3]!;
+    const three = (digits[d] << 18) | (digits[d + 1] << 12) | (digits[d + 2] << 6) | digits[d + 3];
     bytes[k] = three >> 16;
     bytes[k + 1] = (three >> 8) & 255;
     bytes[k + 2] = three & 255;
@@ -35,8 +35,8 @@ export function decodeGlobalId(text: string): Uint8Array | null {
 export function uuidVersion5(namespace: Uint8Array, name: string): Uint8Array {
   const hash = createHash('sha1').update(namespace).update(name, 'utf8').digest();
   const bytes = new Uint8Array(hash.subarray(0, 16));
-  bytes[6] = (bytes[6]! & 0x0f) | 0x50;
-  bytes[8] = (bytes[8]! & 0x3f) | 0x80;
+  bytes[6] = (bytes[6] & 0x0f) | 0x50;
+  bytes[8] = (bytes[8] & 0x3f) | 0x80;
   return bytes;
 }
 

@@ -39,15 +39,15 @@ export function elementForces(result: Result): (globalId: string) => ElementForc
     if (indices === undefined) return null;
     const place = (index: number) =>
       placeAlong(
-        result.bars[index]!,
-        (membersOf.get(globalId) ?? []).map((k) => result.members[k]!),
+        result.bars[index],
+        (membersOf.get(globalId) ?? []).map((k) => result.members[k]),
         at,
       );
     const places = new Map(indices.map((index) => [index, place(index)]));
     const ordered = [...indices].sort((a, b) => places.get(a)! - places.get(b)!);
     return {
       bars: ordered.map((index) => {
-        const bar = result.bars[index]!;
+        const bar = result.bars[index];
         return {
           name: bar.name,
           tension: envelope.get(bar.id)?.tension ?? null,

@@ -30,7 +30,7 @@ export function forbidForeignInBlock({ block }: StepFile): void {
   if (block === null) return;
   const { instances } = block;
   for (const type of instances.types()) {
-    if (!OWN_TYPES.has(type)) refuse(instances.idsOf(type)[0]!, type);
+    if (!OWN_TYPES.has(type)) refuse(instances.idsOf(type)[0], type);
   }
   for (const type of NAMED_TYPES) {
     for (const id of instances.idsOf(type)) {

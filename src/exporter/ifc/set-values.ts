@@ -64,7 +64,7 @@ export function findingValues(findings: readonly ResultFinding[]): SetValues<'Pi
     Count: findings.length,
     Severity: gravest ?? null,
     Codes: [...new Set(findings.map(({ code }) => code))].join(', '),
-    Findings: sentences.length === 1 ? sentences[0]! : sentences.map((text, k) => `${k + 1}. ${text}`).join(' '),
+    Findings: sentences.length === 1 ? sentences[0] : sentences.map((text, k) => `${k + 1}. ${text}`).join(' '),
     Sentences: sentences.length === 1 ? null : sentences,
   };
 }

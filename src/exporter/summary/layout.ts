@@ -41,10 +41,10 @@ export function wrapped(text: string, width: number, first = '', hang = first): 
 
 /** A table with two blanks between columns, indented by two; heads above, as wide as its widest cells. */
 export function columns(heads: readonly Column[], rows: readonly (readonly string[])[]): string[] {
-  const cells = rows.map((row) => heads.map(({ most }, k) => (most ? shortened(row[k]!, most) : row[k]!)));
-  const widths = heads.map(({ head }, k) => Math.max(head.length, ...cells.map((row) => [...row[k]!].length)));
+  const cells = rows.map((row) => heads.map(({ most }, k) => (most ? shortened(row[k], most) : row[k])));
+  const widths = heads.map(({ head }, k) => Math.max(head.length, ...cells.map((row) => [...row[k]].length)));
   const line = (row: readonly string[]) =>
-    `  ${row.map((cell, k) => padded(cell, widths[k]!, heads[k]!.align)).join('  ')}`.trimEnd();
+    `  ${row.map((cell, k) => padded(cell, widths[k], heads[k].align)).join('  ')}`.trimEnd();
   return [line(heads.map(({ head }) => head)), ...cells.map(line)];
 }
 

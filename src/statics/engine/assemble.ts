@@ -19,33 +19,33 @@ export function assemble(symbolic: Symbolic, rows: SparseRows, stiffness: Float6
   const diagonal = new Float64Array(freedoms.blocks * area);
   const lower = new Float64Array(pattern.column.length * area);
   for (let row = 0; row < rows.count; row++) {
-    const k = stiffness[row]!;
-    const from = rows.start[row]!;
-    const to = rows.start[row + 1]!;
+    const k = stiffness[row];
+    const from = rows.start[row];
+    const to = rows.start[row + 1];
     for (let p = from; p < to; p++) {
-      const u = rows.unknown[p]!;
+      const u = rows.unknown[p];
       const block = Math.floor(u / stride);
-      const i = position[block]!;
+      const i = position[block];
       const a = u - block * stride;
-      const weighted = k * rows.value[p]!;
+      const weighted = k * rows.value[p];
       for (let q = from; q < to; q++) {
-        const v = rows.unknown[q]!;
+        const v = rows.unknown[q];
         const other = Math.floor(v / stride);
-        const j = position[other]!;
+        const j = position[other];
         if (j > i) continue;
         const entry = a * stride + (v - other * stride);
-        const product = weighted * rows.value[q]!;
-        if (j === i) diagonal[i * area + entry] = diagonal[i * area + entry]! + product;
+        const product = weighted * rows.value[q];
+        if (j === i) diagonal[i * area + entry] = diagonal[i * area + entry] + product;
         else {
-          const at = findColumn(pattern.column, pattern.start[i]!, pattern.start[i + 1]!, j) * area + entry;
-          lower[at] = lower[at]! + product;
+          const at = findColumn(pattern.column, pattern.start[i], pattern.start[i + 1], j) * area + entry;
+          lower[at] = lower[at] + product;
         }
       }
     }
   }
   let scale = 0;
   for (let i = 0; i < freedoms.blocks; i++)
-    for (let a = 0; a < stride; a++) scale = Math.max(scale, diagonal[i * area + a * (stride + 1)]!);
+    for (let a = 0; a < stride; a++) scale = Math.max(scale, diagonal[i * area + a * (stride + 1)]);
   return { symbolic, diagonal, lower, scale: scale || 1 };
 }
 
@@ -54,7 +54,7 @@ function findColumn(column: Int32Array, from: number, to: number, wanted: number
   let high = to - 1;
   while (low < high) {
     const middle = (low + high) >> 1;
-    if (column[middle]! < wanted) low = middle + 1;
+    if (column[middle] < wanted) low = middle + 1;
     else high = middle;
   }
   return low;

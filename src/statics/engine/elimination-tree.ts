@@ -13,10 +13,10 @@ export function orderPattern(graph: Graph, order: Int32Array, position: Int32Arr
   const column = new Int32Array(graph.neighbour.length / 2);
   let size = 0;
   for (let k = 0; k < graph.count; k++) {
-    const block = order[k]!;
+    const block = order[k];
     const first = size;
-    for (let p = graph.start[block]!; p < graph.start[block + 1]!; p++) {
-      const i = position[graph.neighbour[p]!]!;
+    for (let p = graph.start[block]; p < graph.start[block + 1]; p++) {
+      const i = position[graph.neighbour[p]];
       if (i < k) column[size++] = i;
     }
     column.subarray(first, size).sort();
@@ -30,9 +30,9 @@ export function eliminationTree(pattern: OrderedPattern): Int32Array {
   const parent = new Int32Array(pattern.count).fill(-1);
   const ancestor = new Int32Array(pattern.count).fill(-1);
   for (let k = 0; k < pattern.count; k++) {
-    for (let p = pattern.start[k]!; p < pattern.start[k + 1]!; p++) {
-      for (let i = pattern.column[p]!; i !== -1 && i < k; ) {
-        const next = ancestor[i]!;
+    for (let p = pattern.start[k]; p < pattern.start[k + 1]; p++) {
+      for (let i = pattern.column[p]; i !== -1 && i < k; ) {
+        const next = ancestor[i];
         ancestor[i] = k;
         if (next === -1) parent[i] = k;
         i = next;
@@ -55,13 +55,13 @@ export function rowReach(
 ): number {
   let top = pattern.count;
   mark[k] = k;
-  for (let p = pattern.start[k]!; p < pattern.start[k + 1]!; p++) {
+  for (let p = pattern.start[k]; p < pattern.start[k + 1]; p++) {
     let length = 0;
-    for (let i = pattern.column[p]!; mark[i] !== k; i = parent[i]!) {
+    for (let i = pattern.column[p]; mark[i] !== k; i = parent[i]) {
       stack[length++] = i;
       mark[i] = k;
     }
-    while (length > 0) stack[--top] = stack[--length]!;
+    while (length > 0) stack[--top] = stack[--length];
   }
   return top;
 }
@@ -72,9 +72,9 @@ export function columnCounts(pattern: OrderedPattern, parent: Int32Array): Int32
   const mark = new Int32Array(pattern.count).fill(-1);
   for (let k = 0; k < pattern.count; k++) {
     mark[k] = k;
-    for (let p = pattern.start[k]!; p < pattern.start[k + 1]!; p++) {
-      for (let i = pattern.column[p]!; mark[i] !== k; i = parent[i]!) {
-        counts[i] = counts[i]! + 1;
+    for (let p = pattern.start[k]; p < pattern.start[k + 1]; p++) {
+      for (let i = pattern.column[p]; mark[i] !== k; i = parent[i]) {
+        counts[i] = counts[i] + 1;
         mark[i] = k;
       }
     }

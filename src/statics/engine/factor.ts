@@ -35,7 +35,7 @@ export function factorise(matrix: BlockMatrix, options: Partial<FactorOptions> =
   const count = freedoms.blocks;
   const stride = freedoms.stride;
   const area = stride * stride;
-  const row = new Int32Array(columnStart[count]!);
+  const row = new Int32Array(columnStart[count]);
   const lower = new Float64Array(row.length * area);
   const filled = columnStart.slice(0, count);
   const accumulator = new Float64Array(count * area);
@@ -47,20 +47,20 @@ export function factorise(matrix: BlockMatrix, options: Partial<FactorOptions> =
 
   for (let k = 0; k < count; k++) {
     const top = rowReach(pattern, parent, k, mark, stack);
-    for (let p = pattern.start[k]!; p < pattern.start[k + 1]!; p++) {
-      const at = pattern.column[p]! * area;
-      for (let e = 0; e < area; e++) accumulator[at + e] = matrix.lower[p * area + e]!;
+    for (let p = pattern.start[k]; p < pattern.start[k + 1]; p++) {
+      const at = pattern.column[p] * area;
+      for (let e = 0; e < area; e++) accumulator[at + e] = matrix.lower[p * area + e];
     }
-    const block = order[k]!;
-    for (let e = 0; e < area; e++) pivot[e] = matrix.diagonal[k * area + e]!;
+    const block = order[k];
+    for (let e = 0; e < area; e++) pivot[e] = matrix.diagonal[k * area + e];
     for (let a = 0; a < stride; a++) {
       const at = a * (stride + 1);
-      pivot[at] = freedoms.active[block * stride + a] ? pivot[at]! - shift : matrix.scale;
+      pivot[at] = freedoms.active[block * stride + a] ? pivot[at] - shift : matrix.scale;
     }
     for (let s = top; s < count; s++) {
-      const i = stack[s]!;
-      const end = filled[i]!;
-      update(accumulator, i, lower, row, columnStart[i]!, end, pivots, pivot);
+      const i = stack[s];
+      const end = filled[i];
+      update(accumulator, i, lower, row, columnStart[i], end, pivots, pivot);
       row[end] = k;
       filled[i] = end + 1;
     }

@@ -27,7 +27,7 @@ export function lowestEigenvalue(factor: Factor): number {
     for (let pass = 0; pass < 2; pass++)
       for (const b of basis) {
         const k = inner(next, b);
-        for (let i = 0; i < next.length; i++) next[i] = next[i]! - k * b[i]!;
+        for (let i = 0; i < next.length; i++) next[i] = next[i] - k * b[i];
       }
     const before = highest;
     highest = highestOfTridiagonal(diagonal, beside);

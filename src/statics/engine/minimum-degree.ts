@@ -9,8 +9,7 @@ export function minimumDegree(graph: Graph): Int32Array {
   const variables: number[][] = [];
   const elements: number[][] = Array.from({ length: n }, () => []);
   const members: (number[] | null)[] = new Array<number[] | null>(n).fill(null);
-  for (let i = 0; i < n; i++)
-    variables.push(Array.from(graph.neighbour.subarray(graph.start[i]!, graph.start[i + 1]!)));
+  for (let i = 0; i < n; i++) variables.push(Array.from(graph.neighbour.subarray(graph.start[i], graph.start[i + 1])));
   const degree = Int32Array.from(variables, (list) => list.length);
   const eliminated = new Uint8Array(n);
   const buckets = new DegreeBuckets(degree);
@@ -32,30 +31,30 @@ export function minimumDegree(graph: Graph): Int32Array {
         boundary.push(i);
       }
     };
-    gather(variables[pivot]!);
-    for (const e of elements[pivot]!) {
+    gather(variables[pivot]);
+    for (const e of elements[pivot]) {
       gather(members[e]!);
       members[e] = null;
     }
     members[pivot] = boundary;
     // outside[e]: members of e that the new element does not have.
     for (const i of boundary) {
-      elements[i] = elements[i]!.filter((e) => members[e] !== null);
-      for (const e of elements[i]!) {
+      elements[i] = elements[i].filter((e) => members[e] !== null);
+      for (const e of elements[i]) {
         if (outsideOf[e] !== step) {
           outsideOf[e] = step;
           members[e] = members[e]!.filter((j) => !eliminated[j]);
-          outside[e] = members[e]!.length;
+          outside[e] = members[e].length;
         }
-        outside[e] = outside[e]! - 1;
+        outside[e] = outside[e] - 1;
       }
     }
     for (const i of boundary) {
       // What the new element holds is reached through it.
-      variables[i] = variables[i]!.filter((j) => !eliminated[j] && mark[j] !== step);
-      const kept = elements[i]!.filter((e) => outside[e]! > 0);
-      let bound = variables[i]!.length + boundary.length - 1;
-      for (const e of kept) bound += outside[e]!;
+      variables[i] = variables[i].filter((j) => !eliminated[j] && mark[j] !== step);
+      const kept = elements[i].filter((e) => outside[e] > 0);
+      let bound = variables[i].length + boundary.length - 1;
+      for (const e of kept) bound += outside[e];
       kept.push(pivot);
       elements[i] = kept;
       buckets.move(i, Math.min(bound, n - step - 2));
@@ -84,7 +83,7 @@ class DegreeBuckets {
 
   takeLowest(): number {
     while (this.head[this.lowest] === -1) this.lowest++;
-    const i = this.head[this.lowest]!;
+    const i = this.head[this.lowest];
     this.remove(i);
     return i;
   }
@@ -96,8 +95,8 @@ class DegreeBuckets {
   }
 
   private insert(i: number): void {
-    const d = this.degree[i]!;
-    const first = this.head[d]!;
+    const d = this.degree[i];
+    const first = this.head[d];
     this.next[i] = first;
     this.previous[i] = -1;
     if (first !== -1) this.previous[first] = i;
@@ -106,9 +105,9 @@ class DegreeBuckets {
   }
 
   private remove(i: number): void {
-    const before = this.previous[i]!;
-    const after = this.next[i]!;
-    if (before === -1) this.head[this.degree[i]!] = after;
+    const before = this.previous[i];
+    const after = this.next[i];
+    if (before === -1) this.head[this.degree[i]] = after;
     else this.next[before] = after;
     if (after !== -1) this.previous[after] = before;
   }

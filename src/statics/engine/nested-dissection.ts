@@ -24,8 +24,8 @@ export function nestedDissection(graph: Graph): Int32Array {
     }
     regions++;
     for (const i of piece) region[i] = regions;
-    const far = breadthFirst(graph, piece[0]!, region, level);
-    const reached = breadthFirst(graph, far[far.length - 1]!, region, level);
+    const far = breadthFirst(graph, piece[0], region, level);
+    const reached = breadthFirst(graph, far[far.length - 1], region, level);
     if (reached.length < piece.length) {
       for (const i of reached) region[i] = 0;
       pending.push(
@@ -34,13 +34,13 @@ export function nestedDissection(graph: Graph): Int32Array {
       );
       continue;
     }
-    const last = level[reached[reached.length - 1]!]!;
+    const last = level[reached[reached.length - 1]];
     // Never the last level: there must be something beyond the cut.
-    const cut = Math.min(level[reached[reached.length >> 1]!]!, last - 1);
+    const cut = Math.min(level[reached[reached.length >> 1]], last - 1);
     const isSeparator = (i: number) => level[i] === cut && touchesLevel(graph, i, cut + 1, region, level);
     const separator = reached.filter(isSeparator);
-    const near = reached.filter((i) => level[i]! <= cut && !isSeparator(i));
-    const beyond = reached.filter((i) => level[i]! > cut);
+    const near = reached.filter((i) => level[i] <= cut && !isSeparator(i));
+    const beyond = reached.filter((i) => level[i] > cut);
     if (near.length === 0 || beyond.length === 0) {
       end -= piece.length;
       order.set(reached, end);
@@ -60,12 +60,12 @@ function breadthFirst(graph: Graph, from: number, region: Int32Array, level: Int
   const visited = new Set(queue);
   level[from] = 0;
   for (let head = 0; head < queue.length; head++) {
-    const i = queue[head]!;
-    for (let p = graph.start[i]!; p < graph.start[i + 1]!; p++) {
-      const j = graph.neighbour[p]!;
+    const i = queue[head];
+    for (let p = graph.start[i]; p < graph.start[i + 1]; p++) {
+      const j = graph.neighbour[p];
       if (region[j] !== here || visited.has(j)) continue;
       visited.add(j);
-      level[j] = level[i]! + 1;
+      level[j] = level[i] + 1;
       queue.push(j);
     }
   }
@@ -73,8 +73,8 @@ function breadthFirst(graph: Graph, from: number, region: Int32Array, level: Int
 }
 
 function touchesLevel(graph: Graph, i: number, wanted: number, region: Int32Array, level: Int32Array): boolean {
-  for (let p = graph.start[i]!; p < graph.start[i + 1]!; p++) {
-    const j = graph.neighbour[p]!;
+  for (let p = graph.start[i]; p < graph.start[i + 1]; p++) {
+    const j = graph.neighbour[p];
     if (region[j] === region[i] && level[j] === wanted) return true;
   }
   return false;

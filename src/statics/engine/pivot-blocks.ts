@@ -40,7 +40,7 @@ export class PivotBlocks {
     const { stride, tiny } = this;
     for (let a = 0; a < stride; a++)
       for (let b = 0; b < a; b++) {
-        const mean = (pivot[a * stride + b]! + pivot[b * stride + a]!) / 2;
+        const mean = (pivot[a * stride + b] + pivot[b * stride + a]) / 2;
         pivot[a * stride + b] = mean;
         pivot[b * stride + a] = mean;
       }
@@ -48,9 +48,9 @@ export class PivotBlocks {
     const { values, vectors } = this.eigen;
     this.vectors.set(vectors, k * stride * stride);
     for (let c = 0; c < stride; c++) {
-      const value = values[c]!;
+      const value = values[c];
       if (this.holdBelow !== null && value <= this.holdBelow) {
-        this.held.push({ block, direction: Array.from({ length: stride }, (_, r) => vectors[r * stride + c]!) });
+        this.held.push({ block, direction: Array.from({ length: stride }, (_, r) => vectors[r * stride + c]) });
         continue;
       }
       if (value < 0) this.negative++;

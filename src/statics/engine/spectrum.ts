@@ -59,7 +59,7 @@ export function lowestEigenpairs(
     const projected = Matrix.zeros(basis.length, basis.length);
     for (let i = 0; i < basis.length; i++)
       for (let j = 0; j <= i; j++) {
-        const entry = inner(basis[i]!, images[j]!);
+        const entry = inner(basis[i], images[j]);
         projected.set(i, j, entry);
         projected.set(j, i, entry);
       }
@@ -69,21 +69,21 @@ export function lowestEigenpairs(
     basis = recombine(basis, ritz.eigenvectorMatrix);
     const settled =
       last.length === values.length &&
-      values.slice(0, count).every((v, i) => Math.abs(v - last[i]!) <= 1e-3 * Math.abs(v));
+      values.slice(0, count).every((v, i) => Math.abs(v - last[i]) <= 1e-3 * Math.abs(v));
     if (settled) break;
   }
   return values
-    .map((value, i) => ({ value, vector: basis[i]! }))
+    .map((value, i) => ({ value, vector: basis[i] }))
     .sort((a, b) => a.value - b.value)
     .slice(0, count);
 }
 
 function recombine(basis: readonly Float64Array[], weights: Matrix): Float64Array[] {
   return basis.map((_, c) => {
-    const out = new Float64Array(basis[0]!.length);
+    const out = new Float64Array(basis[0].length);
     basis.forEach((x, r) => {
       const w = weights.get(r, c);
-      for (let i = 0; i < out.length; i++) out[i] = out[i]! + w * x[i]!;
+      for (let i = 0; i < out.length; i++) out[i] = out[i] + w * x[i];
     });
     return out;
   });
@@ -98,7 +98,7 @@ function orthonormal(vectors: readonly Float64Array[]): Float64Array[] {
     for (let pass = 0; pass < 2; pass++)
       for (const y of kept) {
         const k = inner(x, y);
-        for (let i = 0; i < x.length; i++) x[i] = x[i]! - k * y[i]!;
+        for (let i = 0; i < x.length; i++) x[i] = x[i] - k * y[i];
       }
     const size = Math.sqrt(inner(x, x));
     if (size > 1e-10) kept.push(x.map((v) => v / size));

@@ -44,8 +44,8 @@ export function layOut(freedoms: Freedoms, graph: Graph, order: Int32Array): Sym
   const columnStart = new Int32Array(order.length + 1);
   let work = 0;
   for (let k = 0; k < order.length; k++) {
-    const count = counts[k]!;
-    columnStart[k + 1] = columnStart[k]! + count;
+    const count = counts[k];
+    columnStart[k + 1] = columnStart[k] + count;
     work += (count * (count + 3)) / 2;
   }
   return { freedoms, order, position, pattern, parent, columnStart, work };

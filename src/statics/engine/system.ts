@@ -38,7 +38,7 @@ export function buildRows(
       place.set(u, unknown.length);
       unknown.push(u);
       value.push(v);
-    } else value[at] = value[at]! + v;
+    } else value[at] = value[at] + v;
   };
   for (let row = 0; row < count; row++) {
     place.clear();
@@ -53,7 +53,7 @@ export function multiplyRows(rows: SparseRows, q: Float64Array): Float64Array {
   const out = new Float64Array(rows.count);
   for (let row = 0; row < rows.count; row++) {
     let sum = 0;
-    for (let p = rows.start[row]!; p < rows.start[row + 1]!; p++) sum += rows.value[p]! * q[rows.unknown[p]!]!;
+    for (let p = rows.start[row]; p < rows.start[row + 1]; p++) sum += rows.value[p] * q[rows.unknown[p]];
     out[row] = sum;
   }
   return out;
@@ -63,11 +63,11 @@ export function multiplyRows(rows: SparseRows, q: Float64Array): Float64Array {
 export function combineRows(rows: SparseRows, weight: Float64Array, unknowns: number): Float64Array {
   const out = new Float64Array(unknowns);
   for (let row = 0; row < rows.count; row++) {
-    const w = weight[row]!;
+    const w = weight[row];
     if (w === 0) continue;
-    for (let p = rows.start[row]!; p < rows.start[row + 1]!; p++) {
-      const u = rows.unknown[p]!;
-      out[u] = out[u]! + w * rows.value[p]!;
+    for (let p = rows.start[row]; p < rows.start[row + 1]; p++) {
+      const u = rows.unknown[p];
+      out[u] = out[u] + w * rows.value[p];
     }
   }
   return out;
@@ -76,6 +76,6 @@ export function combineRows(rows: SparseRows, weight: Float64Array, unknowns: nu
 /** K q without K: the rows weighted by stiffness times their values at q. */
 export function applyStiffness(rows: SparseRows, stiffness: Float64Array, q: Float64Array): Float64Array {
   const elongation = multiplyRows(rows, q);
-  for (let row = 0; row < rows.count; row++) elongation[row] = elongation[row]! * stiffness[row]!;
+  for (let row = 0; row < rows.count; row++) elongation[row] = elongation[row] * stiffness[row];
   return combineRows(rows, elongation, q.length);
 }

@@ -1,6 +1,6 @@
 export function inner(x: Float64Array, y: Float64Array): number {
   let sum = 0;
-  for (let i = 0; i < x.length; i++) sum += x[i]! * y[i]!;
+  for (let i = 0; i < x.length; i++) sum += x[i] * y[i];
   return sum;
 }
 

@@ -59,7 +59,7 @@ export function addAreaLoad(
     unloaded,
     openings: surface.openings.map((corners) => ({
       corners,
-      planArea: planArea(corners.map((node) => points[node]!)),
+      planArea: planArea(corners.map((node) => points[node])),
     })),
   };
 }

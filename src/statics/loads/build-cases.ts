@@ -119,7 +119,7 @@ function sayOpening(
   load: LoadRule,
   { corners, planArea }: AreaCoverage['openings'][number],
 ): Finding {
-  const first = truss.nodes[corners[0]!]!;
+  const first = truss.nodes[corners[0]];
   return finding(
     'surface-skipped',
     `A field of ${planArea.toFixed(0)} m2 in plan with ${corners.length} corners, far larger than the panels round it, was taken as an ` +

@@ -36,7 +36,7 @@ class Placing {
   constructor(truss: Truss, members: readonly Member[]) {
     this.truss = truss;
     this.nodeAt = nodeFinder(truss);
-    for (const bar of truss.bars) for (const member of bar.members) pushTo(this.barsOf, members[member]!.globalId, bar);
+    for (const bar of truss.bars) for (const member of bar.members) pushTo(this.barsOf, members[member].globalId, bar);
   }
 
   caseOf({ name, nature, loads: given }: GivenCase) {
@@ -88,13 +88,13 @@ class Placing {
 
   /** How far along a bar a point lies, m; outside of it below 0 or beyond its length. */
   private along(bar: TrussBar, at: Vec3): number {
-    const from = this.truss.nodes[bar.from]!.at;
-    const direction = unit(subtract(this.truss.nodes[bar.to]!.at, from));
+    const from = this.truss.nodes[bar.from].at;
+    const direction = unit(subtract(this.truss.nodes[bar.to].at, from));
     return direction === null ? 0 : dot(subtract(at, from), direction);
   }
 
   private distanceTo(bar: TrussBar, at: Vec3): number {
-    const [from, to] = [this.truss.nodes[bar.from]!.at, this.truss.nodes[bar.to]!.at];
+    const [from, to] = [this.truss.nodes[bar.from].at, this.truss.nodes[bar.to].at];
     const t = Math.min(Math.max(this.along(bar, at) / bar.length, 0), 1);
     return distance(at, between(from, to, t));
   }
@@ -107,7 +107,7 @@ function sayBetweenNodes(name: string, points: readonly Vec3[]): Finding {
     `${many ? `${points.length} forces` : 'A force'} of the model's case ${name} ${many ? 'act' : 'acts'} on a bar away from its ends; ` +
       'shared between the ends, and the bending is not seen.',
     'Judge the bending of these bars by hand.',
-    { at: points[0]! },
+    { at: points[0] },
   );
 }
 
@@ -117,7 +117,7 @@ function sayLost(name: string, lost: readonly { at: Vec3; members: string[] }[])
     'no-load',
     `${many ? `${lost.length} loads` : 'A load'} of the model's case ${name} ${many ? 'lie' : 'lies'} wholly or partly on no bar of the truss, and that part is not taken.`,
     'Look whether the members they act on are in scope and read.',
-    { at: lost[0]!.at, members: [...new Set(lost.flatMap(({ members }) => members))] },
+    { at: lost[0].at, members: [...new Set(lost.flatMap(({ members }) => members))] },
   );
 }
 

@@ -23,6 +23,6 @@ export function addLineLoad(
 }
 
 function planLength(truss: Truss, bar: TrussBar): number {
-  const [a, b] = [truss.nodes[bar.from]!.at, truss.nodes[bar.to]!.at];
+  const [a, b] = [truss.nodes[bar.from].at, truss.nodes[bar.to].at];
   return Math.hypot(b[0] - a[0], b[1] - a[1]);
 }

@@ -11,12 +11,12 @@ export function leverShares(truss: Truss): readonly (readonly (readonly [node: n
   const resolve = (node: number): readonly (readonly [number, number])[] => {
     const known = shares[node];
     if (known) return known;
-    const carriage = nodes[node]!.carriedBy;
+    const carriage = nodes[node].carriedBy;
     let own: [number, number][] = [[node, 1]];
     if (carriage !== null) {
       if (open[node]) throw new Error(`node ${node} is carried by itself`);
       open[node] = 1;
-      const bar = bars[carriage.bar]!;
+      const bar = bars[carriage.bar];
       const sum = new Map<number, number>();
       for (const [end, weight] of [
         [bar.from, 1 - carriage.t],

@@ -22,18 +22,18 @@ export function mapElongations(truss: Truss, parts: Parts, supports: Supports, m
   const springs = supports.springs.filter((spring) => parts.liveNode[spring.node]);
   const lengths = new Float64Array(bars.length);
   const directions = bars.map((b, row): Vec3 => {
-    const bar = truss.bars[b]!;
-    const between = subtract(truss.nodes[bar.to]!.at, truss.nodes[bar.from]!.at);
+    const bar = truss.bars[b];
+    const between = subtract(truss.nodes[bar.to].at, truss.nodes[bar.from].at);
     lengths[row] = Math.hypot(...between);
     return unit(between) ?? [0, 0, 0];
   });
   const rows = buildRows(bars.length + springs.length, (row, put) => {
     if (row < bars.length) {
-      const bar = truss.bars[bars[row]!]!;
-      spread(movement, bar.from, directions[row]!, -1, put);
-      spread(movement, bar.to, directions[row]!, 1, put);
+      const bar = truss.bars[bars[row]];
+      spread(movement, bar.from, directions[row], -1, put);
+      spread(movement, bar.to, directions[row], 1, put);
     } else {
-      const spring = springs[row - bars.length]!;
+      const spring = springs[row - bars.length];
       spread(movement, spring.node, spring.direction, 1, put);
     }
   });
@@ -45,15 +45,15 @@ export function elongationsOf(truss: Truss, elongations: Elongations, moves: Flo
   const { bars, springs, directions } = elongations;
   const out = new Float64Array(bars.length + springs.length);
   bars.forEach((b, row) => {
-    const { from, to } = truss.bars[b]!;
-    const d = directions[row]!;
+    const { from, to } = truss.bars[b];
+    const d = directions[row];
     let sum = 0;
-    for (let axis = 0; axis < 3; axis++) sum += d[axis]! * (moves[3 * to + axis]! - moves[3 * from + axis]!);
+    for (let axis = 0; axis < 3; axis++) sum += d[axis] * (moves[3 * to + axis] - moves[3 * from + axis]);
     out[row] = sum;
   });
   springs.forEach((spring, s) => {
     let sum = 0;
-    for (let axis = 0; axis < 3; axis++) sum += spring.direction[axis]! * moves[3 * spring.node + axis]!;
+    for (let axis = 0; axis < 3; axis++) sum += spring.direction[axis] * moves[3 * spring.node + axis];
     out[bars.length + s] = sum;
   });
   return out;

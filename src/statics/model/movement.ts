@@ -54,18 +54,18 @@ export function mapMovement(truss: Truss, parts: Parts, restraints: readonly Res
   for (const restraint of restraints) {
     const { node, direction } = restraint;
     if (!parts.liveNode[node]) continue;
-    if (truss.nodes[node]!.carriedBy !== null) onCarried.push(restraint);
-    else if (addIndependent(held[node]!, direction)) restraintCount++;
+    if (truss.nodes[node].carriedBy !== null) onCarried.push(restraint);
+    else if (addIndependent(held[node], direction)) restraintCount++;
   }
   const frame = new Float64Array(9 * count);
   const freeCount = new Uint8Array(count);
   const active = new Uint8Array(STRIDE * count);
   for (let node = 0; node < count; node++) {
-    const free = complement(held[node]!);
-    [...free, ...held[node]!].forEach((direction, c) => {
+    const free = complement(held[node]);
+    [...free, ...held[node]].forEach((direction, c) => {
       frame.set(direction, 9 * node + 3 * c);
     });
-    if (!parts.liveNode[node] || truss.nodes[node]!.carriedBy !== null) continue;
+    if (!parts.liveNode[node] || truss.nodes[node].carriedBy !== null) continue;
     freeCount[node] = free.length;
     active.fill(1, STRIDE * node, STRIDE * node + free.length);
   }
@@ -108,10 +108,10 @@ function spreadOwn(
   put: (unknown: number, value: number) => void,
 ): void {
   const { frame, freeCount, shares } = movement;
-  for (const [real, share] of shares[node]!)
-    for (let c = 0; c < freeCount[real]!; c++) {
+  for (const [real, share] of shares[node])
+    for (let c = 0; c < freeCount[real]; c++) {
       const at = 9 * real + 3 * c;
-      const along = direction[0] * frame[at]! + direction[1] * frame[at + 1]! + direction[2] * frame[at + 2]!;
+      const along = direction[0] * frame[at] + direction[1] * frame[at + 1] + direction[2] * frame[at + 2];
       if (along !== 0) put(STRIDE * real + c, factor * share * along);
     }
 }
@@ -122,14 +122,14 @@ export function nodeMovements(movement: Movement, q: Float64Array): Float64Array
   const full = q.slice();
   for (const [unknown, terms] of followers) {
     let value = 0;
-    for (const term of terms) value += term.factor * q[term.unknown]!;
+    for (const term of terms) value += term.factor * q[term.unknown];
     full[unknown] = value;
   }
   const own = new Float64Array(3 * truss.nodes.length);
   for (let node = 0; node < truss.nodes.length; node++)
-    for (let c = 0; c < freeCount[node]!; c++)
+    for (let c = 0; c < freeCount[node]; c++)
       for (let axis = 0; axis < 3; axis++)
-        own[3 * node + axis] = own[3 * node + axis]! + full[STRIDE * node + c]! * frame[9 * node + 3 * c + axis]!;
+        own[3 * node + axis] = own[3 * node + axis] + full[STRIDE * node + c] * frame[9 * node + 3 * c + axis];
   return carryMovements(truss, shares, own);
 }
 
@@ -137,10 +137,10 @@ export function nodeMovements(movement: Movement, q: Float64Array): Float64Array
 export function gatherForces(movement: Movement, forces: Float64Array): Float64Array {
   const out = new Float64Array(movement.freedoms.active.length);
   const put = (unknown: number, value: number) => {
-    out[unknown] = out[unknown]! + value;
+    out[unknown] = out[unknown] + value;
   };
   for (let node = 0; 3 * node < forces.length; node++) {
-    const force: Vec3 = [forces[3 * node]!, forces[3 * node + 1]!, forces[3 * node + 2]!];
+    const force: Vec3 = [forces[3 * node], forces[3 * node + 1], forces[3 * node + 2]];
     if (force[0] !== 0 || force[1] !== 0 || force[2] !== 0) spread(movement, node, force, 1, put);
   }
   return out;
@@ -152,7 +152,7 @@ export function carryMovements(truss: Truss, shares: Movement['shares'], own: Fl
     if (node.carriedBy === null) return;
     for (let axis = 0; axis < 3; axis++) {
       let sum = 0;
-      for (const [real, share] of shares[i]!) sum += share * own[3 * real + axis]!;
+      for (const [real, share] of shares[i]) sum += share * own[3 * real + axis];
       own[3 * i + axis] = sum;
     }
   });

@@ -26,7 +26,7 @@ export function findParts(truss: Truss, supports: Supports): Parts {
   }
   nodes.forEach((node, i) => {
     if (node.carriedBy === null) return;
-    sets.join(i, bars[node.carriedBy.bar]!.from);
+    sets.join(i, bars[node.carriedBy.bar].from);
     touched[i] = 1;
   });
   const held = [...supports.restraints, ...supports.springs].map((support) => support.node);
@@ -42,9 +42,9 @@ export function findParts(truss: Truss, supports: Supports): Parts {
   }
   const freeBody = held.length === 0;
   const supported = new Uint8Array(number.size).fill(freeBody ? 1 : 0);
-  for (const node of held) supported[partOf[node]!] = 1;
-  const liveNode = Uint8Array.from(partOf, (part) => (part >= 0 ? supported[part]! : 0));
-  const liveBar = Uint8Array.from(bars, (bar) => liveNode[bar.from]!);
+  for (const node of held) supported[partOf[node]] = 1;
+  const liveNode = Uint8Array.from(partOf, (part) => (part >= 0 ? supported[part] : 0));
+  const liveBar = Uint8Array.from(bars, (bar) => liveNode[bar.from]);
   const setAside = bars.map((_, b) => b).filter((b) => !liveBar[b]);
   return { partOf, count: number.size, freeBody, liveNode, liveBar, setAside };
 }

@@ -10,8 +10,8 @@ export class UnionFind {
     const { parent } = this;
     let at = i;
     while (parent[at] !== at) {
-      parent[at] = parent[parent[at]!]!;
-      at = parent[at]!;
+      parent[at] = parent[parent[at]];
+      at = parent[at];
     }
     return at;
   }

@@ -29,37 +29,36 @@ export function balanceJoints(
   const { movement, elongations, problem } = base;
   const left = new Float64Array(loads.length);
   const put = (node: number, force: Vec3, factor: number) => {
-    for (const [real, share] of movement.shares[node]!)
-      for (let axis = 0; axis < 3; axis++)
-        left[3 * real + axis] = left[3 * real + axis]! + share * factor * force[axis]!;
+    for (const [real, share] of movement.shares[node])
+      for (let axis = 0; axis < 3; axis++) left[3 * real + axis] = left[3 * real + axis] + share * factor * force[axis];
   };
   const given = new Map<number, [number, number, number]>();
   const give = (node: number, force: Vec3, factor: number) => {
     put(node, force, factor);
     const sum = given.get(node) ?? [0, 0, 0];
-    for (let axis = 0; axis < 3; axis++) sum[axis] = sum[axis]! + factor * force[axis]!;
+    for (let axis = 0; axis < 3; axis++) sum[axis] = sum[axis] + factor * force[axis];
     given.set(node, sum);
   };
   let largestForce = 0;
   for (const v of loads) largestForce = Math.max(largestForce, Math.abs(v));
   for (let node = 0; 3 * node < loads.length; node++)
-    put(node, [loads[3 * node]!, loads[3 * node + 1]!, loads[3 * node + 2]!], 1);
+    put(node, [loads[3 * node], loads[3 * node + 1], loads[3 * node + 2]], 1);
   elongations.bars.forEach((b, row) => {
-    const { from, to } = problem.truss.bars[b]!;
-    put(from, elongations.directions[row]!, axial[row]!);
-    put(to, elongations.directions[row]!, -axial[row]!);
-    largestForce = Math.max(largestForce, Math.abs(axial[row]!));
+    const { from, to } = problem.truss.bars[b];
+    put(from, elongations.directions[row], axial[row]);
+    put(to, elongations.directions[row], -axial[row]);
+    largestForce = Math.max(largestForce, Math.abs(axial[row]));
   });
   for (const { node } of problem.supports.restraints) if (problem.parts.liveNode[node]) given.set(node, [0, 0, 0]);
   elongations.springs.forEach((spring, s) => {
-    give(spring.node, spring.direction, -axial[elongations.bars.length + s]!);
+    give(spring.node, spring.direction, -axial[elongations.bars.length + s]);
   });
   carriedReactions(held.movement, left).forEach((amount, i) => {
-    const { node, direction } = held.movement.carriedRestraints[i]!;
+    const { node, direction } = held.movement.carriedRestraints[i];
     give(node, direction, amount);
   });
   for (let node = 0; 3 * node < left.length; node++)
-    for (let c = movement.freeCount[node]!; c < 3 && isHeld(movement, node); c++) {
+    for (let c = movement.freeCount[node]; c < 3 && isHeld(movement, node); c++) {
       const direction = frameDirection(movement, node, c);
       give(node, direction, -along(left, node, direction));
     }
@@ -92,14 +91,14 @@ function carriedReactions(movement: Movement, left: Float64Array): number[] {
 }
 
 function isHeld(movement: Movement, node: number): boolean {
-  return movement.truss.nodes[node]!.carriedBy === null && movement.live[node] === 1;
+  return movement.truss.nodes[node].carriedBy === null && movement.live[node] === 1;
 }
 
 function frameDirection(movement: Movement, node: number, c: number): Vec3 {
   const at = 9 * node + 3 * c;
-  return [movement.frame[at]!, movement.frame[at + 1]!, movement.frame[at + 2]!];
+  return [movement.frame[at], movement.frame[at + 1], movement.frame[at + 2]];
 }
 
 function along(forces: Float64Array, node: number, direction: Vec3): number {
-  return direction[0] * forces[3 * node]! + direction[1] * forces[3 * node + 1]! + direction[2] * forces[3 * node + 2]!;
+  return direction[0] * forces[3 * node] + direction[1] * forces[3 * node + 1] + direction[2] * forces[3 * node + 2];
 }

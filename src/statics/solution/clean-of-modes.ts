@@ -29,21 +29,21 @@ export function cleanOfModes(
   const movesOf = (amounts: Float64Array): Float64Array => {
     const q = new Float64Array(unknowns);
     starts.forEach((start, p) => {
-      for (const [unknown, value] of start) q[unknown] = q[unknown]! + amounts[p]! * value;
+      for (const [unknown, value] of start) q[unknown] = q[unknown] + amounts[p] * value;
     });
-    const force = multiplyRows(base.rows, q).map((e, row) => -e * stiffness[row]!);
+    const force = multiplyRows(base.rows, q).map((e, row) => -e * stiffness[row]);
     const answer = nodeMovements(held.movement, solveOne(factor, combineRows(held.rows, force, unknowns)));
     const given = nodeMovements(base.movement, q);
-    return answer.map((v, i) => v + given[i]!);
+    return answer.map((v, i) => v + given[i]);
   };
   const alongModes = (vector: Float64Array): Float64Array => {
-    const real = vector.map((v, i) => (truss.nodes[Math.floor(i / 3)]!.carriedBy === null ? v : 0));
+    const real = vector.map((v, i) => (truss.nodes[Math.floor(i / 3)].carriedBy === null ? v : 0));
     const direct = gatherForces(base.movement, real);
     const answer = solveOne(factor, gatherForces(held.movement, real));
-    const force = multiplyRows(held.rows, answer).map((e, row) => -e * stiffness[row]!);
+    const force = multiplyRows(held.rows, answer).map((e, row) => -e * stiffness[row]);
     const through = combineRows(base.rows, force, unknowns);
     return Float64Array.from(starts, (start) =>
-      start.reduce((sum, [unknown, value]) => sum + value * (direct[unknown]! + through[unknown]!), 0),
+      start.reduce((sum, [unknown, value]) => sum + value * (direct[unknown] + through[unknown]), 0),
     );
   };
 
@@ -56,14 +56,14 @@ export function cleanOfModes(
     const image = alongModes(movesOf(direction));
     const reach = size / inner(direction, image);
     if (!Number.isFinite(reach)) break;
-    rest = rest.map((v, i) => v - reach * image[i]!);
+    rest = rest.map((v, i) => v - reach * image[i]);
     direction.forEach((v, i) => {
-      amounts[i] = amounts[i]! + reach * v;
+      amounts[i] = amounts[i] + reach * v;
     });
     const before = size;
     size = inner(rest, rest);
-    direction = direction.map((v, i) => rest[i]! + (size / before) * v);
+    direction = direction.map((v, i) => rest[i] + (size / before) * v);
   }
   const along = movesOf(amounts);
-  return moves.map((v, i) => v - along[i]!);
+  return moves.map((v, i) => v - along[i]);
 }

@@ -34,8 +34,8 @@ export function combine(
       limit,
       factors,
       refused: null,
-      axialForce: Array.from({ length: bars }, (_, b) => sum(parts, ({ one }) => one.axialForce[b]!)),
-      displacement: Array.from({ length: nodes }, (_, n) => sumVectors(parts, ({ one }) => one.displacement[n]!)),
+      axialForce: Array.from({ length: bars }, (_, b) => sum(parts, ({ one }) => one.axialForce[b])),
+      displacement: Array.from({ length: nodes }, (_, n) => sumVectors(parts, ({ one }) => one.displacement[n])),
       reactions: sumReactions(parts),
     };
   });

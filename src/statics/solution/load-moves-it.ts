@@ -14,7 +14,7 @@ export function loadMovesIt(
   pivotForces: Float64Array,
 ): { readonly sentence: string; readonly finding: Finding } {
   const moved = mostMoved(truss, stability.modes, loads);
-  const pivot = stability.pivots[indexOfLargest(pivotForces)]!;
+  const pivot = stability.pivots[indexOfLargest(pivotForces)];
   const node = moved?.node ?? pivot.node;
   const direction = moved?.direction ?? pivot.direction;
   const where = `at ${nodeInWords(truss, node)} ${directionInWords(direction)}`;
@@ -29,8 +29,8 @@ export function loadMovesIt(
       `Hold the node ${where}, or add bars that do, or mend the load.`,
       {
         nodes: [node],
-        at: truss.nodes[node]!.at,
-        place: truss.nodes[node]!.place,
+        at: truss.nodes[node].at,
+        place: truss.nodes[node].place,
       },
     ),
   };
@@ -40,16 +40,16 @@ function mostMoved(truss: Truss, modes: readonly Mode[], loads: Float64Array) {
   let best = 0;
   let moved: Mode | null = null;
   const workAt = (mode: Mode, i: number) => {
-    const node = mode.nodes[i]!;
-    const v = mode.movement[i]!;
-    return v[0] * loads[3 * node]! + v[1] * loads[3 * node + 1]! + v[2] * loads[3 * node + 2]!;
+    const node = mode.nodes[i];
+    const v = mode.movement[i];
+    return v[0] * loads[3 * node] + v[1] * loads[3 * node + 1] + v[2] * loads[3 * node + 2];
   };
   const real = onRealNodes(truss, loads);
   for (const mode of modes) {
     let work = 0;
     mode.nodes.forEach((node, i) => {
-      const v = mode.movement[i]!;
-      work += v[0] * real[3 * node]! + v[1] * real[3 * node + 1]! + v[2] * real[3 * node + 2]!;
+      const v = mode.movement[i];
+      work += v[0] * real[3 * node] + v[1] * real[3 * node + 1] + v[2] * real[3 * node + 2];
     });
     if (Math.abs(work) > best * (1 + 1e-9)) {
       best = Math.abs(work);
@@ -61,19 +61,19 @@ function mostMoved(truss: Truss, modes: readonly Mode[], loads: Float64Array) {
   const at = indexOfLargest(Float64Array.from(mode.nodes, (_, i) => workAt(mode, i)));
   const fallback = indexOfLargest(Float64Array.from(mode.movement, (v) => Math.hypot(...v)));
   const chosen = workAt(mode, at) !== 0 ? at : fallback;
-  return { mode, node: mode.nodes[chosen]!, direction: tidyDirection(mode.movement[chosen]!) };
+  return { mode, node: mode.nodes[chosen], direction: tidyDirection(mode.movement[chosen]) };
 }
 
 /** Loads on carried nodes go to the ends of their bars; one step after another, whatever carries what. */
 function onRealNodes(truss: Truss, loads: Float64Array): Float64Array {
   const out = new Float64Array(loads.length);
   const put = (node: number, axis: number, force: number): void => {
-    const carriage = truss.nodes[node]!.carriedBy;
+    const carriage = truss.nodes[node].carriedBy;
     if (carriage === null || force === 0) {
-      out[3 * node + axis] = out[3 * node + axis]! + force;
+      out[3 * node + axis] = out[3 * node + axis] + force;
       return;
     }
-    const bar = truss.bars[carriage.bar]!;
+    const bar = truss.bars[carriage.bar];
     put(bar.from, axis, (1 - carriage.t) * force);
     put(bar.to, axis, carriage.t * force);
   };
@@ -86,7 +86,7 @@ function onRealNodes(truss: Truss, loads: Float64Array): Float64Array {
 function indexOfLargest(values: Float64Array): number {
   let best = 0;
   values.forEach((v, i) => {
-    if (Math.abs(v) > Math.abs(values[best]!) * (1 + 1e-9)) best = i;
+    if (Math.abs(v) > Math.abs(values[best]) * (1 + 1e-9)) best = i;
   });
   return best;
 }

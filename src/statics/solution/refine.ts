@@ -26,28 +26,28 @@ export function solveRefined(system: System, factor: Factor, loads: readonly Flo
   for (let step = 0; step < MOST_STEPS && open.length > 0; step++) {
     const steps = solveMany(
       factor,
-      open.map((i) => rest[i]!),
+      open.map((i) => rest[i]),
     );
     open.forEach((i, k) => {
-      const { q, axial } = results[i]!;
-      const dq = steps[k]!;
-      for (let u = 0; u < unknowns; u++) q[u] = q[u]! + dq[u]!;
+      const { q, axial } = results[i];
+      const dq = steps[k];
+      for (let u = 0; u < unknowns; u++) q[u] = q[u] + dq[u];
       multiplyRows(rows, dq).forEach((e, row) => {
-        axial[row] = axial[row]! + stiffness[row]! * e;
+        axial[row] = axial[row] + stiffness[row] * e;
       });
     });
     rest = rest.map((r, i) => {
       if (!open.includes(i)) return r;
-      const carried = combineRows(rows, results[i]!.axial, unknowns);
+      const carried = combineRows(rows, results[i].axial, unknowns);
       return mask(
-        carried.map((v, u) => loads[i]![u]! - v),
+        carried.map((v, u) => loads[i][u] - v),
         system.movement.freedoms.active,
       );
     });
     open = open.filter((i) => {
-      const size = largest(rest[i]!);
-      const scale = Math.max(largest(loads[i]!), largest(results[i]!.axial));
-      const better = size < worst[i]! / 2;
+      const size = largest(rest[i]);
+      const scale = Math.max(largest(loads[i]), largest(results[i].axial));
+      const better = size < worst[i] / 2;
       worst[i] = size;
       return better && size > 1e-15 * scale;
     });

@@ -11,8 +11,8 @@ export function realStiffness(truss: Truss): (elongations: Elongations) => Float
   return ({ bars, springs, lengths }) => {
     const out = new Float64Array(bars.length + springs.length);
     bars.forEach((b, row) => {
-      const ea = truss.bars[b]!.stiffnessEA ?? mean;
-      out[row] = lengths[row]! > 0 ? ea / lengths[row]! : 0;
+      const ea = truss.bars[b].stiffnessEA ?? mean;
+      out[row] = lengths[row] > 0 ? ea / lengths[row] : 0;
     });
     springs.forEach((spring, s) => {
       out[bars.length + s] = spring.stiffness;
@@ -33,7 +33,7 @@ export function judgeSections({ truss, parts }: Problem, stability: Judgement): 
   const lacking = new Map<number, number[]>();
   truss.bars.forEach((bar, b) => {
     if (bar.stiffnessEA !== null || !parts.liveBar[b]) return;
-    const part = parts.partOf[bar.from]!;
+    const part = parts.partOf[bar.from];
     lacking.set(part, [...(lacking.get(part) ?? []), b]);
   });
   const indeterminate = new Set(
@@ -43,15 +43,15 @@ export function judgeSections({ truss, parts }: Problem, stability: Judgement): 
     refuse: (one) => {
       const load = one.loads.find(
         ({ node, force }) =>
-          parts.liveNode[node] && indeterminate.has(parts.partOf[node]!) && force.some((component) => component !== 0),
+          parts.liveNode[node] && indeterminate.has(parts.partOf[node]) && force.some((component) => component !== 0),
       );
       if (load === undefined) return null;
-      const bars = lacking.get(parts.partOf[load.node]!)!;
-      const names = bars.slice(0, 3).map((b) => truss.bars[b]!.name);
+      const bars = lacking.get(parts.partOf[load.node])!;
+      const names = bars.slice(0, 3).map((b) => truss.bars[b].name);
       const rest = bars.length > 3 ? ` and ${bars.length - 3} more` : '';
       const verb = bars.length === 1 ? 'has' : 'have';
       return `load case ${one.name}: ${names.join(', ')}${rest} ${verb} no section, and the truss is statically indeterminate there, so that its forces hang on it`;
     },
-    withoutDisplacement: (node) => lacking.has(parts.partOf[node]!),
+    withoutDisplacement: (node) => lacking.has(parts.partOf[node]),
   };
 }

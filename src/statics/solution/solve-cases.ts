@@ -53,8 +53,8 @@ export function solveCases(
     nodeLoads.map((loads) => gatherForces(held.movement, loads)),
   );
   const solved = cases.map((one, i): SolvedCase => {
-    const loads = nodeLoads[i]!;
-    const { q, axial } = answers[i]!;
+    const loads = nodeLoads[i];
+    const { q, axial } = answers[i];
     const reason = one.incomplete ? `a load could not be put on the truss (${one.incomplete})` : sections.refuse(one);
     if (reason !== null) return refusedCase(truss, one, reason);
     const balance = balanceJoints(base, held, pivots, axial, loads);
@@ -66,7 +66,7 @@ export function solveCases(
     const moves = cleanOfModes(base, held, factor, pivots, nodeMovements(held.movement, q));
     const axialForce = new Array<number | null>(truss.bars.length).fill(null);
     base.elongations.bars.forEach((b, row) => {
-      axialForce[b] = axial[row]! + 0;
+      axialForce[b] = axial[row] + 0;
     });
     return {
       ...headOf(one),
@@ -84,7 +84,7 @@ export function solveCases(
 
 function headOf({ name, nature, loads }: LoadCase) {
   const sum: [number, number, number] = [0, 0, 0];
-  for (const { force } of loads) for (let axis = 0; axis < 3; axis++) sum[axis] = sum[axis]! + force[axis]!;
+  for (const { force } of loads) for (let axis = 0; axis < 3; axis++) sum[axis] = sum[axis] + force[axis];
   return { name, nature, loads, loadSum: sum as Vec3 };
 }
 
@@ -114,8 +114,8 @@ function leaveOutSetAside({ truss, parts }: Problem, asked: readonly LoadCase[])
           'Join the parts to the rest or support them, or leave them out of the scope.',
           {
             nodes: lost.map(({ node }) => node),
-            at: truss.nodes[lost[0]!.node]!.at,
-            place: truss.nodes[lost[0]!.node]!.place,
+            at: truss.nodes[lost[0].node].at,
+            place: truss.nodes[lost[0].node].place,
           },
         ),
       );
@@ -129,12 +129,12 @@ function leaveOutSetAside({ truss, parts }: Problem, asked: readonly LoadCase[])
 function componentsOf({ truss }: Problem, loads: readonly NodalForce[]): Float64Array {
   const out = new Float64Array(3 * truss.nodes.length);
   for (const { node, force } of loads)
-    for (let axis = 0; axis < 3; axis++) out[3 * node + axis] = out[3 * node + axis]! + force[axis]!;
+    for (let axis = 0; axis < 3; axis++) out[3 * node + axis] = out[3 * node + axis] + force[axis];
   return out;
 }
 
 const vectorAt = (moves: Float64Array, i: number): Vec3 => [
-  moves[3 * i]! + 0,
-  moves[3 * i + 1]! + 0,
-  moves[3 * i + 2]! + 0,
+  moves[3 * i] + 0,
+  moves[3 * i + 1] + 0,
+  moves[3 * i + 2] + 0,
 ];

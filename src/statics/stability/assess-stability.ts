@@ -40,7 +40,7 @@ export function assessStability(truss: Truss, supports: Supports, options: Parti
   const { bars, springs } = base.elongations;
   const rank = countFreedoms(base.movement.freedoms) - spectrum.mechanisms;
   const nearly = nearlyMoves(spectrum, settings);
-  const expected = (i: number) => parts.freeBody && found.modes[i]!.rigid !== null;
+  const expected = (i: number) => parts.freeBody && found.modes[i].rigid !== null;
   return {
     nodes,
     bars: bars.length,
@@ -73,7 +73,7 @@ function describe(
 ): Mode[] {
   const { problem } = base;
   const { truss } = problem;
-  const partOf = (mode: FoundMode) => problem.parts.partOf[mode.pivot.node]!;
+  const partOf = (mode: FoundMode) => problem.parts.partOf[mode.pivot.node];
   const stressed = counts.filter((c) => c.selfStressStates > 0).map((c) => c.part);
   const inside = stressed.map((part) =>
     found.filter((m) => m.rigid === null && partOf(m) === part).map((m) => m.moves),
@@ -106,4 +106,4 @@ function wholeOrPart({ truss, parts }: Problem, mode: FoundMode): Mode['kind'] {
   return alone ? 'whole' : 'part';
 }
 
-const movementOf = (moves: Float64Array, i: number): Vec3 => [moves[3 * i]!, moves[3 * i + 1]!, moves[3 * i + 2]!];
+const movementOf = (moves: Float64Array, i: number): Vec3 => [moves[3 * i], moves[3 * i + 1], moves[3 * i + 2]];

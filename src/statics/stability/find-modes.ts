@@ -56,10 +56,10 @@ export function findModes(base: System, spectrum: Spectrum, options: StabilityOp
     for (const { part, motions, candidates } of bodies) {
       const own = inner.map((p, i) => (problem.parts.partOf[p.node] === part ? i : -1)).filter((i) => i >= 0);
       if (own.length === 0) continue;
-      const modes = own.map((i) => moves[i]!);
+      const modes = own.map((i) => moves[i]);
       const held = holdRigid(problem, motions, bestBase(problem, motions, candidates, modes));
       heldBodies.set(part, held);
-      for (const i of own) moves[i] = withoutRigid(held, moves[i]!);
+      for (const i of own) moves[i] = withoutRigid(held, moves[i]);
     }
     const local = localise(problem.truss, moves);
     if (local.pivots.length === inner.length) {
@@ -74,7 +74,7 @@ export function findModes(base: System, spectrum: Spectrum, options: StabilityOp
       rigid: motion,
       stretch: stretchOf(base, motion.moves),
     })),
-    ...moves.map((m, i) => ({ moves: m, pivot: pivots[i]!, rigid: null, stretch: stretchOf(base, m) })),
+    ...moves.map((m, i) => ({ moves: m, pivot: pivots[i], rigid: null, stretch: stretchOf(base, m) })),
   ];
   return {
     modes: found.filter((mode) => mode.stretch <= options.mostStretch),
@@ -90,12 +90,12 @@ function matchRigid(motions: readonly RigidMotion[], pivots: readonly Restraint[
     let most = -1;
     left.forEach(({ node, direction }, i) => {
       let along = 0;
-      for (let axis = 0; axis < 3; axis++) along += direction[axis]! * motion.moves[3 * node + axis]!;
+      for (let axis = 0; axis < 3; axis++) along += direction[axis] * motion.moves[3 * node + axis];
       if (Math.abs(along) > most + 1e-9) {
         most = Math.abs(along);
         best = i;
       }
     });
-    return { motion, pivot: left.splice(best, 1)[0]! };
+    return { motion, pivot: left.splice(best, 1)[0] };
   });
 }

@@ -14,7 +14,7 @@ const TANGLED = { modes: 3, nodesEach: 6 };
 export function movesFreely(truss: Truss, modes: readonly Mode[]): Finding[] {
   const tangles: Mode[][] = [];
   const single: Mode[] = [];
-  const groups = groupByNodes(modes.map((mode) => mode.nodes)).map((group) => group.map((i) => modes[i]!));
+  const groups = groupByNodes(modes.map((mode) => mode.nodes)).map((group) => group.map((i) => modes[i]));
   for (const group of groups) {
     const each = group.reduce((sum, mode) => sum + mode.nodes.length, 0) / group.length;
     if (group.length > TANGLED.modes && each > TANGLED.nodesEach) tangles.push(group);
@@ -46,9 +46,9 @@ function groupBy<T>(items: readonly T[], keyOf: (item: T) => string): T[][] {
 }
 
 function aboutAlike(truss: Truss, group: readonly Bundle[]): Finding {
-  const bundle = group[0]!;
-  const first = bundle[0]!;
-  const ways = bundle.slice(1).map((mode) => directionInWords(tidyDirection(mode.movement[indexOfMost(mode)]!)));
+  const bundle = group[0];
+  const first = bundle[0];
+  const ways = bundle.slice(1).map((mode) => directionInWords(tidyDirection(mode.movement[indexOfMost(mode)])));
   const also = ways.length > 0 ? `; and in ${count(ways.length, 'more way')}: ${ways.join(', ')}` : '';
   const others = group.length > 1 ? `; the same at ${group.length} places in all` : '';
   return finding(
@@ -72,9 +72,9 @@ function aboutTangle(truss: Truss, group: readonly Mode[]): Finding {
 }
 
 function whereOf(truss: Truss, group: readonly Mode[]) {
-  const first = group[0]!;
+  const first = group[0];
   const nodes = [...new Set(group.flatMap((mode) => mode.nodes))].sort((a, b) => a - b);
-  const most = truss.nodes[first.nodes[indexOfMost(first)]!]!;
+  const most = truss.nodes[first.nodes[indexOfMost(first)]];
   return { nodes, at: most.at, place: most.place };
 }
 
@@ -88,7 +88,7 @@ function likenessOf(mode: Mode): string {
 
 function indexOfMost(mode: Mode): number {
   let best = 0;
-  const size = (i: number) => Math.hypot(...mode.movement[i]!);
+  const size = (i: number) => Math.hypot(...mode.movement[i]);
   mode.movement.forEach((_, i) => {
     if (size(i) > size(best) + 1e-9) best = i;
   });
@@ -129,9 +129,9 @@ export function nearlyMoves(spectrum: Spectrum, options: StabilityOptions): Find
 function smoothRun(ladder: readonly Rung[], options: StabilityOptions): string {
   const top = options.threshold * 100;
   const within = ladder.filter((rung) => rung.ratio <= top * 1.0001);
-  const last = within[within.length - 1]!;
+  const last = within[within.length - 1];
   const before = within.filter((rung) => rung.count === 0);
-  const from = before.length > 0 ? power(before[before.length - 1]!.ratio) : `below ${power(within[0]!.ratio)}`;
+  const from = before.length > 0 ? power(before[before.length - 1].ratio) : `below ${power(within[0].ratio)}`;
   const steps = within
     .filter((rung, i) => rung.count > 0 && i < within.length - 1 && Math.abs(Math.log10(rung.ratio) % 1) < 1e-6)
     .map((rung) => `${rung.count} below ${power(rung.ratio)}`);

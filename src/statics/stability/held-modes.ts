@@ -26,7 +26,7 @@ export function modesOfPivots(base: System, pivots: readonly Restraint[], moved:
   const loadOf = (elongation: Float64Array): Float64Array =>
     combineRows(
       held.rows,
-      elongation.map((e, row) => -e * held.stiffness[row]!),
+      elongation.map((e, row) => -e * held.stiffness[row]),
       unknowns,
     );
   const out: Float64Array[] = [];
@@ -37,17 +37,17 @@ export function modesOfPivots(base: System, pivots: readonly Restraint[], moved:
     // The second pass is the refinement that takes the stretch down to rounding.
     for (let pass = 0; pass < 2; pass++) {
       const loads = stretch.map((e, t) => {
-        const more = multiplyRows(held.rows, answers[t]!);
-        return loadOf(e.map((v, row) => v + more[row]!));
+        const more = multiplyRows(held.rows, answers[t]);
+        return loadOf(e.map((v, row) => v + more[row]));
       });
       solveMany(factor, loads).forEach((step, t) => {
-        const answer = answers[t]!;
-        for (let i = 0; i < unknowns; i++) answer[i] = answer[i]! + step[i]!;
+        const answer = answers[t];
+        for (let i = 0; i < unknowns; i++) answer[i] = answer[i] + step[i];
       });
     }
     answers.forEach((answer, t) => {
       const moves = nodeMovements(held.movement, answer);
-      for (let i = 0; i < moves.length; i++) moves[i] = moves[i]! + start[t]![i]!;
+      for (let i = 0; i < moves.length; i++) moves[i] = moves[i] + start[t][i];
       out.push(tidyMode(moves));
     });
   }

@@ -38,15 +38,15 @@ function largestCluster(problem: Problem, moving: readonly number[]): { nodes: n
 
 /** Whether the nodes keep all their distances, to first order, under the movement: fitted by least squares to one rigid motion. */
 function isRigid(problem: Problem, nodes: readonly number[], moves: Float64Array): boolean {
-  const at = (i: number) => problem.truss.nodes[i]!.at;
-  const centre: Vec3 = at(nodes[0]!);
+  const at = (i: number) => problem.truss.nodes[i].at;
+  const centre: Vec3 = at(nodes[0]);
   const elementary = [0, 1, 2, 3, 4, 5].map((k) => ({
     centre,
     shift: axisOr(k),
     turn: axisOr(k - 3),
   }));
   const columns = elementary.map((twist) => nodes.flatMap((i) => [...movementAt(twist, at(i))]));
-  let rest = nodes.flatMap((i) => [moves[3 * i]!, moves[3 * i + 1]!, moves[3 * i + 2]!]);
+  let rest = nodes.flatMap((i) => [moves[3 * i], moves[3 * i + 1], moves[3 * i + 2]]);
   const basis: number[][] = [];
   for (const column of columns) {
     const before = Math.hypot(...column);
@@ -63,6 +63,6 @@ const axisOr = (k: number): Vec3 => [k === 0 ? 1 : 0, k === 1 ? 1 : 0, k === 2 ?
 
 function without(vector: readonly number[], b: readonly number[]): number[] {
   let k = 0;
-  for (let i = 0; i < vector.length; i++) k += vector[i]! * b[i]!;
-  return vector.map((v, i) => v - k * b[i]!);
+  for (let i = 0; i < vector.length; i++) k += vector[i] * b[i];
+  return vector.map((v, i) => v - k * b[i]);
 }

@@ -12,7 +12,7 @@ export function movingNodes(truss: Truss, moves: Float64Array): number[] {
   const out: number[] = [];
   truss.nodes.forEach((node, i) => {
     if (node.carriedBy !== null) return;
-    const size = Math.max(Math.abs(moves[3 * i]!), Math.abs(moves[3 * i + 1]!), Math.abs(moves[3 * i + 2]!));
+    const size = Math.max(Math.abs(moves[3 * i]), Math.abs(moves[3 * i + 1]), Math.abs(moves[3 * i + 2]));
     if (size > STILL * most) out.push(i);
   });
   return out;
@@ -24,10 +24,10 @@ export function localise(truss: Truss, modes: readonly Float64Array[]): ReducedM
   const groups = groupByNodes(moving);
   const out: ReducedModes = { modes: [], pivots: [] };
   for (const group of groups) {
-    const nodes = [...new Set(group.flatMap((i) => moving[i]!))].sort((a, b) => a - b);
+    const nodes = [...new Set(group.flatMap((i) => moving[i]))].sort((a, b) => a - b);
     const reduced = reduceModes(
       truss,
-      group.map((i) => modes[i]!),
+      group.map((i) => modes[i]),
       nodes,
     );
     out.modes.push(...reduced.modes);

@@ -39,15 +39,15 @@ function nearbyStates(
 ): Float64Array[] {
   const { truss } = held.problem;
   const turned = held.elongations.bars
-    .map((b, row) => ({ row, bar: truss.bars[b]! }))
+    .map((b, row) => ({ row, bar: truss.bars[b] }))
     .filter(({ bar }) =>
-      modes.some((m) => [0, 1, 2].some((a) => Math.abs(m[3 * bar.to + a]! - m[3 * bar.from + a]!) > 1e-9)),
+      modes.some((m) => [0, 1, 2].some((a) => Math.abs(m[3 * bar.to + a] - m[3 * bar.from + a]) > 1e-9)),
     )
     .map(({ row }) => row);
   const step = Math.max(1, turned.length / MOST_STATES);
   const states: Float64Array[] = [];
   for (let i = 0; i < turned.length; i += step) {
-    const state = selfStress(held, factor, turned[Math.floor(i)]!);
+    const state = selfStress(held, factor, turned[Math.floor(i)]);
     if (state !== null) states.push(state);
   }
   return states;
@@ -61,7 +61,7 @@ function selfStress(held: System, factor: ReturnType<typeof factorise>, row: num
   for (let pass = 0; pass < 3; pass++) {
     const load = combineRows(rows, tension, held.matrix.symbolic.freedoms.active.length);
     const elongation = multiplyRows(rows, solveOne(factor, load));
-    for (let r = 0; r < tension.length; r++) tension[r] = tension[r]! - stiffness[r]! * elongation[r]!;
+    for (let r = 0; r < tension.length; r++) tension[r] = tension[r] - stiffness[r] * elongation[r];
   }
   const size = largest(tension);
   return size < 1e-7 ? null : tension.map((t) => (Math.abs(t) < 1e-9 * size ? 0 : t / size));
@@ -73,11 +73,11 @@ function productForces(held: System, tension: Float64Array, modes: readonly Floa
   const { bars, lengths } = held.elongations;
   const q = Matrix.zeros(modes.length, modes.length);
   bars.forEach((b, row) => {
-    const density = tension[row]! / lengths[row]!;
+    const density = tension[row] / lengths[row];
     if (density === 0) return;
-    const { from, to } = truss.bars[b]!;
+    const { from, to } = truss.bars[b];
     for (let axis = 0; axis < 3; axis++) {
-      const relative = modes.map((m) => m[3 * to + axis]! - m[3 * from + axis]!);
+      const relative = modes.map((m) => m[3 * to + axis] - m[3 * from + axis]);
       relative.forEach((ri, i) => {
         if (ri === 0) return;
         relative.forEach((rj, j) => {
@@ -97,19 +97,19 @@ export function canBeDefinite(matrices: readonly Matrix[]): boolean {
   for (const sign of [1, -1]) {
     let weights = scaled.map((q) => sign * (q.trace() || 1e-3));
     for (let step = 0; step < 80; step++) {
-      const sum = Matrix.zeros(scaled[0]!.rows, scaled[0]!.columns);
+      const sum = Matrix.zeros(scaled[0].rows, scaled[0].columns);
       scaled.forEach((q, s) => {
-        sum.add(Matrix.mul(q, weights[s]!));
+        sum.add(Matrix.mul(q, weights[s]));
       });
       const eigen = new EigenvalueDecomposition(sum, { assumeSymmetric: true });
       const lowest = eigen.realEigenvalues.indexOf(Math.min(...eigen.realEigenvalues));
-      if (eigen.realEigenvalues[lowest]! > 1e-6 * sum.norm()) return true;
+      if (eigen.realEigenvalues[lowest] > 1e-6 * sum.norm()) return true;
       const direction = eigen.eigenvectorMatrix.getColumnVector(lowest);
       const slope = scaled.map((q) => direction.transpose().mmul(q).mmul(direction).get(0, 0));
       const size = Math.hypot(...slope);
       if (size < 1e-9) break;
       const reach = Math.hypot(...weights) / Math.sqrt(step + 1);
-      weights = weights.map((w, s) => w + (reach * slope[s]!) / size);
+      weights = weights.map((w, s) => w + (reach * slope[s]) / size);
     }
   }
   return false;

@@ -38,7 +38,7 @@ export function findPivots(base: System, held: readonly Restraint[], wanted: num
 function asRestraint(movement: Movement, { block, direction }: HeldPivot): Restraint {
   const world = [0, 0, 0];
   direction.forEach((part, c) => {
-    for (let axis = 0; axis < 3; axis++) world[axis] = world[axis]! + part * movement.frame[9 * block + 3 * c + axis]!;
+    for (let axis = 0; axis < 3; axis++) world[axis] = world[axis] + part * movement.frame[9 * block + 3 * c + axis];
   });
   return { node: block, direction: world as unknown as Vec3 };
 }

@@ -21,7 +21,7 @@ export function reduceModes(
   moves: readonly Float64Array[],
   only: readonly number[] | null = null,
 ): ReducedModes {
-  const nodes = (only ?? truss.nodes.map((_, i) => i)).filter((i) => truss.nodes[i]!.carriedBy === null);
+  const nodes = (only ?? truss.nodes.map((_, i) => i)).filter((i) => truss.nodes[i].carriedBy === null);
   const modes = moves.map((move) => move.slice());
   const size = modes.map(largest);
   const pivotOf: (Restraint | null)[] = modes.map(() => null);
@@ -33,7 +33,7 @@ export function reduceModes(
       if (pivotOf[c] !== null || size[c] === 0) return;
       for (const i of nodes) {
         // A hair's preference for the first, so that equal movements are taken in the order of the nodes.
-        const amount = Math.sqrt(mode[3 * i]! ** 2 + mode[3 * i + 1]! ** 2 + mode[3 * i + 2]! ** 2) / size[c]!;
+        const amount = Math.sqrt(mode[3 * i] ** 2 + mode[3 * i + 1] ** 2 + mode[3 * i + 2] ** 2) / size[c];
         if (amount > best * (1 + 1e-9)) {
           best = amount;
           column = c;
@@ -42,17 +42,17 @@ export function reduceModes(
       }
     });
     if (column < 0) break;
-    const mode = modes[column]!;
-    const direction = tidyDirection([mode[3 * node]!, mode[3 * node + 1]!, mode[3 * node + 2]!]);
+    const mode = modes[column];
+    const direction = tidyDirection([mode[3 * node], mode[3 * node + 1], mode[3 * node + 2]]);
     const along = (m: Float64Array) =>
-      direction[0] * m[3 * node]! + direction[1] * m[3 * node + 1]! + direction[2] * m[3 * node + 2]!;
+      direction[0] * m[3 * node] + direction[1] * m[3 * node + 1] + direction[2] * m[3 * node + 2];
     const factor = 1 / along(mode);
-    for (let i = 0; i < mode.length; i++) mode[i] = mode[i]! * factor;
+    for (let i = 0; i < mode.length; i++) mode[i] = mode[i] * factor;
     modes.forEach((other, c) => {
       if (c === column) return;
       const k = along(other);
       if (k === 0) return;
-      for (let i = 0; i < other.length; i++) other[i] = other[i]! - k * mode[i]!;
+      for (let i = 0; i < other.length; i++) other[i] = other[i] - k * mode[i];
     });
     pivotOf[column] = { node, direction };
   }

@@ -24,13 +24,13 @@ export function rigidMotions(system: System): RigidMotion[] {
   const { parts, truss } = problem;
   const nodesOf: number[][] = Array.from({ length: parts.count }, () => []);
   parts.partOf.forEach((part, node) => {
-    if (part >= 0 && parts.liveNode[node] && truss.nodes[node]!.carriedBy === null) nodesOf[part]!.push(node);
+    if (part >= 0 && parts.liveNode[node] && truss.nodes[node].carriedBy === null) nodesOf[part].push(node);
   });
   const supportsOf: { node: number; direction: Vec3 }[][] = nodesOf.map(() => []);
   for (const support of [...problem.supports.restraints, ...problem.supports.springs])
-    supportsOf[parts.partOf[support.node]!]!.push(support);
+    supportsOf[parts.partOf[support.node]].push(support);
   return nodesOf.flatMap((nodes, part) =>
-    nodes.length === 0 ? [] : partMotions(problem, system.movement.shares, part, nodes, supportsOf[part]!),
+    nodes.length === 0 ? [] : partMotions(problem, system.movement.shares, part, nodes, supportsOf[part]),
   );
 }
 
@@ -42,11 +42,11 @@ function partMotions(
   supports: readonly { node: number; direction: Vec3 }[],
 ): RigidMotion[] {
   const { truss } = problem;
-  const centre = middle(nodes.map((i) => truss.nodes[i]!.at));
-  const radius = Math.max(...nodes.map((i) => Math.hypot(...subtract(truss.nodes[i]!.at, centre))), 1e-6);
+  const centre = middle(nodes.map((i) => truss.nodes[i].at));
+  const radius = Math.max(...nodes.map((i) => Math.hypot(...subtract(truss.nodes[i].at, centre))), 1e-6);
   const move = (twist: Twist): Float64Array => {
     const own = new Float64Array(3 * truss.nodes.length);
-    for (const i of nodes) own.set(movementAt(twist, truss.nodes[i]!.at), 3 * i);
+    for (const i of nodes) own.set(movementAt(twist, truss.nodes[i].at), 3 * i);
     return carryMovements(truss, shares, own);
   };
   const elementary = AXES.flatMap((axis): Twist[] => [{ centre, shift: axis, turn: [0, 0, 0] }]).concat(
@@ -56,8 +56,8 @@ function partMotions(
   const conditions = supports.map(({ node, direction }) =>
     elementary.map((twist) => {
       let sum = 0;
-      for (const [real, share] of shares[node]!) {
-        const m = movementAt(twist, truss.nodes[real]!.at);
+      for (const [real, share] of shares[node]) {
+        const m = movementAt(twist, truss.nodes[real].at);
         sum += share * (m[0] * direction[0] + m[1] * direction[1] + m[2] * direction[2]);
       }
       return sum;
@@ -98,11 +98,11 @@ export function nullSpace(rows: readonly (readonly number[])[], width: number, t
       });
     });
     if (r < 0) break;
-    const pivot = left.splice(r, 1)[0]!.map((v, _, all) => v / all[column]!);
+    const pivot = left.splice(r, 1)[0].map((v, _, all) => v / all[column]);
     for (const row of [...left, ...pivots.map((p) => p.row)]) {
-      const k = row[column]!;
+      const k = row[column];
       pivot.forEach((v, c) => {
-        row[c] = row[c]! - k * v;
+        row[c] = row[c] - k * v;
       });
     }
     pivots.push({ row: pivot, column });
@@ -113,7 +113,7 @@ export function nullSpace(rows: readonly (readonly number[])[], width: number, t
     .map((free) => {
       const vector = new Array<number>(width).fill(0);
       vector[free] = 1;
-      for (const { row, column } of pivots) vector[column] = Math.abs(row[free]!) < 1e-12 ? 0 : -row[free]!;
+      for (const { row, column } of pivots) vector[column] = Math.abs(row[free]) < 1e-12 ? 0 : -row[free];
       return vector;
     });
 }
@@ -131,7 +131,7 @@ function combine(centre: Vec3, elementary: readonly Twist[], weights: readonly n
     const out = [0, 0, 0];
     elementary.forEach((twist, i) => {
       pick(twist).forEach((v, axis) => {
-        out[axis] = out[axis]! + weights[i]! * v;
+        out[axis] = out[axis] + weights[i] * v;
       });
     });
     return out as unknown as Vec3;
@@ -141,7 +141,7 @@ function combine(centre: Vec3, elementary: readonly Twist[], weights: readonly n
 
 function middle(points: readonly Vec3[]): Vec3 {
   const sum = [0, 0, 0];
-  for (const p of points) for (let axis = 0; axis < 3; axis++) sum[axis] = sum[axis]! + p[axis]! / points.length;
+  for (const p of points) for (let axis = 0; axis < 3; axis++) sum[axis] = sum[axis] + p[axis] / points.length;
   return sum as unknown as Vec3;
 }
 
@@ -153,8 +153,8 @@ function dependsOn(others: readonly Float64Array[], moves: Float64Array): boolea
     for (let pass = 0; pass < 2; pass++)
       for (const b of basis) {
         let k = 0;
-        for (let i = 0; i < out.length; i++) k += b[i]! * out[i]!;
-        for (let i = 0; i < out.length; i++) out[i] = out[i]! - k * b[i]!;
+        for (let i = 0; i < out.length; i++) k += b[i] * out[i];
+        for (let i = 0; i < out.length; i++) out[i] = out[i] - k * b[i];
       }
     return out;
   };

@@ -76,28 +76,28 @@ function widestGap(counts: Counts, options: StabilityOptions, bisect: boolean): 
   const fill = (i: number, j: number): void => {
     if (j - i < 2) return;
     if (count[i] === count[j]) {
-      count.fill(count[i]!, i + 1, j);
+      count.fill(count[i], i + 1, j);
       return;
     }
     const middle = (i + j) >> 1;
-    count[middle] = counts.below(ratios[middle]!);
+    count[middle] = counts.below(ratios[middle]);
     fill(i, middle);
     fill(middle, j);
   };
-  count[0] = counts.below(ratios[0]!);
-  count[ratios.length - 1] = counts.below(ratios[ratios.length - 1]!);
+  count[0] = counts.below(ratios[0]);
+  count[ratios.length - 1] = counts.below(ratios[ratios.length - 1]);
   fill(0, ratios.length - 1);
 
   let widest: Gap | null = null;
   for (let i = 0; i < ratios.length; ) {
     let j = i;
     while (j + 1 < ratios.length && count[j + 1] === count[i]) j++;
-    const next = j + 1 < ratios.length ? ratios[j + 1]! : 2;
-    const before = i > 0 ? ratios[i - 1]! : ROUNDING;
-    if (ratios[i]! <= options.threshold && next / before >= options.clearGap) {
-      const lower = i === 0 || !bisect ? ratios[i]! : counts.edge(before, ratios[i]!, count[i]!, false);
-      const upper = bisect || j + 1 === ratios.length ? counts.edge(ratios[j]!, next, count[i]!, true) : ratios[j]!;
-      if (widest === null || upper / lower > widest.upper / widest.lower) widest = { count: count[i]!, lower, upper };
+    const next = j + 1 < ratios.length ? ratios[j + 1] : 2;
+    const before = i > 0 ? ratios[i - 1] : ROUNDING;
+    if (ratios[i] <= options.threshold && next / before >= options.clearGap) {
+      const lower = i === 0 || !bisect ? ratios[i] : counts.edge(before, ratios[i], count[i], false);
+      const upper = bisect || j + 1 === ratios.length ? counts.edge(ratios[j], next, count[i], true) : ratios[j];
+      if (widest === null || upper / lower > widest.upper / widest.lower) widest = { count: count[i], lower, upper };
     }
     i = j + 1;
   }

@@ -19,9 +19,9 @@ export function withoutRigid(rigid: ReducedModes, mode: Float64Array): Float64Ar
   const out = mode.slice();
   rigid.pivots.forEach(({ node, direction }, r) => {
     let k = 0;
-    for (let axis = 0; axis < 3; axis++) k += direction[axis]! * mode[3 * node + axis]!;
-    const motion = rigid.modes[r]!;
-    if (k !== 0) for (let i = 0; i < out.length; i++) out[i] = out[i]! - k * motion[i]!;
+    for (let axis = 0; axis < 3; axis++) k += direction[axis] * mode[3 * node + axis];
+    const motion = rigid.modes[r];
+    if (k !== 0) for (let i = 0; i < out.length; i++) out[i] = out[i] - k * motion[i];
   });
   return out;
 }
@@ -33,7 +33,7 @@ export function baseCandidates(problem: Problem, part: number): number[][] {
   const pairs: number[][] = [];
   truss.bars.forEach((bar, b) => {
     if (!parts.liveBar[b] || parts.partOf[bar.from] !== part) return;
-    if (truss.nodes[bar.from]!.carriedBy !== null || truss.nodes[bar.to]!.carriedBy !== null) return;
+    if (truss.nodes[bar.from].carriedBy !== null || truss.nodes[bar.to].carriedBy !== null) return;
     pairs.push([bar.from, bar.to]);
     joined.set(bar.from, [...(joined.get(bar.from) ?? []), bar.to]);
     joined.set(bar.to, [...(joined.get(bar.to) ?? []), bar.from]);
@@ -72,30 +72,30 @@ export function bestBase(
 /** The mode less the rigid motion that it makes at the base. */
 function atRest(motions: readonly RigidMotion[], base: readonly number[], mode: Float64Array): Float64Array {
   const out = mode.slice();
-  const local = motions.map((m) => base.flatMap((i) => [m.moves[3 * i]!, m.moves[3 * i + 1]!, m.moves[3 * i + 2]!]));
+  const local = motions.map((m) => base.flatMap((i) => [m.moves[3 * i], m.moves[3 * i + 1], m.moves[3 * i + 2]]));
   const basis: { readonly at: number[]; readonly moves: Float64Array }[] = [];
   local.forEach((vector, r) => {
     let at = [...vector];
-    let moves = motions[r]!.moves.slice();
+    let moves = motions[r].moves.slice();
     for (let pass = 0; pass < 2; pass++)
       for (const b of basis) {
-        const k = at.reduce((sum, v, i) => sum + v * b.at[i]!, 0);
-        at = at.map((v, i) => v - k * b.at[i]!);
-        moves = moves.map((v, i) => v - k * b.moves[i]!);
+        const k = at.reduce((sum, v, i) => sum + v * b.at[i], 0);
+        at = at.map((v, i) => v - k * b.at[i]);
+        moves = moves.map((v, i) => v - k * b.moves[i]);
       }
     const size = Math.hypot(...at);
     if (size > 1e-6) basis.push({ at: at.map((v) => v / size), moves: moves.map((v) => v / size) });
   });
-  const here = base.flatMap((i) => [mode[3 * i]!, mode[3 * i + 1]!, mode[3 * i + 2]!]);
+  const here = base.flatMap((i) => [mode[3 * i], mode[3 * i + 1], mode[3 * i + 2]]);
   for (const b of basis) {
-    const k = here.reduce((sum, v, i) => sum + v * b.at[i]!, 0);
-    if (k !== 0) for (let i = 0; i < out.length; i++) out[i] = out[i]! - k * b.moves[i]!;
+    const k = here.reduce((sum, v, i) => sum + v * b.at[i], 0);
+    if (k !== 0) for (let i = 0; i < out.length; i++) out[i] = out[i] - k * b.moves[i];
   }
   return out;
 }
 
 function inLine(problem: Problem, a: number, b: number, c: number): boolean {
-  const at = (i: number) => problem.truss.nodes[i]!.at;
+  const at = (i: number) => problem.truss.nodes[i].at;
   const twist = { centre: at(a), shift: [0, 0, 0] as Vec3, turn: minus(at(b), at(a)) };
   const area = Math.hypot(...movementAt(twist, at(c)));
   return area < 1e-3 * Math.hypot(...minus(at(b), at(a))) * Math.hypot(...minus(at(c), at(a)));

@@ -13,7 +13,7 @@ const FEW = 3;
 
 /** A node in words: its place in the building, or its coordinates to the millimetre. */
 export function nodeInWords(truss: Truss, node: number): string {
-  const { at, place } = truss.nodes[node]!;
+  const { at, place } = truss.nodes[node];
   return place ?? `(${at.map((v) => plain(v, 3)).join(', ')})`;
 }
 
@@ -33,16 +33,16 @@ export function modeInWords(truss: Truss, mode: FoundMode, kind: Mode['kind']): 
   if (mode.rigid !== null) return rigidInWords(truss, mode, kind, nodes) + note;
   const directions = nodes.map((i) => movementDirection(mode.moves, i));
   const common = directions.every(
-    (d) => Math.abs(d[0] * directions[0]![0] + d[1] * directions[0]![1] + d[2] * directions[0]![2]) > 1 - 1e-6,
+    (d) => Math.abs(d[0] * directions[0][0] + d[1] * directions[0][1] + d[2] * directions[0][2]) > 1 - 1e-6,
   );
-  const most = [...nodes].sort((a, b) => sizeAt(mode.moves, b) - sizeAt(mode.moves, a) || a - b)[0]!;
+  const most = [...nodes].sort((a, b) => sizeAt(mode.moves, b) - sizeAt(mode.moves, a) || a - b)[0];
   const who = listNodes(truss, nodes);
   if (kind === 'part') {
     const how = directionInWords(movementDirection(mode.moves, most));
     return `${count(nodes.length, 'node')} can move as one body against the rest, the node at ${nodeInWords(truss, most)} ${how}${note}`;
   }
   if (common) {
-    const way = directionInWords(directions[0]!);
+    const way = directionInWords(directions[0]);
     if (nodes.length === 1) return `the node at ${who} can move ${way}: no bar holds it in that direction${note}`;
     return `the nodes at ${who} can move ${way} together: no bar holds them in that direction${note}`;
   }
@@ -56,7 +56,7 @@ function rigidInWords(truss: Truss, mode: FoundMode, kind: Mode['kind'], nodes: 
   const who =
     kind === 'whole'
       ? 'the whole truss'
-      : `a part of ${count(nodes.length, 'node')} about ${nodeInWords(truss, nodes[0]!)}`;
+      : `a part of ${count(nodes.length, 'node')} about ${nodeInWords(truss, nodes[0])}`;
   if (norm(turn) === 0) return `${who} can move ${directionInWords(tidyDirection(shift))} as one body`;
   const size = turn[0] ** 2 + turn[1] ** 2 + turn[2] ** 2;
   // The axis of the turn passes where turn x (point - centre) undoes the shift.
@@ -74,15 +74,15 @@ function rigidInWords(truss: Truss, mode: FoundMode, kind: Mode['kind'], nodes: 
 function listNodes(truss: Truss, nodes: readonly number[]): string {
   const shown = nodes.slice(0, FEW).map((i) => nodeInWords(truss, i));
   if (nodes.length > FEW) return `${shown.join(', ')} and ${nodes.length - FEW} more`;
-  return shown.length === 1 ? shown[0]! : `${shown.slice(0, -1).join(', ')} and ${shown[shown.length - 1]}`;
+  return shown.length === 1 ? shown[0] : `${shown.slice(0, -1).join(', ')} and ${shown[shown.length - 1]}`;
 }
 
 export function movementDirection(moves: Float64Array, node: number): Vec3 {
-  return tidyDirection([moves[3 * node]!, moves[3 * node + 1]!, moves[3 * node + 2]!]);
+  return tidyDirection([moves[3 * node], moves[3 * node + 1], moves[3 * node + 2]]);
 }
 
 export function sizeAt(moves: Float64Array, node: number): number {
-  return Math.hypot(moves[3 * node]!, moves[3 * node + 1]!, moves[3 * node + 2]!);
+  return Math.hypot(moves[3 * node], moves[3 * node + 1], moves[3 * node + 2]);
 }
 
 export const count = (n: number, one: string, many = `${one}s`): string => `${n} ${n === 1 ? one : many}`;

@@ -98,9 +98,9 @@ describe('a node selector', () => {
     const truss = {
       ...made.truss,
       nodes: made.truss.nodes.map((node, i) => ({ ...node, members: [i] })),
-      bars: [{ ...made.truss.bars[0]!, members: [0, 1] }],
+      bars: [{ ...made.truss.bars[0], members: [0, 1] }],
     };
-    const members = ['left', 'right'].map((name) => ({ ...made.members[0]!, name }));
+    const members = ['left', 'right'].map((name) => ({ ...made.members[0], name }));
     for (const key of ['endOf', 'joins']) {
       expect(selectNodes(truss, members, [{ line: 1, [key]: [{ line: 1, name: 'right' }] }])).toEqual([1]);
     }

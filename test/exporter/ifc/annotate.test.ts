@@ -88,7 +88,7 @@ describe('what is appended', () => {
 
   it('draws another GlobalId, always the same, where the model has one already', () => {
     const before = model('IFC4');
-    const first = /IFCPROPERTYSET\('([^']{22})',\$,'Pinwright_Forces'/.exec(annotated(before))![1]!;
+    const first = /IFCPROPERTYSET\('([^']{22})',\$,'Pinwright_Forces'/.exec(annotated(before))![1];
     const taken = before.replace('ENDSEC;\nEND', `#900=IFCPROXY('${first}',$,'x',$,$,$,$,.PRODUCT.,$);\nENDSEC;\nEND`);
     expect(taken).not.toBe(before);
     const after = annotated(taken);
@@ -170,7 +170,7 @@ describe('what is appended', () => {
       after,
     )!;
     expect(table[1]).not.toBe(table[2]);
-    expect(table[1]!.match(/00FC/g)!.length).toBe(254);
+    expect(table[1].match(/00FC/g)!.length).toBe(254);
   });
 
   it('is refused where something foreign stands in an earlier one', () => {
@@ -254,7 +254,7 @@ describe.skipIf(check === null)('the independent checker', () => {
     expect(problems(path)).toMatch(/^0 problems in [1-9]/);
   });
 
-  it.skipIf(MODELS[0]!.path === null).each(MODELS)(
+  it.skipIf(MODELS[0].path === null).each(MODELS)(
     'finds no problem in the block of $name',
     ({ name, path }) => {
       const file = openStep(new Uint8Array(readFileSync(path!)));

@@ -45,8 +45,8 @@ describe('a drawn GlobalId', () => {
     ];
     expect(new Set([id, ...others]).size).toBe(5);
     const bytes = decodeGlobalId(id)!;
-    expect(bytes[6]! >> 4).toBe(5);
-    expect(bytes[8]! >> 6).toBe(2);
+    expect(bytes[6] >> 4).toBe(5);
+    expect(bytes[8] >> 6).toBe(2);
   });
 
   it('follows RFC 9562: its example in A.4, www.example.com among the DNS names', () => {

@@ -34,7 +34,7 @@ function dense({ freedoms, rows, stiffness }: ReturnType<typeof randomSystem>): 
     const unit = new Float64Array(freedoms.active.length);
     unit[u] = 1;
     const image = applyStiffness(rows, stiffness, unit);
-    return unknown.map((v) => image[v]!);
+    return unknown.map((v) => image[v]);
   });
   return { matrix: new Matrix(columns), unknown };
 }
@@ -53,7 +53,7 @@ describe.each([1, 2, 3, 4, 6])('with %i freedoms a block', (stride) => {
     expect([...order].sort((a, b) => a - b)).toEqual(Array.from({ length: 30 }, (_, i) => i));
     const assembled = assemble(layOut(system.freedoms, graph, order), system.rows, system.stiffness);
     for (let i = 0; i + 1 < values.length; i += 3) {
-      const shift = (values[i]! + values[i + 1]!) / 2;
+      const shift = (values[i] + values[i + 1]) / 2;
       expect(factorise(assembled, { shift }).negative).toBe(i + 1);
     }
     const random = randomFrom(9);
@@ -62,7 +62,7 @@ describe.each([1, 2, 3, 4, 6])('with %i freedoms a block', (stride) => {
     );
     solveMany(factorise(assembled), loads).forEach((x, t) => {
       const image = applyStiffness(system.rows, system.stiffness, x);
-      for (const u of unknown) expect(image[u]).toBeCloseTo(loads[t]![u]!, 9);
+      for (const u of unknown) expect(image[u]).toBeCloseTo(loads[t][u], 9);
     });
   });
 
@@ -70,10 +70,10 @@ describe.each([1, 2, 3, 4, 6])('with %i freedoms a block', (stride) => {
     const assembled = assemble(layOut(system.freedoms, graph, orders.minimumDegree), system.rows, system.stiffness);
     const full = { ...system, matrix: assembled };
     const factor = factorise(assembled);
-    expect(lowestEigenvalue(factor) / values[0]!).toBeCloseTo(1, 3);
-    expect(highestEigenvalue(full) / values[values.length - 1]!).toBeCloseTo(1, 1);
+    expect(lowestEigenvalue(factor) / values[0]).toBeCloseTo(1, 3);
+    expect(highestEigenvalue(full) / values[values.length - 1]).toBeCloseTo(1, 1);
     lowestEigenpairs(full, factor, 2, 60).forEach((pair, i) => {
-      expect(pair.value / values[i]!).toBeCloseTo(1, 2);
+      expect(pair.value / values[i]).toBeCloseTo(1, 2);
     });
   });
 });
@@ -102,8 +102,8 @@ describe('orderings', () => {
         if (j + 1 < side) ends.push([i * side + j, i * side + j + 1]);
       }
     const rows = buildRows(ends.length, (row, put) => {
-      put(ends[row]![0], 1);
-      put(ends[row]![1], -1);
+      put(ends[row][0], 1);
+      put(ends[row][1], -1);
     });
     const graph = coupleBlocks(freedoms, rows);
     // Source: 31/4 n log2 n (George 1973), the natural order fills n^1.5.
@@ -111,9 +111,9 @@ describe('orderings', () => {
       freedoms,
       graph,
       Int32Array.from({ length: blocks }, (_, i) => i),
-    ).columnStart[blocks]!;
+    ).columnStart[blocks];
     for (const order of [nestedDissection(graph), minimumDegree(graph)]) {
-      const fill = layOut(freedoms, graph, order).columnStart[blocks]!;
+      const fill = layOut(freedoms, graph, order).columnStart[blocks];
       expect(fill).toBeLessThan(natural / 2);
       expect(fill).toBeLessThan((31 / 4) * blocks * Math.log2(blocks));
     }

@@ -24,7 +24,7 @@ const area = (pressure: number, acts: 'down' | 'normal', per: 'slope' | 'plan', 
 
 const total = (loads: readonly NodalForce[]): Vec3 => loads.reduce<Vec3>((sum, { force }) => add(sum, force), ORIGIN);
 const momentOf = ({ truss }: Made, loads: readonly NodalForce[]): Vec3 =>
-  loads.reduce<Vec3>((sum, { node, force }) => add(sum, cross(truss.nodes[node]!.at, force)), ORIGIN);
+  loads.reduce<Vec3>((sum, { node, force }) => add(sum, cross(truss.nodes[node].at, force)), ORIGIN);
 const downAt = (made: Made, loads: readonly NodalForce[]): number[] =>
   made.truss.nodes.map((_, node) => -(loads.find((load) => load.node === node)?.force[2] ?? 0));
 
@@ -48,7 +48,7 @@ describe('self weight', () => {
     );
     expect(findings).toEqual([]);
     const g = 9.80665 * 1.1;
-    expect(cases[0]!.loads.map(({ node, force }) => [node, force[2]])).toEqual([
+    expect(cases[0].loads.map(({ node, force }) => [node, force[2]])).toEqual([
       [0, expect.closeTo(-25 * g, 9)],
       [1, expect.closeTo(-45 * g, 9)],
       [2, expect.closeTo(-27 * g, 9)],
@@ -90,11 +90,11 @@ describe('point and line loads', () => {
       on: [{ line: 6, name: 'P*' }],
       per,
     });
-    expect(build(made, line('length')).cases[0]!.loads).toEqual([
+    expect(build(made, line('length')).cases[0].loads).toEqual([
       { node: 0, force: [0, 25, -50] },
       { node: 1, force: [0, 25, -50] },
     ]);
-    expect(build(made, line('plan')).cases[0]!.loads).toEqual([
+    expect(build(made, line('plan')).cases[0].loads).toEqual([
       { node: 0, force: [0, 15, -30] },
       { node: 1, force: [0, 15, -30] },
     ]);
@@ -106,9 +106,7 @@ describe('an area load', () => {
     const { at, runs } = makeGrid([0, 2, 4], [0, 6, 12]);
     const made = makeTruss(at, runs);
     const { cases, coverage } = build(made, area(100, 'down', 'plan'));
-    expect(downAt(made, cases[0]!.loads)).toEqual(
-      [3, 6, 3, 6, 12, 6, 3, 6, 3].map((m2) => expect.closeTo(100 * m2, 9)),
-    );
+    expect(downAt(made, cases[0].loads)).toEqual([3, 6, 3, 6, 12, 6, 3, 6, 3].map((m2) => expect.closeTo(100 * m2, 9)));
     expect(coverage).toEqual([
       {
         case: 'snow',
@@ -132,19 +130,19 @@ describe('an area load', () => {
 
   it('per slope is 1/cos of the pitch times that per plan', () => {
     const made = pitched();
-    const plan = total(build(made, area(600, 'down', 'plan', TOP)).cases[0]!.loads);
-    const slope = total(build(made, area(600, 'down', 'slope', TOP)).cases[0]!.loads);
+    const plan = total(build(made, area(600, 'down', 'plan', TOP)).cases[0].loads);
+    const slope = total(build(made, area(600, 'down', 'slope', TOP)).cases[0].loads);
     expect(plan[2]).toBeCloseTo(-600 * 144, 6);
     expect(slope[2] / plan[2]).toBeCloseTo(1 / Math.cos(pitch), 9);
   });
 
   it('normal to a pitched roof presses down and outwards, and sucks when negative', () => {
     const made = pitched();
-    const { loads } = build(made, area(1000, 'normal', 'slope')).cases[0]!;
+    const { loads } = build(made, area(1000, 'normal', 'slope')).cases[0];
     expect(total(loads).map((c) => Math.round(c * 1e6) / 1e6 + 0)).toEqual([0, 0, -144_000]);
     // On the left half the roof rises to the right: pressing pushes to the right.
     expect(loads.find(({ node }) => node === 5)!.force[0]).toBeGreaterThan(0);
-    const suction = build(made, area(-1000, 'normal', 'slope')).cases[0]!.loads;
+    const suction = build(made, area(-1000, 'normal', 'slope')).cases[0].loads;
     expect(total(suction)[2]).toBeCloseTo(144_000, 6);
   });
 
@@ -156,12 +154,12 @@ describe('an area load', () => {
       [index(i + 1, j), index(i, j + 1)],
     ];
     const braced = makeTruss(at, [...runs, ...cross(0, 0), ...cross(1, 0), ...cross(3, 2)]);
-    const down = downAt(plain, build(plain, area(600, 'down', 'slope')).cases[0]!.loads);
-    expect(downAt(braced, build(braced, area(600, 'down', 'slope', TOP)).cases[0]!.loads)).toEqual(
+    const down = downAt(plain, build(plain, area(600, 'down', 'slope')).cases[0].loads);
+    expect(downAt(braced, build(braced, area(600, 'down', 'slope', TOP)).cases[0].loads)).toEqual(
       down.map((f) => expect.closeTo(f, 9)),
     );
     for (let j = 0; j < 4; j++) {
-      for (let i = 0; i < 5; i++) expect(down[index(i, j)]).toBeCloseTo(down[index(4 - i, 3 - j)]!, 9);
+      for (let i = 0; i < 5; i++) expect(down[index(i, j)]).toBeCloseTo(down[index(4 - i, 3 - j)], 9);
     }
   });
 
@@ -170,8 +168,8 @@ describe('an area load', () => {
     const plain = makeTruss(at, runs);
     const braced = makeTruss(at, [...runs, [index(0, 0), index(3, 1)], [index(3, 0), index(0, 1)]]);
     const built = build(braced, area(600, 'down', 'plan'));
-    expect(built.coverage[0]!.patches).toBe(3);
-    expect(built.cases[0]!.loads).toEqual(build(plain, area(600, 'down', 'plan')).cases[0]!.loads);
+    expect(built.coverage[0].patches).toBe(3);
+    expect(built.cases[0].loads).toEqual(build(plain, area(600, 'down', 'plan')).cases[0].loads);
   });
 
   it('finds cells at purlins that chords carry between their panel points, whether these are chosen or not', () => {
@@ -198,17 +196,17 @@ describe('an area load', () => {
       { nodes: [0, 2], member: purlin },
     ]);
     const { cases } = build(made, area(100, 'down', 'plan'));
-    expect(downAt(made, cases[0]!.loads)).toEqual([2, 0, 2, 0, 4, 4, 2, 2].map((m2) => expect.closeTo(100 * m2, 9)));
+    expect(downAt(made, cases[0].loads)).toEqual([2, 0, 2, 0, 4, 4, 2, 2].map((m2) => expect.closeTo(100 * m2, 9)));
     const byPurlins: NodeSelector = { line: 8, joins: [{ line: 8, name: 'purlin' }] };
     expect(build(made, area(100, 'down', 'plan', byPurlins)).cases).toEqual(cases);
-    expect(build(made, area(100, 'down', 'plan')).coverage[0]!.unloaded).toEqual([1, 3]);
+    expect(build(made, area(100, 'down', 'plan')).coverage[0].unloaded).toEqual([1, 3]);
   });
 
   it('gives the panel points of two chords joined at their ends only what lies beside each', () => {
     const xs = [0, 2, 4, 6, 8];
     const at: Vec3[] = [0, 3].flatMap((y) => xs.map((x): Vec3 => [x, y, 0]));
     const made = makeTruss(at, [{ nodes: [0, 1, 2, 3, 4] }, { nodes: [5, 6, 7, 8, 9] }, [0, 5], [4, 9]]);
-    const down = downAt(made, build(made, area(10, 'down', 'plan')).cases[0]!.loads);
+    const down = downAt(made, build(made, area(10, 'down', 'plan')).cases[0].loads);
     expect(down).toEqual([15, 30, 30, 30, 15, 15, 30, 30, 30, 15].map((f) => expect.closeTo(f, 9)));
   });
 
@@ -222,7 +220,7 @@ describe('an area load', () => {
       at.map((_, k) => [k, (k + 1) % 6] as const),
     );
     const each = (10 * 1.5 * Math.sqrt(3) * 9) / 6;
-    expect(downAt(made, build(made, area(10, 'down', 'plan')).cases[0]!.loads)).toEqual(
+    expect(downAt(made, build(made, area(10, 'down', 'plan')).cases[0].loads)).toEqual(
       at.map(() => expect.closeTo(each, 9)),
     );
   });
@@ -250,20 +248,20 @@ describe('an area load', () => {
       runs.flatMap((run) => {
         const kept: [number, number][] = [];
         for (let k = 1; k < run.length; k++)
-          if (!gone.has(run[k - 1]!) && !gone.has(run[k]!)) kept.push([run[k - 1]!, run[k]!]);
+          if (!gone.has(run[k - 1]) && !gone.has(run[k])) kept.push([run[k - 1], run[k]]);
         return kept;
       }),
     );
     const { coverage, findings } = build(court, area(1, 'down', 'plan', { line: 8, level: [-1, 1] }));
     expect(coverage[0]).toMatchObject({ formedBy: 'bars', planArea: expect.closeTo(39 ** 2 - 27 ** 2, 6) });
     expect(findings.map(({ code, severity }) => [code, severity])).toEqual([['surface-skipped', 'warning']]);
-    expect(findings[0]!.message).toContain('729 m2 in plan with 36 corners');
+    expect(findings[0].message).toContain('729 m2 in plan with 36 corners');
   });
 
   it('refuses nodes at heights too different to be one surface', () => {
     const at = [0, 3, 6, 9].flatMap((x) => [0, 3, 6].map((y): Vec3 => [x, y, (x + y) % 2 === 0 ? 0 : 9]));
     const { cases, findings } = build(makeTruss(at, []), area(1, 'down', 'slope'));
-    expect(cases[0]!.incomplete).toContain('too different heights');
+    expect(cases[0].incomplete).toContain('too different heights');
     expect(findings.map(({ code }) => code)).toEqual(['no-load']);
   });
 
@@ -272,10 +270,10 @@ describe('an area load', () => {
     const made = makeTruss(at, [{ nodes: [0, 1, 2, 3] }, { nodes: [4, 5, 6, 7] }]);
     const { cases, coverage, findings } = build(made, area(10, 'down', 'plan'));
     expect(coverage[0]).toMatchObject({ formedBy: 'outline', planArea: expect.closeTo(54, 9) });
-    expect(downAt(made, cases[0]!.loads)).toEqual([45, 90, 90, 45, 45, 90, 90, 45].map((f) => expect.closeTo(f, 9)));
+    expect(downAt(made, cases[0].loads)).toEqual([45, 90, 90, 45, 45, 90, 90, 45].map((f) => expect.closeTo(f, 9)));
     expect(findings.map(({ code, severity }) => [code, severity])).toEqual([['surface-skipped', 'warning']]);
-    expect(findings[0]!.message).toContain('line 7 of the brief');
-    expect(findings[0]!.message).toContain('54.0 m2 in plan');
+    expect(findings[0].message).toContain('line 7 of the brief');
+    expect(findings[0].message).toContain('54.0 m2 in plan');
   });
 
   it('over any scattered nodes covers their convex outline exactly once', () => {
@@ -288,11 +286,11 @@ describe('an area load', () => {
           const made = makeTruss(at, []);
           const { coverage, findings } = build(made, area(1, 'down', 'slope'));
           const outline = hullArea(at);
-          if (outline < 0.01) expect(findings[0]!.code).toBe('no-load');
+          if (outline < 0.01) expect(findings[0].code).toBe('no-load');
           else {
-            expect(coverage[0]!.planArea).toBeCloseTo(outline, 8);
-            expect(coverage[0]!.area).toBeCloseTo(outline, 8);
-            expect(coverage[0]!.unloaded).toEqual([]);
+            expect(coverage[0].planArea).toBeCloseTo(outline, 8);
+            expect(coverage[0].area).toBeCloseTo(outline, 8);
+            expect(coverage[0].unloaded).toEqual([]);
           }
         },
       ),
@@ -333,12 +331,12 @@ describe('an area load', () => {
       'its nodes span no area in plan',
     ];
     faults.forEach(({ cases, coverage, findings }, i) => {
-      expect(cases[0]!.loads).toEqual([]);
-      expect(cases[0]!.incomplete).toContain(words[i]);
+      expect(cases[0].loads).toEqual([]);
+      expect(cases[0].incomplete).toContain(words[i]);
       expect(coverage).toEqual([]);
       expect(findings.map(({ code }) => code)).toEqual(['no-load']);
-      expect(findings[0]!.message).toContain(words[i]);
-      expect(findings[0]!.nodes.length).toBeGreaterThan(0);
+      expect(findings[0].message).toContain(words[i]);
+      expect(findings[0].nodes.length).toBeGreaterThan(0);
     });
   });
 
@@ -348,16 +346,16 @@ describe('an area load', () => {
       fc.property(fc.array(fc.tuple(number, number, number), { minLength: 12, maxLength: 12 }), (shifts) => {
         const { at, runs } = makeGrid([0, 5, 10, 15], [0, 5, 10]);
         const made = makeTruss(
-          at.map(([x, y, z], i): Vec3 => [x + shifts[i]![0], y + shifts[i]![1], z + shifts[i]![2]]),
+          at.map(([x, y, z], i): Vec3 => [x + shifts[i][0], y + shifts[i][1], z + shifts[i][2]]),
           runs,
         );
         const { cases, coverage } = build(made, area(100, 'down', 'plan'));
-        const boundary = [0, 1, 2, 3, 7, 11, 10, 9, 8, 4].map((node) => made.truss.nodes[node]!.at);
+        const boundary = [0, 1, 2, 3, 7, 11, 10, 9, 8, 4].map((node) => made.truss.nodes[node].at);
         const { area: planArea, first } = polygonIntegrals(boundary);
-        expect(coverage[0]!.patches).toBe(6);
-        expect(coverage[0]!.planArea).toBeCloseTo(planArea, 8);
-        expect(total(cases[0]!.loads)[2]).toBeCloseTo(-100 * planArea, 6);
-        const [mx, my] = momentOf(made, cases[0]!.loads);
+        expect(coverage[0].patches).toBe(6);
+        expect(coverage[0].planArea).toBeCloseTo(planArea, 8);
+        expect(total(cases[0].loads)[2]).toBeCloseTo(-100 * planArea, 6);
+        const [mx, my] = momentOf(made, cases[0].loads);
         expect(mx).toBeCloseTo(-100 * first[1], 5);
         expect(my).toBeCloseTo(100 * first[0], 5);
       }),
@@ -370,14 +368,14 @@ describe('an area load', () => {
       fc.property(fc.array(number, { minLength: 9, maxLength: 9 }), (heights) => {
         const { at, runs } = makeGrid([0, 5, 10], [0, 5, 10]);
         const made = makeTruss(
-          at.map(([x, y], i): Vec3 => [x, y, heights[i]!]),
+          at.map(([x, y], i): Vec3 => [x, y, heights[i]]),
           runs,
         );
-        const loop = [0, 1, 2, 5, 8, 7, 6, 3].map((node) => made.truss.nodes[node]!.at);
-        const vectorArea = loop.reduce<Vec3>((sum, a, i) => add(sum, scale(cross(a, loop[(i + 1) % 8]!), 0.5)), ORIGIN);
-        const sum = total(build(made, area(100, 'normal', 'slope')).cases[0]!.loads);
+        const loop = [0, 1, 2, 5, 8, 7, 6, 3].map((node) => made.truss.nodes[node].at);
+        const vectorArea = loop.reduce<Vec3>((sum, a, i) => add(sum, scale(cross(a, loop[(i + 1) % 8]), 0.5)), ORIGIN);
+        const sum = total(build(made, area(100, 'normal', 'slope')).cases[0].loads);
         sum.forEach((component, k) => {
-          expect(component).toBeCloseTo(-100 * vectorArea[k]!, 6);
+          expect(component).toBeCloseTo(-100 * vectorArea[k], 6);
         });
       }),
     );
@@ -427,7 +425,7 @@ describe('cases', () => {
 function polygonIntegrals(corners: readonly Vec3[]): { area: number; first: [number, number] } {
   let [area2, x6, y6] = [0, 0, 0];
   corners.forEach((a, i) => {
-    const b = corners[(i + 1) % corners.length]!;
+    const b = corners[(i + 1) % corners.length];
     const w = a[0] * b[1] - b[0] * a[1];
     area2 += w;
     x6 += (a[0] + b[0]) * w;

@@ -32,7 +32,7 @@ const line = (from: number, to: number, forceFrom: Vec3, forceTo: Vec3, globalId
 });
 
 const at = (node: number, result: ReturnType<typeof build>): Vec3 =>
-  result.cases[0]!.loads.find((load) => load.node === node)?.force ?? ORIGIN;
+  result.cases[0].loads.find((load) => load.node === node)?.force ?? ORIGIN;
 
 describe('a force that the model gives', () => {
   it('goes to the node within a millimetre of its point', () => {
@@ -50,7 +50,7 @@ describe('a force that the model gives', () => {
 
   it('on nothing is not put, which is said', () => {
     const result = build({ kind: 'point', at: [5, 1, 0], force: [0, 0, -30] });
-    expect(result.cases[0]!.loads).toEqual([]);
+    expect(result.cases[0].loads).toEqual([]);
     expect(result.findings).toMatchObject([{ code: 'no-load', at: [5, 1, 0] }]);
   });
 });
@@ -76,10 +76,10 @@ describe('a line load that the model gives', () => {
     fc.assert(
       fc.property(place, place, force, force, (from, to, q1, q2) => {
         fc.pre(Math.abs(to - from) > 0.01);
-        const { loads } = build(line(from, to, q1, q2)).cases[0]!;
+        const { loads } = build(line(from, to, q1, q2)).cases[0];
         const put = loads.reduce<Vec3>((sum, load) => add(sum, load.force), ORIGIN);
         const turn = loads.reduce<Vec3>(
-          (sum, load) => add(sum, cross(made.truss.nodes[load.node]!.at, load.force)),
+          (sum, load) => add(sum, cross(made.truss.nodes[load.node].at, load.force)),
           ORIGIN,
         );
         // Gauss: two points integrate a product of two linear functions without error.
@@ -113,7 +113,7 @@ describe('self weight that the model gives', () => {
     // 10 kg/m, 13 m of bars.
     const direction = unit([1, 0, -2]) as Vec3;
     const result = build({ kind: 'selfWeight', factors: scale(direction, 1.5) });
-    const put = result.cases[0]!.loads.reduce<Vec3>((sum, load) => add(sum, load.force), ORIGIN);
+    const put = result.cases[0].loads.reduce<Vec3>((sum, load) => add(sum, load.force), ORIGIN);
     const off = subtract(put, along(ORIGIN, direction, 1.5 * 130 * 9.80665));
     expect(Math.hypot(...off)).toBeLessThan(1e-9);
   });

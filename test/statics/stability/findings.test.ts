@@ -23,7 +23,7 @@ describe('what is said of a mechanism', () => {
     const { mechanisms, findings } = assessStability(truss, fix({ 0: 'xyz', 1: 'xyz', 2: 'xyz' }));
     expect(mechanisms).toBe(2);
     expect(findings).toHaveLength(1);
-    const { message, at } = findings[0]!;
+    const { message, at } = findings[0];
     expect(message).toContain('sideways (along y)');
     // Square to the bar in its own plane: neither straight up nor straight aside.
     expect(message).toMatch(/along \(-?0\.80, 0\.00, -?0\.60\)/);

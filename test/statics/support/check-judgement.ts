@@ -14,7 +14,7 @@ export function checkJudgement(truss: Truss, supports: Supports, judged: Stabili
   const columns = judged.modes.map((mode) => {
     const column = new Array<number>(3 * truss.nodes.length).fill(0);
     mode.nodes.forEach((node, i) => {
-      mode.movement[i]!.forEach((v, axis) => {
+      mode.movement[i].forEach((v, axis) => {
         column[3 * node + axis] = v;
       });
     });

@@ -7,7 +7,7 @@ import type { Supports } from '../../../src/statics/types.ts';
 export function denseRows({ nodes, bars }: Truss, supports: Supports): { strains: Matrix; conditions: Matrix } {
   const width = 3 * nodes.length;
   const movementRow = (node: number, direction: Vec3): number[] => {
-    const carriage = nodes[node]!.carriedBy;
+    const carriage = nodes[node].carriedBy;
     const row = new Array<number>(width).fill(0);
     if (carriage === null) {
       direction.forEach((v, axis) => {
@@ -15,17 +15,17 @@ export function denseRows({ nodes, bars }: Truss, supports: Supports): { strains
       });
       return row;
     }
-    const bar = bars[carriage.bar]!;
+    const bar = bars[carriage.bar];
     const from = movementRow(bar.from, direction);
     const to = movementRow(bar.to, direction);
-    return row.map((_, i) => (1 - carriage.t) * from[i]! + carriage.t * to[i]!);
+    return row.map((_, i) => (1 - carriage.t) * from[i] + carriage.t * to[i]);
   };
   const strains = bars.map((bar) => {
-    const p = nodes[bar.from]!.at;
-    const q = nodes[bar.to]!.at;
+    const p = nodes[bar.from].at;
+    const q = nodes[bar.to].at;
     const d: Vec3 = [(q[0] - p[0]) / bar.length, (q[1] - p[1]) / bar.length, (q[2] - p[2]) / bar.length];
     const from = movementRow(bar.from, d);
-    return movementRow(bar.to, d).map((v, i) => v - from[i]!);
+    return movementRow(bar.to, d).map((v, i) => v - from[i]);
   });
   for (const spring of supports.springs) strains.push(movementRow(spring.node, spring.direction));
   const conditions = supports.restraints.map(({ node, direction }) => movementRow(node, direction));

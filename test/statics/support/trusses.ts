@@ -24,8 +24,8 @@ export function trussOf({ points, bars, stiffness = 1e8, carried = new Map() }: 
       members: [i],
       from,
       to,
-      length: distance(points[from]!, points[to]!),
-      stiffnessEA: typeof stiffness === 'number' ? stiffness : stiffness[i]!,
+      length: distance(points[from], points[to]),
+      stiffnessEA: typeof stiffness === 'number' ? stiffness : stiffness[i],
       massPerLength: 10,
       expansion: 1.2e-5,
     })),
@@ -38,14 +38,14 @@ const DIRECTION: Readonly<Record<string, Vec3>> = { x: [1, 0, 0], y: [0, 1, 0], 
 /** `fix({0: 'xyz', 4: 'yz'})`. */
 export function fix(letters: Readonly<Record<number, string>>, springs: readonly GroundSpring[] = []): Supports {
   const restraints = Object.entries(letters).flatMap(([node, held]) =>
-    [...held].map((letter): Restraint => ({ node: Number(node), direction: DIRECTION[letter]! })),
+    [...held].map((letter): Restraint => ({ node: Number(node), direction: DIRECTION[letter] })),
   );
   return { restraints, springs };
 }
 
 /** Holds every node along one axis: a flat truss stays flat. */
 export function alsoFlat(supports: Supports, count: number, axis: 'x' | 'y' | 'z'): Supports {
-  const more = Array.from({ length: count }, (_, node): Restraint => ({ node, direction: DIRECTION[axis]! }));
+  const more = Array.from({ length: count }, (_, node): Restraint => ({ node, direction: DIRECTION[axis] }));
   return { ...supports, restraints: [...supports.restraints, ...more] };
 }
 
@@ -93,19 +93,19 @@ export function randomTruss(seed: number, extra: number): RandomTruss {
   for (let a = 0; a < count; a++) for (let b = a + 1; b < count; b++) all.push([a, b]);
   const bars: [number, number][] = [];
   const wanted = Math.min(Math.max(freedoms - springs.length + extra, count), all.length);
-  while (bars.length < wanted) bars.push(all.splice(Math.floor(random() * all.length), 1)[0]!);
+  while (bars.length < wanted) bars.push(all.splice(Math.floor(random() * all.length), 1)[0]);
   const carried = new Map<number, Carriage>();
   for (let k = 0; k < 3; k++) {
     const bar = Math.floor(random() * wanted);
     const t = 0.2 + 0.6 * random();
-    const [a, b] = [points[bars[bar]![0]]!, points[bars[bar]![1]]!];
+    const [a, b] = [points[bars[bar][0]], points[bars[bar][1]]];
     carried.set(points.length, { bar, t });
     points.push([a[0] + t * (b[0] - a[0]), a[1] + t * (b[1] - a[1]), a[2] + t * (b[2] - a[2])]);
   }
   // A bar between two carried nodes, and a node carried by it.
   const onCarried = bars.length;
   bars.push([count, count + 1]);
-  const [a, b] = [points[count]!, points[count + 1]!];
+  const [a, b] = [points[count], points[count + 1]];
   carried.set(points.length, { bar: onCarried, t: 0.5 });
   points.push([(a[0] + b[0]) / 2, (a[1] + b[1]) / 2, (a[2] + b[2]) / 2]);
   if (random() < 0.4) restraints.push({ node: count + 2, direction: direction() });

@@ -28,11 +28,10 @@ export interface Uncrossed {
  */
 export function removeCrossings(points: readonly Vec3[], edges: readonly PlanEdge[]): Uncrossed {
   let crossings = findCrossings(points, edges);
-  const lengths = edges.map(([from, to]) => planDistance(points[from]!, points[to]!));
+  const lengths = edges.map(([from, to]) => planDistance(points[from], points[to]));
   const layered = new Set<PlanEdge>();
   for (const { first, second, rise } of crossings) {
-    if (rise > LAYER_SHARE * Math.min(lengths[first]!, lengths[second]!))
-      layered.add(edges[first]!).add(edges[second]!);
+    if (rise > LAYER_SHARE * Math.min(lengths[first], lengths[second])) layered.add(edges[first]).add(edges[second]);
   }
   const removed = new Set<number>();
   while (crossings.length > 0) {
@@ -43,7 +42,7 @@ export function removeCrossings(points: readonly Vec3[], edges: readonly PlanEdg
     }
     const isBeaten = new Set<number>();
     for (const { first, second } of crossings) {
-      const worse = counts.get(first)! - counts.get(second)! || compareLengths(lengths[first]!, lengths[second]!);
+      const worse = counts.get(first)! - counts.get(second)! || compareLengths(lengths[first], lengths[second]);
       if (worse > 0) isBeaten.add(second);
       if (worse < 0) isBeaten.add(first);
     }
@@ -60,7 +59,7 @@ const compareLengths = (a: number, b: number): number => (Math.abs(a - b) <= 0.0
 function findCrossings(points: readonly Vec3[], edges: readonly PlanEdge[]): Crossing[] {
   const boxes = edges
     .map(([from, to], index) => {
-      const [a, b] = [points[from]!, points[to]!];
+      const [a, b] = [points[from], points[to]];
       return {
         index,
         left: Math.min(a[0], b[0]) - SAME_PLACE,
@@ -72,11 +71,11 @@ function findCrossings(points: readonly Vec3[], edges: readonly PlanEdge[]): Cro
     .toSorted((a, b) => a.left - b.left);
   const crossings: Crossing[] = [];
   for (let i = 0; i < boxes.length; i++) {
-    const box = boxes[i]!;
-    for (let j = i + 1; j < boxes.length && boxes[j]!.left <= box.right; j++) {
-      const other = boxes[j]!;
+    const box = boxes[i];
+    for (let j = i + 1; j < boxes.length && boxes[j].left <= box.right; j++) {
+      const other = boxes[j];
       if (other.low > box.high || other.high < box.low) continue;
-      const rise = riseAtCrossing(points, edges[box.index]!, edges[other.index]!);
+      const rise = riseAtCrossing(points, edges[box.index], edges[other.index]);
       if (rise !== null) crossings.push({ first: box.index, second: other.index, rise });
     }
   }
@@ -86,14 +85,14 @@ function findCrossings(points: readonly Vec3[], edges: readonly PlanEdge[]): Cro
 /** The difference in height where two edges meet in plan other than at a common node; null where they do not. */
 function riseAtCrossing(points: readonly Vec3[], e: PlanEdge, f: PlanEdge): number | null {
   const shared = e.find((node) => f.includes(node));
-  const [a, b] = [points[e[0]]!, points[e[1]]!];
-  const [c, d] = [points[f[0]]!, points[f[1]]!];
+  const [a, b] = [points[e[0]], points[e[1]]];
+  const [c, d] = [points[f[0]], points[f[1]]];
   for (const end of f) {
-    const rise = end === shared ? null : riseOver(a, b, points[end]!);
+    const rise = end === shared ? null : riseOver(a, b, points[end]);
     if (rise !== null) return rise;
   }
   for (const end of e) {
-    const rise = end === shared ? null : riseOver(c, d, points[end]!);
+    const rise = end === shared ? null : riseOver(c, d, points[end]);
     if (rise !== null) return rise;
   }
   if (shared !== undefined) return null;

@@ -18,7 +18,7 @@ export function findFaces(points: readonly Vec3[], edges: readonly PlanEdge[]): 
       kept = withoutLooseEnds(kept.filter((edge) => !bridges.has(edge)));
       continue;
     }
-    const cells = faces.filter((face) => planArea(face.map((node) => points[node]!)) > 0);
+    const cells = faces.filter((face) => planArea(face.map((node) => points[node])) > 0);
     return { cells, islands: findIslands(points, kept, cells) };
   }
 }
@@ -84,10 +84,10 @@ function traceFaces(
 function nextAround(points: readonly Vec3[], edges: readonly PlanEdge[]): (from: number, to: number) => number {
   const following = new Map<string, number>();
   for (const [node, neighbours] of neighboursOf(edges)) {
-    const [x, y] = points[node]!;
-    const angle = (other: number): number => Math.atan2(points[other]![1] - y, points[other]![0] - x);
+    const [x, y] = points[node];
+    const angle = (other: number): number => Math.atan2(points[other][1] - y, points[other][0] - x);
     const round = neighbours.toSorted((a, b) => angle(b) - angle(a));
-    for (const [i, neighbour] of round.entries()) following.set(`${neighbour},${node}`, round[(i + 1) % round.length]!);
+    for (const [i, neighbour] of round.entries()) following.set(`${neighbour},${node}`, round[(i + 1) % round.length]);
   }
   return (from, to) => following.get(`${from},${to}`)!;
 }
@@ -108,10 +108,10 @@ function findIslands(
   return [...parts].flatMap(([root, nodes]) => {
     const inside = cells.some(
       (cell) =>
-        part.get(cell[0]!) !== root &&
+        part.get(cell[0]) !== root &&
         isInsideInPlan(
-          points[nodes[0]!]!,
-          cell.map((corner) => points[corner]!),
+          points[nodes[0]],
+          cell.map((corner) => points[corner]),
         ),
     );
     return inside ? nodes : [];

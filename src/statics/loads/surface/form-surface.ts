@@ -74,9 +74,9 @@ function formWithinOutline(points: readonly Vec3[], nodes: readonly number[]): S
 }
 
 function findOpenings(points: readonly Vec3[], cells: readonly (readonly number[])[]): (readonly number[])[] {
-  const areas = cells.map((cell) => planArea(cell.map((node) => points[node]!)));
+  const areas = cells.map((cell) => planArea(cell.map((node) => points[node])));
   const usual = [...areas].sort((a, b) => a - b)[areas.length >> 1] ?? 0;
-  return cells.filter((cell, i) => cell.length > OPENING.corners && areas[i]! > OPENING.timesUsualArea * usual);
+  return cells.filter((cell, i) => cell.length > OPENING.corners && areas[i] > OPENING.timesUsualArea * usual);
 }
 
 /** A cell of four true corners stays whole; others are cut into triangles and polygons inscribed in a circle. */
@@ -90,18 +90,18 @@ function divide(points: readonly Vec3[], cell: readonly number[]): number[][] | 
 /** Whether every corner turns left by more than three degrees. */
 function isConvex(points: readonly Vec3[], cell: readonly number[]): boolean {
   return cell.every((node, i) => {
-    const [a, b, c] = [points[cell.at(i - 1)!]!, points[node]!, points[cell[(i + 1) % cell.length]!]!];
+    const [a, b, c] = [points[cell.at(i - 1)!], points[node], points[cell[(i + 1) % cell.length]]];
     return turn(a, b, c) > 0.05 * planDistance(a, b) * planDistance(b, c);
   });
 }
 
 /** Nodes in one place in plan, at different heights. */
 function findStacked(points: readonly Vec3[], nodes: readonly number[]): number[] {
-  const ordered = nodes.toSorted((a, b) => points[a]![0] - points[b]![0]);
+  const ordered = nodes.toSorted((a, b) => points[a][0] - points[b][0]);
   const stacked = new Set<number>();
   ordered.forEach((node, i) => {
-    for (let j = i + 1; j < ordered.length && points[ordered[j]!]![0] - points[node]![0] <= SAME_PLACE; j++) {
-      if (planDistance(points[node]!, points[ordered[j]!]!) <= SAME_PLACE) stacked.add(node).add(ordered[j]!);
+    for (let j = i + 1; j < ordered.length && points[ordered[j]][0] - points[node][0] <= SAME_PLACE; j++) {
+      if (planDistance(points[node], points[ordered[j]]) <= SAME_PLACE) stacked.add(node).add(ordered[j]);
     }
   });
   return [...stacked];

@@ -12,18 +12,15 @@ const LEAST_AREA = 1e-2;
  * 1979). None where the nodes are in line.
  */
 export function convexHull(points: readonly Vec3[], nodes: readonly number[]): number[] {
-  const ordered = nodes.toSorted((a, b) => points[a]![0] - points[b]![0] || points[a]![1] - points[b]![1]);
+  const ordered = nodes.toSorted((a, b) => points[a][0] - points[b][0] || points[a][1] - points[b][1]);
   const corners = [...halfHull(points, ordered), ...halfHull(points, ordered.toReversed())];
-  if (corners.length < 3 || planArea(corners.map((node) => points[node]!)) < LEAST_AREA) return [];
+  if (corners.length < 3 || planArea(corners.map((node) => points[node])) < LEAST_AREA) return [];
   const taken = new Set(corners);
   return corners.flatMap((a, i) => {
-    const b = corners[(i + 1) % corners.length]!;
-    const onSide = ordered.filter((node) => !taken.has(node) && isOnSide(points[a]!, points[b]!, points[node]!));
+    const b = corners[(i + 1) % corners.length];
+    const onSide = ordered.filter((node) => !taken.has(node) && isOnSide(points[a], points[b], points[node]));
     for (const node of onSide) taken.add(node);
-    return [
-      a,
-      ...onSide.toSorted((p, q) => planDistance(points[a]!, points[p]!) - planDistance(points[a]!, points[q]!)),
-    ];
+    return [a, ...onSide.toSorted((p, q) => planDistance(points[a], points[p]) - planDistance(points[a], points[q]))];
   });
 }
 
@@ -31,7 +28,7 @@ export function convexHull(points: readonly Vec3[], nodes: readonly number[]): n
 function halfHull(points: readonly Vec3[], ordered: readonly number[]): number[] {
   const chain: number[] = [];
   for (const node of ordered) {
-    while (chain.length > 1 && turn(points[chain.at(-2)!]!, points[chain.at(-1)!]!, points[node]!) <= 0) chain.pop();
+    while (chain.length > 1 && turn(points[chain.at(-2)!], points[chain.at(-1)!], points[node]) <= 0) chain.pop();
     chain.push(node);
   }
   return chain.slice(0, -1);

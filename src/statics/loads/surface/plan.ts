@@ -16,14 +16,14 @@ export const planDistance = (a: Vec3, b: Vec3): number => Math.hypot(b[0] - a[0]
 export function planArea(corners: readonly Vec3[]): number {
   const [origin] = corners;
   let twice = 0;
-  for (let i = 2; i < corners.length; i++) twice += turn(origin!, corners[i - 1]!, corners[i]!);
+  for (let i = 2; i < corners.length; i++) twice += turn(origin!, corners[i - 1], corners[i]);
   return twice / 2;
 }
 
 export function isInsideInPlan(point: Vec3, corners: readonly Vec3[]): boolean {
   let inside = false;
   corners.forEach((a, i) => {
-    const b = corners[(i + 1) % corners.length]!;
+    const b = corners[(i + 1) % corners.length];
     if (a[1] > point[1] === b[1] > point[1]) return;
     if (point[0] < a[0] + ((point[1] - a[1]) / (b[1] - a[1])) * (b[0] - a[0])) inside = !inside;
   });

@@ -21,10 +21,10 @@ export function sharePatch(points: readonly Vec3[], patch: readonly number[]): C
   for (let apex = 0; apex < fans; apex++) {
     for (let k = 1; k < count - 1; k++) {
       const corners = [apex, (apex + k) % count, (apex + k + 1) % count] as const;
-      const [a, b, c] = corners.map((corner) => points[patch[corner]!]!) as [Vec3, Vec3, Vec3];
+      const [a, b, c] = corners.map((corner) => points[patch[corner]]) as [Vec3, Vec3, Vec3];
       const normalArea = scale(cross(subtract(b, a), subtract(c, a)), 1 / 2);
       for (const corner of corners) {
-        const share = shares[corner]!;
+        const share = shares[corner];
         share.normalArea = add(share.normalArea, scale(normalArea, 1 / (3 * fans)));
         share.area += norm(normalArea) / (3 * fans);
       }

@@ -39,7 +39,7 @@ export class Triangulation {
   /** Triangles, and convex polygons where neighbouring triangles lie on one circle, so that no diagonal is preferred. */
   patches(): number[][] {
     const group = this.#triangles.map((_, i) => i);
-    const rootOf = (i: number): number => (group[i] === i ? i : rootOf(group[i]!));
+    const rootOf = (i: number): number => (group[i] === i ? i : rootOf(group[i]));
     const inner = new Set<number>();
     for (const [edge, triangle] of this.#owner) {
       const [from, to] = this.#ends(edge);
@@ -70,22 +70,22 @@ export class Triangulation {
     while (left.length > 3) {
       const ear = left.findIndex((_, i) => this.#isEar(left, i));
       if (ear < 0) return false;
-      this.#add(left.at(ear - 1)!, left[ear]!, left[(ear + 1) % left.length]!);
+      this.#add(left.at(ear - 1)!, left[ear], left[(ear + 1) % left.length]);
       left.splice(ear, 1);
     }
     const [a, b, c] = left as Triangle;
-    if (left.length !== 3 || turn(this.#points[a]!, this.#points[b]!, this.#points[c]!) <= 0) return false;
+    if (left.length !== 3 || turn(this.#points[a], this.#points[b], this.#points[c]) <= 0) return false;
     this.#add(a, b, c);
     return true;
   }
 
   #isEar(left: readonly number[], i: number): boolean {
-    const corners = [left.at(i - 1)!, left[i]!, left[(i + 1) % left.length]!] as Triangle;
-    const [a, b, c] = corners.map((corner) => this.#points[corner]!) as [Vec3, Vec3, Vec3];
+    const corners = [left.at(i - 1)!, left[i], left[(i + 1) % left.length]] as Triangle;
+    const [a, b, c] = corners.map((corner) => this.#points[corner]) as [Vec3, Vec3, Vec3];
     const slack = 1e-9 * Math.abs(turn(a, b, c));
     if (turn(a, b, c) <= 1e-9) return false;
     return left.every((node) => {
-      const point = this.#points[node]!;
+      const point = this.#points[node];
       return (
         corners.includes(node) || turn(a, b, point) < -slack || turn(b, c, point) < -slack || turn(c, a, point) < -slack
       );
@@ -94,16 +94,16 @@ export class Triangulation {
 
   /** Splits the triangle that a point lies in, then mends the edges around (Lawson 1977). */
   #insert(node: number): boolean {
-    const point = this.#points[node]!;
+    const point = this.#points[node];
     const found = this.#triangles.findIndex(([a, b, c]) =>
       [
-        turn(this.#points[a]!, this.#points[b]!, point),
-        turn(this.#points[b]!, this.#points[c]!, point),
-        turn(this.#points[c]!, this.#points[a]!, point),
+        turn(this.#points[a], this.#points[b], point),
+        turn(this.#points[b], this.#points[c], point),
+        turn(this.#points[c], this.#points[a], point),
       ].every((side) => side >= -1e-9),
     );
     if (found < 0) return false;
-    const [a, b, c] = this.#triangles[found]!;
+    const [a, b, c] = this.#triangles[found];
     this.#place(found, a, b, node);
     this.#add(b, c, node);
     this.#add(c, a, node);
@@ -137,19 +137,19 @@ export class Triangulation {
 
   /** Whether the two triangles at an edge make a convex quadrilateral: a sliver on the outline may not. */
   #isConvexAcross(a: number, b: number): boolean {
-    const c = this.#points[this.#opposite(this.#owner.get(this.#edge(a, b))!, a, b)]!;
-    const d = this.#points[this.#opposite(this.#owner.get(this.#edge(b, a))!, b, a)]!;
-    return turn(c, this.#points[a]!, d) > 0 && turn(d, this.#points[b]!, c) > 0;
+    const c = this.#points[this.#opposite(this.#owner.get(this.#edge(a, b))!, a, b)];
+    const d = this.#points[this.#opposite(this.#owner.get(this.#edge(b, a))!, b, a)];
+    return turn(c, this.#points[a], d) > 0 && turn(d, this.#points[b], c) > 0;
   }
 
   #angle(at: number, from: number, to: number): number {
-    const [p, q, r] = [this.#points[at]!, this.#points[from]!, this.#points[to]!];
+    const [p, q, r] = [this.#points[at], this.#points[from], this.#points[to]];
     const cosine = (q[0] - p[0]) * (r[0] - p[0]) + (q[1] - p[1]) * (r[1] - p[1]);
     return Math.atan2(Math.abs(turn(p, q, r)), cosine);
   }
 
   #opposite(triangle: number, a: number, b: number): number {
-    return this.#triangles[triangle]!.find((corner) => corner !== a && corner !== b)!;
+    return this.#triangles[triangle].find((corner) => corner !== a && corner !== b)!;
   }
 
   #add(a: number, b: number, c: number): void {
