@@ -14,6 +14,7 @@ import type { Truss } from './domain/truss.ts';
 import { assembleResult } from './exporter/assemble-result.ts';
 import { hasAnalysisView, readAnalysisModel } from './importer/analysis/read-analysis-model.ts';
 import { openModel } from './importer/files/open-model.ts';
+import type { Given } from './importer/given.ts';
 import { importModel } from './importer/import-model.ts';
 import type { ImportedModel } from './importer/types.ts';
 import { type BuiltCases, buildCases, type Coverage } from './statics/loads/build-cases.ts';
@@ -98,7 +99,7 @@ export async function runModel(bytes: Uint8Array, options: Partial<RunOptions> =
   const loadOn = usesGivenCases
     ? () => buildGivenCases(truss, members, given.cases)
     : () => buildCases(truss, members, brief);
-  const loaded = extent === 'analyse' ? loadOn() : NO_LOADS;
+  const loaded = extent === 'analyse' && members.length > 0 ? loadOn() : NO_LOADS;
   const solved = solveCases(truss, supports, stability, loaded.cases);
   const combinations =
     extent === 'analyse' ? combine(solved.cases, usesGivenCases ? given.combinations : brief.combinations) : [];
@@ -111,7 +112,8 @@ export async function runModel(bytes: Uint8Array, options: Partial<RunOptions> =
     ...scope.findings,
     ...sectionFindings,
     ...joined.findings,
-    ...supportFindings,
+    ...(members.length > 0 ? supportFindings : []),
+    ...unusedCases(given, brief, extent),
     ...supportFinding(supports, extent, members.length),
     ...stability.findings.map((found) => withSeverity(found, isCarried)),
     ...loaded.findings,
@@ -140,7 +142,7 @@ export async function runModel(bytes: Uint8Array, options: Partial<RunOptions> =
     file,
     elementCount: imported.elementCount,
     mass: truss.bars.reduce((sum, bar) => sum + bar.massPerLength * bar.length, 0),
-    kinds: memberKinds(imported.members, members),
+    kinds: memberKinds(imported.members, scope.members),
     topLevels: extent === 'survey' ? topLevels(truss) : [],
     coverage: loaded.coverage,
     seconds: clock.stop(),
@@ -212,6 +214,19 @@ function asLine(member: Member): Member {
 
 function nodesOf({ restraints, springs }: Supports): ReadonlySet<number> {
   return new Set([...restraints, ...springs].map(({ node }) => node));
+}
+
+/** A brief with cases of its own takes the place of the model's. */
+function unusedCases(given: Given | null, brief: Brief, extent: RunOptions['extent']): Finding[] {
+  if (given === null || given.cases.length === 0 || brief.cases.length === 0 || extent === 'survey') return [];
+  const names = given.cases.map(({ name }) => name).join(', ');
+  return [
+    finding(
+      'out-of-scope',
+      `The model's own load cases (${names}) are not used: the brief gives its own.`,
+      "Leave `cases:` out of the brief to use the model's.",
+    ),
+  ];
 }
 
 function supportFinding(supports: Supports, extent: RunOptions['extent'], memberCount: number): Finding[] {

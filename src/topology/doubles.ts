@@ -52,7 +52,7 @@ export function resolveDoubles(
     } else if (options.pairs === 'one' && alike(members[a.member], members[b.member])) {
       joined[a.member] = asOne(a, b);
       joined[b.member] = null;
-      findings.push(pairFinding(members[a.member], members[b.member], middleOf(a), placeOf));
+      findings.push(pairFinding(members[a.member], members[b.member], middleOf(a), norm(asideOf(a, b)), placeOf));
     }
   }
   return { axes: joined, findings };
@@ -165,11 +165,11 @@ function overlapFinding(a: Member, b: Member, at: Vec3, overlap: number, placeOf
   );
 }
 
-function pairFinding(a: Member, b: Member, at: Vec3, placeOf: PlaceNamer): Finding {
+function pairFinding(a: Member, b: Member, at: Vec3, apart: number, placeOf: PlaceNamer): Finding {
   return finding(
     'pair-joined',
-    `${labelOf(a)} and ${labelOf(b)} run side by side and are one bar: their areas add.`,
+    `${labelOf(a)} and ${labelOf(b)} run side by side, axes ${millimetres(apart)} apart, and are one bar: their areas add.`,
     'Say `joints: {pairs: apart}` in the brief where they are two bars.',
-    { members: [a.globalId, b.globalId], at, place: placeOf(at) },
+    { members: [a.globalId, b.globalId], at, place: placeOf(at), gap: apart },
   );
 }

@@ -125,10 +125,14 @@ function pairEvidence(
 /** Beyond this turn (5 degrees) the truss is no longer what was drawn. */
 const MUCH_TURNED = Math.PI / 36;
 
+/** Beyond its own depth and this, m, an axis was moved farther than a seat on a deep chord explains. */
+const MUCH_SHIFTED = 0.3;
+
 function axisMovedFindings(members: readonly Member[], truss: Truss, placeOf: PlaceNamer): Finding[] {
   return members.flatMap((member, index) => {
     const { shift, turn } = truss.faith[index];
-    if (turn <= MUCH_TURNED) return [];
+    const depth = Math.max(member.section?.depth ?? 0, member.section?.width ?? 0);
+    if (turn <= MUCH_TURNED && shift <= depth + MUCH_SHIFTED) return [];
     const at = between(member.axis[0], member.axis[1], 0.5);
     const degrees = ((turn * 180) / Math.PI).toFixed(0);
     return finding(

@@ -1,6 +1,9 @@
 import type { Truss, TrussBar, TrussNode } from '../domain/truss.ts';
 import type { Vec3 } from '../domain/vector.ts';
 
+/** Beyond this share of its member a tail is no overhang: most of the member would be gone. */
+const MOST_CUT = 0.25;
+
 /** A tail that was cut off. */
 export interface Overhang {
   readonly members: readonly number[];
@@ -21,10 +24,15 @@ export function cutOverhangs(truss: Truss, supported: ReadonlySet<number>): { tr
     barsAt[bar.to].push(index);
   });
   const carrying = new Set(truss.nodes.flatMap((node) => (node.carriedBy ? [node.carriedBy.bar] : [])));
+  const lengthOf = new Map<number, number>();
+  for (const { members, length } of truss.bars) {
+    for (const member of members) lengthOf.set(member, (lengthOf.get(member) ?? 0) + length);
+  }
   const isTail = (bar: TrussBar, free: number): boolean =>
     barsAt[free].length === 1 &&
     isFreeEnd(truss, free, bar) &&
     !supported.has(free) &&
+    bar.length <= MOST_CUT * (lengthOf.get(bar.members[0]) as number) &&
     barsAt[free === bar.from ? bar.to : bar.from].some(
       (other) => truss.bars[other] !== bar && truss.bars[other].members.includes(bar.members[0]),
     );
