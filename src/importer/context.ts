@@ -1,4 +1,4 @@
-import { asEnum, asRef, asString } from '../step/values.ts';
+import { asEnum } from '../step/values.ts';
 import { writtenClass } from './class-names.ts';
 import type { Reading } from './reading.ts';
 import { type Relations, wholesAbove } from './relations.ts';
@@ -24,62 +24,87 @@ const SPATIAL = new Set([
   'IFCBRIDGEPART',
 ]);
 
-export function contextOf(reading: Reading, relations: Relations, id: number): ElementContext {
-  const { file } = reading;
-  const wholes = wholesAbove(relations, id);
-  const elements = wholes.filter((whole) => !SPATIAL.has(file.typeOf(whole)));
-  const assembly = elements.find((whole) => file.typeOf(whole) === 'IFCELEMENTASSEMBLY') ?? elements[0];
-  // A baluster within an assembly within a stair is part of the stair.
-  const foreign = elements.find((whole) => file.typeOf(whole) !== 'IFCELEMENTASSEMBLY');
-  const whole = foreign ?? assembly;
-  const typeId = relations.typeOf.get(id);
-  const storey = storeyOf(reading, relations, [id, ...wholes]);
-  return {
-    predefinedType: predefinedType(reading, id, typeId),
-    type: typeId === undefined ? null : named(reading, typeId),
-    assembly: assembly === undefined ? null : assemblyName(reading, assembly),
-    partOf: whole === undefined ? null : writtenClass(file.typeOf(whole)),
-    storey: storey === null ? null : named(reading, storey),
-  };
-}
+/** What stands around the elements of a file; what many share is read once. */
+export class ContextBook {
+  private readonly reading: Reading;
+  private readonly relations: Relations;
+  private readonly names = new Map<number, string | null>();
+  private readonly storeysAbove = new Map<number, number | null>();
 
-const named = (reading: Reading, id: number): string | null => asString(reading.file.args(id)[2]);
+  constructor(reading: Reading, relations: Relations) {
+    this.reading = reading;
+    this.relations = relations;
+  }
+
+  of(id: number): ElementContext {
+    const { file } = this.reading;
+    const wholes = wholesAbove(this.relations, id);
+    const elements = wholes.filter((whole) => !SPATIAL.has(file.typeOf(whole)));
+    const assembly = elements.find((whole) => file.typeOf(whole) === 'IFCELEMENTASSEMBLY') ?? elements[0];
+    // A baluster within an assembly within a stair is part of the stair.
+    const foreign = elements.find((whole) => file.typeOf(whole) !== 'IFCELEMENTASSEMBLY');
+    const whole = foreign ?? assembly;
+    const typeId = this.relations.typeOf.get(id);
+    const storey = this.storeyOf(id, wholes);
+    return {
+      predefinedType: this.predefinedType(id, typeId),
+      type: typeId === undefined ? null : this.named(typeId),
+      assembly: assembly === undefined ? null : assemblyName(this.reading, assembly),
+      partOf: whole === undefined ? null : writtenClass(file.typeOf(whole)),
+      storey: storey === null ? null : this.named(storey),
+    };
+  }
+
+  private named(id: number): string | null {
+    let name = this.names.get(id);
+    if (name === undefined) {
+      name = this.reading.file.stringAt(id, 2);
+      this.names.set(id, name);
+    }
+    return name;
+  }
+
+  /** IFC2X3 has a predefined type on the element's type only. */
+  private predefinedType(id: number, typeId: number | undefined): string | null {
+    const { file, family } = this.reading;
+    const own = family === 'IFC2X3' ? null : asEnum(file.valueAt(id, 8));
+    if (own !== null && own !== 'NOTDEFINED') return own;
+    return (typeId === undefined ? null : asEnum(file.valueAt(typeId, 9))) ?? own;
+  }
+
+  /** From the element or the first of its wholes that is contained somewhere, up to a storey. */
+  private storeyOf(id: number, wholes: readonly number[]): number | null {
+    let storey = this.storeyAt(id);
+    for (let i = 0; storey === null && i < wholes.length; i++) storey = this.storeyAt(wholes[i]!);
+    return storey;
+  }
+
+  private storeyAt(id: number): number | null {
+    const { file } = this.reading;
+    const container = this.relations.containerOf.get(id);
+    if (container === undefined) return file.typeOf(id) === 'IFCBUILDINGSTOREY' ? id : null;
+    let storey = this.storeysAbove.get(container);
+    if (storey === undefined) {
+      const up = [container, ...wholesAbove(this.relations, container)];
+      storey = up.find((at) => file.typeOf(at) === 'IFCBUILDINGSTOREY') ?? null;
+      this.storeysAbove.set(container, storey);
+    }
+    return storey;
+  }
+}
 
 function assemblyName(reading: Reading, id: number): string | null {
-  const args = reading.file.args(id);
-  const texts = [asString(args[2]), asString(args[7]), asString(args[0])];
+  const { file } = reading;
+  const texts = [file.stringAt(id, 2), file.stringAt(id, 7), file.stringAt(id, 0)];
   return texts.find((text) => text !== null && text.trim() !== '') ?? null;
-}
-
-/** IFC2X3 has a predefined type on the element's type only. */
-function predefinedType(reading: Reading, id: number, typeId: number | undefined): string | null {
-  const own = reading.family === 'IFC2X3' ? null : asEnum(reading.file.args(id)[8]);
-  if (own !== null && own !== 'NOTDEFINED') return own;
-  const ofType = typeId === undefined ? null : asEnum(reading.file.args(typeId)[9]);
-  return ofType ?? own;
-}
-
-/** From the element or the first of its wholes that is contained somewhere, up to a storey. */
-function storeyOf(reading: Reading, relations: Relations, chain: readonly number[]): number | null {
-  for (const id of chain) {
-    const container = relations.containerOf.get(id);
-    const up = container === undefined ? [id] : [container, ...wholesAbove(relations, container)];
-    const storey = up.find((at) => reading.file.typeOf(at) === 'IFCBUILDINGSTOREY');
-    if (storey !== undefined) return storey;
-  }
-  return null;
 }
 
 /** The layer of an element's shape: of one of its representations, or of an item in one. */
 export function layerOf(reading: Reading, relations: Relations, shape: number | null): string | null {
   if (shape === null || relations.layerOf.size === 0) return null;
-  const representations = reading.file.args(shape)[2];
-  for (const value of Array.isArray(representations) ? representations : []) {
-    const id = asRef(value);
-    if (id === null) continue;
-    const items = reading.file.args(id)[3];
-    for (const candidate of [id, ...(Array.isArray(items) ? items.map(asRef) : [])]) {
-      const layer = candidate === null ? undefined : relations.layerOf.get(candidate);
+  for (const id of reading.file.refsAt(shape, 2)) {
+    for (const candidate of [id, ...reading.file.refsAt(id, 3)]) {
+      const layer = relations.layerOf.get(candidate);
       if (layer !== undefined) return layer;
     }
   }

@@ -55,16 +55,14 @@ export function elementAxes(
 /** Whether a body is of a kind that only a parser can tell of, or has a drawn profile that is not read. */
 function isUnknown(reading: Reading, sections: SectionBook, read: readonly BodyAxis[] | NotRead): boolean {
   if (read instanceof NotRead) return read instanceof NeedsParser;
-  return read.some(({ profile }) => profile !== null && isDrawn(reading, profile) && !canRead(sections, profile));
+  return read.some(({ profile }) => profile !== null && isDrawn(reading, profile) && !sections.canRead(profile));
 }
 
 /** A profile that is a mere name has no shape to be meshed. */
 const isDrawn = (reading: Reading, profile: number): boolean =>
-  profile > 0 && !['', 'IFCPROFILEDEF', 'IFCPARAMETERIZEDPROFILEDEF'].includes(reading.file.typeOf(profile));
+  profile > 0 && !MERE_NAMES.has(reading.file.typeOf(profile));
 
-function canRead(sections: SectionBook, profile: number): boolean {
-  return Array.isArray(orRefusal(() => [sections.profile(profile)]));
-}
+const MERE_NAMES: ReadonlySet<string> = new Set(['', 'IFCPROFILEDEF', 'IFCPARAMETERIZEDPROFILEDEF']);
 
 /** What the parser's mesh shows, where there is one and it shows something. */
 function meshed(read: BodyAxis[] | NotRead, mesh: readonly Polygon[] | null, world: Transform): BodyAxis[] | NotRead {
@@ -91,6 +89,7 @@ function memberSolids(
   solids: readonly BodyAxis[],
   profiles: readonly number[],
 ): readonly BodyAxis[] {
+  if (solids.length === 1) return solids;
   const longest = Math.max(...solids.map(lengthOf));
   return solids.filter((solid) => {
     if (!(lengthOf(solid) < longest * FITTING_LENGTH)) return true;
@@ -114,12 +113,12 @@ const ALONGSIDE = Math.cos((10 * Math.PI) / 180);
 
 /** One drawn line for several bars, some of them across it: the line of a joist as a whole, not of its bars. */
 function isLattice(drawn: readonly Chord[], solids: readonly BodyAxis[]): boolean {
-  const [line, ...more] = drawn;
-  if (line === undefined || more.length > 0) return false;
+  const [line] = drawn;
+  if (line === undefined || drawn.length > 1 || solids.length < 3) return false;
   const along = unit(subtract(line.to, line.from));
   const across = solids.filter((solid) => {
     const direction = unit(subtract(solid.end, solid.start));
     return along !== null && direction !== null && Math.abs(dot(along, direction)) < ALONGSIDE;
   });
-  return across.length >= 2 && solids.length >= 3;
+  return across.length >= 2;
 }

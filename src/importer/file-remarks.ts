@@ -1,4 +1,3 @@
-import { asString } from '../step/values.ts';
 import { type Reading, unitMissing } from './reading.ts';
 
 /** Findings about the file as a whole. */
@@ -16,12 +15,11 @@ export function noteMissingLengthUnit(reading: Reading): void {
   if (!reading.units.lengthStated) reading.note(unitMissing(reading.units, 'length'));
 }
 
-export function noteRepeatedGlobalIds(reading: Reading, elements: readonly number[]): void {
+/** @param globalIds one for each element, '' where it has none */
+export function noteRepeatedGlobalIds(reading: Reading, globalIds: readonly string[]): void {
+  if (new Set(globalIds).size === globalIds.length) return;
   const count = new Map<string, number>();
-  for (const id of elements) {
-    const globalId = asString(reading.file.args(id)[0])?.trim() ?? '';
-    if (globalId !== '') count.set(globalId, (count.get(globalId) ?? 0) + 1);
-  }
+  for (const globalId of globalIds) if (globalId !== '') count.set(globalId, (count.get(globalId) ?? 0) + 1);
   for (const [globalId, times] of count) {
     if (times === 1) continue;
     reading.about(globalId);

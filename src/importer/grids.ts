@@ -61,7 +61,7 @@ function straightCurve(reading: Reading, id: number): readonly [Vec3, Vec3] | nu
     const chord = chordOf(readCurve(reading, id));
     if (chord === null) return null;
     const length = norm(subtract(chord.to, chord.from));
-    return length > 0 && isStraight(chord, length) ? [chord.from, chord.to] : null;
+    return length > 0 && isStraight(chord.rise, length) ? [chord.from, chord.to] : null;
   } catch (problem) {
     // A grid axis that cannot be read names no place; nothing else depends on it.
     if (problem instanceof NotRead) return null;

@@ -34,7 +34,10 @@ export const SHORTEST = 1e-3;
 /** Farther from the origin than this no building stands, in any national grid: metres. */
 const FARTHEST = 1e8;
 
-export const isSound = (p: Vec3): boolean => p.every((c) => Number.isFinite(c) && Math.abs(c) <= FARTHEST);
+export const isSound = (p: Vec3): boolean => isNear(p[0]) && isNear(p[1]) && isNear(p[2]);
+
+/** False of what is no number, too. */
+const isNear = (coordinate: number): boolean => Math.abs(coordinate) <= FARTHEST;
 
 /** Ends are told apart to a tenth of a millimetre. */
 const ROUNDED = 1e4;
@@ -45,29 +48,31 @@ export function inOrder(a: Vec3, b: Vec3): readonly [Vec3, Vec3] {
 }
 
 export function compareRounded(a: Vec3, b: Vec3): number {
-  for (const i of [0, 1, 2] as const) {
-    const difference = Math.round(a[i] * ROUNDED) - Math.round(b[i] * ROUNDED);
-    if (difference !== 0) return difference;
-  }
-  return 0;
+  return (
+    Math.round(a[0] * ROUNDED) - Math.round(b[0] * ROUNDED) ||
+    Math.round(a[1] * ROUNDED) - Math.round(b[1] * ROUNDED) ||
+    Math.round(a[2] * ROUNDED) - Math.round(b[2] * ROUNDED)
+  );
 }
 
 /** The centroid line of a body, with the section that its profile shows across it. */
 export function axisOfBody(book: SectionBook, body: BodyAxis, profiles: readonly number[]): MemberAxis {
   const ends = inOrder(body.start, body.end);
-  const along = directionOf(ends);
-  const common = {
+  const { section, noSection, zAxis } = sectionAcross(book, body, directionOf(ends), profiles);
+  return {
     axisFrom: body.from,
     ends,
-    isBent: !isStraight({ from: body.start, to: body.end, rise: body.rise }, lengthOf(body)),
+    zAxis,
+    section,
+    noSection,
+    isBent: !isStraight(body.rise, lengthOf(body)),
     isRun: body.isRun,
     isTapered: body.endProfile !== null,
-    centroidEnds: null,
-    isBeside: false,
     confidence: body.measured?.confidence ?? null,
     hasRaggedEnd: body.measured !== null && body.measured.squareness === null,
-  } as const;
-  return { ...common, ...sectionAcross(book, body, along, profiles) };
+    centroidEnds: null,
+    isBeside: false,
+  };
 }
 
 /** A drawn axis, with the section of the body that runs along it, else of the material's profile. */
@@ -80,37 +85,61 @@ export function axisOfLine(
 ): MemberAxis {
   const ends = inOrder(line.from, line.to);
   const along = directionOf(ends);
-  const isBent = !isStraight(line, distance(line.from, line.to));
-  const isRun = line.isRun ?? false;
-  const beside = againstCentroid(bodies, line, along);
-  const common = { axisFrom: 'axis', ends, isBent, isRun, hasRaggedEnd: false, ...beside } as const;
+  const centroidEnds = centroidBeside(bodies, line);
   const body = alongside(bodies, along);
-  if (body !== null) {
-    const seen = axisOfBody(book, body, profiles);
-    const zAxis = firstAcross(along, dot(seen.zAxis, along) ** 2 < 0.99 ? seen.zAxis : upOf(world, along));
-    return { ...seen, ...common, zAxis };
-  }
-  const zAxis = firstAcross(along, upOf(world, along));
-  return { ...common, zAxis, isTapered: false, confidence: null, ...sectionOfProfiles(book, profiles, along, zAxis) };
+  const seen = body === null ? null : sectionOfBody(book, body, profiles);
+  const isSeen = seen !== null && dot(seen.zAxis, along) ** 2 < 0.99;
+  const zAxis = firstAcross(along, isSeen ? seen.zAxis : upOf(world, along));
+  const { section, noSection } = seen ?? sectionOfProfiles(book, profiles, along, zAxis);
+  return {
+    axisFrom: 'axis',
+    ends,
+    zAxis,
+    section,
+    noSection,
+    isBent: !isStraight(line.rise, distance(line.from, line.to)),
+    isRun: line.isRun ?? false,
+    isTapered: body !== null && body.endProfile !== null,
+    confidence: body?.measured?.confidence ?? null,
+    hasRaggedEnd: false,
+    centroidEnds: centroidEnds !== null && isSame(centroidEnds, ends) ? ends : centroidEnds,
+    isBeside: centroidEnds !== null && isFarFrom(line, along, centroidEnds),
+  };
 }
 
 /** A drawn axis this far beside the centroid line, in metres, makes moments that a modeller should know of. */
 export const FARTHEST_BESIDE = 0.02;
 
-/** The line and the centroid line of the body it stands for: the only one that is nearly as long as the longest. */
-function againstCentroid(
-  bodies: readonly BodyAxis[],
-  line: Chord,
-  along: Vec3,
-): Pick<MemberAxis, 'centroidEnds' | 'isBeside'> {
-  const longest = Math.max(0, ...bodies.map(lengthOf));
-  const [body, ...more] = bodies.filter((each) => lengthOf(each) > 0.8 * longest);
-  const isComparable = body !== undefined && more.length === 0 && line.isRun !== true && !(line.rise > FARTHEST_BESIDE);
-  if (!isComparable || body.rise > FARTHEST_BESIDE || !isSound(body.start) || !isSound(body.end)) {
-    return { centroidEnds: null, isBeside: false };
+/** The centroid line of the body that a drawn line stands for; null where the two cannot be held against each other. */
+function centroidBeside(bodies: readonly BodyAxis[], line: Chord): readonly [Vec3, Vec3] | null {
+  if (line.isRun === true || line.rise > FARTHEST_BESIDE) return null;
+  const body = longestByFar(bodies);
+  if (body === null || body.rise > FARTHEST_BESIDE || !isSound(body.start) || !isSound(body.end)) return null;
+  return inOrder(body.start, body.end);
+}
+
+/** To the last digit: most axes are drawn where the centroid is, and one line is then kept for both. */
+const isSame = ([a, b]: readonly [Vec3, Vec3], [c, d]: readonly [Vec3, Vec3]): boolean =>
+  isSamePoint(a, c) && isSamePoint(b, d);
+
+const isSamePoint = (a: Vec3, b: Vec3): boolean =>
+  Object.is(a[0], b[0]) && Object.is(a[1], b[1]) && Object.is(a[2], b[2]);
+
+/** The only body that is nearly as long as the longest. */
+function longestByFar(bodies: readonly BodyAxis[]): BodyAxis | null {
+  let longest = 0;
+  for (const body of bodies) longest = Math.max(longest, lengthOf(body));
+  let found: BodyAxis | null = null;
+  for (const body of bodies) {
+    if (!(lengthOf(body) > 0.8 * longest)) continue;
+    if (found !== null) return null;
+    found = body;
   }
-  const beside = Math.max(...[body.start, body.end].map((p) => norm(across(subtract(p, line.from), along))));
-  return { centroidEnds: inOrder(body.start, body.end), isBeside: beside > FARTHEST_BESIDE };
+  return found;
+}
+
+function isFarFrom(line: Chord, along: Vec3, ends: readonly [Vec3, Vec3]): boolean {
+  return ends.some((end) => norm(across(subtract(end, line.from), along)) > FARTHEST_BESIDE);
 }
 
 /** @throws NotRead where the ends are no points of a building or no line lies between them. */
@@ -152,6 +181,10 @@ function upOf(world: Transform, along: Vec3): Vec3 {
 
 type SectionFound = Pick<MemberAxis, 'section' | 'noSection' | 'zAxis'>;
 
+function sectionOfBody(book: SectionBook, body: BodyAxis, profiles: readonly number[]): SectionFound {
+  return sectionAcross(book, body, directionOf(inOrder(body.start, body.end)), profiles);
+}
+
 function sectionAcross(book: SectionBook, body: BodyAxis, along: Vec3, profiles: readonly number[]): SectionFound {
   const { measured, profile } = body;
   if (measured !== null) {
@@ -160,10 +193,10 @@ function sectionAcross(book: SectionBook, body: BodyAxis, along: Vec3, profiles:
   try {
     if (profile === null) throw noSection('only its bounding box is drawn');
     const seen = book.seenAlong(profile, along, body.x, body.y);
-    if (body.endProfile === null) return { ...seen, noSection: null };
-    const far = book.seenAlong(body.endProfile, along, body.x, body.y);
+    const far = body.endProfile === null ? seen : book.seenAlong(body.endProfile, along, body.x, body.y);
     // The lesser end of a tapered member is the safe one.
-    return { ...(far.section.area < seen.section.area ? far : seen), noSection: null };
+    const { section, zAxis } = far.section.area < seen.section.area ? far : seen;
+    return { section, zAxis, noSection: null };
   } catch (problem) {
     if (!(problem instanceof NotRead)) throw problem;
     const upright = across(body.y, along);

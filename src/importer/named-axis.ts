@@ -4,12 +4,12 @@ import type { MemberAxis } from './member-axis.ts';
 import { namedSection } from './sections/named-section.ts';
 
 /**
- * The axis with the section that `texts` name, the first that names one, where its profile is not known; what is said of
+ * The axis with the section that `texts` (read only then) name, the first that names one, where its profile is not known; what is said of
  * that. A section that is named and measured alike is no guess.
  */
 export function namedAxis(
   axis: MemberAxis,
-  texts: readonly (string | null)[],
+  texts: () => readonly (string | null)[],
 ): { readonly axis: MemberAxis; readonly remark: Remark | null } {
   const named = namedSection(axis.section, texts);
   if (named === null) return { axis, remark: null };

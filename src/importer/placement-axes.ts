@@ -6,13 +6,18 @@ import { across, firstAcross, frame, IDENTITY, type Transform } from './transfor
 
 /** IfcAxis2Placement3D, or its plane form lying in z = 0; the identity where it is left out. */
 export function readAxes(reading: Reading, value: StepValue | undefined): Transform {
-  const id = asRef(value);
+  return axesOf(reading, asRef(value));
+}
+
+/** The same of the placement `id`. */
+export function axesOf(reading: Reading, id: number | null): Transform {
   if (id === null) return IDENTITY;
-  const args = reading.args(id);
-  if (reading.file.typeOf(id) === 'IFCAXIS2PLACEMENT2D') {
-    return frame(reading.point(args[0]), null, reading.direction(args[1]));
-  }
-  return frame(reading.point(args[0]), reading.direction(args[1]), reading.direction(args[2]));
+  const location = reading.refAt(id, 0);
+  const first = reading.file.refAt(id, 1);
+  const second = reading.file.refAt(id, 2);
+  const origin = reading.pointOf(location);
+  if (reading.file.typeOf(id) === 'IFCAXIS2PLACEMENT2D') return frame(origin, null, reading.directionOf(first));
+  return frame(origin, reading.directionOf(first), reading.directionOf(second));
 }
 
 /** IfcAxis2Placement2D as a map of the plane. */

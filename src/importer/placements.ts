@@ -3,7 +3,7 @@ import { gridsByAxis, readGridPlacement } from './grid-placement.ts';
 import type { Grid } from './grids.ts';
 import { readLinearAxes } from './linear-placement.ts';
 import { NotRead, noAxis } from './not-read.ts';
-import { readAxes } from './placement-axes.ts';
+import { axesOf, readAxes } from './placement-axes.ts';
 import type { Reading } from './reading.ts';
 import { compose, IDENTITY, type Transform } from './transform.ts';
 
@@ -31,10 +31,22 @@ export class Placements {
    * @throws NotRead where the chain runs in a circle or is of a kind that is not read.
    */
   worldOf(id: number | null): Transform {
+    if (id === null) return this.root;
+    const own = this.world.get(id);
+    if (own !== undefined) return orThrow(own);
+    const parent = this.reading.file.typeOf(id) === 'IFCLOCALPLACEMENT' ? this.reading.file.refAt(id, 0) : null;
+    const base = parent === null ? undefined : this.world.get(parent);
+    // Most placements are one element's alone: they are not worth keeping once what they stand on is known.
+    if (base !== undefined && !(base instanceof NotRead))
+      return compose(base, axesOf(this.reading, this.reading.file.refAt(id, 1)));
+    return this.walk(id);
+  }
+
+  private walk(id: number): Transform {
     // Walked in a loop and not by recursion: files hold chains of many thousand links.
     const chain: { id: number; relative: Transform }[] = [];
     const onWay = new Set<number>();
-    let at = id;
+    let at: number | null = id;
     let base: Transform | NotRead = this.root;
     while (at !== null) {
       const known = this.world.get(at);
@@ -60,8 +72,7 @@ export class Placements {
       base = base instanceof NotRead ? base : compose(base, link.relative);
       this.world.set(link.id, base);
     }
-    if (base instanceof NotRead) throw base;
-    return base;
+    return orThrow(base);
   }
 
   private link(id: number): Link | NotRead {
@@ -102,6 +113,11 @@ export class Placements {
       'Export the model with local placements.',
     );
   }
+}
+
+function orThrow(found: Transform | NotRead): Transform {
+  if (found instanceof NotRead) throw found;
+  return found;
 }
 
 function orRefusal(read: () => Link): Link | NotRead {

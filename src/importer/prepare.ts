@@ -1,6 +1,7 @@
 import { between, type Vec3 } from '../domain/vector.ts';
 import type { StepFile } from '../step/step-file.ts';
 import { asRef, asString } from '../step/values.ts';
+import { ContextBook } from './context.ts';
 import { FactsBook } from './facts.ts';
 import { noteFileProblems, noteGuessedSchema, noteMissingLengthUnit, noteRepeatedGlobalIds } from './file-remarks.ts';
 import { FindingsLog } from './findings-log.ts';
@@ -38,6 +39,7 @@ export function prepare(file: StepFile, options: ImportOptions): Prepared {
     reading,
     placements: new Placements(reading, grids),
     relations,
+    contexts: new ContextBook(reading, relations),
     sections: new SectionBook(reading),
     materials: new MaterialBook(reading, options.defaultMaterial),
     facts: new FactsBook(file, units, relations),
@@ -50,17 +52,17 @@ export function prepare(file: StepFile, options: ImportOptions): Prepared {
 
 /**
  * Puts the members in order, names their places and gathers the findings.
- * @param elements the instances they were read from, and those that could not be read
+ * @param globalIds of the instances they were read from and of those that could not be read; '' where there is none
  */
 export function finish(
   { sources, grids, log }: Prepared,
   source: ImportedModel['source'],
-  elements: readonly number[],
+  globalIds: readonly string[],
   members: readonly PlacelessMember[],
 ): Omit<ImportedModel, 'given' | 'evidence'> {
   const { reading, placements } = sources;
   const found = [...members].sort(byGeometry);
-  noteRepeatedGlobalIds(reading, elements);
+  noteRepeatedGlobalIds(reading, globalIds);
   const storeys = readStoreys(sources);
   noteFileProblems(reading);
   const placeOf = placeNamer({ grids, placements, storeys, corner: cornerOf(found) });
@@ -72,7 +74,7 @@ export function finish(
     members: found,
     findings: log.findings(placeOf),
     placeOf,
-    elementCount: elements.length,
+    elementCount: globalIds.length,
   };
 }
 
@@ -85,12 +87,12 @@ function byGeometry(a: PlacelessMember, b: PlacelessMember): number {
 
 function cornerOf(members: readonly PlacelessMember[]): Vec3 | null {
   if (members.length === 0) return null;
-  let [x, y] = [Number.POSITIVE_INFINITY, Number.POSITIVE_INFINITY];
-  for (const { axis } of members) {
-    for (const end of axis) {
-      x = Math.min(x, end[0]);
-      y = Math.min(y, end[1]);
-    }
+  let x = Number.POSITIVE_INFINITY;
+  let y = Number.POSITIVE_INFINITY;
+  for (const member of members) {
+    const [from, to] = member.axis;
+    x = Math.min(x, from[0], to[0]);
+    y = Math.min(y, from[1], to[1]);
   }
   return [x, y, 0];
 }

@@ -1,9 +1,8 @@
 import type { Member } from '../domain/member.ts';
 import { between } from '../domain/vector.ts';
-import { asRef, asString } from '../step/values.ts';
 import type { BodyMeshes } from './body-meshes.ts';
 import { writtenClass } from './class-names.ts';
-import { contextOf, layerOf } from './context.ts';
+import { type ContextBook, layerOf } from './context.ts';
 import { elementAxes } from './element-axes.ts';
 import { NO_GLOBAL_ID, refusal, remarksOn } from './element-remarks.ts';
 import type { FactsBook } from './facts.ts';
@@ -23,6 +22,7 @@ import type { Transform } from './transform.ts';
 export interface Sources {
   readonly reading: Reading;
   readonly relations: Relations;
+  readonly contexts: ContextBook;
   readonly placements: Placements;
   readonly sections: SectionBook;
   readonly materials: MaterialBook;
@@ -36,16 +36,14 @@ export interface PlacelessMember extends Member {
 }
 
 /** The members that one element holds; none, with a finding, where it cannot be read. */
-export function readElement(sources: Sources, id: number, meshes: BodyMeshes): PlacelessMember[] {
+export function readElement(sources: Sources, id: number, stated: string, meshes: BodyMeshes): PlacelessMember[] {
   const { reading, placements } = sources;
-  const args = reading.file.args(id);
-  const stated = asString(args[0])?.trim() ?? '';
+  const { file } = reading;
   const globalId = stated === '' ? `#${id}` : stated;
   reading.about(globalId);
   if (stated === '') reading.note(NO_GLOBAL_ID);
   try {
-    const placement = asRef(args[5]);
-    const world = placements.worldOf(placement);
+    const world = placements.worldOf(file.refAt(id, 5));
     reading.about(globalId, isSound(world.origin) ? world.origin : null);
     return membersOf(sources, id, globalId, world, meshes);
   } catch (problem) {
@@ -65,15 +63,18 @@ function membersOf(
   meshes: BodyMeshes,
 ): PlacelessMember[] {
   const { reading, relations, materials } = sources;
-  const args = reading.file.args(id);
-  const shape = asRef(args[6]);
+  const { file } = reading;
+  const shape = file.refAt(id, 6);
   const made = materials.madeOf(materialId(relations, id));
   const axes = elementAxes(sources, readShape(reading, shape), world, made.profiles, () => meshes.of(id));
-  axes.sort((a, b) => compareRounded(a.ends[0], b.ends[0]) || compareRounded(a.ends[1], b.ends[1]));
+  if (axes.length > 1)
+    axes.sort((a, b) => compareRounded(a.ends[0], b.ends[0]) || compareRounded(a.ends[1], b.ends[1]));
 
-  const context = contextOf(reading, relations, id);
   const layer = layerOf(reading, relations, shape);
-  const texts = [context.type, asString(args[4]), asString(args[2]), asString(args[3])];
+  const context = sources.contexts.of(id);
+  const name = file.stringAt(id, 2);
+  const tag = file.stringAt(id, 7);
+  const texts = () => [context.type, file.stringAt(id, 4), name, file.stringAt(id, 3)];
   return axes.map((found, part) => {
     reading.about(globalId, between(...found.ends, 0.5));
     const { axis, remark } = namedAxis(found, texts);
@@ -85,9 +86,9 @@ function membersOf(
     return {
       globalId,
       part,
-      name: asString(args[2]),
-      tag: asString(args[7]),
-      class: writtenClass(reading.file.typeOf(id)),
+      name,
+      tag,
+      class: writtenClass(file.typeOf(id)),
       predefinedType: context.predefinedType,
       type: context.type,
       assembly: context.assembly,

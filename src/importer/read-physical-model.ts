@@ -3,7 +3,7 @@ import { type BodyMeshes, WantedMeshes } from './body-meshes.ts';
 import { readEvidence } from './evidence/read-evidence.ts';
 import { IMPORT_DEFAULTS, type ImportOptions } from './options.ts';
 import { finish, prepare } from './prepare.ts';
-import { readElement } from './read-element.ts';
+import { type PlacelessMember, readElement } from './read-element.ts';
 import type { ImportedModel } from './types.ts';
 
 const MEMBER_CLASSES = ['IfcBeam', 'IfcColumn', 'IfcMember'].flatMap((name) => [name, `${name}StandardCase`]);
@@ -21,8 +21,14 @@ export function readPhysicalModel(
 ): ImportedModel {
   const prepared = prepare(file, chosen);
   const elements = elementsOf(file, chosen.classes);
-  const members = elements.flatMap((id) => readElement(prepared.sources, id, meshes));
-  return { ...finish(prepared, 'physical', elements, members), given: null, evidence: readEvidence(prepared.sources) };
+  const members: PlacelessMember[] = [];
+  const globalIds: string[] = [];
+  for (const id of elements) {
+    const globalId = file.stringAt(id, 0)?.trim() ?? '';
+    globalIds.push(globalId);
+    for (const member of readElement(prepared.sources, id, globalId, meshes)) members.push(member);
+  }
+  return { ...finish(prepared, 'physical', globalIds, members), given: null, evidence: readEvidence(prepared.sources) };
 }
 
 function elementsOf(file: StepFile, extra: readonly string[]): number[] {

@@ -14,7 +14,9 @@ export class Reading {
   readonly units: Units;
   private readonly log: FindingsLog;
   /** The element that findings are about at the moment; null between elements. */
-  private subject: { globalId: string; at: Vec3 | null } | null = null;
+  private subject: string | null = null;
+  private subjectAt: Vec3 | null = null;
+  private readonly numbers = new Float64Array(3);
 
   constructor(file: StepFile, family: SchemaFamily, units: Units, log: FindingsLog) {
     this.file = file;
@@ -24,17 +26,31 @@ export class Reading {
   }
 
   about(globalId: string | null, at: Vec3 | null = null): void {
-    this.subject = globalId === null ? null : { globalId, at };
+    this.subject = globalId;
+    this.subjectAt = globalId === null ? null : at;
   }
 
   note(remark: Remark): void {
-    this.log.add(remark, this.subject?.globalId ?? null, this.subject?.at ?? null);
+    this.log.add(remark, this.subject, this.subjectAt);
   }
 
   /** The instance's arguments; where the file does not hold it, none, and a finding. */
   args(id: number): readonly StepValue[] {
     if (!this.file.has(id)) this.noteDangling(id);
     return this.file.args(id);
+  }
+
+  /** The id that argument `index` refers to, read alone; null where it refers to nothing. */
+  refAt(id: number, index: number): number | null {
+    const found = this.file.refAt(id, index);
+    if (found === null && !this.file.has(id)) this.noteDangling(id);
+    return found;
+  }
+
+  /** The ids in the list that argument `index` is, read alone. */
+  refsAt(id: number, index: number): readonly number[] {
+    if (!this.file.has(id)) this.noteDangling(id);
+    return this.file.refsAt(id, index);
   }
 
   typeOf(id: number): string {
@@ -76,17 +92,35 @@ export class Reading {
 
   /** A cartesian point in metres; a point of two coordinates lies at z = 0. */
   point(value: StepValue | undefined): Vec3 {
-    const id = asRef(value);
-    const list = id === null ? null : this.args(id)[0];
-    return this.coordinates(list, this.units.length);
+    return this.pointOf(asRef(value));
+  }
+
+  pointOf(id: number | null): Vec3 {
+    if (id === null) return [0, 0, 0];
+    if (!this.file.has(id)) this.noteDangling(id);
+    return this.firstCoordinates(id, this.units.length) ?? [0, 0, 0];
   }
 
   /** A direction as written, not at unit length; null where it is left out. */
   direction(value: StepValue | undefined): Vec3 | null {
-    const id = asRef(value);
+    return this.directionOf(asRef(value));
+  }
+
+  directionOf(id: number | null): Vec3 | null {
     if (id === null) return null;
-    const [ratios] = this.args(id);
-    return ratios === undefined ? null : this.coordinates(ratios, 1);
+    if (!this.file.has(id)) this.noteDangling(id);
+    const direction = this.firstCoordinates(id, 1);
+    return direction === null && this.file.valueAt(id, 0) === undefined ? null : (direction ?? [0, 0, 0]);
+  }
+
+  /** As `coordinates` of the first argument of `id`; null where that is no list. */
+  private firstCoordinates(id: number, factor: number): Vec3 | null {
+    const { numbers } = this;
+    const count = this.file.numbersAt(id, 0, numbers);
+    if (count < 0) return null;
+    const x = count > 0 ? numbers[0]! * factor : 0;
+    const y = count > 1 ? numbers[1]! * factor : 0;
+    return [x, y, count > 2 ? numbers[2]! * factor : 0];
   }
 
   coordinates(list: StepValue | undefined | null, factor: number): Vec3 {

@@ -1,4 +1,3 @@
-import { asRefs, asString } from '../step/values.ts';
 import type { Reading } from './reading.ts';
 
 /** What an element's shape offers: the items of its Axis, and those of its body. */
@@ -8,7 +7,7 @@ export interface Shape {
 }
 
 /** Representations that show something else than the solid or its line. */
-const ASIDE = new Set(['FOOTPRINT', 'ANNOTATION', 'PROFILE', 'CLEARANCE', 'SURFACE', 'LIGHTING', 'COG', 'PLAN']);
+const OTHERS = new Set(['FOOTPRINT', 'ANNOTATION', 'PROFILE', 'CLEARANCE', 'SURFACE', 'LIGHTING', 'COG', 'PLAN']);
 
 /** The best body first; what exporters call it varies. */
 const BODY_RANK = ['BODY', '', 'BODY-FALLBACK', 'FACETATION', 'TESSELLATION', 'REFERENCE'];
@@ -16,22 +15,36 @@ const BODY_RANK = ['BODY', '', 'BODY-FALLBACK', 'FACETATION', 'TESSELLATION', 'R
 /** The bounding box: better than nothing, and than nothing only. */
 const LAST = 'BOX';
 
+const ASIDE = -1;
+const AXIS = -2;
+
+/** AXIS, ASIDE, or how good a body it is, the lowest best. */
+function placeOf(name: string): number {
+  if (OTHERS.has(name)) return ASIDE;
+  if (name === 'AXIS') return AXIS;
+  const rank = BODY_RANK.indexOf(name);
+  return rank >= 0 ? rank : BODY_RANK.length + (name === LAST ? 1 : 0);
+}
+
+/** Of the names as the standard spells them, which most exporters do: every member has one or two. */
+const PLACES: ReadonlyMap<string, number> = new Map(
+  ['Axis', 'Body', 'Box', 'FootPrint'].map((name) => [name, placeOf(name.toUpperCase())]),
+);
+
 export function readShape(reading: Reading, id: number | null): Shape {
   let axis: readonly number[] = [];
   let body: readonly number[] = [];
   let best = Number.POSITIVE_INFINITY;
   if (id === null) return { axis, body };
-  for (const representation of asRefs(reading.args(id)[2])) {
-    const args = reading.args(representation);
-    const name = (asString(args[1]) ?? '').toUpperCase();
-    const items = asRefs(args[3]);
-    if (ASIDE.has(name) || items.length === 0) continue;
-    if (name === 'AXIS') {
+  for (const representation of reading.refsAt(id, 2)) {
+    const items = reading.refsAt(representation, 3);
+    const name = reading.file.stringAt(representation, 1) ?? '';
+    const place = PLACES.get(name) ?? placeOf(name.toUpperCase());
+    if (place === ASIDE || items.length === 0) continue;
+    if (place === AXIS) {
       axis = items;
       continue;
     }
-    const rank = BODY_RANK.indexOf(name);
-    const place = rank >= 0 ? rank : BODY_RANK.length + (name === LAST ? 1 : 0);
     if (place < best) {
       best = place;
       body = items;

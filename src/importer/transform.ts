@@ -19,8 +19,11 @@ export function mapDirection(t: Transform, d: Vec3): Vec3 {
 }
 
 export function mapPosition(t: Transform, p: Vec3): Vec3 {
-  const d = mapDirection(t, p);
-  return [d[0] + t.origin[0], d[1] + t.origin[1], d[2] + t.origin[2]];
+  return [
+    t.x[0] * p[0] + t.y[0] * p[1] + t.z[0] * p[2] + t.origin[0],
+    t.x[1] * p[0] + t.y[1] * p[1] + t.z[1] * p[2] + t.origin[1],
+    t.x[2] * p[0] + t.y[2] * p[1] + t.z[2] * p[2] + t.origin[2],
+  ];
 }
 
 /** The map that does `inner` first and `outer` after it. */
@@ -61,11 +64,20 @@ export function frame(origin: Vec3, axis: Vec3 | null, reference: Vec3 | null): 
 
 /** A unit vector across `z`, as near `reference` as may be (IfcFirstProjAxis). */
 export function firstAcross(z: Vec3, reference: Vec3 | null): Vec3 {
-  for (const candidate of [reference, [1, 0, 0] as const, [0, 1, 0] as const]) {
-    const direction = candidate === null ? null : unit(candidate);
-    if (direction === null) continue;
-    const projected = across(direction, z);
-    if (dot(projected, projected) > 1e-12) return unit(projected) as Vec3;
-  }
-  return scale(z, 0);
+  return (
+    (reference === null ? null : projectedAcross(z, reference)) ??
+    projectedAcross(z, X) ??
+    projectedAcross(z, Y) ??
+    scale(z, 0)
+  );
+}
+
+const X: Vec3 = [1, 0, 0];
+const Y: Vec3 = [0, 1, 0];
+
+function projectedAcross(z: Vec3, reference: Vec3): Vec3 | null {
+  const direction = unit(reference);
+  if (direction === null) return null;
+  const projected = across(direction, z);
+  return dot(projected, projected) > 1e-12 ? unit(projected) : null;
 }

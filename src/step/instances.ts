@@ -1,8 +1,10 @@
 import type { InstanceTable } from './instance-table.ts';
 import type { Keywords } from './keywords.ts';
 import { ParameterReader, type StepRecord } from './parameters.ts';
+import { ABSENT, MIXED, PlainLists } from './plain-list.ts';
+import { plainNumbers, plainRef, plainRefs } from './plain-values.ts';
 import type { StepProblem, StepProblems } from './problems.ts';
-import type { StepValue } from './values.ts';
+import { asNumber, asRef, asRefs, asString, type StepValue } from './values.ts';
 
 /** What the index pass hands over. */
 export interface IndexedInstances {
@@ -16,14 +18,19 @@ export class StepInstances {
   private readonly table: InstanceTable;
   private readonly keywords: Keywords;
   private readonly found: StepProblems;
+  /** Of the whole file; they must not change. */
+  readonly bytes: Uint8Array;
   private readonly reader: ParameterReader;
+  private readonly plain: PlainLists;
   private readonly idsByType = new Map<string, readonly number[]>();
 
   constructor(bytes: Uint8Array, indexed: IndexedInstances) {
     this.table = indexed.table;
     this.keywords = indexed.keywords;
     this.found = indexed.problems;
+    this.bytes = bytes;
     this.reader = new ParameterReader(bytes);
+    this.plain = new PlainLists(bytes);
   }
 
   /** How many instances there are. */
@@ -97,6 +104,72 @@ export class StepInstances {
     if (row < 0) return [];
     if (!this.isComplex(row)) return [{ type: this.typeOf(id), args: this.args(id) }];
     return this.reader.readRecords(this.table.offsetOf(row), this.faultsOf(id)) ?? [];
+  }
+
+  /**
+   * Parameter `index` alone, as `args(id)[index]` gives it. This and those below make no values of the other parameters,
+   * which is most of what reading a large model costs.
+   */
+  valueAt(id: number, index: number): StepValue | undefined {
+    const at = this.plainAt(id, index);
+    return at > 0 ? this.reader.readPlain(at) : this.argAt(id, index, at);
+  }
+
+  /** The id that parameter `index` refers to; null where it refers to nothing. */
+  refAt(id: number, index: number): number | null {
+    const at = this.plainAt(id, index);
+    return at > 0 ? plainRef(this.bytes, at) : asRef(this.argAt(id, index, at));
+  }
+
+  /** The ids in the list of references that parameter `index` is; empty where it is none. */
+  refsAt(id: number, index: number): number[] {
+    return this.onlyRefsAt(id, index) ?? asRefs(this.valueAt(id, index));
+  }
+
+  /** The same; null where the list holds anything else, or what it holds has to be read with care. */
+  onlyRefsAt(id: number, index: number): number[] | null {
+    const at = this.plainAt(id, index);
+    return at > 0 ? plainRefs(this.bytes, at) : null;
+  }
+
+  /** The string in parameter `index`; null where there is none. */
+  stringAt(id: number, index: number): string | null {
+    return asString(this.valueAt(id, index));
+  }
+
+  /** The number in parameter `index`; null where there is none. */
+  numberAt(id: number, index: number): number | null {
+    return asNumber(this.valueAt(id, index));
+  }
+
+  /**
+   * Fills `into` with the numbers of the list that parameter `index` is, NaN for items that are none.
+   * @returns how many items the list has, `into` or not; -1 where the parameter is no list.
+   */
+  numbersAt(id: number, index: number, into: Float64Array): number {
+    const row = this.table.rowOf(id);
+    // A point or a direction, `((1.,0.,0.))`, as half of a model's instances are: its parameters need not be told apart.
+    const isFirst = index === 0 && row >= 0;
+    const first = isFirst ? plainNumbers(this.bytes, this.table.offsetOf(row) + 1, into, true) : -1;
+    if (first >= 0) return first;
+    const at = this.plainAt(id, index);
+    const count = at > 0 ? plainNumbers(this.bytes, at, into) : -1;
+    if (count >= 0) return count;
+    const list = this.argAt(id, index, at);
+    if (!Array.isArray(list)) return -1;
+    for (let i = 0; i < into.length && i < list.length; i++) into[i] = asNumber(list[i] as StepValue) ?? Number.NaN;
+    return list.length;
+  }
+
+  /** Where parameter `index` begins, if it can be read alone; else ABSENT, or MIXED where the list has to be read whole. */
+  private plainAt(id: number, index: number): number {
+    const row = this.table.rowOf(id);
+    if (row < 0) return ABSENT;
+    return this.isComplex(row) ? MIXED : this.plain.startOf(this.table.offsetOf(row), row, index);
+  }
+
+  private argAt(id: number, index: number, at: number): StepValue | undefined {
+    return at === ABSENT ? undefined : this.args(id)[index];
   }
 
   private isComplex(row: number): boolean {

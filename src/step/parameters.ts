@@ -2,7 +2,7 @@ import {
   APOSTROPHE,
   ASTERISK,
   afterString,
-  BACKSLASH,
+  asBuffer,
   CLOSE,
   COMMA,
   DIGIT_0,
@@ -26,7 +26,10 @@ import {
   upper,
 } from './bytes.ts';
 import { decodeString } from './decode-string.ts';
+import { exactReal } from './exact-real.ts';
+import { IS_PLAIN } from './plain-list.ts';
 import type { StepProblemKind } from './problems.ts';
+import { ShortTexts } from './short-texts.ts';
 import { DERIVED, StepBinary, StepEnum, StepRef, StepTyped, type StepValue } from './values.ts';
 
 /** Told what is wrong with a value and where. */
@@ -40,25 +43,26 @@ export interface StepRecord {
 
 /** No schema nests lists beyond a handful; a file that does would exhaust the stack. */
 const DEEPEST_NESTING = 200;
-/** Whole numbers below this, divided by or multiplied with one power of ten up to 22, round correctly (Clinger 1990). */
-const EXACT_BELOW = 2 ** 53;
-const POWERS_OF_TEN = Array.from({ length: 23 }, (_, exponent) => Number(`1e${exponent}`));
-
-/** 1 for the bytes that stand for themselves in a string. */
-const IS_PLAIN = Uint8Array.from({ length: 256 }, (_, byte) =>
-  byte === APOSTROPHE || byte === BACKSLASH || byte > 0x7e ? 0 : 1,
-);
 
 /** Reads parameter lists out of the bytes of a STEP file. Never throws on what it meets: a value that cannot be read is null and a fault. */
 export class ParameterReader {
   /** Where reading stopped. */
   at = 0;
   private readonly bytes: Uint8Array;
+  private readonly texts: ShortTexts;
   private fault: FaultSink = () => {};
   private depth = 0;
 
   constructor(bytes: Uint8Array) {
-    this.bytes = bytes;
+    this.bytes = asBuffer(bytes);
+    this.texts = new ShortTexts(bytes);
+  }
+
+  /** The one value at `at`, which stands in a plain list and so has no fault. */
+  readPlain(at: number): StepValue {
+    this.at = at;
+    this.depth = 0;
+    return this.value() as StepValue;
   }
 
   /** The parameters of the list that opens at `at`; null where brackets and commas do not fit, with a fault told. */
@@ -188,7 +192,7 @@ export class ParameterReader {
     while (IS_PLAIN[bytes[end]] === 1) end++;
     if (bytes[end] === APOSTROPHE && bytes[end + 1] !== APOSTROPHE) {
       this.at = end + 1;
-      return latin1(bytes, from, end);
+      return this.texts.textOf(from, end);
     }
     end = afterString(bytes, from);
     while (end !== -1 && bytes[end] === APOSTROPHE) end = afterString(bytes, end + 1);
@@ -224,7 +228,7 @@ export class ParameterReader {
       if (letter === 0x54) return true;
       if (letter === 0x46) return false;
     }
-    return new StepEnum(latin1(bytes, from + 1, p).toUpperCase());
+    return new StepEnum(this.texts.textOf(from + 1, p).toUpperCase());
   }
 
   private typed(): StepValue | undefined {
@@ -264,11 +268,8 @@ export class ParameterReader {
     }
     this.at = p;
     if (!this.endsHere()) return this.unreadable(from);
-    const scale = exponent - fractionDigits;
-    if (mantissa < EXACT_BELOW && scale >= -22 && scale <= 22) {
-      const size = scale < 0 ? mantissa / POWERS_OF_TEN[-scale] : mantissa * POWERS_OF_TEN[scale];
-      return negative ? -size : size;
-    }
+    const size = exactReal(mantissa, exponent - fractionDigits);
+    if (size >= 0) return negative ? -size : size;
     const value = Number(latin1(bytes, from, p));
     return Number.isFinite(value) ? value : this.unreadable(from);
   }

@@ -26,7 +26,6 @@ export interface StepBlock {
 
 /** A STEP physical file (ISO 10303-21), indexed; instances are parsed when asked for. */
 export class StepFile extends StepInstances {
-  readonly bytes: Uint8Array;
   /** The first name in FILE_SCHEMA, upper-case: `IFC4X3_ADD2`; '' where there is none. */
   readonly schema: string;
   /** The time stamp in FILE_NAME as written; null where it is empty. */
@@ -45,7 +44,6 @@ export class StepFile extends StepInstances {
 
   constructor(bytes: Uint8Array, header: StepHeader, scanner: DataScanner, sections: DataSections) {
     super(bytes, scanner.model);
-    this.bytes = bytes;
     this.schema = header.schema;
     this.timeStamp = header.timeStamp;
     this.fileDescription = header.entries.get('FILE_DESCRIPTION') ?? [];

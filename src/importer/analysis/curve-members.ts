@@ -1,7 +1,6 @@
 import { add, between, cross, distance, norm, scale, subtract, unit, type Vec3 } from '../../domain/vector.ts';
 import { asEnum, asRef, asString } from '../../step/values.ts';
 import { writtenClass } from '../class-names.ts';
-import { contextOf } from '../context.ts';
 import { BENT, refusal } from '../element-remarks.ts';
 import { inOrder, isSound, SHORTEST } from '../member-axis.ts';
 import { NotRead, noAxis, noSection } from '../not-read.ts';
@@ -82,7 +81,7 @@ function readCurveMember(
   if (made.remark !== null) reading.note(made.remark);
   for (const doubt of made.doubts) reading.note(doubt);
 
-  const context = contextOf(reading, relations, element ?? id);
+  const context = sources.contexts.of(element ?? id);
   const member: PlacelessMember = {
     globalId: globalIdOf(sources, id),
     part: 0,

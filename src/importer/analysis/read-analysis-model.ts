@@ -28,7 +28,8 @@ export function readAnalysisModel(file: StepFile, options: Partial<ImportOptions
   noteConnections(sources.reading, members);
   noteSurfaces(sources.reading);
   const read = [...members.values()].map(({ member }) => member);
-  return { ...finish(prepared, 'analysis', ids, read), given: { supports, cases, combinations }, evidence: null };
+  const globalIds = ids.map((id) => file.stringAt(id, 0)?.trim() ?? '');
+  return { ...finish(prepared, 'analysis', globalIds, read), given: { supports, cases, combinations }, evidence: null };
 }
 
 /** Whether the file has a structural analysis view with members. */

@@ -87,7 +87,7 @@ function pointAt(reading: Reading, id: number): Vec3 | null {
 function isCurved(reading: Reading, curve: number | null): boolean {
   if (curve === null || reading.typeOf(curve) === 'IFCLINE') return false;
   const chord = chordOf(readCurve(reading, curve));
-  return chord !== null && !isStraight(chord, distance(chord.from, chord.to));
+  return chord !== null && !isStraight(chord.rise, distance(chord.from, chord.to));
 }
 
 function inARow(edges: readonly EdgeLine[]): EdgeLine {
@@ -102,5 +102,5 @@ function inARow(edges: readonly EdgeLine[]): EdgeLine {
 function curveAt(reading: Reading, item: number, frame: Transform): EdgeLine {
   const [chord] = readAxisLines(reading, [item], frame);
   if (chord === undefined) throw noAxis('it has no edge');
-  return { from: chord.from, to: chord.to, isBent: !isStraight(chord, distance(chord.from, chord.to)) };
+  return { from: chord.from, to: chord.to, isBent: !isStraight(chord.rise, distance(chord.from, chord.to)) };
 }

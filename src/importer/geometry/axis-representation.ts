@@ -16,17 +16,22 @@ const DEEPEST = 16;
  */
 export function readAxisLines(reading: Reading, items: readonly number[], world: Transform, depth = 0): Chord[] {
   if (depth > DEEPEST) throw noAxis('its Axis refers to itself');
-  return items.flatMap((item) => {
-    const type = reading.typeOf(item);
-    if (type === 'IFCMAPPEDITEM') {
-      const mapped = mappedItems(reading, item);
-      return readAxisLines(reading, mapped.items, compose(world, mapped.transform), depth + 1);
-    }
-    if (type === 'IFCGEOMETRICSET' || type === 'IFCGEOMETRICCURVESET') {
-      const elements = reading.args(item)[0];
-      const ids = Array.isArray(elements) ? elements.map(asRef).filter((id) => id !== null) : [];
-      return readAxisLines(reading, ids, world, depth + 1);
-    }
-    return straightRuns(readCurve(reading, item).map((piece) => mapPiece(world, piece)));
-  });
+  const [only] = items;
+  return only !== undefined && items.length === 1
+    ? readItem(reading, only, world, depth)
+    : items.flatMap((item) => readItem(reading, item, world, depth));
+}
+
+function readItem(reading: Reading, item: number, world: Transform, depth: number): Chord[] {
+  const type = reading.typeOf(item);
+  if (type === 'IFCMAPPEDITEM') {
+    const mapped = mappedItems(reading, item);
+    return readAxisLines(reading, mapped.items, compose(world, mapped.transform), depth + 1);
+  }
+  if (type === 'IFCGEOMETRICSET' || type === 'IFCGEOMETRICCURVESET') {
+    const elements = reading.args(item)[0];
+    const ids = Array.isArray(elements) ? elements.map(asRef).filter((id) => id !== null) : [];
+    return readAxisLines(reading, ids, world, depth + 1);
+  }
+  return straightRuns(readCurve(reading, item).map((piece) => mapPiece(world, piece)));
 }

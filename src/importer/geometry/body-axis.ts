@@ -64,7 +64,8 @@ export function joinedInLine(a: BodyAxis, b: BodyAxis): BodyAxis | null {
 }
 
 /** Each distinct axis once: repeated solids and pieces in line are one. */
-export function distinctAxes(axes: readonly BodyAxis[]): BodyAxis[] {
+export function distinctAxes(axes: readonly BodyAxis[]): readonly BodyAxis[] {
+  if (axes.length === 1) return axes;
   const kept: BodyAxis[] = [];
   for (const axis of axes) {
     let current = axis;

@@ -95,4 +95,4 @@ function samples(piece: CurvePiece): Vec3[] {
 }
 
 /** A curve nearer to its chord than this is straight: a tenth of a millimetre, or what rounded coordinates leave. */
-export const isStraight = (chord: Chord, length: number): boolean => chord.rise <= Math.max(1e-4, 1e-5 * length);
+export const isStraight = (rise: number, length: number): boolean => rise <= Math.max(1e-4, 1e-5 * length);

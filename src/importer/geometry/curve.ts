@@ -23,8 +23,10 @@ const DEEPEST = 32;
  */
 export function readCurve(reading: Reading, id: number, depth = 0): CurvePiece[] {
   if (depth > DEEPEST) throw noAxis('its curve refers to itself');
-  const args = reading.args(id);
   const type = reading.typeOf(id);
+  const points = type === 'IFCPOLYLINE' ? reading.file.onlyRefsAt(id, 0) : null;
+  if (points !== null) return throughPoints(points.map((point) => reading.pointOf(point)));
+  const args = reading.args(id);
   switch (type) {
     case 'IFCPOLYLINE':
       return throughPoints(asList(args[0]).map((point) => reading.point(point)));
@@ -52,6 +54,7 @@ export function readCurve(reading: Reading, id: number, depth = 0): CurvePiece[]
 
 function throughPoints(points: readonly Vec3[]): CurvePiece[] {
   if (points.length < 2) throw noAxis('its polyline has fewer than two points');
+  if (points.length === 2) return [linePiece(points[0]!, points[1]!)];
   return points.slice(1).map((point, i) => linePiece(points[i]!, point));
 }
 

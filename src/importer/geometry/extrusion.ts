@@ -1,7 +1,6 @@
 import { add, scale, unit, type Vec3 } from '../../domain/vector.ts';
-import { asRef } from '../../step/values.ts';
 import { noAxis } from '../not-read.ts';
-import { readAxes } from '../placement-axes.ts';
+import { axesOf } from '../placement-axes.ts';
 import type { Reading } from '../reading.ts';
 import type { SectionBook } from '../sections/section-book.ts';
 import { compose, mapDirection, mapPosition, type Transform } from '../transform.ts';
@@ -19,16 +18,17 @@ export interface Extrusion {
 
 /** IfcExtrudedAreaSolid and its tapered form. @throws NotRead (no-axis) where it has no profile, direction or depth. */
 export function readExtrusion(reading: Reading, id: number, world: Transform): Extrusion {
-  const args = reading.args(id);
-  const profile = asRef(args[0]);
+  const { file } = reading;
+  const profile = reading.refAt(id, 0);
   if (profile === null) throw noAxis('its extrusion has no profile');
-  const direction = unit(reading.direction(args[2]) ?? [0, 0, 1]);
-  const depth = reading.length(args[3]);
+  const position = file.refAt(id, 1);
+  const depth = reading.length(file.valueAt(id, 3));
+  const direction = unit(reading.directionOf(file.refAt(id, 2)) ?? [0, 0, 1]);
   if (direction === null || Number.isNaN(depth) || depth === 0) throw noAxis('its extrusion has no depth');
   return {
     profile,
-    endProfile: reading.file.typeOf(id) === 'IFCEXTRUDEDAREASOLIDTAPERED' ? asRef(args[4]) : null,
-    plane: compose(world, readAxes(reading, args[1])),
+    endProfile: file.typeOf(id) === 'IFCEXTRUDEDAREASOLIDTAPERED' ? file.refAt(id, 4) : null,
+    plane: compose(world, axesOf(reading, position)),
     sweep: scale(direction, depth),
   };
 }

@@ -57,7 +57,7 @@ function roundShape(outer: Ring, hole: Ring | undefined): ProfileShape | null {
 }
 
 function circleOf(ring: Ring): { centre: Point2; radius: number } | null {
-  const corners = cornersOf(ring);
+  const corners = trueCorners(cornersOf(ring));
   if (corners.length < FEWEST_FACETS) return null;
   const [low, high] = boxOf(corners);
   const centre: Point2 = [(low[0] + high[0]) / 2, (low[1] + high[1]) / 2];
@@ -85,6 +85,17 @@ function boxFilled(ring: Ring): { width: number; depth: number } | null {
   const [low, high] = boxOf(cornersOf(ring));
   const [width, depth] = [high[0] - low[0], high[1] - low[1]];
   return ringSize(ring).area < BOXY * width * depth ? null : { width, depth };
+}
+
+/** A facet of two triangles is cut into two edges in one line (sine of the turn between them). */
+const IN_LINE = 1e-3;
+
+function trueCorners(corners: readonly Point2[]): Point2[] {
+  return corners.filter((p, i) => {
+    const [before, after] = [corners.at(i - 1)!, corners[(i + 1) % corners.length]!];
+    const [a, b, c, d] = [p[0] - before[0], p[1] - before[1], after[0] - p[0], after[1] - p[1]];
+    return Math.abs(a * d - b * c) > IN_LINE * Math.hypot(a, b) * Math.hypot(c, d);
+  });
 }
 
 const cornersOf = (ring: Ring): Point2[] => ring.map(startOf);

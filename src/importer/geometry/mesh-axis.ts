@@ -1,14 +1,15 @@
-import { add, along, cross, dot, norm, scale, subtract, unit, type Vec3 } from '../../domain/vector.ts';
+import { add, along, cross, norm, scale, subtract, unit, type Vec3 } from '../../domain/vector.ts';
 import { NotRead, noAxis } from '../not-read.ts';
 import type { Outline, Point2 } from '../sections/outline.ts';
 import { outlineProperties } from '../sections/outline-properties.ts';
-import { across, firstAcross } from '../transform.ts';
+import { across } from '../transform.ts';
+import { bentMeshAxes } from './bent-mesh.ts';
 import type { BodyAxis } from './body-axis.ts';
 import { measuredSection } from './measured-section.ts';
 import { type Mesh, meshOf, type Polygon } from './mesh.ts';
 import { separateBodies } from './mesh-bodies.ts';
 import { MeshCutter } from './mesh-cut.ts';
-import { prismDirection, prismEnds, rangeAlong, sectionFrame } from './prism.ts';
+import { prismDirection, prismEnds, rangeAlong, sectionFrame, uprightAcross } from './prism.ts';
 
 /** A body not this many times as long as it is wide is a plate or a lump, no member. */
 const LEAST_SLENDER = 2.5;
@@ -19,8 +20,11 @@ const STATIONS = [0.103, 0.201, 0.302, 0.401, 0.503, 0.602, 0.703, 0.801, 0.902]
 /** Areas within a hundredth are one section. */
 const SAME_AREA = 0.01;
 
+/** Centroids of cuts leave a straight line by as much where a mesh is drawn in whole millimetres. */
+const STRAIGHT = 1e-3;
+
 /**
- * One axis for each separate body of a mesh, fitted to it as to a prism. `upright` is the direction that the section's z
+ * The axes of each separate body of a mesh: one fitted to it as to a prism, else those of a bar that bends. `upright` is the direction that the section's z
  * axis is to be near.
  * @throws NotRead (no-axis, many-in-one, no-section) where no body is a single slender one.
  */
@@ -31,9 +35,16 @@ export function meshAxes(polygons: readonly Polygon[], upright: Vec3): BodyAxis[
   let refusal: NotRead | null = null;
   for (const body of separateBodies(mesh)) {
     try {
-      axes.push(meshAxis(body, upright));
+      const { axis, isAstray } = meshAxis(body, upright);
+      const bent = axis.rise > STRAIGHT || isAstray ? bentMeshAxes(body, upright) : null;
+      axes.push(...(bent ?? [axis]));
     } catch (problem) {
       if (!(problem instanceof NotRead)) throw problem;
+      const bent = bentMeshAxes(body, upright);
+      if (bent !== null) {
+        axes.push(...bent);
+        continue;
+      }
       // A lattice among single bars is the more telling of two refusals.
       refusal = refusal === null || problem.code === 'many-in-one' ? problem : refusal;
     }
@@ -49,7 +60,8 @@ interface Station {
   readonly regions: readonly Outline[];
 }
 
-function meshAxis(mesh: Mesh, upright: Vec3): BodyAxis {
+/** `isAstray`: some cut has its centroid outside of the section carried along the axis, as no straight bar has. */
+function meshAxis(mesh: Mesh, upright: Vec3): { axis: BodyAxis; isAstray: boolean } {
   const first = prismDirection(mesh);
   if (first === null) throw noAxis('its mesh shows no direction');
   refuseStout(mesh, first, sectionFrame(mesh, first, uprightAcross(upright, first)));
@@ -58,10 +70,12 @@ function meshAxis(mesh: Mesh, upright: Vec3): BodyAxis {
   if (prevailing.regions.length > 1) throw severalBars();
   const section = measuredSection(prevailing.regions[0]!);
   const rise = riseOf(agreeing.length >= stations.length / 2 ? agreeing : stations, agreeing);
-  const isBent = rise > 1e-3;
+  const isBent = rise > STRAIGHT;
   const line = isBent ? bentChord(mesh, direction, frame) : straightChord(mesh, prevailing, direction);
   const ends = [line.start, line.end].map((p) => add(p, mesh.base));
-  return {
+  const astray = stations.map(({ centroid }) => norm(across(subtract(centroid, prevailing.centroid), direction)));
+  const isAstray = Math.max(...astray) > Math.max(section.depth, section.width) / 2;
+  const axis: BodyAxis = {
     from: 'mesh',
     start: ends[0]!,
     end: ends[1]!,
@@ -78,6 +92,7 @@ function meshAxis(mesh: Mesh, upright: Vec3): BodyAxis {
       squareness: line.squareness,
     },
   };
+  return { axis, isAstray };
 }
 
 function refuseStout(mesh: Mesh, direction: Vec3, frame: Frame): void {
@@ -99,9 +114,6 @@ const severalBars = () =>
     'its body is one mesh of several bars grown together',
     'Export each bar as an element of its own, or as a solid of its own within the element.',
   );
-
-const uprightAcross = (upright: Vec3, direction: Vec3): Vec3 =>
-  firstAcross(direction, Math.abs(dot(upright, direction)) > 0.99 ? [0, 1, 0] : upright);
 
 interface Cuts {
   readonly direction: Vec3;

@@ -1,6 +1,6 @@
 import { EigenvalueDecomposition, Matrix } from 'ml-matrix';
 import { cross, dot, norm, scale, subtract, unit, type Vec3 } from '../../domain/vector.ts';
-import { across } from '../transform.ts';
+import { across, firstAcross } from '../transform.ts';
 import type { Face, Mesh } from './mesh.ts';
 
 /** Faces that lean less than this to the axis are sides; each pass is stricter, so that cut ends and holes drop out. */
@@ -80,6 +80,10 @@ export function sectionFrame(mesh: Mesh, along: Vec3, upright: Vec3): { x: Vec3;
 }
 
 const NOWHERE = { size: 0, normal: [0, 0, 0] as Vec3, most: 0 };
+
+/** The unit vector across a member's direction that is nearest to `upright`; of one that runs along it, to the world's y. */
+export const uprightAcross = (upright: Vec3, direction: Vec3): Vec3 =>
+  firstAcross(direction, Math.abs(dot(upright, direction)) > 0.99 ? [0, 1, 0] : upright);
 
 /** An end of a prism as found along its centroid line. */
 export interface PrismEnd {

@@ -25,6 +25,10 @@ interface Run {
  * polygon of some (a cranked chord, a bent web bar), carried on to where the runs meet; the chord of a bow.
  */
 export function straightRuns(pieces: readonly CurvePiece[]): Chord[] {
+  const [only] = pieces;
+  if (pieces.length === 1 && only!.kind === 'line' && unit(subtract(only!.to, only!.from)) !== null) {
+    return [{ from: only!.from, to: only!.to, rise: 0 }];
+  }
   const whole = chordOf(pieces);
   if (whole === null) return [];
   const runs = mergedRuns(pieces);

@@ -35,6 +35,7 @@ export class MaterialBook {
   private readonly fallback: Material | null;
   private readonly known = new Map<number | null, MadeOf>();
   private readonly strengthened = new Map<Material, Map<string, Material>>();
+  private readonly inSections = new Map<Material, Map<Section, Material>>();
   private stated: ReadonlyMap<number, StatedNumbers> | null = null;
 
   /** @throws RequestError where `defaultMaterial` names no grade that is known. */
@@ -58,6 +59,20 @@ export class MaterialBook {
   /** `material` with the strengths of a part as thick as the section's thickest. */
   inSection(material: Material, section: Section | null): Material {
     if (section === null) return material;
+    let known = this.inSections.get(material);
+    if (known === undefined) {
+      known = new Map();
+      this.inSections.set(material, known);
+    }
+    let found = known.get(section);
+    if (found === undefined) {
+      found = this.byThickness(material, section);
+      known.set(section, found);
+    }
+    return found;
+  }
+
+  private byThickness(material: Material, section: Section): Material {
     const byShape = this.strengthened.get(material) ?? new Map<string, Material>();
     this.strengthened.set(material, byShape);
     const key = `${section.shape} ${section.thickness.toFixed(5)}`;

@@ -18,9 +18,9 @@ const SAME_AREA = 0.05;
  * What the first of `texts` that names a section tells of a member whose profile is not known: `found` is what was measured
  * of its body, or null. Null where a profile or numbers are known, or no text names a section.
  */
-export function namedSection(found: Section | null, texts: readonly (string | null)[]): NamedSection | null {
+export function namedSection(found: Section | null, texts: () => readonly (string | null)[]): NamedSection | null {
   if (found !== null && found.from !== 'mesh') return null;
-  for (const text of texts) {
+  for (const text of texts()) {
     const section = text === null ? null : sectionNamedIn(text);
     if (section === null) continue;
     if (found === null) return { section, remark: guessed(section), isTurned: false };

@@ -25,7 +25,7 @@ export class SectionBook {
   private readonly reading: Reading;
   private readonly profiles = new Map<number, Profile | NotRead>();
   private readonly centroids = new Map<number, Point2>();
-  private readonly sections = new Map<string, Section>();
+  private readonly views = new Map<number, Map<number | string, Section>>();
   private readonly disks = new Map<string, number>();
   private readonly withoutOutline = new Map<number, Section | null>();
   private readonly contradictions = new Map<number, Remark | null>();
@@ -40,6 +40,10 @@ export class SectionBook {
     const found = this.profileOrRefusal(id);
     if (found instanceof NotRead) throw found;
     return found;
+  }
+
+  canRead(id: number): boolean {
+    return !(this.profileOrRefusal(id) instanceof NotRead);
   }
 
   private profileOrRefusal(id: number): Profile | NotRead {
@@ -89,11 +93,7 @@ export class SectionBook {
 
   /** The centroid in the plane that is swept, metres; its origin where the profile cannot be read. */
   centroidOrOrigin(id: number): Point2 {
-    try {
-      this.profile(id);
-    } catch (problem) {
-      if (!(problem instanceof NotRead)) throw problem;
-    }
+    this.profileOrRefusal(id);
     return this.centroids.get(id) ?? [0, 0];
   }
 
@@ -142,11 +142,17 @@ export class SectionBook {
   }
 
   private view(id: number, shape: ProfileShape, view: PlaneMap): Section {
-    const key = [id, ...view.x, ...view.y].map((n) => Math.round(n * 1e6)).join(' ');
-    let section = this.sections.get(key);
+    let views = this.views.get(id);
+    if (views === undefined) {
+      views = new Map();
+      this.views.set(id, views);
+    }
+    const [a, b, c] = [Math.round(view.x[0] * 1e6), Math.round(view.x[1] * 1e6), Math.round(view.y[1] * 1e6)];
+    const key = b === 0 && c === 1e6 ? a : `${a} ${b} ${c}`;
+    let section = views.get(key);
     if (section === undefined) {
       section = sectionOf(viewedShape(shape, view));
-      this.sections.set(key, section);
+      views.set(key, section);
     }
     return section;
   }
