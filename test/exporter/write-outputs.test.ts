@@ -86,7 +86,7 @@ describe('writing the outputs', () => {
       };
       return handle;
     };
-    const attempt = write(['a.json', 'b.ifc'], { files: { ...nodeFiles, open } });
+    const attempt = write(['a.json', 'b.ifc'], { files: { ...nodeFiles, open }, filesAtOnce: 1 });
     await expect(attempt).rejects.toThrow(/a\.json: the disk is full/);
     await expect(attempt).rejects.toBeInstanceOf(RequestError);
     expect(read('a.json')).toBe('old');
