@@ -102,7 +102,7 @@ export interface ExtremeForce {
   readonly from: string;
 }
 
-/** Greatest tension and compression of one bar; null where it never has any. */
+/** Greatest tension and compression of one bar; null where it is never in tension, or never in compression. */
 export interface BarEnvelope {
   readonly bar: number;
   readonly tension: ExtremeForce | null;

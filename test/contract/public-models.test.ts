@@ -2,34 +2,10 @@ import { existsSync, readFileSync } from 'node:fs';
 import { join } from 'node:path';
 import { describe, expect, it } from 'vitest';
 import { pinwright, runChecker } from '../support/run-cli.ts';
-import { checker, publicModel } from '../support/shared.ts';
+import { checker, PUBLIC_STEP_MODELS, publicModel } from '../support/shared.ts';
 import { temporaryFolder } from '../support/temporary-folder.ts';
 
-const MODELS = [
-  'analysis-view-house.ifc',
-  'analysis-view-portal-ifc4-inch.ifc',
-  'beam-standard-case-ifc4.ifc',
-  'bent-beam-ifc4x3.ifc',
-  'brep-beam.ifc',
-  'brep-lintels.ifczip',
-  'cardinal-points-ifc4x3.ifc',
-  'clipped-beam.ifc',
-  'fabrication-model.ifc',
-  'grid-placement-ifc4x3.ifc',
-  'gridshell-roof.ifc',
-  'large-id.ifc',
-  'large-offset.ifc',
-  'mapped-axis-beam.ifc',
-  'mirrored-profiles-inch.ifc',
-  'mixed-frame.ifc',
-  'newline-in-string.ifc',
-  'six-shapes.ifc',
-  'steel-frame.ifc',
-  'surface-member.ifcxml',
-  'tessellated-beam-ifc4x3.ifc',
-  'timber-house-ifc4.ifc',
-  'wall-ifcxml.ifczip',
-];
+const MODELS = [...PUBLIC_STEP_MODELS, 'brep-lintels.ifczip', 'surface-member.ifcxml', 'wall-ifcxml.ifczip'];
 
 const folder = temporaryFolder();
 const resultChecker = checker('check_result.py');

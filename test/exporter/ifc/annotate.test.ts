@@ -6,7 +6,7 @@ import { afterAll, describe, expect, it } from 'vitest';
 import { joinChunks } from '../../../src/exporter/chunks.ts';
 import { annotate, clean } from '../../../src/exporter/ifc/annotate.ts';
 import { openStep } from '../../../src/step/step-file.ts';
-import { checker, publicModel } from '../../support/shared.ts';
+import { checker, PUBLIC_STEP_MODELS, publicModel } from '../../support/shared.ts';
 import { someResult } from '../support.ts';
 import { BEAM, COLUMN, model, PROJECT } from './models.ts';
 
@@ -195,28 +195,7 @@ describe('what is appended', () => {
   });
 });
 
-const MODELS = [
-  'analysis-view-house.ifc',
-  'analysis-view-portal-ifc4-inch.ifc',
-  'beam-standard-case-ifc4.ifc',
-  'bent-beam-ifc4x3.ifc',
-  'brep-beam.ifc',
-  'cardinal-points-ifc4x3.ifc',
-  'clipped-beam.ifc',
-  'fabrication-model.ifc',
-  'grid-placement-ifc4x3.ifc',
-  'gridshell-roof.ifc',
-  'large-id.ifc',
-  'large-offset.ifc',
-  'mapped-axis-beam.ifc',
-  'mirrored-profiles-inch.ifc',
-  'mixed-frame.ifc',
-  'newline-in-string.ifc',
-  'six-shapes.ifc',
-  'steel-frame.ifc',
-  'tessellated-beam-ifc4x3.ifc',
-  'timber-house-ifc4.ifc',
-].map((name) => ({ name, path: publicModel(name) }));
+const MODELS = PUBLIC_STEP_MODELS.map((name) => ({ name, path: publicModel(name) }));
 
 const TYPES = ['BEAM', 'BEAMSTANDARDCASE', 'COLUMN', 'MEMBER', 'STRUCTURALCURVEMEMBER', 'BUILDINGELEMENTPROXY'];
 const check = checker('check_ifc.py');
