@@ -12,6 +12,8 @@ import type { Member } from './domain/member.ts';
 import type { Result } from './domain/result.ts';
 import type { Truss } from './domain/truss.ts';
 import { assembleResult } from './exporter/assemble-result.ts';
+import { setTracesAside } from './exporter/ifc/own-traces.ts';
+import { signatureVoid } from './exporter/ifc/signature-void.ts';
 import { hasAnalysisView, readAnalysisModel } from './importer/analysis/read-analysis-model.ts';
 import { openModel } from './importer/files/open-model.ts';
 import type { Given } from './importer/given.ts';
@@ -52,6 +54,8 @@ export interface Run {
   /** The model, for writing the results back. */
   readonly file: StepFile;
   readonly elementCount: number;
+  /** Instances of an earlier run's results that were taken out of a file which another program has rewritten. */
+  readonly tracesRemoved: number;
   /** kg, of the bars between their nodes. */
   readonly mass: number;
   /** The members that were read, in scope or not. */
@@ -73,7 +77,8 @@ export async function runModel(bytes: Uint8Array, options: Partial<RunOptions> =
   const clock = stageClock(onStage);
 
   clock.enter('import');
-  const { file, findings: fileFindings } = await openModel(bytes);
+  const opened = await openModel(bytes);
+  const { file, removed } = setTracesAside(opened.file);
   const { imported, scope } = await readInScope(file, brief);
   const { members, findings: sectionFindings } = applySections(scope.members, brief.sections);
   const { given } = imported;
@@ -107,7 +112,8 @@ export async function runModel(bytes: Uint8Array, options: Partial<RunOptions> =
 
   const isCarried = solved.cases.length > 0 && solved.cases.every(({ refused }) => refused === null);
   const findings = [
-    ...fileFindings,
+    ...opened.findings,
+    ...signatureVoid(file),
     ...withoutSettled(imported.findings, members),
     ...scope.findings,
     ...sectionFindings,
@@ -141,6 +147,7 @@ export async function runModel(bytes: Uint8Array, options: Partial<RunOptions> =
     result,
     file,
     elementCount: imported.elementCount,
+    tracesRemoved: removed,
     mass: truss.bars.reduce((sum, bar) => sum + bar.massPerLength * bar.length, 0),
     kinds: memberKinds(imported.members, scope.members),
     topLevels: extent === 'survey' ? topLevels(truss) : [],

@@ -1,5 +1,5 @@
 import { CommanderError } from 'commander';
-import { EXIT, PinwrightError } from '../domain/errors.ts';
+import { EXIT, ModelError, PinwrightError } from '../domain/errors.ts';
 
 /** Says an error in one line on stderr and gives the exit code it stands for. */
 export function reportFailure(error: unknown): number {
@@ -14,6 +14,15 @@ export function reportFailure(error: unknown): number {
     `pinwright: a fault of our own: ${printable(what)}; set PINWRIGHT_DEBUG=1 for where, and please report it\n`,
   );
   return EXIT.ourFault;
+}
+
+/** What `work` gives; a fault of the model is told with its path, since the stages know bytes and the user knows files. */
+export async function namingModel<T>(path: string, work: () => Promise<T>): Promise<T> {
+  try {
+    return await work();
+  } catch (error) {
+    throw error instanceof ModelError ? new ModelError(`${path}: ${error.message}`) : error;
+  }
 }
 
 /** Text from files may hold terminal codes; lines stay, since a brief lists several problems. */

@@ -3,6 +3,7 @@ import { Command } from 'commander';
 import { CAUTION } from '../domain/caution.ts';
 import { EXIT } from '../domain/errors.ts';
 import { GENERATOR } from '../domain/generator.ts';
+import { cleanCommand, withCleanOptions } from './clean-command.ts';
 import { reportFailure } from './failure.ts';
 import { type RunFlags, runCommand, withRunOptions } from './run-command.ts';
 
@@ -39,6 +40,11 @@ withRunOptions(program.command('analyse'))
   .action(async (model: string, flags: RunFlags) => {
     exitCode = await runCommand(model, 'analyse', flags);
   });
+
+withCleanOptions(program.command('clean'))
+  .description('the model without what Pinwright has written into it')
+  .addHelpText('after', '\nExample:\n  pinwright clean roof-with-forces.ifc -o roof.ifc')
+  .action(cleanCommand);
 
 try {
   await program.parseAsync();

@@ -1,12 +1,13 @@
 import { basename } from 'node:path';
 import type { Command } from 'commander';
 import { DEFAULT_BRIEF } from '../brief/default-brief.ts';
-import { EXIT, ModelError } from '../domain/errors.ts';
+import { EXIT } from '../domain/errors.ts';
 import { contentOf } from '../exporter/content.ts';
 import { planOutputs } from '../exporter/outputs.ts';
 import { summarise } from '../exporter/summary.ts';
 import { writeOutputs } from '../exporter/write-outputs.ts';
 import { type Run, type RunOptions, runModel, type Stage } from '../pipeline.ts';
+import { namingModel } from './failure.ts';
 import { makeProgress } from './progress.ts';
 import { readBrief, readModelBytes } from './read-files.ts';
 
@@ -38,27 +39,20 @@ export async function runCommand(model: string, extent: RunOptions['extent'], fl
   const brief = flags.brief === undefined ? DEFAULT_BRIEF : readBrief(flags.brief);
   const bytes = readModelBytes(model);
   const progress = makeProgress(flags.quiet === true);
-  let run: Run;
-  try {
-    run = await runModel(bytes, {
-      fileName: basename(model),
-      extent,
-      brief,
-      onStage: (stage) => progress.stage(STAGE_WORDS[stage]),
-    });
-  } catch (error) {
-    throw named(error, model);
-  } finally {
-    progress.done();
-  }
+  const onStage = (stage: Stage) => progress.stage(STAGE_WORDS[stage]);
+  const run = await namingModel(model, () =>
+    runModel(bytes, { fileName: basename(model), extent, brief, onStage }),
+  ).finally(() => progress.done());
   const analysed = performance.now();
   await writeOutputs(plan, contentOf(run.result, run.file));
   if (flags.timings) reportTimings(run, (performance.now() - analysed) / 1000);
   if (!flags.quiet && !plan.stdout) {
-    const { elementCount, mass, coverage, topLevels } = run;
+    const { elementCount, tracesRemoved, mass, coverage, topLevels } = run;
     // Before there are loads the reader is still choosing what belongs to the truss.
     const kinds = extent === 'survey' ? run.kinds : [];
-    process.stdout.write(summarise(run.result, { extras: { elementCount, mass, coverage, kinds, topLevels } }));
+    process.stdout.write(
+      summarise(run.result, { extras: { elementCount, tracesRemoved, mass, coverage, kinds, topLevels } }),
+    );
     if (outputs.length > 0) process.stdout.write(`\nWritten: ${outputs.join(', ')}\n`);
   }
   return hasFaults(run) ? EXIT.faultsFound : EXIT.done;
@@ -72,11 +66,6 @@ const STAGE_WORDS: Readonly<Record<Stage, string>> = {
   checks: 'Checking bars',
   export: 'Writing',
 };
-
-/** The stages know bytes, not files; the user knows files. */
-function named(error: unknown, model: string): unknown {
-  return error instanceof ModelError ? new ModelError(`${model}: ${error.message}`) : error;
-}
 
 /** Whether an error stands or a force could not be found. */
 function hasFaults({ result }: Run): boolean {

@@ -13,7 +13,7 @@ import { count, verdict } from './verdict.ts';
 export function summarise(result: Result, options: Partial<SummaryOptions> = {}): string {
   const chosen = { ...SUMMARY_DEFAULTS, ...options };
   const paragraphs = [
-    [title(result)],
+    [title(result), ...edited(chosen)],
     readAndJoined(result, chosen),
     memberKinds(chosen),
     findings(result, chosen),
@@ -32,6 +32,17 @@ export function summarise(result: Result, options: Partial<SummaryOptions> = {})
 function title({ generator, model }: Result): string {
   const source = model.source === 'analysis' ? ', its structural analysis view' : '';
   return `Pinwright ${generator.version}: ${harmless(model.file)} (${model.schema}, ${model.lengthUnit}${source})`;
+}
+
+/** Results of ours whose comments are gone are taken out before anything is read, which changes the file. */
+function edited({ extras, width }: SummaryOptions): string[] {
+  const { tracesRemoved = 0 } = extras;
+  if (tracesRemoved === 0) return [];
+  const what = `Another program has rewritten this model; ${count(tracesRemoved, 'instance')} of earlier results in it`;
+  return wrapped(
+    `${what} ${tracesRemoved === 1 ? 'was' : 'were'} set aside. An annotated copy is an edit of it.`,
+    width,
+  );
 }
 
 function readAndJoined(result: Result, { extras, width }: SummaryOptions): string[] {

@@ -70,6 +70,12 @@ export function afterString(bytes: Uint8Array, at: number): number {
   return -1;
 }
 
+/** The offset after the line ending at `at`; `at` where there is none. */
+export function afterLineEnding(bytes: Uint8Array, at: number): number {
+  if (bytes[at] === CARRIAGE_RETURN) return bytes[at + 1] === LINE_FEED ? at + 2 : at + 1;
+  return bytes[at] === LINE_FEED ? at + 1 : at;
+}
+
 /**
  * ISO 10303-21 lets `\S\'` stand for U+00A7, so that an apostrophe there does not close its string. Exporters that do not double
  * their backslashes also end a path with `\S\'`; what follows decides: after a string only a comma or a bracket can.

@@ -4,8 +4,8 @@ import {
   APOSTROPHE,
   ASTERISK,
   afterComment,
+  afterLineEnding,
   afterString,
-  CARRIAGE_RETURN,
   CLOSE,
   DIGIT_0,
   EQUALS,
@@ -13,7 +13,6 @@ import {
   HASH,
   isDigit,
   isWordAt,
-  LINE_FEED,
   LineCounter,
   lineOf,
   OPEN,
@@ -273,11 +272,6 @@ export class DataScanner {
 
 function emptyIndex(expectedRows: number): IndexedInstances {
   return { table: new InstanceTable(expectedRows), keywords: new Keywords(), problems: new StepProblems() };
-}
-
-function afterLineEnding(bytes: Uint8Array, at: number): number {
-  if (bytes[at] === CARRIAGE_RETURN) return bytes[at + 1] === LINE_FEED ? at + 2 : at + 1;
-  return bytes[at] === LINE_FEED ? at + 1 : at;
 }
 
 /** The offset, not before `from`, of the `#` in `#12 =` whose equals sign stands at `equals`; -1 where there is none. */

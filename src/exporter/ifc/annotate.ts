@@ -6,9 +6,8 @@ import { enumeration } from '../../step/write.ts';
 import type { Chunks } from '../chunks.ts';
 import { Block } from './block.ts';
 import { findElements } from './element-index.ts';
-import { firstFreeId } from './free-ids.ts';
 import { elementForces, listedByKey } from './member-forces.ts';
-import { forbidForeignInBlock } from './own-block.ts';
+import { forbidForeignInBlock, forbidReferencesIntoBlock } from './own-block.ts';
 import { ownerHistory } from './owner-history.ts';
 import { type Common, writeSet } from './property-set.ts';
 import type { SetName, SetValues } from './set-definitions.ts';
@@ -18,22 +17,24 @@ import { writeTemplates } from './templates.ts';
 /**
  * The model with the result's property sets in it: its own bytes untouched, one block of new instances before the end of
  * its data, in the place of an earlier one. The same model and result give the same bytes, annotated before or not.
- * Throws a ModelError where something foreign stands in an earlier block.
+ * Throws a ModelError where something foreign stands in an earlier block, or refers into it.
  */
 export function annotate(file: StepFile, result: Result): Chunks {
   forbidForeignInBlock(file);
+  forbidReferencesIntoBlock(file);
   return withBlock(file, blockLines(file, result));
 }
 
 /** The model without our block: the bytes as they were before `annotate`. Throws as that does. */
 export function clean(file: StepFile): Chunks {
   forbidForeignInBlock(file);
+  forbidReferencesIntoBlock(file);
   return withoutBlock(file);
 }
 
 function* blockLines(file: StepFile, result: Result): Generator<string> {
   const elements = elementsConcerned(file, result);
-  const block = new Block(file, firstFreeId(file, mostInstances(elements.length)));
+  const block = new Block(file, mostInstances(elements.length));
   const project = projectOf(file);
   const owner = ownerHistory(file, project?.id ?? null, result.generator.version, block);
   const newton = block.add('IFCSIUNIT', DERIVED, enumeration('FORCEUNIT'), null, enumeration('NEWTON'));

@@ -1,21 +1,25 @@
 import type { StepFile } from '../../step/step-file.ts';
 import { InstanceWriter, integer, typed, type ValueToWrite } from '../../step/write.ts';
+import { firstFreeId } from './free-ids.ts';
 import { drawGlobalId } from './global-id.ts';
 import type { Measure } from './set-definitions.ts';
-import { usedGlobalIds } from './used-global-ids.ts';
+import { takenIn } from './taken.ts';
+import type { UsedGlobalIds } from './used-global-ids.ts';
 
 /** IfcLabel and IfcIdentifier end here (ISO 16739). */
 const LONGEST_LABEL = 255;
 
-/** Writes the instances of a block, with GlobalIds that the model does not have. */
+/** Writes the instances of a block, with numbers and GlobalIds that the model does not have. */
 export class Block extends InstanceWriter {
   readonly isIfc2x3: boolean;
-  private readonly used: ReadonlySet<string>;
+  private readonly used: UsedGlobalIds;
 
-  constructor(file: StepFile, firstId: number) {
-    super(firstId);
+  /** For at most so many instances. */
+  constructor(file: StepFile, mostInstances: number) {
+    const taken = takenIn(file);
+    super(firstFreeId(file, taken, mostInstances));
     this.isIfc2x3 = file.schema.startsWith('IFC2');
-    this.used = usedGlobalIds(file);
+    this.used = taken.globalIds;
   }
 
   /** The GlobalId for a role of something: drawn again, always the same way, while the model has it already. */

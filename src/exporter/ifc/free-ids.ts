@@ -1,13 +1,21 @@
 import { ModelError } from '../../domain/errors.ts';
 import type { StepFile } from '../../step/step-file.ts';
+import type { Taken } from './taken.ts';
 
 /** Many readers keep instance numbers in 32 bits with a sign. */
 const HIGHEST_ID = 2 ** 31 - 1;
 
-/** The first of `amount` numbers in a row that no instance has: above the highest, or in a gap where that would go too far. */
-export function firstFreeId(file: Pick<StepFile, 'maxId' | 'ids'>, amount: number): number {
-  if (file.maxId + amount <= HIGHEST_ID) return file.maxId + 1;
-  const ids = Float64Array.from(file.ids()).sort();
+/**
+ * The first of `amount` numbers in a row that nothing has or refers to: above the highest, or in a gap where that would
+ * go too far.
+ */
+export function firstFreeId(
+  file: Pick<StepFile, 'ids'>,
+  { highestId, dangling }: Pick<Taken, 'highestId' | 'dangling'>,
+  amount: number,
+): number {
+  if (highestId + amount <= HIGHEST_ID) return highestId + 1;
+  const ids = Float64Array.from([...file.ids(), ...dangling]).sort();
   let free = 1;
   for (const id of ids) {
     if (id - free >= amount) return free;

@@ -1,8 +1,9 @@
 import { ModelError } from '../../domain/errors.ts';
+import { walkReferences } from '../../step/reference-walk.ts';
 import type { StepFile } from '../../step/step-file.ts';
 
 /** Everything that a block of ours can hold. */
-const OWN_TYPES: ReadonlySet<string> = new Set([
+export const OWN_TYPES: ReadonlySet<string> = new Set([
   'IFCPERSON',
   'IFCORGANIZATION',
   'IFCPERSONANDORGANIZATION',
@@ -38,6 +39,24 @@ export function forbidForeignInBlock({ block }: StepFile): void {
       if (typeof name !== 'string' || !name.startsWith('Pinwright_')) refuse(id, type);
     }
   }
+}
+
+/**
+ * Throws a ModelError if something outside the block refers to what stands in it: without the block it would refer to
+ * nothing.
+ */
+export function forbidReferencesIntoBlock(file: StepFile): void {
+  const { block, bytes } = file;
+  if (block === null) return;
+  const reference = (id: number, to: number) => {
+    if (!block.instances.has(to) || file.has(to)) return;
+    throw new ModelError(
+      `#${id}, an ${file.typeOf(id)}, refers to #${to} among Pinwright's results, so they cannot be taken out or replaced; ` +
+        `remove #${id} or what it refers to there.`,
+    );
+  };
+  walkReferences(bytes, 0, block.begin, { reference });
+  walkReferences(bytes, block.end, bytes.length, { reference });
 }
 
 function refuse(id: number, type: string): never {

@@ -4,6 +4,8 @@ import type { MemberKind } from '../../brief/member-kinds.ts';
 export interface SummaryExtras {
   /** Elements of the classes asked for, whether or not they could be read. */
   readonly elementCount?: number;
+  /** Instances of earlier results taken out of a file that another program has rewritten. */
+  readonly tracesRemoved?: number;
   /** kg, of the bars between their nodes. */
   readonly mass?: number;
   /** Members that were read, by what a scope would name. */

@@ -86,6 +86,12 @@ describe('what is appended', () => {
     expect(Math.min(...ids)).toBeGreaterThan(10);
   });
 
+  it('does not take a number that a dangling reference of the model names, which would then point at us', () => {
+    const dangling = model('IFC4').replace('#13=', "#14=IFCRELASSOCIATES('x',$,$,$,(#10,#77));\n#13=");
+    const ids = [...annotated(dangling).matchAll(/^#(\d+)=IFCPROPERTY/gm)].map((match) => Number(match[1]));
+    expect(Math.min(...ids)).toBeGreaterThan(77);
+  });
+
   it('draws another GlobalId, always the same, where the model has one already', () => {
     const before = model('IFC4');
     const first = /IFCPROPERTYSET\('([^']{22})',\$,'Pinwright_Forces'/.exec(annotated(before))![1];
