@@ -48,6 +48,31 @@ export function buildRows(
   return { count, start, unknown: Int32Array.from(unknown), value: Float64Array.from(value) };
 }
 
+/** The rows of `first`, then those of `second`. */
+export function joinRows(first: SparseRows, second: SparseRows): SparseRows {
+  const shift = first.unknown.length;
+  const start = new Int32Array(first.count + second.count + 1);
+  start.set(first.start);
+  for (let row = 0; row < second.count; row++) start[first.count + row + 1] = shift + second.start[row + 1];
+  return {
+    count: first.count + second.count,
+    start,
+    unknown: joinNumbers(first.unknown, second.unknown),
+    value: joinNumbers(first.value, second.value),
+  };
+}
+
+/** One typed array after the other. */
+export function joinNumbers<T extends Int32Array | Float64Array>(first: T, second: T): T {
+  const out =
+    first instanceof Int32Array
+      ? new Int32Array(first.length + second.length)
+      : new Float64Array(first.length + second.length);
+  out.set(first);
+  out.set(second, first.length);
+  return out as T;
+}
+
 /** The value of every row at `q`: elongations, where rows are bars. */
 export function multiplyRows(rows: SparseRows, q: Float64Array): Float64Array {
   const out = new Float64Array(rows.count);
