@@ -11,17 +11,15 @@ export interface Graph {
 export function coupleBlocks(freedoms: Freedoms, rows: SparseRows): Graph {
   const { blocks, stride } = freedoms;
   const ends: number[] = [];
+  const touched: number[] = [];
   for (let row = 0; row < rows.count; row++) {
-    const from = rows.start[row];
-    const to = rows.start[row + 1];
-    for (let p = from; p < to; p++) {
-      const a = Math.floor(rows.unknown[p] / stride);
-      if (p > from && a === Math.floor(rows.unknown[p - 1] / stride)) continue;
-      for (let q = p + 1; q < to; q++) {
-        const b = Math.floor(rows.unknown[q] / stride);
-        if (b !== a && b !== Math.floor(rows.unknown[q - 1] / stride)) ends.push(a, b);
-      }
+    touched.length = 0;
+    for (let p = rows.start[row]; p < rows.start[row + 1]; p++) {
+      const block = Math.floor(rows.unknown[p] / stride);
+      if (!touched.includes(block)) touched.push(block);
     }
+    for (let i = 0; i < touched.length; i++)
+      for (let j = i + 1; j < touched.length; j++) ends.push(touched[i], touched[j]);
   }
   return graphOf(blocks, ends);
 }
@@ -29,8 +27,8 @@ export function coupleBlocks(freedoms: Freedoms, rows: SparseRows): Graph {
 /** `ends` lists the two ends of every edge; repeats are merged. */
 export function graphOf(count: number, ends: readonly number[]): Graph {
   const start = new Int32Array(count + 1);
-  for (const end of ends) start[end + 1] = start[end + 1] + 1;
-  for (let i = 0; i < count; i++) start[i + 1] = start[i + 1] + start[i];
+  for (let e = 0; e < ends.length; e++) start[ends[e] + 1]++;
+  for (let i = 0; i < count; i++) start[i + 1] += start[i];
   const next = start.slice();
   const filled = new Int32Array(ends.length);
   for (let e = 0; e < ends.length; e += 2) {

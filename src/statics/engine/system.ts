@@ -31,17 +31,19 @@ export function buildRows(
   const start = new Int32Array(count + 1);
   const unknown: number[] = [];
   const value: number[] = [];
-  const place = new Map<number, number>();
+  let from = 0;
   const put = (u: number, v: number) => {
-    const at = place.get(u);
-    if (at === undefined) {
-      place.set(u, unknown.length);
-      unknown.push(u);
-      value.push(v);
-    } else value[at] = value[at] + v;
+    // Rows are short: looking through one is quicker than any map.
+    for (let at = from; at < unknown.length; at++) {
+      if (unknown[at] !== u) continue;
+      value[at] = value[at] + v;
+      return;
+    }
+    unknown.push(u);
+    value.push(v);
   };
   for (let row = 0; row < count; row++) {
-    place.clear();
+    from = unknown.length;
     fill(row, put);
     start[row + 1] = unknown.length;
   }
