@@ -1,6 +1,8 @@
 import { createHash } from 'node:crypto';
 import { DEFAULT_BRIEF } from './brief/default-brief.ts';
+import { jointLimits } from './brief/joint-limits.ts';
 import { type MemberKind, memberKinds } from './brief/member-kinds.ts';
+import { namedPlaces } from './brief/named-places.ts';
 import { applyScope } from './brief/scope.ts';
 import { applySections, withoutSettled } from './brief/sections.ts';
 import { type TopLevel, topLevels } from './brief/selectors/top-levels.ts';
@@ -19,6 +21,9 @@ import { openModel } from './importer/files/open-model.ts';
 import type { Given } from './importer/given.ts';
 import { importModel } from './importer/import-model.ts';
 import type { ImportedModel } from './importer/types.ts';
+import { bendingBetweenNodes } from './statics/bending/between-nodes.ts';
+import { eccentricityMoments } from './statics/bending/eccentricity-moments.ts';
+import { bendingFindings, withMoments } from './statics/bending/findings.ts';
 import { type BuiltCases, buildCases, type Coverage } from './statics/loads/build-cases.ts';
 import { buildGivenCases } from './statics/loads/given-cases.ts';
 import { combine } from './statics/solution/combine.ts';
@@ -29,7 +34,7 @@ import type { Supports } from './statics/types.ts';
 import { withoutBlock } from './step/splice.ts';
 import type { StepFile } from './step/step-file.ts';
 import { joinMembers } from './topology/join-members.ts';
-import type { JoinOptions } from './topology/options.ts';
+import { type JoinOptions, valueFor } from './topology/options.ts';
 
 export interface RunOptions {
   /** The model's name in outputs; no path. */
@@ -88,11 +93,18 @@ export async function runModel(bytes: Uint8Array, options: Partial<RunOptions> =
     given === null || brief.supports.length > 0
       ? resolveSupports(truss, members, brief)
       : resolveGivenSupports(truss, given.supports);
-  const joined = joinMembers(given === null ? members : members.map(asLine), joinOptions(brief, given !== null), {
-    placeOf: imported.placeOf,
-    evidence: imported.evidence,
-    supportedNodes: (truss) => nodesOf(supportsOf(truss).supports),
-  });
+  const { findings: limitFindings, ...limits } = jointLimits(members, brief.joints);
+  const joining = { ...brief.joints, ...limits, chords: brief.chords };
+  const joined = joinMembers(
+    given === null ? members : members.map(asLine),
+    given === null ? joining : joiningOfView(joining, members.length),
+    {
+      placeOf: imported.placeOf,
+      evidence: imported.evidence,
+      supportedNodes: (truss) => nodesOf(supportsOf(truss).supports),
+      namedPlaces: namedPlaces(brief, given),
+    },
+  );
   const { truss } = joined;
   const { supports, findings: supportFindings } = supportsOf(truss);
 
@@ -110,6 +122,9 @@ export async function runModel(bytes: Uint8Array, options: Partial<RunOptions> =
     extent === 'analyse' ? combine(solved.cases, usesGivenCases ? given.combinations : brief.combinations) : [];
   const forces = envelope(truss, solved.cases, combinations);
 
+  const eccentricities = eccentricityMoments(truss, solved.cases, combinations);
+  const bending = bendingBetweenNodes(truss, solved.cases, combinations);
+
   const isCarried = solved.cases.length > 0 && solved.cases.every(({ refused }) => refused === null);
   const findings = [
     ...opened.findings,
@@ -117,13 +132,15 @@ export async function runModel(bytes: Uint8Array, options: Partial<RunOptions> =
     ...withoutSettled(imported.findings, members),
     ...scope.findings,
     ...sectionFindings,
-    ...joined.findings,
+    ...limitFindings,
+    ...withMoments(joined.findings, eccentricities),
     ...(members.length > 0 ? supportFindings : []),
     ...unusedCases(given, brief, extent),
     ...supportFinding(supports, extent, members.length),
     ...stability.findings.map((found) => withSeverity(found, isCarried)),
     ...loaded.findings,
     ...solved.findings,
+    ...bendingFindings(bending, truss, members),
   ];
   const result = assembleResult({
     generator: GENERATOR,
@@ -142,6 +159,9 @@ export async function runModel(bytes: Uint8Array, options: Partial<RunOptions> =
     cases: solved.cases,
     combinations,
     envelope: forces,
+    limits: given === null ? joined.limits : null,
+    eccentricities,
+    bending,
   });
   return {
     result,
@@ -201,16 +221,10 @@ function classesNamed(brief: Brief): string[] {
 /** m; members of an analysis view meet in shared points, which are written with fewer digits than they have. */
 const SHARED_POINT = 1e-3;
 
-function joinOptions({ joints, chords }: Brief, isAnalysisView: boolean): Partial<JoinOptions> {
-  if (!isAnalysisView) return { ...joints, chords };
-  return {
-    reach: joints.reach ?? SHARED_POINT,
-    offset: joints.offset ?? SHARED_POINT,
-    crossings: joints.crossings,
-    seated: 'apart',
-    pairs: 'apart',
-    chords,
-  };
+function joiningOfView(asked: JoinOptions, count: number): JoinOptions {
+  const orShared = (limit: JoinOptions['reach']) =>
+    Array.from({ length: count }, (_, member) => valueFor(limit, member) ?? SHARED_POINT);
+  return { ...asked, reach: orShared(asked.reach), offset: orShared(asked.offset), seated: 'apart', pairs: 'apart' };
 }
 
 /** In an analysis view the depth of a section says nothing of how near two joints may be. */

@@ -1,6 +1,15 @@
 import { DEFAULT_BRIEF } from './default-brief.ts';
 import type { WrittenBrief } from './schema.ts';
-import type { Brief, CaseRule, CombinationRule, LoadRule, MemberSelector, NodeSelector, SupportRule } from './types.ts';
+import type {
+  Brief,
+  CaseRule,
+  CombinationRule,
+  LengthRule,
+  LoadRule,
+  MemberSelector,
+  NodeSelector,
+  SupportRule,
+} from './types.ts';
 import type { WrittenMemberSelector, WrittenNodeSelector } from './written-selectors.ts';
 import type { Path } from './written-source.ts';
 
@@ -20,7 +29,14 @@ export function normaliseBrief(written: WrittenBrief, lineAt: LineAt): Brief {
       include: toMemberSelectors(scope?.include ?? [], ['scope', 'include'], lineAt),
       exclude: toMemberSelectors(scope?.exclude ?? [], ['scope', 'exclude'], lineAt),
     },
-    joints: { ...DEFAULT_BRIEF.joints, ...withoutUndefined(joints ?? {}) },
+    joints: {
+      ...DEFAULT_BRIEF.joints,
+      ...withoutUndefined({
+        ...joints,
+        reach: toLengths(joints?.reach, ['joints', 'reach'], lineAt),
+        offset: toLengths(joints?.offset, ['joints', 'offset'], lineAt),
+      }),
+    },
     chords: written.chords ?? DEFAULT_BRIEF.chords,
     supports: (written.supports ?? []).map((rule, i) => toSupport(rule, ['supports', i], lineAt)),
     materials: { default: materials?.default ?? DEFAULT_BRIEF.materials.default },
@@ -32,6 +48,17 @@ export function normaliseBrief(written: WrittenBrief, lineAt: LineAt): Brief {
     cases: (written.cases ?? []).map((rule, i) => toCase(rule, ['cases', i], lineAt)),
     combinations: toCombinations(written.combinations ?? 'none', lineAt),
   };
+}
+
+type WrittenLengths = NonNullable<WrittenBrief['joints']>['reach'];
+
+function toLengths(written: WrittenLengths, path: Path, lineAt: LineAt): number | LengthRule[] | undefined {
+  if (written === undefined || typeof written === 'number') return written;
+  return written.map(({ on, use }, i) => ({
+    line: lineAt([...path, i]),
+    on: toMemberSelectors(on, [...path, i, 'on'], lineAt),
+    use,
+  }));
 }
 
 function toSupport(written: WrittenSupport, path: Path, lineAt: LineAt): SupportRule {

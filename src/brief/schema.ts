@@ -107,6 +107,13 @@ const sectionDesignation = text
   })
   .describe('a designation, such as "HEA 200", "CHS 88.9x4" or "W12X26"');
 
+/** One length for every member, or one each for those that selectors catch. */
+const lengthByMember = z
+  .union([positive('length'), z.array(z.strictObject({ on: members, use: positive('length') })).min(1)], {
+    error: 'a length, or a list of {on: ..., use: length}, is due',
+  })
+  .describe('a length, or a list of {on, use}; of several rules on a member the last counts, of no rule the sections');
+
 /** A list that may stand in a brief and may not catch anything in this version. */
 const nothingYet = z
   .array(z.unknown())
@@ -125,8 +132,8 @@ export const briefInputSchema = z.strictObject({
     .optional(),
   joints: z
     .strictObject({
-      reach: positive('length').optional(),
-      offset: positive('length').optional(),
+      reach: lengthByMember.optional(),
+      offset: lengthByMember.optional(),
       crossings: z.enum(['apart', 'joined']).optional(),
       seated: z.enum(['node', 'apart']).optional(),
       pairs: z.enum(['one', 'apart']).optional(),

@@ -9,9 +9,9 @@ export interface Brief {
   readonly axes: 'given' | 'centroid';
   readonly scope: { readonly include: readonly MemberSelector[]; readonly exclude: readonly MemberSelector[] };
   readonly joints: {
-    /** m; null where the sections decide. */
-    readonly reach: number | null;
-    readonly offset: number | null;
+    /** m, for all members or by rules; null where the sections decide. */
+    readonly reach: number | null | readonly LengthRule[];
+    readonly offset: number | null | readonly LengthRule[];
     readonly crossings: 'apart' | 'joined';
     readonly seated: 'node' | 'apart';
     readonly pairs: 'one' | 'apart';
@@ -70,6 +70,13 @@ export interface NodeSelector {
   /** Such a member meets the node, wherever along it. */
   readonly joins?: readonly MemberSelector[];
   readonly not?: NodeSelector;
+}
+
+/** A length, m, for the members it is given to; of several rules on one member the last counts. */
+export interface LengthRule {
+  readonly line: number;
+  readonly on: readonly MemberSelector[];
+  readonly use: number;
 }
 
 /** The section that members have, whatever the model says. */

@@ -62,6 +62,12 @@ const nodeSchema = z.strictObject({
   fixed: text.describe('letters of the rigidly held directions; "" for a free node'),
   place: textOrNull,
   carriedBy: z.strictObject({ bar: text, t: z.number() }).nullable(),
+  joinedBy: z
+    .array(text)
+    .optional()
+    .describe(
+      'why its members are one joint: nearness where all would be joined by it alone, seat, and evidence such as "plate GP-12"',
+    ),
 });
 
 const barSchema = z.strictObject({
@@ -155,6 +161,27 @@ const checkSchema = z.strictObject({
   assumptions: z.array(text),
 });
 
+const limitSchema = z.strictObject({
+  set: z.array(z.strictObject({ value: z.number().describe('m'), members: z.number().int() })).describe('by the brief'),
+  bySections: z
+    .tuple([z.number(), z.number()])
+    .nullable()
+    .describe('m, least and greatest that the sections of members that met gave'),
+});
+
+const joiningSchema = z
+  .strictObject({ reach: limitSchema, offset: limitSchema })
+  .describe('how far axes were allowed to be carried; evidence widens it for the pair concerned');
+
+const eccentricitySchema = z.strictObject({
+  node: text,
+  of: z.enum(['braces', 'seat']),
+  member: text.describe('GlobalId of the one that is bent: the chord, or the member that sits'),
+  e: z.number().describe("m, as drawn; of braces positive beyond the chord's axis"),
+  moment: z.number().nullable().describe('Nm, greatest dN e; null without forces'),
+  from: textOrNull,
+});
+
 export const resultSchema = z.strictObject({
   format: z.literal('pinwright-result'),
   version: z.literal(1),
@@ -177,6 +204,12 @@ export const resultSchema = z.strictObject({
   combinations: z.array(combinationSchema),
   envelope: z.array(z.strictObject({ bar: text, tension: extreme, compression: extreme })),
   checks: z.array(checkSchema),
+  joining: joiningSchema.optional(),
+  eccentricities: z.array(eccentricitySchema).optional(),
+  bending: z
+    .array(z.strictObject({ bar: text, node: text, moment: z.number().describe('Nm'), from: text }))
+    .optional()
+    .describe('greatest moment that the nodes a bar carries cause in it; not checked'),
 });
 
 export type Result = z.infer<typeof resultSchema>;

@@ -6,6 +6,27 @@ export interface Carriage {
   readonly t: number;
 }
 
+/** Axes that miss their node as drawn: what they hand over there bends a member. */
+export interface Eccentricity {
+  /** `braces`: they meet off the chord's axis; `seat`: a member sits on another. */
+  readonly of: 'braces' | 'seat';
+  /** The member that is bent: the chord, or the one that sits. */
+  readonly member: number;
+  /** The braces, none for a seat. */
+  readonly others: readonly number[];
+  /** m; of braces positive beyond the chord's axis, negative where they meet before it. */
+  readonly e: number;
+  /** e as a share of the chord's depth in the plane of the braces; null for a seat. */
+  readonly share: number | null;
+}
+
+/** How the members at a node came together. */
+export interface Joining {
+  /** "nearness" where the axes come near enough by themselves; "seat"; and the evidence for it: "plate GP-12", "assembly T1". */
+  readonly by: readonly string[];
+  readonly eccentricities: readonly Eccentricity[];
+}
+
 export interface TrussNode {
   readonly at: Vec3;
   /** Indices into the members the truss was made of. */
@@ -13,6 +34,8 @@ export interface TrussNode {
   readonly carriedBy: Carriage | null;
   /** kg of overhangs that were cut off here: they carry no force but weigh. */
   readonly overhangMass: number;
+  /** Absent where members were not joined here: at a free end, or where the truss was not made of members. */
+  readonly joining?: Joining;
   readonly place: string | null;
 }
 

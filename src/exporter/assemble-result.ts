@@ -4,6 +4,8 @@ import type { Member } from '../domain/member.ts';
 import type { Result } from '../domain/result.ts';
 import type { Truss } from '../domain/truss.ts';
 import type { Vec3 } from '../domain/vector.ts';
+import type { BarBending } from '../statics/bending/between-nodes.ts';
+import type { EccentricityMoment } from '../statics/bending/eccentricity-moments.ts';
 import type {
   BarEnvelope,
   ExtremeForce,
@@ -14,6 +16,7 @@ import type {
   Stability,
   Supports,
 } from '../statics/types.ts';
+import type { JoinLimits } from '../topology/limits.ts';
 
 /** Everything a run found, by index; the result says the same by name. */
 export interface RunRecord {
@@ -27,6 +30,10 @@ export interface RunRecord {
   readonly cases: readonly SolvedCase[];
   readonly combinations: readonly SolvedCombination[];
   readonly envelope: readonly BarEnvelope[];
+  /** Null where the model's own view says which points are shared. */
+  readonly limits: JoinLimits | null;
+  readonly eccentricities: readonly EccentricityMoment[];
+  readonly bending: readonly BarBending[];
 }
 
 const MODES_LISTED = 100;
@@ -54,6 +61,7 @@ export function assembleResult(run: RunRecord): Result {
       fixed: fixed.get(index) ?? '',
       place: node.place,
       carriedBy: node.carriedBy && { bar: barId(node.carriedBy.bar), t: node.carriedBy.t },
+      ...(node.joining === undefined ? {} : { joinedBy: [...node.joining.by] }),
     })),
     bars: truss.bars.map((bar, index) => resultBar(bar, index, members)),
     findings: run.findings.map((finding) => ({
@@ -71,7 +79,25 @@ export function assembleResult(run: RunRecord): Result {
       compression: extreme(compression),
     })),
     checks: [],
+    ...(run.limits === null ? {} : { joining: resultLimits(run.limits) }),
+    eccentricities: run.eccentricities.map(({ node, eccentricity: { of, member, e }, moment, from }) => ({
+      node: nodeId(node),
+      of,
+      member: members[member].globalId,
+      e,
+      moment,
+      from,
+    })),
+    bending: run.bending.map(({ bar, node, ...rest }) => ({ bar: barId(bar), node: nodeId(node), ...rest })),
   };
+}
+
+function resultLimits({ reach, offset }: JoinLimits): NonNullable<Result['joining']> {
+  const limit = ({ set, bySections }: JoinLimits['reach']): NonNullable<Result['joining']>['reach'] => ({
+    set: set.map((one) => ({ ...one })),
+    bySections: bySections && [bySections[0], bySections[1]],
+  });
+  return { reach: limit(reach), offset: limit(offset) };
 }
 
 /** A finding of statics names nodes; the reader of the model knows members. */

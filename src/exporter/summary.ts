@@ -3,6 +3,7 @@ import { millimetres } from '../domain/words.ts';
 import { worstBars } from './summary/bars.ts';
 import { loadCases } from './summary/cases.ts';
 import { findings } from './summary/findings.ts';
+import { joinedBy } from './summary/joined.ts';
 import { memberKinds } from './summary/kinds.ts';
 import { degrees, harmless, wrapped } from './summary/layout.ts';
 import { SUMMARY_DEFAULTS, type SummaryOptions } from './summary/options.ts';
@@ -69,6 +70,7 @@ function readAndJoined(result: Result, { extras, width }: SummaryOptions): strin
     ),
   );
   lines.push(...wrapped(faith(members), width, '         '));
+  for (const words of joinedBy(result)) lines.push(...wrapped(harmless(words), width, '         '));
   if (topLevels.length > 0) lines.push(...wrapped(topWords(topLevels), width, '         '));
   return lines;
 }

@@ -1,6 +1,7 @@
 import type { Member, SectionShape } from '../domain/member.ts';
 import { cross, dot, norm, scale, subtract, unit, type Vec3 } from '../domain/vector.ts';
-import { TOLERANCE } from './options.ts';
+import type { Assembly } from '../importer/evidence/types.ts';
+import { type JoinOptions, TOLERANCE, valueFor } from './options.ts';
 
 /** A member's axis made ready for joining. */
 export interface Axis {
@@ -15,16 +16,24 @@ export interface Axis {
   readonly length: number;
   /** The greater extent of the section. */
   readonly depth: number;
-  readonly assembly: string | null;
+  /** Of which it is part; two of one name are two. */
+  readonly assembly: Assembly | null;
   readonly sectionName: string | null;
   /** Half the section's extent in a unit direction. */
   readonly halfExtent: (direction: Vec3) => number;
   /** How far the centroid may lie from the middle of the section, as a share of the half extent. */
   readonly lean: number;
+  /** m, as the brief sets them for this member; null where the sections decide. */
+  readonly reach: number | null;
+  readonly offset: number | null;
 }
 
 /** The axes of all members that have a length, in the members' order; null for the others. */
-export function makeAxes(members: readonly Member[]): (Axis | null)[] {
+export function makeAxes(
+  members: readonly Member[],
+  { reach, offset }: Pick<JoinOptions, 'reach' | 'offset'> = { reach: null, offset: null },
+  assemblies: ReadonlyMap<string, Assembly> | null = null,
+): (Axis | null)[] {
   return members.map((member, index) => {
     const [start, finish] = member.axis;
     const line = subtract(finish, start);
@@ -39,12 +48,19 @@ export function makeAxes(members: readonly Member[]): (Axis | null)[] {
       direction,
       length,
       depth: member.section ? Math.max(member.section.depth, member.section.width) : TOLERANCE.unknownDepth,
-      assembly: member.partOf === 'IfcElementAssembly' ? member.assembly : null,
+      assembly: assemblies?.get(member.globalId) ?? assemblyByName(member),
       sectionName: member.section?.name ?? null,
       halfExtent: halfExtentOf(member, direction),
       lean: LEANING.has(member.section?.shape ?? 'other') ? 0.5 : 0,
+      reach: valueFor(reach, index),
+      offset: valueFor(offset, index),
     };
   });
+}
+
+/** Without the file's own word, what bears one name is taken for one assembly. */
+function assemblyByName({ partOf, assembly }: Member): Assembly | null {
+  return partOf === 'IfcElementAssembly' && assembly !== null ? { globalId: assembly, name: assembly } : null;
 }
 
 /** Sections whose centroid lies off their middle: an equal angle's at 0.28 of its leg, a tee's at about 0.25 of its depth. */

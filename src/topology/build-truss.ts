@@ -1,13 +1,13 @@
 import type { Member } from '../domain/member.ts';
 import type { PlaceNamer } from '../domain/place.ts';
-import type { Truss, TrussBar, TrussNode } from '../domain/truss.ts';
+import type { Joining, Truss, TrussBar, TrussNode } from '../domain/truss.ts';
 import { between, distance, dot, subtract, type Vec3 } from '../domain/vector.ts';
 import type { Axis } from './axes.ts';
 import { nameBars } from './bar-names.ts';
 import { barProperties, membersOfPiece } from './bar-properties.ts';
 import { faithOf } from './faith.ts';
 import { endsOf, type PieceRun } from './pieces.ts';
-import type { VertexGraph } from './vertices.ts';
+import { isFreeEnd, type Vertex, type VertexGraph } from './vertices.ts';
 
 /** Makes nodes and bars of the runs, ordered and named by geometry so that the file's order does not matter. */
 export function buildTruss(
@@ -16,6 +16,7 @@ export function buildTruss(
   members: readonly Member[],
   axes: readonly (Axis | null)[],
   placeOf: PlaceNamer,
+  joiningOf: (vertex: Vertex) => Joining,
 ): Truss {
   const carriedIn = new Map<number, number>();
   runs.forEach((run, index) => {
@@ -70,8 +71,10 @@ export function buildTruss(
     const at = positionOf(vertex);
     const run = carriedIn.get(vertex);
     const carriedBy = run === undefined ? null : { bar: barOfRun.get(run) as number, t: alongBar(vertex, run) };
-    const met = graph.vertices[vertex].stations.flatMap(({ member }) => membersOfPiece(axes, member));
-    return { at, members: met.sort((p, q) => p - q), carriedBy, overhangMass: 0, place: placeOf(at) };
+    const joint = graph.vertices[vertex];
+    const met = joint.stations.flatMap(({ member }) => membersOfPiece(axes, member)).sort((p, q) => p - q);
+    const joining = isFreeEnd(joint) ? {} : { joining: joiningOf(joint) };
+    return { at, members: met, carriedBy, overhangMass: 0, place: placeOf(at), ...joining };
   }
 
   function alongBar(vertex: number, run: number): number {

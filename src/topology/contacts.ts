@@ -17,6 +17,13 @@ export interface Contact {
   readonly kind: 'meets' | 'seat' | 'crossing';
   /** m by which the two axes have to be carried. */
   readonly cost: number;
+  /** What was accepted, m: how far the ends that come here may be carried (null where none does), and how far the axes may pass. */
+  readonly reach: number | null;
+  readonly offset: number;
+  /** Evidence that the two are joined ("plate GP-12", "assembly T1"). */
+  readonly by: readonly string[];
+  /** Whether the axes come near enough by themselves, without the evidence. */
+  readonly isNear: boolean;
 }
 
 /** A contact with how near its limits it is: at most 1 is accepted. */
@@ -34,27 +41,33 @@ export function findContacts(
   const present = axes.filter((axis) => axis !== null);
   const boxes = new Float64Array(6 * present.length);
   present.forEach((axis, i) => {
-    boxes.set(boxAround(axis, largestReach(axis, options)), 6 * i);
+    boxes.set(boxAround(axis, largestReach(axis)), 6 * i);
   });
   const index = indexBoxes(boxes);
   const contacts: Contact[] = [];
   present.forEach((axis, i) => {
     searchBoxes(index, boxes.subarray(6 * i, 6 * i + 6), (j) => {
       if (j <= i) return;
-      if (!evidence.has(pairKey(axis.member, present[j].member, axes.length))) accept(axis, present[j], 1);
+      if (!evidence.has(pairKey(axis.member, present[j].member, axes.length))) accept(axis, present[j], NO_WORDS);
     });
   });
-  for (const key of evidence.keys()) {
+  for (const [key, words] of evidence) {
     const [a, b] = [axes[Math.floor(key / axes.length)], axes[key % axes.length]];
-    if (a !== null && b !== null) accept(a, b, TOLERANCE.withEvidence);
+    if (a !== null && b !== null) accept(a, b, words);
   }
   return contacts.sort((p, q) => p.a - q.a || p.b - q.b);
 
-  function accept(a: Axis, b: Axis, widening: number): void {
+  function accept(a: Axis, b: Axis, words: readonly string[]): void {
+    const widening = words.length === 0 ? wideningFor(a, b) : TOLERANCE.withEvidence;
     const judged = judgePair(a, b, options, widening);
-    if (judged !== null && judged.ratio <= 1) contacts.push(judged.contact);
+    if (judged === null || judged.ratio > 1) return;
+    const by = inOneAssembly(a, b) ? [...words, `assembly ${a.assembly?.name ?? a.assembly?.globalId}`] : words;
+    if (by.length === 0) contacts.push(judged.contact);
+    else contacts.push({ ...judged.contact, by, isNear: (judgePair(a, b, options, 1)?.ratio ?? 2) <= 1 });
   }
 }
+
+const NO_WORDS: readonly string[] = [];
 
 /** The box of an axis, widened on all sides. */
 export function boxAround(axis: Axis, margin: number): number[] {
@@ -67,31 +80,36 @@ export function boxAround(axis: Axis, margin: number): number[] {
  * No pair accepts a miss greater than the sum of its two axes' largest reaches: the one's notch and the other's half
  * extent (at most half the diagonal of a square section) over the least sine.
  */
-export function largestReach(axis: Axis, options: JoinOptions): number {
+export function largestReach(axis: Axis): number {
   const halfExtent = axis.depth * Math.SQRT1_2;
   const bySections = Math.max(halfExtent / TOLERANCE.leastSine, TOLERANCE.detailingGap, axis.depth);
-  return Math.max(TOLERANCE.sameAssembly * bySections + TOLERANCE.seatPacking, options.reach ?? 0, options.offset ?? 0);
+  const bySection = TOLERANCE.sameAssembly * bySections + TOLERANCE.seatPacking;
+  return Math.max(bySection, (axis.reach ?? 0) * TOLERANCE.sameAssembly, (axis.offset ?? 0) * TOLERANCE.sameAssembly);
 }
 
-/** How two axes come together, if they do at all. Reach and offset are multiplied by `widening`. */
-export function judgePair(a: Axis, b: Axis, options: JoinOptions, widening = 1): JudgedContact | null {
+/**
+ * How two axes come together, if they do at all. Reach and offset, from the brief or the sections, are multiplied by
+ * `widening`.
+ */
+export function judgePair(a: Axis, b: Axis, options: JoinOptions, widening = wideningFor(a, b)): JudgedContact | null {
   const sine = sineBetween(a, b);
-  const wide = Math.max(widening, wideningFor(a, b));
-  return sine < TOLERANCE.parallelSine ? judgeParallel(a, b, options, wide) : judgeSkew(a, b, sine, options, wide);
+  return sine < TOLERANCE.parallelSine ? judgeParallel(a, b, widening) : judgeSkew(a, b, sine, options, widening);
 }
 
 function judgeSkew(a: Axis, b: Axis, sine: number, options: JoinOptions, widening: number): JudgedContact | null {
   const { s, t, distance, normal } = approach(a, b);
   const [acrossB, acrossA] = [approachDirection(a, b), approachDirection(b, a)];
   const cosine = Math.abs(dot(a.direction, b.direction));
-  const reachA = (options.reach ?? reachOf(a, b.halfExtent(acrossB) + a.halfExtent(acrossA) * cosine, sine)) * widening;
-  const reachB = (options.reach ?? reachOf(b, a.halfExtent(acrossA) + b.halfExtent(acrossB) * cosine, sine)) * widening;
+  const reachA = (a.reach ?? reachOf(a, b.halfExtent(acrossB) + a.halfExtent(acrossA) * cosine, sine)) * widening;
+  const reachB = (b.reach ?? reachOf(b, a.halfExtent(acrossA) + b.halfExtent(acrossB) * cosine, sine)) * widening;
   const extensionA = beyondEnds(s, a);
   const extensionB = beyondEnds(t, b);
   const lengthwise = Math.max(extensionA / reachA, extensionB / reachB);
-  const bothRunThrough = isInside(s, a, reachA) && isInside(t, b, reachB);
+  const [runsThroughA, runsThroughB] = [isInside(s, a, reachA), isInside(t, b, reachB)];
+  const bothRunThrough = runsThroughA && runsThroughB;
+  const reach = bothRunThrough ? null : Math.max(runsThroughA ? 0 : reachA, runsThroughB ? 0 : reachB);
 
-  const offset = (options.offset ?? offsetOf(a, b)) * widening;
+  const offset = (setOffset(a, b) ?? offsetOf(a, b)) * widening;
   const seatHeight = normal === null ? 0 : a.halfExtent(normal) + b.halfExtent(normal);
   const lean = normal === null ? 0 : a.lean * a.halfExtent(normal) + b.lean * b.halfExtent(normal);
   const seatGap = Math.max(0, Math.abs(distance - seatHeight) - lean);
@@ -102,11 +120,26 @@ function judgeSkew(a: Axis, b: Axis, sine: number, options: JoinOptions, widenin
   const kind = sits ? 'seat' : bothRunThrough ? 'crossing' : 'meets';
   const cost = extensionA + extensionB + (sits ? seatGap : distance);
   const point = between(along(a.start, a.direction, s), along(b.start, b.direction, t), 0.5);
-  return { contact: { a: a.member, b: b.member, s, t, point, kind, cost }, ratio: Math.max(lengthwise, sideways) };
+  const contact = {
+    a: a.member,
+    b: b.member,
+    s,
+    t,
+    point,
+    kind,
+    cost,
+    reach,
+    offset,
+    by: NO_WORDS,
+    isNear: true,
+  } as const;
+  return { contact, ratio: Math.max(lengthwise, sideways) };
 }
 
 /** Parallel axes meet where two ends face each other: splices, a chord's ridge, a bar run on by the next. */
-function judgeParallel(a: Axis, b: Axis, options: JoinOptions, widening: number): JudgedContact | null {
+function judgeParallel(a: Axis, b: Axis, widening: number): JudgedContact | null {
+  const reach = (setReach(a, b) ?? reachOf(a, 0, 1) + reachOf(b, 0, 1)) * widening;
+  const offset = (setOffset(a, b) ?? offsetOf(a, b)) * widening;
   const sameWay = dot(a.direction, b.direction) > 0;
   let best: JudgedContact | null = null;
   for (const endA of [0, 1]) {
@@ -118,18 +151,15 @@ function judgeParallel(a: Axis, b: Axis, options: JoinOptions, widening: number)
     const lengthwise = dot(gap, outward);
     const sideways = subtract(gap, scale(outward, lengthwise));
     const aside = Math.hypot(...sideways);
-    const reach = (options.reach ?? reachOf(a, 0, 1) + reachOf(b, 0, 1)) * widening;
-    const offset = (options.offset ?? offsetOf(a, b)) * widening;
     const ratio = Math.max(Math.abs(lengthwise) / reach, aside / offset);
     if (best !== null && best.ratio <= ratio) continue;
     const half = lengthwise / 2;
     const s = endA === 0 ? -half : a.length + half;
     const t = endB === 0 ? -half : b.length + half;
     const cost = Math.abs(lengthwise) + aside;
-    best = {
-      contact: { a: a.member, b: b.member, s, t, point: between(p, q, 0.5), kind: 'meets', cost },
-      ratio,
-    };
+    const point = between(p, q, 0.5);
+    const limits = { reach, offset, by: NO_WORDS, isNear: true };
+    best = { contact: { a: a.member, b: b.member, s, t, point, kind: 'meets', cost, ...limits }, ratio };
   }
   return best;
 }
@@ -144,8 +174,18 @@ function reachOf(own: Axis, halfExtentMet: number, sine: number): number {
 const offsetOf = (a: Axis, b: Axis): number =>
   Math.min(Math.max(TOLERANCE.leastOffset, Math.max(a.depth, b.depth) / 2), TOLERANCE.mostOffset);
 
-const wideningFor = (a: Axis, b: Axis): number =>
-  a.assembly !== null && a.assembly === b.assembly ? TOLERANCE.sameAssembly : 1;
+/** What the brief sets for two members that meet: the greater where it sets both. */
+const greater = (p: number | null, q: number | null): number | null =>
+  p === null || q === null ? (p ?? q) : Math.max(p, q);
+
+const setReach = (a: Axis, b: Axis): number | null => greater(a.reach, b.reach);
+
+const setOffset = (a: Axis, b: Axis): number | null => greater(a.offset, b.offset);
+
+const inOneAssembly = (a: Axis, b: Axis): boolean =>
+  a.assembly !== null && a.assembly.globalId === b.assembly?.globalId;
+
+const wideningFor = (a: Axis, b: Axis): number => (inOneAssembly(a, b) ? TOLERANCE.sameAssembly : 1);
 
 const beyondEnds = (s: number, axis: Axis): number => Math.max(0, -s, s - axis.length);
 

@@ -1,12 +1,12 @@
 import { type Finding, finding } from '../domain/finding.ts';
 import type { Member } from '../domain/member.ts';
-import type { PlaceNamer } from '../domain/place.ts';
-import { along, cross, dot, scale, subtract, unit, type Vec3 } from '../domain/vector.ts';
+import type { Eccentricity, Truss } from '../domain/truss.ts';
+import { along, cross, dot, norm, scale, subtract, unit, type Vec3 } from '../domain/vector.ts';
 import { millimetres } from '../domain/words.ts';
 import { type Axis, approach, sineBetween } from './axes.ts';
 import { labelOf } from './labels.ts';
 import { TOLERANCE } from './options.ts';
-import type { Vertex, VertexGraph } from './vertices.ts';
+import type { Vertex } from './vertices.ts';
 
 /**
  * Shares of the chord's depth within which the moment of the eccentricity may be left out for the chord: EN 1993-1-8
@@ -15,36 +15,47 @@ import type { Vertex, VertexGraph } from './vertices.ts';
 const INNER = -0.55;
 const OUTER = 0.25;
 
+/** The eccentricities of a joint as drawn: of braces that meet off the only chord's axis, and of members that sit. */
+export function eccentricitiesOf(vertex: Vertex, axes: readonly (Axis | null)[]): Eccentricity[] {
+  const seats = vertex.stations.flatMap(({ member }): Eccentricity[] => {
+    const axis = axes[member];
+    if (axis === null || !vertex.seated.has(member)) return [];
+    return [{ of: 'seat', member, others: [], e: distanceToLine(vertex.at, axis), share: null }];
+  });
+  const chord = onlyChord(vertex, axes);
+  const braces = chord === null ? null : greatestEccentricity(vertex, chord, bracesOn(vertex, chord, axes));
+  return braces === null ? seats : [braces, ...seats];
+}
+
 /** Joints whose braces, as drawn, meet farther from the chord's axis than the standard lets pass. */
-export function offsetJointFindings(
-  graph: VertexGraph,
-  members: readonly Member[],
-  axes: readonly (Axis | null)[],
-  placeOf: PlaceNamer,
-): Finding[] {
-  return graph.vertices.flatMap((vertex) => {
-    const chord = onlyChord(vertex, axes);
-    if (chord === null) return [];
-    const braces = vertex.stations.flatMap(({ member, role }) => {
-      const axis = axes[member];
-      const frames = role !== 'through' && !vertex.seated.has(member) && axis !== null;
-      return frames && sineBetween(axis, chord) > TOLERANCE.leastSine ? [axis] : [];
-    });
-    const worst = greatestEccentricity(vertex, chord, braces);
-    if (worst === null || (worst.share >= INNER && worst.share <= OUTER)) return [];
-    const side = worst.share > 0 ? 'beyond' : 'before';
-    const { braces: pair } = worst;
-    return finding(
-      'offset-joint',
-      `${pair.map((axis) => labelOf(members[axis.member])).join(' and ')} meet ${millimetres(Math.abs(worst.e))} ${side} the axis of ${labelOf(members[chord.member])}, ${Math.abs(worst.share).toFixed(2)} of its depth: the moment of their forces on it bends the chord and is not seen.`,
-      `Move the braces so that they meet within ${Math.abs(INNER)} of the depth before and ${OUTER} beyond the chord's axis (EN 1993-1-8 5.1.5), or check the chord for the moment.`,
-      {
-        members: [chord, ...pair].map((axis) => members[axis.member].globalId),
-        at: vertex.at,
-        place: placeOf(vertex.at),
-        gap: Math.abs(worst.e),
-      },
-    );
+export function offsetJointFindings(truss: Truss, members: readonly Member[]): Finding[] {
+  return truss.nodes.flatMap(({ joining, at, place }, node) =>
+    (joining?.eccentricities ?? []).flatMap(({ share, e, member: chord, others }) => {
+      if (share === null || (share >= INNER && share <= OUTER)) return [];
+      // In an order of their own, so that the file's order does not show.
+      const braces = others.map((brace) => members[brace]).sort((p, q) => (p.globalId < q.globalId ? -1 : 1));
+      const side = share > 0 ? 'beyond' : 'before';
+      return finding(
+        'offset-joint',
+        `${braces.map(labelOf).join(' and ')} meet ${millimetres(Math.abs(e))} ${side} the axis of ${labelOf(members[chord])}, ${Math.abs(share).toFixed(2)} of its depth: the moment of their forces on it bends the chord and is not checked.`,
+        `Move the braces so that they meet within ${Math.abs(INNER)} of the depth before and ${OUTER} beyond the chord's axis (EN 1993-1-8 5.1.5), or check the chord for the moment.`,
+        {
+          members: [members[chord], ...braces].map(({ globalId }) => globalId),
+          nodes: [node],
+          at,
+          place,
+          gap: Math.abs(e),
+        },
+      );
+    }),
+  );
+}
+
+function bracesOn(vertex: Vertex, chord: Axis, axes: readonly (Axis | null)[]): Axis[] {
+  return vertex.stations.flatMap(({ member, role }) => {
+    const axis = axes[member];
+    const frames = role !== 'through' && !vertex.seated.has(member) && axis !== null;
+    return frames && sineBetween(axis, chord) > TOLERANCE.leastSine ? [axis] : [];
   });
 }
 
@@ -53,17 +64,11 @@ function onlyChord(vertex: Vertex, axes: readonly (Axis | null)[]): Axis | null 
   return through.length === 1 ? axes[through[0].member] : null;
 }
 
-interface Eccentricity {
-  /** m from the chord's axis, positive away from the braces. */
-  readonly e: number;
-  /** Of the chord's depth in the plane of the braces. */
-  readonly share: number;
-  readonly braces: readonly [Axis, Axis];
-}
+type OfBraces = Eccentricity & { readonly share: number };
 
-function greatestEccentricity(vertex: Vertex, chord: Axis, braces: readonly Axis[]): Eccentricity | null {
-  let worst: Eccentricity | null = null;
-  const excess = (found: Eccentricity | null) =>
+function greatestEccentricity(vertex: Vertex, chord: Axis, braces: readonly Axis[]): OfBraces | null {
+  let worst: OfBraces | null = null;
+  const excess = (found: OfBraces | null) =>
     found === null ? Number.NEGATIVE_INFINITY : Math.max(found.share / OUTER, found.share / INNER);
   braces.forEach((first, i) => {
     for (const second of braces.slice(i + 1)) {
@@ -75,7 +80,7 @@ function greatestEccentricity(vertex: Vertex, chord: Axis, braces: readonly Axis
 }
 
 /** Two braces on one side of the chord, in one plane with it; null for any others. */
-function eccentricityOf(vertex: Vertex, chord: Axis, first: Axis, second: Axis): Eccentricity | null {
+function eccentricityOf(vertex: Vertex, chord: Axis, first: Axis, second: Axis): OfBraces | null {
   const [a, b] = [leaving(first, vertex.at), leaving(second, vertex.at)];
   const [normalA, normalB] = [squareTo(chord, a), squareTo(chord, b)];
   if (normalA === null || normalB === null || dot(normalA, normalB) < 0.98) return null;
@@ -84,7 +89,13 @@ function eccentricityOf(vertex: Vertex, chord: Axis, first: Axis, second: Axis):
   const difference = slope(a) - slope(b);
   if (Math.abs(difference) < TOLERANCE.leastSine) return null;
   const height = (stationB - stationA) / difference;
-  return { e: -height, share: -height / (2 * chord.halfExtent(normalA)), braces: [first, second] };
+  return {
+    of: 'braces',
+    member: chord.member,
+    others: [first.member, second.member],
+    e: -height,
+    share: -height / (2 * chord.halfExtent(normalA)),
+  };
 }
 
 /** The direction in which a brace goes away from the joint. */
@@ -97,3 +108,5 @@ function leaving(brace: Axis, joint: Vec3): Vec3 {
 function squareTo(chord: Axis, direction: Vec3): Vec3 | null {
   return unit(cross(chord.direction, cross(direction, chord.direction)));
 }
+
+const distanceToLine = (point: Vec3, axis: Axis): number => norm(cross(subtract(point, axis.start), axis.direction));

@@ -95,6 +95,13 @@ export function relatedMembers(related: readonly Related[], globalIds: readonly 
   }
 }
 
+/** What either says of each pair. */
+export function united(first: PairEvidence, second: PairEvidence): PairEvidence {
+  const both = new Map(first);
+  for (const [key, words] of second) both.set(key, [...(first.get(key) ?? []), ...words].sort());
+  return both;
+}
+
 function tidied(evidence: Map<number, string[]>): PairEvidence {
   for (const [key, words] of evidence) if (words.length > 1) evidence.set(key, [...new Set(words)].sort());
   return evidence;

@@ -1,7 +1,8 @@
+import type { NamedPlace } from '../brief/named-places.ts';
 import { type Finding, finding } from '../domain/finding.ts';
 import type { Member } from '../domain/member.ts';
 import type { PlaceNamer } from '../domain/place.ts';
-import type { Truss } from '../domain/truss.ts';
+import type { Joining, Truss } from '../domain/truss.ts';
 import { between } from '../domain/vector.ts';
 import { millimetres } from '../domain/words.ts';
 import type { Evidence } from '../importer/evidence/types.ts';
@@ -10,29 +11,45 @@ import { buildTruss } from './build-truss.ts';
 import { findCarriers } from './carriers.ts';
 import { type Contact, findContacts } from './contacts.ts';
 import { resolveDoubles } from './doubles.ts';
-import { offsetJointFindings } from './eccentricity.ts';
-import { type PairEvidence, relatedMembers, touchingPlates } from './evidence.ts';
+import { eccentricitiesOf, offsetJointFindings } from './eccentricity.ts';
+import { type PairEvidence, relatedMembers, touchingPlates, united } from './evidence.ts';
 import { carriedFindings, crossingFindings, crowdedFindings } from './joint-findings.ts';
 import { makeJoints, type Refusal } from './joints.ts';
 import { labelOf } from './labels.ts';
+import { type JoinLimits, limitsUsed } from './limits.ts';
 import { looseEndFindings, overhangFindings } from './loose-ends.ts';
 import { JOIN_DEFAULTS, type JoinOptions } from './options.ts';
 import { cutOverhangs } from './overhangs.ts';
 import { partFindings } from './parts.ts';
 import { cutPieces, joinSplices } from './pieces.ts';
+import { reasonsFor } from './reasons.ts';
+import { findSplices, namedSplices } from './splices.ts';
 import { findStations } from './stations.ts';
 import { withoutTwisting } from './twisted.ts';
-import { makeVertices, type VertexGraph } from './vertices.ts';
+import { makeVertices, type Vertex } from './vertices.ts';
 
 export interface JoinContext {
   readonly placeOf: PlaceNamer;
   /** Nodes of a truss that stand on supports: a free end there is a bearing, not a fault. */
   readonly supportedNodes: (truss: Truss) => ReadonlySet<number>;
   /** Plates and relationships in the file that say what is joined. */
-  readonly evidence: Pick<Evidence, 'plates' | 'related'> | null;
+  readonly evidence: (Pick<Evidence, 'plates' | 'related'> & Partial<Pick<Evidence, 'assemblies'>>) | null;
+  /** Places that supports and loads name: a splice there stays a node. */
+  readonly namedPlaces: readonly NamedPlace[];
 }
 
-const NO_CONTEXT: JoinContext = { placeOf: () => null, supportedNodes: () => new Set(), evidence: null };
+const NO_CONTEXT: JoinContext = {
+  placeOf: () => null,
+  supportedNodes: () => new Set(),
+  evidence: null,
+  namedPlaces: [],
+};
+
+export interface Joined {
+  readonly truss: Truss;
+  readonly findings: Finding[];
+  readonly limits: JoinLimits;
+}
 
 /**
  * Makes a truss of members: finds where axes meet, joins them into work points, and splits members into bars.
@@ -42,15 +59,16 @@ export function joinMembers(
   members: readonly Member[],
   options: Partial<JoinOptions> = {},
   context: Partial<JoinContext> = {},
-): { truss: Truss; findings: Finding[] } {
+): Joined {
   const chosen = { ...JOIN_DEFAULTS, ...options };
-  const { placeOf, supportedNodes, evidence } = { ...NO_CONTEXT, ...context };
-  const drawn = makeAxes(members);
+  const known = { ...NO_CONTEXT, ...context };
+  const { placeOf, supportedNodes, evidence } = known;
+  const drawn = makeAxes(members, chosen, evidence?.assemblies);
   const doubles = resolveDoubles(members, drawn, chosen, placeOf);
   const { axes } = doubles;
 
   const contacts = findContacts(axes, chosen, pairEvidence(members, axes, evidence));
-  const { truss: whole, refused, graph } = trussOf(members, axes, contacts, chosen, placeOf);
+  const { truss: whole, refused } = trussOf(members, axes, contacts, chosen, known);
   const { truss: cut, cut: tails } = cutOverhangs(whole, supportedNodes(whole));
   const supported = supportedNodes(cut);
   const findings = [
@@ -61,11 +79,11 @@ export function joinMembers(
     ...partFindings(cut, members, axes, supported, placeOf),
     ...crossingFindings(contacts, members, axes, cut, placeOf),
     ...crowdedFindings(refused, members, cut, placeOf),
-    ...offsetJointFindings(graph, members, axes, placeOf),
+    ...offsetJointFindings(cut, members),
     ...carriedFindings(cut, members),
     ...axisMovedFindings(members, cut, placeOf),
   ];
-  return { truss: cut, findings };
+  return { truss: cut, findings, limits: limitsUsed(axes, contacts) };
 }
 
 function trussOf(
@@ -73,13 +91,18 @@ function trussOf(
   axes: readonly (Axis | null)[],
   contacts: readonly Contact[],
   options: JoinOptions,
-  placeOf: PlaceNamer,
-): { truss: Truss; refused: readonly Refusal[]; graph: VertexGraph } {
+  { placeOf, namedPlaces }: JoinContext,
+): { truss: Truss; refused: readonly Refusal[] } {
   const joining = contacts.filter(({ kind }) => kind !== 'crossing' || options.crossings === 'joined');
-  const { graph, refused } = untwisted(axes, joining);
-  const carriers = findCarriers(graph, axes, options);
-  const runs = joinSplices(cutPieces(graph, carriers), graph.vertices);
-  return { truss: buildTruss(graph, runs, members, axes, placeOf), refused, graph };
+  const { graph, refused, contacts: kept } = untwisted(axes, joining);
+  const pieces = cutPieces(graph, findCarriers(graph, axes, options));
+  const splices = findSplices(pieces, graph.vertices);
+  const runs = joinSplices(pieces, splices, namedSplices(splices, graph.vertices, namedPlaces), options.chords);
+  const joiningOf = (vertex: Vertex): Joining => ({
+    by: reasonsFor(vertex, kept),
+    eccentricities: eccentricitiesOf(vertex, axes),
+  });
+  return { truss: buildTruss(graph, runs, members, axes, placeOf, joiningOf), refused };
 }
 
 function zeroLengthFindings(
@@ -107,7 +130,7 @@ function untwisted(axes: readonly (Axis | null)[], contacts: readonly Contact[])
     const { joints, refused } = makeJoints(axes, joining, findStations(axes, joining));
     const graph = makeVertices(axes, joints);
     const fewer = withoutTwisting(joining, axes, graph);
-    if (fewer === null) return { graph, refused };
+    if (fewer === null) return { graph, refused, contacts: joining };
     joining = fewer;
   }
 }
@@ -119,7 +142,7 @@ function pairEvidence(
 ): PairEvidence {
   if (evidence === null) return new Map();
   const globalIds = members.map((member) => member.globalId);
-  return new Map([...touchingPlates(evidence.plates, axes), ...relatedMembers(evidence.related, globalIds)]);
+  return united(touchingPlates(evidence.plates, axes), relatedMembers(evidence.related, globalIds));
 }
 
 /** Beyond this turn (5 degrees) the truss is no longer what was drawn. */

@@ -89,7 +89,7 @@ export function carriedFindings(truss: Truss, members: readonly Member[]): Findi
   return [
     finding(
       'carried-node',
-      `${nodes.length === 1 ? 'One node is' : `${nodes.length} nodes are`} carried between the ends of a bar: nothing that triangulates frames in there, so the member runs on without a hinge and its bending there is not seen.`,
+      `${nodes.length === 1 ? 'One node is' : `${nodes.length} nodes are`} carried between the ends of a bar: nothing that triangulates frames in there, so the member runs on without a hinge; it bends there, which is not checked.`,
       'Say `chords: strict` in the brief where every joint is a hinge.',
       { members: [...carriers].map((member) => members[member].globalId), nodes, at: first.at, place: first.place },
     ),

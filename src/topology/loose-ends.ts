@@ -76,11 +76,11 @@ function nearMissSearch(axes: readonly (Axis | null)[], options: JoinOptions): (
   const present = axes.filter((axis) => axis !== null);
   const boxes = new Float64Array(6 * present.length);
   present.forEach((axis, i) => {
-    boxes.set(boxAround(axis, TOLERANCE.nearMiss * largestReach(axis, options)), 6 * i);
+    boxes.set(boxAround(axis, TOLERANCE.nearMiss * largestReach(axis)), 6 * i);
   });
   const index = indexBoxes(boxes);
   return ({ axis, at, atStart }) => {
-    const margin = TOLERANCE.nearMiss * largestReach(axis, options);
+    const margin = TOLERANCE.nearMiss * largestReach(axis);
     let best: Miss | null = null;
     const box = [...at.map((x) => x - margin), ...at.map((x) => x + margin)];
     searchBoxes(index, box, (i) => {
@@ -91,7 +91,7 @@ function nearMissSearch(axes: readonly (Axis | null)[], options: JoinOptions): (
       const { s } = judged.contact;
       if (s < axis.length / 2 !== atStart) return;
       const { distance: gap } = distanceToAxis(at, other);
-      if (gap > TOLERANCE.nearMiss * largestGap(axis, other, options)) return;
+      if (gap > TOLERANCE.nearMiss * largestGap(axis, other)) return;
       if (
         best === null ||
         judged.ratio < best.ratio ||
@@ -104,8 +104,8 @@ function nearMissSearch(axes: readonly (Axis | null)[], options: JoinOptions): (
 }
 
 /** What a joint of the two could bridge straight across, however slanting they meet. */
-function largestGap(own: Axis, other: Axis, options: JoinOptions): number {
-  return Math.max(options.reach ?? 0, own.depth, other.depth) + TOLERANCE.detailingGap;
+function largestGap(own: Axis, other: Axis): number {
+  return Math.max(own.reach ?? 0, own.depth, other.depth) + TOLERANCE.detailingGap;
 }
 
 function nearMiss(end: FreeEnd, miss: Miss, members: readonly Member[], placeOf: PlaceNamer): Finding {

@@ -1,9 +1,9 @@
 /** How far axes may be carried to meet. Lengths in metres; METHODS "Topology" gives the trade reasons. */
 export interface JoinOptions {
-  /** How far an end may be carried along its own axis; null lets the two sections decide. */
-  readonly reach: number | null;
-  /** Shortest distance between two axes that are still taken to meet; null lets the two sections decide. */
-  readonly offset: number | null;
+  /** How far an end may be carried along its own axis, m; null lets the two sections decide. */
+  readonly reach: PerMember;
+  /** Shortest distance between two axes that are still taken to meet, m; null lets the two sections decide. */
+  readonly offset: PerMember;
   /** Axes that run through each other away from their ends (crossed bracing). */
   readonly crossings: 'apart' | 'joined';
   /** Members that sit on others (purlins on chords). */
@@ -13,6 +13,12 @@ export interface JoinOptions {
   /** `strict` splits a through member at every joint; `pinned` only where something triangulates. */
   readonly chords: 'pinned' | 'strict';
 }
+
+/** One value for all members, or one each in their order. */
+export type PerMember = number | null | readonly (number | null)[];
+
+export const valueFor = (values: PerMember, member: number): number | null =>
+  typeof values === 'number' || values === null ? values : (values[member] ?? null);
 
 export const JOIN_DEFAULTS: JoinOptions = {
   reach: null,

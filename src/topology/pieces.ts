@@ -1,6 +1,5 @@
 import { pushTo } from '../domain/group.ts';
-import { cross, dot, norm, subtract, unit, type Vec3 } from '../domain/vector.ts';
-import type { Vertex, VertexGraph } from './vertices.ts';
+import type { VertexGraph } from './vertices.ts';
 
 /** The part of one member between two vertices that split it. */
 export interface Piece {
@@ -13,9 +12,6 @@ export interface Piece {
 
 /** Pieces in a row, of one member or of several spliced end to end: one bar. */
 export type PieceRun = readonly Piece[];
-
-/** Sine of the kink (5 degrees) up to which two members end to end with nothing else at the node are one bar. */
-const STRAIGHT = 0.087;
 
 /** Cuts members where vertices split them. */
 export function cutPieces(graph: VertexGraph, carriers: readonly (number | null)[]): Piece[] {
@@ -36,22 +32,21 @@ export function cutPieces(graph: VertexGraph, carriers: readonly (number | null)
   return pieces;
 }
 
-/** Rows of pieces that are one bar: a splice (two members in line, nothing else there) leaves no node. */
-export function joinSplices(pieces: readonly Piece[], vertices: readonly Vertex[]): PieceRun[] {
+/**
+ * Rows of pieces that are one bar: a splice leaves no node. Where a load is put on a splice the bar runs on and carries it;
+ * what a support holds there is a node of its own.
+ */
+export function joinSplices(
+  pieces: readonly Piece[],
+  splices: ReadonlySet<number>,
+  named: ReadonlyMap<number, 'support' | 'load'>,
+  chords: 'pinned' | 'strict',
+): PieceRun[] {
   const at = new Map<number, number[]>();
   pieces.forEach((piece, index) => {
-    for (const vertex of [piece.from, piece.to]) pushTo(at, vertex, index);
+    for (const vertex of [piece.from, piece.to]) if (splices.has(vertex)) pushTo(at, vertex, index);
   });
-  const isSplice = (vertex: number): boolean => {
-    const [first, second, ...rest] = at.get(vertex) ?? [];
-    if (second === undefined || rest.length > 0 || vertices[vertex].stations.length !== 2) return false;
-    const [a, b] = [pieces[first], pieces[second]];
-    return a.member !== b.member && isStraight(leaving(a, vertex), leaving(b, vertex));
-  };
-  const leaving = (piece: Piece, vertex: number): Vec3 => {
-    const other = piece.from === vertex ? piece.to : piece.from;
-    return subtract(vertices[other].at, vertices[vertex].at);
-  };
+  const splits = (splice: number) => named.get(splice) === 'support' || (chords === 'strict' && named.has(splice));
   const used = new Uint8Array(pieces.length);
   return pieces.flatMap((_, index) => (used[index] ? [] : [runThrough(index)]));
 
@@ -59,28 +54,24 @@ export function joinSplices(pieces: readonly Piece[], vertices: readonly Vertex[
     used[index] = 1;
     const back = follow(index, pieces[index].from);
     const on = follow(index, pieces[index].to);
-    return [...back.reverse(), index, ...on].map((i) => pieces[i]);
+    return [...back.reverse(), pieces[index], ...on];
   }
 
-  function follow(start: number, vertex: number): number[] {
-    const found: number[] = [];
-    let piece = start;
+  function follow(start: number, vertex: number): Piece[] {
+    const found: Piece[] = [];
+    let index = start;
     let end = vertex;
-    while (isSplice(end)) {
-      const next = (at.get(end) as number[]).find((i) => i !== piece) as number;
+    while (splices.has(end) && !splits(end)) {
+      const next = (at.get(end) as number[]).find((i) => i !== index) as number;
       if (used[next]) break;
       used[next] = 1;
-      found.push(next);
-      end = pieces[next].from === end ? pieces[next].to : pieces[next].from;
-      piece = next;
+      const piece = pieces[next];
+      found.push(named.has(end) ? { ...piece, carries: [...piece.carries, end] } : piece);
+      end = piece.from === end ? piece.to : piece.from;
+      index = next;
     }
     return found;
   }
-}
-
-function isStraight(a: Vec3, b: Vec3): boolean {
-  const [u, v] = [unit(a), unit(b)];
-  return u !== null && v !== null && dot(u, v) < 0 && norm(cross(u, v)) < STRAIGHT;
 }
 
 /** The two outer vertices of a run. */

@@ -169,5 +169,8 @@ export function someResult(globalIds: readonly string[], { withCombinations = tr
     combinations,
     envelope,
     checks: [],
+    joining: { reach: { set: [], bySections: [0.13, 0.48] }, offset: { set: [], bySections: [0.02, 0.12] } },
+    eccentricities: [],
+    bending: [],
   });
 }

@@ -1,5 +1,6 @@
 import type { Truss } from '../../domain/truss.ts';
 import type { BarEnvelope, ExtremeForce, SolvedCase, SolvedCombination } from '../types.ts';
+import { decisive } from './decisive.ts';
 
 /** N; a force below this is rounding, not tension or compression. */
 const NO_FORCE = 1e-3;
@@ -13,11 +14,7 @@ export function envelope(
   cases: readonly SolvedCase[],
   combinations: readonly SolvedCombination[],
 ): BarEnvelope[] {
-  const decisive =
-    combinations.length > 0
-      ? combinations.filter((one) => one.limit === 'strength' || one.limit === 'accidental')
-      : cases;
-  const carried = decisive.filter((one) => one.refused === null);
+  const carried = decisive(cases, combinations);
   return truss.bars.map((_, bar): BarEnvelope => {
     let tension: ExtremeForce | null = null;
     let compression: ExtremeForce | null = null;
