@@ -6,6 +6,7 @@ import { type BodyAxis, distinctAxes, lengthOf } from './geometry/body-axis.ts';
 import type { Chord } from './geometry/curve-piece.ts';
 import type { Polygon } from './geometry/mesh.ts';
 import { meshAxes } from './geometry/mesh-axis.ts';
+import type { KnownSections } from './geometry/short-bar.ts';
 import { axisOfBody, axisOfLine, type MemberAxis, SHORTEST } from './member-axis.ts';
 import { NeedsParser, NotRead, noAxis } from './not-read.ts';
 import type { ImportOptions } from './options.ts';
@@ -22,8 +23,8 @@ interface Sources {
 
 /**
  * The lines that one element is read as: its drawn Axis or the centroid lines of its solids, whichever is asked for; of a
- * lattice drawn as one element its solids, whatever its Axis. `profiles` are those its material gives,
- * `parsedMesh` asks a parser for the body's mesh.
+ * lattice drawn as one element its solids, whatever its Axis. `profiles` are those its material gives, `known` are the
+ * sections that its names and fellows say, `parsedMesh` asks a parser for the body's mesh.
  * @throws NotRead where there is none.
  */
 export function elementAxes(
@@ -31,11 +32,12 @@ export function elementAxes(
   shape: Shape,
   world: Transform,
   profiles: readonly number[],
+  known: KnownSections,
   parsedMesh: () => readonly Polygon[] | null,
 ): MemberAxis[] {
   const lines = orRefusal<Chord>(() => readAxisLines(reading, shape.axis, world));
-  const read = orRefusal<BodyAxis>(() => readBody(reading, sections, shape.body, world));
-  const bodies = isUnknown(reading, sections, read) ? meshed(read, parsedMesh(), world) : read;
+  const read = orRefusal<BodyAxis>(() => readBody(reading, sections, shape.body, world, known));
+  const bodies = isUnknown(reading, sections, read) ? meshed(read, parsedMesh(), world, known) : read;
   const drawn = Array.isArray(lines) ? lines.filter((line) => !(distance(line.from, line.to) < SHORTEST)) : [];
   const solids = Array.isArray(bodies) ? distinctAxes(bodies) : [];
   const members = solids.length === 0 ? [] : memberSolids(sections, solids, profiles);
@@ -65,9 +67,14 @@ const isDrawn = (reading: Reading, profile: number): boolean =>
 const MERE_NAMES: ReadonlySet<string> = new Set(['', 'IFCPROFILEDEF', 'IFCPARAMETERIZEDPROFILEDEF']);
 
 /** What the parser's mesh shows, where there is one and it shows something. */
-function meshed(read: BodyAxis[] | NotRead, mesh: readonly Polygon[] | null, world: Transform): BodyAxis[] | NotRead {
+function meshed(
+  read: BodyAxis[] | NotRead,
+  mesh: readonly Polygon[] | null,
+  world: Transform,
+  known: KnownSections,
+): BodyAxis[] | NotRead {
   if (mesh === null) return read;
-  const fitted = orRefusal<BodyAxis>(() => meshAxes(mesh, world.z));
+  const fitted = orRefusal<BodyAxis>(() => meshAxes(mesh, world.z, known));
   return fitted instanceof NotRead && !(read instanceof NotRead) ? read : fitted;
 }
 

@@ -10,7 +10,8 @@ export function remarksOn(axis: MemberAxis): Remark[] {
   if (axis.isRun) remarks.push(RUNS);
   if (axis.isTapered && axis.section !== null) remarks.push(TAPERED);
   if (axis.confidence !== null) remarks.push(axis.confidence < DOUBTFUL ? UNEVEN : MEASURED);
-  if (axis.hasRaggedEnd && !axis.isBent) remarks.push(RAGGED);
+  if (axis.strays !== null) remarks.push(axis.strays > NOTICED ? approximate(axis.strays) : SHORT);
+  else if (axis.hasRaggedEnd && !axis.isBent) remarks.push(RAGGED);
   if (axis.isBeside) remarks.push(BESIDE);
   return remarks;
 }
@@ -58,6 +59,28 @@ const RUNS: Remark = {
   say: (count, first) =>
     `${whose(count, first, 'are drawn as one line with bends', 'is drawn as one line with bends')}; each straight run is read as a member of its own, pinned at the bends.`,
   advice: 'Where a bend is stiff and no other member meets it there, judge its bending by hand.',
+};
+
+/** m. A body that leaves its axis by less is straight for whoever reads it. */
+const NOTICED = 1e-3;
+
+const approximate = (strays: number): Remark => ({
+  code: 'bent-axis',
+  key: 'approximate',
+  gap: strays,
+  say: (count, first, most) =>
+    `${whose(count, first, 'are short bars', 'is a short bar')} of the section that ${count === 1 ? 'its name says' : 'their names say'}, split, joggled or notched over part of the length; ${count === 1 ? 'its axis is' : 'their axes are'} approximate: the body sticks out of the section carried along it by up to ${Math.round(most * 1000)} mm.`,
+  advice:
+    'Leave anchors and brackets out of the scope in the brief; draw a bar that carries force as a straight profile.',
+});
+
+const SHORT: Remark = {
+  code: 'guessed-section',
+  key: 'mesh short',
+  severity: 'note',
+  say: (count, first) =>
+    `${whose(count, first, 'are drawn as meshes', 'is drawn as a mesh')} too short to show which way ${count === 1 ? 'it runs' : 'they run'}; the axis is taken across the section that ${count === 1 ? 'its name says or others of its type have' : 'their names say or others of their types have'}.`,
+  advice: 'Leave such a piece out of the scope in the brief if it is a plate or a leftover.',
 };
 
 const BESIDE: Remark = {

@@ -7,10 +7,12 @@ export interface Remark {
   readonly code: FindingCode;
   /** Findings with the same code and key are one. */
   readonly key: string;
-  /** The sentence, told of so many members. */
-  readonly say: (count: number, first: string) => string;
+  /** The sentence, told of so many members; `most` is the greatest of their gaps. */
+  readonly say: (count: number, first: string, most: number) => string;
   readonly advice: string;
   readonly severity?: Severity;
+  /** m; the finding has the greatest of those it is met with. */
+  readonly gap?: number;
   /** Most GlobalIds to name; all where it is left out. */
   readonly most?: number;
 }
@@ -21,6 +23,7 @@ interface Entry {
   readonly members: Map<string, Vec3 | null>;
   /** Where it was met outside any member. */
   at: Vec3 | null;
+  gap: number | null;
 }
 
 /** Gathers what is met element by element, so that one cause is one finding with all the members it touches. */
@@ -31,9 +34,10 @@ export class FindingsLog {
     const key = `${remark.code} ${remark.key}`;
     let entry = this.entries.get(key);
     if (entry === undefined) {
-      entry = { remark, members: new Map(), at: null };
+      entry = { remark, members: new Map(), at: null, gap: null };
       this.entries.set(key, entry);
     }
+    if (remark.gap !== undefined) entry.gap = Math.max(entry.gap ?? 0, remark.gap);
     if (globalId === null) entry.at ??= at;
     else entry.members.set(globalId, lower(entry.members.get(globalId) ?? null, at));
   }
@@ -42,14 +46,15 @@ export class FindingsLog {
   findings(placeOf: PlaceNamer): Finding[] {
     const keys = [...this.entries.keys()].sort();
     return keys.map((key) => {
-      const { remark, members, at: elsewhere } = this.entries.get(key)!;
+      const { remark, members, at: elsewhere, gap } = this.entries.get(key)!;
       const named = [...members.keys()].sort();
       const at = (named[0] === undefined ? null : members.get(named[0])) ?? elsewhere;
-      return finding(remark.code, remark.say(named.length, named[0] ?? ''), remark.advice, {
+      return finding(remark.code, remark.say(named.length, named[0] ?? '', gap ?? 0), remark.advice, {
         ...(remark.severity === undefined ? {} : { severity: remark.severity }),
         members: named.slice(0, remark.most ?? named.length),
         at,
         place: at === null ? null : placeOf(at),
+        gap,
       });
     });
   }

@@ -22,6 +22,8 @@ export interface MemberAxis {
   readonly confidence: number | null;
   /** Of a mesh: an end is no single face across the axis, so that its place is that of the farthest corner. */
   readonly hasRaggedEnd: boolean;
+  /** Of a mesh too short to show its own axis: how far it leaves its section carried along the one taken, metres. */
+  readonly strays: number | null;
   /** Of a drawn line: the centroid line of the one body that runs along it. */
   readonly centroidEnds: readonly [Vec3, Vec3] | null;
   /** Whether the drawn line lies clearly elsewhere than the centroid line. */
@@ -70,6 +72,7 @@ export function axisOfBody(book: SectionBook, body: BodyAxis, profiles: readonly
     isTapered: body.endProfile !== null,
     confidence: body.measured?.confidence ?? null,
     hasRaggedEnd: body.measured !== null && body.measured.squareness === null,
+    strays: body.measured?.strays ?? null,
     centroidEnds: null,
     isBeside: false,
   };
@@ -102,6 +105,7 @@ export function axisOfLine(
     isTapered: body !== null && body.endProfile !== null,
     confidence: body?.measured?.confidence ?? null,
     hasRaggedEnd: false,
+    strays: null,
     centroidEnds: centroidEnds !== null && isSame(centroidEnds, ends) ? ends : centroidEnds,
     isBeside: centroidEnds !== null && isFarFrom(line, along, centroidEnds),
   };

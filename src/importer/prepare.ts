@@ -17,6 +17,7 @@ import { Reading } from './reading.ts';
 import { readRelations } from './relations.ts';
 import { knownSchema } from './schema.ts';
 import { SectionBook } from './sections/section-book.ts';
+import { SiblingSections } from './siblings.ts';
 import type { ImportedModel } from './types.ts';
 import { readUnits } from './units.ts';
 
@@ -35,12 +36,14 @@ export function prepare(file: StepFile, options: ImportOptions): Prepared {
   const reading = new Reading(file, schema.family, units, log);
   const grids = readGrids(reading);
   const relations = readRelations(file);
+  const sections = new SectionBook(reading);
   const sources: Sources = {
     reading,
     placements: new Placements(reading, grids),
     relations,
     contexts: new ContextBook(reading, relations),
-    sections: new SectionBook(reading),
+    sections,
+    siblings: new SiblingSections(reading, relations, sections),
     materials: new MaterialBook(reading, options.defaultMaterial),
     facts: new FactsBook(file, units, relations),
     options,

@@ -15,7 +15,9 @@ import type { Placements } from './placements.ts';
 import type { Reading } from './reading.ts';
 import type { Relations } from './relations.ts';
 import { readShape } from './representations.ts';
+import { knownSections } from './sections/known-sections.ts';
 import type { SectionBook } from './sections/section-book.ts';
+import type { SiblingSections } from './siblings.ts';
 import type { Transform } from './transform.ts';
 
 /** What elements are read with. */
@@ -25,6 +27,7 @@ export interface Sources {
   readonly contexts: ContextBook;
   readonly placements: Placements;
   readonly sections: SectionBook;
+  readonly siblings: SiblingSections;
   readonly materials: MaterialBook;
   readonly facts: FactsBook;
   readonly options: ImportOptions;
@@ -66,15 +69,16 @@ function membersOf(
   const { file } = reading;
   const shape = file.refAt(id, 6);
   const made = materials.madeOf(materialId(relations, id));
-  const axes = elementAxes(sources, readShape(reading, shape), world, made.profiles, () => meshes.of(id));
+  const context = sources.contexts.of(id);
+  const name = file.stringAt(id, 2);
+  const texts = () => [context.type, file.stringAt(id, 4), name, file.stringAt(id, 3)];
+  const known = () => knownSections(texts(), () => sources.siblings.of(id));
+  const axes = elementAxes(sources, readShape(reading, shape), world, made.profiles, known, () => meshes.of(id));
   if (axes.length > 1)
     axes.sort((a, b) => compareRounded(a.ends[0], b.ends[0]) || compareRounded(a.ends[1], b.ends[1]));
 
   const layer = layerOf(reading, relations, shape);
-  const context = sources.contexts.of(id);
-  const name = file.stringAt(id, 2);
   const tag = file.stringAt(id, 7);
-  const texts = () => [context.type, file.stringAt(id, 4), name, file.stringAt(id, 3)];
   return axes.map((found, part) => {
     reading.about(globalId, between(...found.ends, 0.5));
     const { axis, remark } = namedAxis(found, texts);

@@ -93,6 +93,7 @@ function axisAlong(run: Chord, mesh: Mesh, walk: Walk, upright: Vec3): MeasuredA
       zAxis: y,
       confidence: agreeing.length / walk.slices.length,
       squareness: walk.squareness,
+      strays: null,
     },
   };
 }

@@ -11,6 +11,8 @@ export interface Measured {
   readonly confidence: number;
   /** The lesser of both ends' cosines between the axis and the end face's normal; null where an end has no one face. */
   readonly squareness: number | null;
+  /** Of a body too short to show its own axis: how far it leaves its section carried along the one taken, metres. */
+  readonly strays: number | null;
 }
 
 /** The centroid line of one solid, world metres. */

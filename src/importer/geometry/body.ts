@@ -13,6 +13,7 @@ import { blockFaces, readFaces } from './face-sets.ts';
 import { mappedItems } from './mapped-item.ts';
 import { meshAxes } from './mesh-axis.ts';
 import { revolutionAxis } from './revolution.ts';
+import type { KnownSections } from './short-bar.ts';
 import { sectionedAxis, sweptAreaAxes } from './swept-area.ts';
 import { cylinderAxis, sweptDiskAxes } from './swept-disk.ts';
 
@@ -20,7 +21,7 @@ const DEEPEST = 64;
 
 /**
  * The axes of the solids in a body's items, world metres. Items that give none are passed over where another gives one,
- * with a note.
+ * with a note. `known` are sections that a short mesh may be of.
  * @throws NotRead (no-axis) where no item gives an axis, saying what the body is.
  */
 export function readBody(
@@ -28,13 +29,14 @@ export function readBody(
   book: SectionBook,
   items: readonly number[],
   world: Transform,
+  known?: KnownSections,
   depth = 0,
 ): BodyAxis[] {
   const axes: BodyAxis[] = [];
   let refusal: NotRead | null = null;
   for (const item of items) {
     try {
-      axes.push(...readSolid(reading, book, item, world, depth));
+      axes.push(...readSolid(reading, book, item, world, known, depth));
     } catch (problem) {
       if (!(problem instanceof NotRead)) throw problem;
       refusal ??= problem;
@@ -54,7 +56,14 @@ const passedOver = ({ message }: NotRead): Remark => ({
   advice: 'Where one of them is a member, export it as an element of its own.',
 });
 
-function readSolid(reading: Reading, book: SectionBook, id: number, world: Transform, depth: number): BodyAxis[] {
+function readSolid(
+  reading: Reading,
+  book: SectionBook,
+  id: number,
+  world: Transform,
+  known: KnownSections | undefined,
+  depth: number,
+): BodyAxis[] {
   if (depth > DEEPEST) throw noAxis('its body refers to itself');
   const type = reading.typeOf(id);
   switch (type) {
@@ -80,22 +89,22 @@ function readSolid(reading: Reading, book: SectionBook, id: number, world: Trans
       return [revolutionAxis(reading, book, id, world)];
     case 'IFCMAPPEDITEM': {
       const mapped = mappedItems(reading, id);
-      return readBody(reading, book, mapped.items, compose(world, mapped.transform), depth + 1);
+      return readBody(reading, book, mapped.items, compose(world, mapped.transform), known, depth + 1);
     }
     case 'IFCBOOLEANRESULT':
     case 'IFCBOOLEANCLIPPINGRESULT':
-      return readBoolean(reading, book, id, world, depth);
+      return readBoolean(reading, book, id, world, known, depth);
     case 'IFCCSGSOLID': {
       const root = asRef(reading.args(id)[0]);
       if (root === null) throw noAxis('its body is empty');
-      return readSolid(reading, book, root, world, depth + 1);
+      return readSolid(reading, book, root, world, known, depth + 1);
     }
     case '':
       throw noAxis('the body it refers to is missing');
     default: {
       const faces = readFaces(reading, id, world);
       if (faces === null) throw new NeedsParser(`its body is ${inWords(type)}`);
-      return meshAxes(faces, world.z);
+      return meshAxes(faces, world.z, known);
     }
   }
 }
@@ -109,12 +118,19 @@ function boundingBoxAxis(reading: Reading, id: number, world: Transform): BodyAx
 }
 
 /** The first operand is the member; the second cuts its ends or lengthens it, and never makes a member of its own. */
-function readBoolean(reading: Reading, book: SectionBook, id: number, world: Transform, depth: number): BodyAxis[] {
+function readBoolean(
+  reading: Reading,
+  book: SectionBook,
+  id: number,
+  world: Transform,
+  known: KnownSections | undefined,
+  depth: number,
+): BodyAxis[] {
   const args = reading.args(id);
   const first = asRef(args[1]);
   const second = asRef(args[2]);
   if (first === null) throw noAxis('its body is empty');
-  const axes = readSolid(reading, book, first, world, depth + 1);
+  const axes = readSolid(reading, book, first, world, known, depth + 1);
   if (second === null) return axes;
   const operator = asEnum(args[0]);
   if (operator === 'UNION') return lengthened(axes, operandAxes(reading, book, second, world, depth));
@@ -136,7 +152,7 @@ const coversAll = ([from, to]: Span): boolean => from <= 0 && to >= 1;
 
 function operandAxes(reading: Reading, book: SectionBook, id: number, world: Transform, depth: number): BodyAxis[] {
   try {
-    return readSolid(reading, book, id, world, depth + 1);
+    return readSolid(reading, book, id, world, undefined, depth + 1);
   } catch (problem) {
     if (problem instanceof NotRead) return [];
     throw problem;

@@ -10,12 +10,15 @@ import { type Mesh, meshOf, type Polygon } from './mesh.ts';
 import { separateBodies } from './mesh-bodies.ts';
 import { MeshCutter } from './mesh-cut.ts';
 import { prismDirection, prismEnds, rangeAlong, sectionFrame, uprightAcross } from './prism.ts';
+import { type KnownSections, shortBarAxis } from './short-bar.ts';
 
 /** A body not this many times as long as it is wide is a plate or a lump, no member. */
 const LEAST_SLENDER = 2.5;
 
 /** Cuts are made at these parts of the length: off the even fractions that builders use. */
 const STATIONS = [0.103, 0.201, 0.302, 0.401, 0.503, 0.602, 0.703, 0.801, 0.902];
+
+const NOTHING_KNOWN: KnownSections = () => [];
 
 /** Areas within a hundredth are one section. */
 const SAME_AREA = 0.01;
@@ -24,11 +27,15 @@ const SAME_AREA = 0.01;
 const STRAIGHT = 1e-3;
 
 /**
- * The axes of each separate body of a mesh: one fitted to it as to a prism, else those of a bar that bends. `upright` is the direction that the section's z
- * axis is to be near.
+ * The axes of each separate body of a mesh: one fitted to it as to a prism, else that of a short piece of a section that is
+ * known, else those of a bar that bends. `upright` is the direction that the section's z axis is to be near.
  * @throws NotRead (no-axis, many-in-one, no-section) where no body is a single slender one.
  */
-export function meshAxes(polygons: readonly Polygon[], upright: Vec3): BodyAxis[] {
+export function meshAxes(
+  polygons: readonly Polygon[],
+  upright: Vec3,
+  known: KnownSections = NOTHING_KNOWN,
+): BodyAxis[] {
   const mesh = meshOf(polygons);
   if (mesh.faces.length === 0) throw noAxis('its mesh has no faces');
   const axes: BodyAxis[] = [];
@@ -40,9 +47,9 @@ export function meshAxes(polygons: readonly Polygon[], upright: Vec3): BodyAxis[
       axes.push(...(bent ?? [axis]));
     } catch (problem) {
       if (!(problem instanceof NotRead)) throw problem;
-      const bent = bentMeshAxes(body, upright);
-      if (bent !== null) {
-        axes.push(...bent);
+      const found = (problem instanceof Stout ? shortAxis(body, upright, known) : null) ?? bentMeshAxes(body, upright);
+      if (found !== null) {
+        axes.push(...found);
         continue;
       }
       // A lattice among single bars is the more telling of two refusals.
@@ -51,6 +58,14 @@ export function meshAxes(polygons: readonly Polygon[], upright: Vec3): BodyAxis[
   }
   if (refusal !== null && (axes.length === 0 || refusal.code === 'many-in-one')) throw refusal;
   return axes;
+}
+
+function shortAxis(mesh: Mesh, upright: Vec3, known: KnownSections): BodyAxis[] | null {
+  for (const section of known()) {
+    const axis = shortBarAxis(mesh, upright, section);
+    if (axis !== null) return [axis];
+  }
+  return null;
 }
 
 interface Station {
@@ -90,6 +105,7 @@ function meshAxis(mesh: Mesh, upright: Vec3): { axis: BodyAxis; isAstray: boolea
       zAxis: frame.y,
       confidence: agreeing.length / STATIONS.length,
       squareness: line.squareness,
+      strays: null,
     },
   };
   return { axis, isAstray };
@@ -100,12 +116,18 @@ function refuseStout(mesh: Mesh, direction: Vec3, frame: Frame): void {
     const [low, high] = rangeAlong(mesh, axis);
     return high - low;
   }) as [number, number, number];
-  if (length >= LEAST_SLENDER * Math.max(width, depth)) return;
-  throw new NotRead(
-    'no-axis',
-    `it is a plate or a lump, not ${LEAST_SLENDER} times as long as it is wide`,
-    'Leave plates, anchors and panels out of the scope; export a short member as a profile extruded along its length.',
-  );
+  if (length < LEAST_SLENDER * Math.max(width, depth)) throw new Stout();
+}
+
+/** A plate, a lump, or a piece too short to show which way it runs. */
+class Stout extends NotRead {
+  constructor() {
+    super(
+      'no-axis',
+      `it is a plate or a lump, not ${LEAST_SLENDER} times as long as it is wide`,
+      'Leave plates, anchors and panels out of the scope; export a short member as a profile extruded along its length.',
+    );
+  }
 }
 
 const severalBars = () =>

@@ -12,7 +12,7 @@ import {
   unit,
   type Vec3,
 } from '../../domain/vector.ts';
-import { type Outline, startOf } from '../sections/outline.ts';
+import { type Outline, type Point2, startOf } from '../sections/outline.ts';
 import { outlineProperties, ringSize } from '../sections/outline-properties.ts';
 import { type Face, type Mesh, withFaces } from './mesh.ts';
 import { MeshCutter } from './mesh-cut.ts';
@@ -104,7 +104,8 @@ export class Slicer {
   }
 }
 
-function boxOf({ outer }: Outline): readonly [low: [number, number], high: [number, number]] {
+/** Of an outline of straight edges. */
+export function boxOf({ outer }: Outline): readonly [low: Point2, high: Point2] {
   const low: [number, number] = [Number.POSITIVE_INFINITY, Number.POSITIVE_INFINITY];
   const high: [number, number] = [Number.NEGATIVE_INFINITY, Number.NEGATIVE_INFINITY];
   for (const [x, y] of outer.map(startOf)) {
