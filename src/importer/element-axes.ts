@@ -12,6 +12,7 @@ import { NeedsParser, NotRead, noAxis } from './not-read.ts';
 import type { ImportOptions } from './options.ts';
 import type { Reading } from './reading.ts';
 import type { Shape } from './representations.ts';
+import { measuredInstead } from './sections/impossible-profile.ts';
 import type { SectionBook } from './sections/section-book.ts';
 import type { Transform } from './transform.ts';
 
@@ -38,6 +39,7 @@ export function elementAxes(
   const lines = orRefusal<Chord>(() => readAxisLines(reading, shape.axis, world));
   const read = orRefusal<BodyAxis>(() => readBody(reading, sections, shape.body, world, known));
   const bodies = isUnknown(reading, sections, read) ? meshed(read, parsedMesh(), world, known) : read;
+  if (bodies !== read) noteUnread(reading, sections, read);
   const drawn = Array.isArray(lines) ? lines.filter((line) => !(distance(line.from, line.to) < SHORTEST)) : [];
   const solids = Array.isArray(bodies) ? distinctAxes(bodies) : [];
   const members = solids.length === 0 ? [] : memberSolids(sections, solids, profiles);
@@ -57,7 +59,19 @@ export function elementAxes(
 /** Whether a body is of a kind that only a parser can tell of, or has a drawn profile that is not read. */
 function isUnknown(reading: Reading, sections: SectionBook, read: readonly BodyAxis[] | NotRead): boolean {
   if (read instanceof NotRead) return read instanceof NeedsParser;
-  return read.some(({ profile }) => profile !== null && isDrawn(reading, profile) && !sections.canRead(profile));
+  return read.some(({ profile }) => profile !== null && isUnread(reading, sections, profile));
+}
+
+const isUnread = (reading: Reading, sections: SectionBook, profile: number): boolean =>
+  isDrawn(reading, profile) && sections.refusalOf(profile) !== null;
+
+/** Why the body was measured although profiles are drawn. */
+function noteUnread(reading: Reading, sections: SectionBook, read: readonly BodyAxis[] | NotRead): void {
+  if (read instanceof NotRead) return;
+  for (const { profile } of read) {
+    const refusal = profile === null || !isDrawn(reading, profile) ? null : sections.refusalOf(profile);
+    if (refusal !== null) reading.note(measuredInstead(refusal));
+  }
 }
 
 /** A profile that is a mere name has no shape to be meshed. */

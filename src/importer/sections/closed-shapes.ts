@@ -16,7 +16,7 @@ export interface RhsDimensions {
 export function rhs(name: string | null, d: RhsDimensions): ProfileShape {
   const { width, depth, wall, inner, outer } = d;
   requirePositive({ width, depth, 'wall thickness': wall });
-  requireShape(2 * wall < Math.min(width, depth), 'its walls are thicker than it is wide');
+  requireShape(2 * wall < Math.min(width, depth), 'its walls are thicker than it is wide', { wall, depth, width });
   return {
     name: name ?? `RHS ${inMillimetres(Math.max(width, depth), Math.min(width, depth), wall)}`,
     shape: 'RHS',
@@ -32,7 +32,7 @@ export function rhs(name: string | null, d: RhsDimensions): ProfileShape {
 
 export function chs(name: string | null, radius: number, wall: number): ProfileShape {
   requirePositive({ radius, 'wall thickness': wall });
-  requireShape(wall < radius, 'its wall is thicker than its radius');
+  requireShape(wall < radius, 'its wall is thicker than its radius', { wall, radius });
   const inside = radius - wall;
   return {
     name: name ?? `CHS ${inMillimetres(2 * radius, wall)}`,

@@ -18,8 +18,8 @@ export interface CDimensions {
 export function cShape(name: string | null, d: CDimensions): ProfileShape {
   const { depth, width, wall: t, girth } = d;
   requirePositive({ depth, width, 'wall thickness': t, girth });
-  requireShape(2 * t < Math.min(depth, width), 'its walls are thicker than it is wide');
-  requireShape(girth > t && 2 * girth < depth, 'its lips do not fit its depth');
+  requireShape(2 * t < Math.min(depth, width), 'its walls are thicker than it is wide', { wall: t, depth, width });
+  requireShape(girth > t && 2 * girth < depth, 'its lips do not fit its depth', { girth, wall: t, depth });
   const inner = d.innerRadius;
   const outer = inner > 0 ? inner + t : 0;
   const x = width / 2;
@@ -66,8 +66,8 @@ export interface ZDimensions {
 export function zShape(name: string | null, d: ZDimensions): ProfileShape {
   const { depth, width, web, flange } = d;
   requirePositive({ depth, width, 'web thickness': web, 'flange thickness': flange });
-  requireShape(2 * flange < depth, 'its flanges are thicker than it is deep');
-  requireShape(web < width, 'its web is thicker than its flange is wide');
+  requireShape(2 * flange < depth, 'its flanges are thicker than it is deep', { flange, depth });
+  requireShape(web < width, 'its web is thicker than its flange is wide', { web, flange: width });
   const x = width - web / 2;
   const y = depth / 2;
   const half = [

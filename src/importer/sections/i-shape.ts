@@ -29,8 +29,12 @@ export function iShape(name: string | null, d: IDimensions): ProfileShape {
     'flange width': Math.min(top.width, bottom.width),
     'flange thickness': Math.min(top.thickness, bottom.thickness),
   });
-  requireShape(top.thickness + bottom.thickness < depth, 'its flanges are thicker than it is deep');
-  requireShape(web < Math.min(top.width, bottom.width), 'its web is thicker than its flange is wide');
+  requireShape(top.thickness + bottom.thickness < depth, 'its flanges are thicker than it is deep', {
+    flange: Math.max(top.thickness, bottom.thickness),
+    depth,
+  });
+  const narrower = Math.min(top.width, bottom.width);
+  requireShape(web < narrower, 'its web is thicker than its flange is wide', { web, flange: narrower });
   const right = [...flangeCorners(bottom, web, -depth / 2, 1), ...flangeCorners(top, web, depth / 2, -1).reverse()];
   const left = right.map(({ at, radius }) => corner(-at[0], at[1], radius)).reverse();
   return {

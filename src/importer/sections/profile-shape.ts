@@ -78,7 +78,9 @@ export function requirePositive(lengths: Readonly<Record<string, number>>): void
 const formatted = (length: number): string =>
   Number.isFinite(length) ? `${inMillimetres(length)} mm` : 'missing or no number';
 
-/** @throws NotRead (no-section) with `reason` where the dimensions cannot be those of such a shape. */
-export function requireShape(holds: boolean, reason: string): void {
-  if (!holds) throw noSection(reason);
+/** @throws NotRead (no-section) with `reason` and the `lengths` (metres) that it speaks of, where these cannot be those of such a shape. */
+export function requireShape(holds: boolean, reason: string, lengths: Readonly<Record<string, number>> = {}): void {
+  if (holds) return;
+  const told = Object.entries(lengths).map(([what, length]) => `${what} ${formatted(length)}`);
+  throw noSection(told.length === 0 ? reason : `${reason} (${told.join(', ')})`);
 }

@@ -5,6 +5,7 @@ import { NotRead, noSection } from '../not-read.ts';
 import { planeOf, readOperator, readPlaneAxes } from '../placement-axes.ts';
 import type { Reading } from '../reading.ts';
 import { inWords } from '../words.ts';
+import { orImpossible } from './impossible-profile.ts';
 import { composeMaps, type Edge, mapOutline, type PlaneMap, type Point2, type Ring, SAME_PLANE } from './outline.ts';
 import { parametricShape } from './parametric-profile.ts';
 import { type ProfileShape, sectionOf } from './profile-shape.ts';
@@ -39,7 +40,7 @@ export function readProfile(reading: Reading, id: number, depth = 0): Profile {
   if (type === 'IFCCENTERLINEPROFILEDEF') {
     return { id, shape: centreLineShape(reading, args, name), map: SAME_PLANE };
   }
-  const shape = parametricShape(reading, type, args, name);
+  const shape = orImpossible(name, () => parametricShape(reading, type, args, name));
   if (shape !== null) return { id, shape, map: readPlaneAxes(reading, args[2]) };
   throw noSection(type === '' ? 'its profile is missing' : `its profile is ${inWords(type)}, which is not read`);
 }

@@ -18,8 +18,8 @@ export interface UDimensions {
 /** Channel with its web on the left, open to the right. */
 export function uShape(name: string | null, d: UDimensions): ProfileShape {
   requirePositive({ depth: d.depth, width: d.width, 'web thickness': d.web, 'flange thickness': d.flange });
-  requireShape(2 * d.flange < d.depth, 'its flanges are thicker than it is deep');
-  requireShape(d.web < d.width, 'its web is thicker than its flange is wide');
+  requireShape(2 * d.flange < d.depth, 'its flanges are thicker than it is deep', { flange: d.flange, depth: d.depth });
+  requireShape(d.web < d.width, 'its web is thicker than its flange is wide', { web: d.web, flange: d.width });
   // A sloped flange has its nominal thickness half its width from the edge (EN 10365, UPN up to 300).
   const rise = Math.tan(d.slope);
   const tip = d.flange - (rise * d.width) / 2;
@@ -71,7 +71,7 @@ export interface LDimensions {
 export function lShape(name: string | null, d: LDimensions): ProfileShape {
   const { depth, width, thickness: t } = d;
   requirePositive({ depth, width, thickness: t });
-  requireShape(t < Math.min(depth, width), 'its legs are thicker than they are long');
+  requireShape(t < Math.min(depth, width), 'its legs are thicker than they are long', { thickness: t, depth, width });
   const x = width / 2;
   const y = depth / 2;
   // Sloped legs have their nominal thickness half way along.
@@ -115,8 +115,8 @@ export interface TDimensions {
 export function tShape(name: string | null, d: TDimensions): ProfileShape {
   const { depth, width, web, flange } = d;
   requirePositive({ depth, width, 'web thickness': web, 'flange thickness': flange });
-  requireShape(flange < depth, 'its flange is thicker than it is deep');
-  requireShape(web < width, 'its web is thicker than its flange is wide');
+  requireShape(flange < depth, 'its flange is thicker than it is deep', { flange, depth });
+  requireShape(web < width, 'its web is thicker than its flange is wide', { web, flange: width });
   const x = width / 2;
   const y = depth / 2;
   // Sloped parts have their nominal thickness half way along what stands out.

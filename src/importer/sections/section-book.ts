@@ -5,8 +5,10 @@ import type { Remark } from '../findings-log.ts';
 import { NotRead, noSection } from '../not-read.ts';
 import type { Reading } from '../reading.ts';
 import { across, firstAcross } from '../transform.ts';
+import { calledOtherwise } from './called-otherwise.ts';
 import { chs, circle } from './closed-shapes.ts';
 import { sectionNamedIn } from './designations/section-from-designation.ts';
+import { ImpossibleProfile, namedInstead } from './impossible-profile.ts';
 import { knownByName } from './known-outline.ts';
 import { mapOutline, mapPoint, type PlaneMap, type Point2, SAME_PLANE } from './outline.ts';
 import { type Profile, readProfile } from './profile.ts';
@@ -28,7 +30,7 @@ export class SectionBook {
   private readonly views = new Map<number, Map<number | string, Section>>();
   private readonly disks = new Map<string, number>();
   private readonly withoutOutline = new Map<number, Section | null>();
-  private readonly contradictions = new Map<number, Remark | null>();
+  private readonly contradictions = new Map<number, readonly Remark[]>();
   private stated: ReadonlyMap<number, StatedSection> | null = null;
 
   constructor(reading: Reading) {
@@ -42,8 +44,11 @@ export class SectionBook {
     return found;
   }
 
-  canRead(id: number): boolean {
-    return !(this.profileOrRefusal(id) instanceof NotRead);
+  /** Why the profile gives no section, not even by its name or its stated numbers where it is impossible; null where it does. */
+  refusalOf(id: number): NotRead | null {
+    const found = this.profileOrRefusal(id);
+    if (!(found instanceof NotRead)) return null;
+    return found instanceof ImpossibleProfile && this.sectionWithoutOutline(id) !== null ? null : found;
   }
 
   private profileOrRefusal(id: number): Profile | NotRead {
@@ -67,8 +72,12 @@ export class SectionBook {
   private withWhatIsKnown(id: number, profile: Profile): Profile {
     const shape = knownByName(profile.shape);
     const stated = this.statedOf(id);
+    const remarks = [
+      calledOtherwise(shape, shape.name),
+      stated === null ? null : disagreement(sectionOf(shape), stated),
+    ].filter((remark) => remark !== null);
+    if (remarks.length > 0) this.contradictions.set(id, remarks);
     if (stated === null) return { ...profile, shape };
-    this.contradictions.set(id, disagreement(sectionOf(shape), stated));
     const warping = shape.shape === 'other' && shape.warping === 0 ? (stated.warping ?? 0) : shape.warping;
     return { ...profile, shape: { ...shape, torsion: shape.torsion ?? stated.torsion ?? null, warping } };
   }
@@ -122,10 +131,11 @@ export class SectionBook {
     if (profile instanceof NotRead) {
       const section = this.sectionWithoutOutline(id);
       if (section === null) throw profile;
+      if (profile instanceof ImpossibleProfile) this.reading.note(namedInstead(profile, section.name));
       return { section, zAxis: firstAcross(along, across(y, along)) };
     }
-    const contradiction = this.contradictions.get(id) ?? null;
-    if (contradiction !== null) this.reading.note(contradiction);
+    const contradictions = this.contradictions.get(id);
+    if (contradictions !== undefined) for (const remark of contradictions) this.reading.note(remark);
     const { shape, map } = profile;
     const own = (d: Point2): Vec3 => [x[0] * d[0] + y[0] * d[1], x[1] * d[0] + y[1] * d[1], x[2] * d[0] + y[2] * d[1]];
     const sideways = across(own(map.x), along);
