@@ -182,6 +182,35 @@ const eccentricitySchema = z.strictObject({
   from: textOrNull,
 });
 
+const governingReaction = z
+  .strictObject({
+    force: z.number().describe('N, not negative'),
+    from: text,
+    reaction: vector.describe('N, the whole reaction that acts together with it'),
+  })
+  .nullable();
+
+const bearingSchema = z.strictObject({
+  node: text,
+  down: governingReaction,
+  uplift: governingReaction,
+  horizontal: governingReaction,
+});
+
+const jointSchema = z.strictObject({
+  node: text,
+  bars: z.array(text),
+  states: z.array(
+    z.strictObject({
+      from: text,
+      governs: z.array(text).describe('bars whose greatest tension or compression this is'),
+      forces: z.array(z.number().nullable()).describe('N, tension positive, one per bar of the joint'),
+      reaction: vector.nullable().describe('N, global axes; null where nothing supports the joint'),
+      loads: vector.nullable().describe('N, global axes; what closes the sum of the rest'),
+    }),
+  ),
+});
+
 export const resultSchema = z.strictObject({
   format: z.literal('pinwright-result'),
   version: z.literal(1),
@@ -210,6 +239,8 @@ export const resultSchema = z.strictObject({
     .array(z.strictObject({ bar: text, node: text, moment: z.number().describe('Nm'), from: text }))
     .optional()
     .describe('greatest moment that the nodes a bar carries cause in it; not checked'),
+  bearings: z.array(bearingSchema).optional().describe('what each support has to bear at most'),
+  joints: z.array(jointSchema).optional().describe('what the connection of each joint is designed for'),
 });
 
 export type Result = z.infer<typeof resultSchema>;

@@ -17,6 +17,7 @@ import type {
   Supports,
 } from '../statics/types.ts';
 import type { JoinLimits } from '../topology/limits.ts';
+import { resultSchedules } from './schedules/result-schedules.ts';
 
 /** Everything a run found, by index; the result says the same by name. */
 export interface RunRecord {
@@ -46,7 +47,7 @@ const barId = (index: number): string => `b${index + 1}`;
 export function assembleResult(run: RunRecord): Result {
   const { truss, members } = run;
   const fixed = fixedLetters(run.supports);
-  return {
+  const result: Result = {
     format: 'pinwright-result',
     version: 1,
     generator: run.generator,
@@ -90,6 +91,7 @@ export function assembleResult(run: RunRecord): Result {
     })),
     bending: run.bending.map(({ bar, node, ...rest }) => ({ bar: barId(bar), node: nodeId(node), ...rest })),
   };
+  return { ...result, ...resultSchedules(result) };
 }
 
 function resultLimits({ reach, offset }: JoinLimits): NonNullable<Result['joining']> {

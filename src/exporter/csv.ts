@@ -1,6 +1,7 @@
 import type { Result } from '../domain/result.ts';
 import { type Chunks, encodeText } from './chunks.ts';
-import { type Cell, TABLES, type Table, type TableName } from './tables.ts';
+import type { Cell, Table } from './table.ts';
+import { TABLES, type TableName } from './tables.ts';
 
 /** One table of the result as comma separated values: RFC 4180, UTF-8 without a mark, units in the heads, SI. */
 export function tableToCsv(result: Result, name: TableName): Chunks {

@@ -1,14 +1,8 @@
 import type { Result } from '../domain/result.ts';
-import { distance, type Vec3 } from '../domain/vector.ts';
-
-/** One cell; null is an empty one. */
-export type Cell = string | number | null;
-
-/** A table of the result. Heads carry the unit in brackets; rows come one at a time, since a large roof has many. */
-export interface Table {
-  readonly heads: readonly string[];
-  readonly rows: Iterable<readonly Cell[]>;
-}
+import { distance } from '../domain/vector.ts';
+import { bearingsTable } from './schedules/bearings-table.ts';
+import { jointsTable } from './schedules/joints-table.ts';
+import { type Cell, coordinates, each, joined, type Table } from './table.ts';
 
 /** Every table of the result by its name, in the order in which one reads them. */
 export const TABLES = {
@@ -16,6 +10,8 @@ export const TABLES = {
   members: membersTable,
   nodes: nodesTable,
   reactions: reactionsTable,
+  bearings: bearingsTable,
+  joints: jointsTable,
   envelope: envelopeTable,
   forces: forcesTable,
   displacements: displacementsTable,
@@ -27,13 +23,6 @@ export const TABLES = {
 export type TableName = keyof typeof TABLES;
 
 export const TABLE_NAMES = Object.keys(TABLES) as readonly TableName[];
-
-const joined = (words: readonly string[]): string | null => (words.length === 0 ? null : words.join(' '));
-const coordinates = (at: Vec3 | null): readonly Cell[] => at ?? [null, null, null];
-
-function* each<T>(items: readonly T[], row: (item: T, index: number) => readonly Cell[]): Generator<readonly Cell[]> {
-  for (const [index, item] of items.entries()) yield row(item, index);
-}
 
 /** The bars with their members and their greatest forces: what goes to whoever designs the connections. */
 function barsTable(result: Result): Table {

@@ -2,7 +2,8 @@ import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import { joinChunks } from '../../src/exporter/chunks.ts';
 import { csvCell, csvLines, tableToCsv } from '../../src/exporter/csv.ts';
-import { type Cell, TABLE_NAMES, TABLES } from '../../src/exporter/tables.ts';
+import type { Cell } from '../../src/exporter/table.ts';
+import { TABLE_NAMES, TABLES } from '../../src/exporter/tables.ts';
 import { someResult } from './support.ts';
 
 const text = (chunks: Iterable<Uint8Array>) => new TextDecoder().decode(joinChunks(chunks));
