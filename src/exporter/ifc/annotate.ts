@@ -7,6 +7,7 @@ import type { Chunks } from '../chunks.ts';
 import { Block } from './block.ts';
 import { findElements } from './element-index.ts';
 import { elementForces, listedByKey } from './member-forces.ts';
+import { elementLengths } from './member-lengths.ts';
 import { forbidForeignInBlock, forbidReferencesIntoBlock } from './own-block.ts';
 import { ownerHistory } from './owner-history.ts';
 import { type Common, writeSet } from './property-set.ts';
@@ -37,8 +38,7 @@ function* blockLines(file: StepFile, result: Result): Generator<string> {
   const block = new Block(file, mostInstances(elements.length));
   const project = projectOf(file);
   const owner = ownerHistory(file, project?.id ?? null, result.generator.version, block);
-  const newton = block.add('IFCSIUNIT', DERIVED, enumeration('FORCEUNIT'), null, enumeration('NEWTON'));
-  const common: Common = { owner, newton };
+  const common: Common = { owner, units: writeUnits(block) };
   const setsByName = new Map<SetName, StepRef[]>();
   const write = <S extends SetName>(name: S, values: SetValues<S>, { globalId, ids }: Target) => {
     const sets = setsByName.get(name) ?? [];
@@ -48,16 +48,25 @@ function* blockLines(file: StepFile, result: Result): Generator<string> {
 
   if (project !== null) write('Pinwright_Run', runValues(result), { globalId: project.globalId, ids: [project.id] });
   const forcesOf = result.cases.length > 0 ? elementForces(result) : () => null;
+  const lengthsOf = elementLengths(result);
   const findingsOf = listedByKey(result.findings, (finding) => [...new Set(finding.members)]);
   for (const element of elements) {
     const forces = forcesOf(element.globalId);
     if (forces !== null) write('Pinwright_Forces', forceValues(forces, result), element);
+    const lengths = lengthsOf(element.globalId);
+    if (lengths !== null) write('Pinwright_Lengths', lengths, element);
     const findings = findingsOf.get(element.globalId)?.map((k) => result.findings[k]);
     if (findings !== undefined) write('Pinwright_Findings', findingValues(findings), element);
     yield* block.take();
   }
   if (!block.isIfc2x3 && project !== null) writeTemplates(block, common, project, setsByName);
   yield* block.take();
+}
+
+function writeUnits(block: Block): Common['units'] {
+  const unit = (kind: string, name: string) =>
+    block.add('IFCSIUNIT', DERIVED, enumeration(kind), null, enumeration(name));
+  return { IfcForceMeasure: unit('FORCEUNIT', 'NEWTON'), IfcLengthMeasure: unit('LENGTHUNIT', 'METRE') };
 }
 
 /** The instances of one GlobalId: several where it stands twice in the file. */
@@ -87,5 +96,5 @@ function projectOf(file: StepFile): { readonly id: number; readonly globalId: st
 
 /** More than are ever written: properties, sets and relationships of an element, then the templates and the rest once. */
 function mostInstances(elements: number): number {
-  return 25 * elements + 200;
+  return 45 * elements + 300;
 }

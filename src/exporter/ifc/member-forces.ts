@@ -1,5 +1,6 @@
 import type { Result, ResultBar, ResultMember } from '../../domain/result.ts';
 import { along, distance, dot, subtract, type Vec3 } from '../../domain/vector.ts';
+import { type Bearing, type BearingKind, bearings, type GoverningReaction } from '../schedules/bearings.ts';
 
 export interface Extreme {
   readonly force: number;
@@ -24,6 +25,8 @@ export interface ElementForces {
   readonly byRun: readonly (readonly [run: string, force: number])[];
   /** Cases or combinations without a force for some bar of the element. */
   readonly missingRuns: number;
+  /** Of the supports at its ends, the greatest of each kind; null where it stands on none. */
+  readonly support: Omit<Bearing, 'node'> | null;
 }
 
 /** Forces by GlobalId of every element that bars stand for. */
@@ -32,6 +35,7 @@ export function elementForces(result: Result): (globalId: string) => ElementForc
   const membersOf = listedByKey(result.members, (member) => [member.globalId]);
   const at = new Map(result.nodes.map((node) => [node.id, node.at]));
   const envelope = new Map(result.envelope.map((entry) => [entry.bar, entry]));
+  const bearingOf = new Map(bearings(result).map((bearing) => [bearing.node, bearing]));
   const runs = result.combinations.length > 0 ? result.combinations : result.cases;
 
   return (globalId) => {
@@ -60,12 +64,27 @@ export function elementForces(result: Result): (globalId: string) => ElementForc
         const force = largest(ordered.map((index) => run.axialForce[index] ?? null));
         return force === null ? [] : [[run.name, force] as const];
       }),
+      support: greatest(
+        ordered.flatMap((index) => endsOf(result.bars[index]).flatMap((node) => bearingOf.get(node) ?? [])),
+      ),
       missingRuns: runs.filter((run) => ordered.some((index) => (run.axialForce[index] ?? null) === null)).length,
     };
   };
 }
 
 const elementsOf = (bar: ResultBar): readonly string[] => [...new Set(bar.members ?? [bar.member])];
+
+const endsOf = ({ from, to }: ResultBar): readonly string[] => [from, to];
+
+function greatest(supports: readonly Bearing[]): Omit<Bearing, 'node'> | null {
+  if (supports.length === 0) return null;
+  const of = (kind: BearingKind) =>
+    supports.reduce<GoverningReaction | null>((most, bearing) => {
+      const here = bearing[kind];
+      return here !== null && here.force > (most?.force ?? 0) ? here : most;
+    }, null);
+  return { down: of('down'), uplift: of('uplift'), horizontal: of('horizontal') };
+}
 
 /** Under each key the indices of the items that have it. */
 export function listedByKey<T>(items: readonly T[], keysOf: (item: T) => readonly string[]): Map<string, number[]> {

@@ -14,6 +14,8 @@ export const OWN_TYPES: ReadonlySet<string> = new Set([
   'IFCPROPERTYLISTVALUE',
   'IFCPROPERTYTABLEVALUE',
   'IFCPROPERTYSET',
+  'IFCQUANTITYLENGTH',
+  'IFCELEMENTQUANTITY',
   'IFCRELDEFINESBYPROPERTIES',
   'IFCSIMPLEPROPERTYTEMPLATE',
   'IFCPROPERTYSETTEMPLATE',
@@ -21,7 +23,7 @@ export const OWN_TYPES: ReadonlySet<string> = new Set([
   'IFCRELDECLARES',
 ]);
 
-const NAMED_TYPES = ['IFCPROPERTYSET', 'IFCPROPERTYSETTEMPLATE'];
+const NAMED_TYPES = ['IFCPROPERTYSET', 'IFCELEMENTQUANTITY', 'IFCPROPERTYSETTEMPLATE'];
 
 /**
  * Throws a ModelError if something that Pinwright did not write stands between its comments: replacing or removing the

@@ -3,6 +3,8 @@ import { refs, typed, type ValueToWrite } from '../../step/write.ts';
 import { type Block, label, measured } from './block.ts';
 import {
   definitionOf,
+  holdsQuantities,
+  type Measure,
   type PropertyDefinition,
   type PropertyValue,
   type SetName,
@@ -14,7 +16,8 @@ import {
 /** What all sets of a block share. */
 export interface Common {
   readonly owner: StepRef | null;
-  readonly newton: StepRef;
+  /** Units are always said, since forces and lengths here are SI whatever the project's own units. */
+  readonly units: Readonly<Partial<Record<Measure, StepRef>>>;
 }
 
 /**
@@ -23,33 +26,39 @@ export interface Common {
  */
 export function writeSet<S extends SetName>(
   block: Block,
-  { owner, newton }: Common,
+  { owner, units }: Common,
   name: S,
   values: SetValues<S>,
   of: string,
   objects: readonly number[],
 ): StepRef {
   const properties: StepRef[] = [];
-  for (const [property, definition] of Object.entries(definitionOf(name).properties)) {
+  const set = definitionOf(name);
+  for (const [property, definition] of Object.entries(set.properties)) {
     const value = (values as Readonly<Record<string, PropertyValue | undefined>>)[property];
     if (value === null || value === undefined || (Array.isArray(value) && value.length === 0)) continue;
-    properties.push(writeProperty(block, newton, property, definition, value));
+    properties.push(writeProperty(block, units[definition.measure] ?? null, property, definition, value));
   }
   const globalId = block.globalId(name, of);
-  const set = block.add('IFCPROPERTYSET', globalId, owner, name, null, properties);
+  const written = holdsQuantities(set)
+    ? block.add('IFCELEMENTQUANTITY', globalId, owner, name, null, 'Pinwright', properties)
+    : block.add('IFCPROPERTYSET', globalId, owner, name, null, properties);
   const tie = block.globalId('defines', globalId);
-  block.add('IFCRELDEFINESBYPROPERTIES', tie, owner, null, null, refs(objects), set);
-  return set;
+  block.add('IFCRELDEFINESBYPROPERTIES', tie, owner, null, null, refs(objects), written);
+  return written;
 }
 
 function writeProperty(
   block: Block,
-  newton: StepRef,
+  unit: StepRef | null,
   name: string,
   { kind, measure }: PropertyDefinition,
   value: NonNullable<PropertyValue>,
 ): StepRef {
-  const unit = measure === 'IfcForceMeasure' ? newton : null;
+  if (kind === 'quantity') {
+    const formula: ValueToWrite[] = block.isIfc2x3 ? [] : [null];
+    return block.add('IFCQUANTITYLENGTH', name, null, unit, value as number, ...formula);
+  }
   if (kind === 'single') {
     return block.add('IFCPROPERTYSINGLEVALUE', name, null, measured(measure, value as Value), unit);
   }

@@ -1,10 +1,10 @@
 /** What Pinwright writes on elements and on the project: one table for the property sets and for their templates. */
 
-export type Measure = 'IfcForceMeasure' | 'IfcInteger' | 'IfcLabel' | 'IfcText';
+export type Measure = 'IfcForceMeasure' | 'IfcInteger' | 'IfcLabel' | 'IfcLengthMeasure' | 'IfcText';
 
 export interface PropertyDefinition {
-  /** Tables define by a label and hold `measure`. */
-  readonly kind: 'single' | 'list' | 'table';
+  /** Tables define by a label and hold `measure`; quantities are lengths. */
+  readonly kind: 'single' | 'list' | 'table' | 'quantity';
   readonly measure: Measure;
   readonly says: string;
 }
@@ -17,6 +17,7 @@ export interface SetDefinition {
 
 const single = (measure: Measure, says: string): PropertyDefinition => ({ kind: 'single', measure, says });
 const list = (measure: Measure, says: string): PropertyDefinition => ({ kind: 'list', measure, says });
+const quantity = (says: string): PropertyDefinition => ({ kind: 'quantity', measure: 'IfcLengthMeasure', says });
 const table = (measure: Measure, says: string): PropertyDefinition => ({ kind: 'table', measure, says });
 
 /** Many viewers show single values only, so every headline is one; lists and tables come in addition. */
@@ -46,6 +47,26 @@ export const SET_DEFINITIONS = {
       CompressionAlongElement: list('IfcForceMeasure', 'Greatest compression of each bar in order along the element.'),
       ForceByCombination: table('IfcForceMeasure', 'Force of the bar with the largest one, by combination.'),
       ForceByCase: table('IfcForceMeasure', 'Force of the bar with the largest one, by load case.'),
+      SupportDown: single(
+        'IfcForceMeasure',
+        'Greatest downward force that this element brings to a support at its end.',
+      ),
+      SupportDownFrom: single('IfcLabel', 'Combination or case that it comes from.'),
+      SupportUplift: single('IfcForceMeasure', 'Greatest uplift at a support at an end of this element.'),
+      SupportUpliftFrom: single('IfcLabel', 'Combination or case that it comes from.'),
+      SupportHorizontal: single('IfcForceMeasure', 'Greatest horizontal force at a support at an end of this element.'),
+      SupportHorizontalFrom: single('IfcLabel', 'Combination or case that it comes from.'),
+      SupportNote: single('IfcText', 'What the support forces are.'),
+    },
+  },
+  Pinwright_Lengths: {
+    says: 'Lengths of this element as a line of force; quantities of the idealised truss, not of the steel.',
+    applicableTo: 'IfcElement',
+    properties: {
+      AxisAsDrawn: quantity('Length of the axis as the model has it.'),
+      BetweenJoints: quantity('Length of all its bars between joints.'),
+      LongestBar: quantity('Length of its longest bar between joints.'),
+      GreatestShift: quantity('How far joining moved its nodes off the axis as drawn, at most.'),
     },
   },
   Pinwright_Findings: {
@@ -81,6 +102,10 @@ export const SET_DEFINITIONS = {
     },
   },
 } as const satisfies Readonly<Record<string, SetDefinition>>;
+
+/** Sets that hold quantities are an IfcElementQuantity, all others an IfcPropertySet. */
+export const holdsQuantities = ({ properties }: SetDefinition): boolean =>
+  Object.values(properties).every(({ kind }) => kind === 'quantity');
 
 export type SetName = keyof typeof SET_DEFINITIONS;
 

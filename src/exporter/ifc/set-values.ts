@@ -1,4 +1,5 @@
 import type { Result, ResultFinding } from '../../domain/result.ts';
+import { ultimateTitle } from '../schedules/runs.ts';
 import { count, envelopeTitle, verdict } from '../verdict.ts';
 import type { BarForces, ElementForces } from './member-forces.ts';
 import type { SetValues } from './set-definitions.ts';
@@ -26,6 +27,21 @@ export function forceValues(forces: ElementForces, result: Result): SetValues<'P
     TensionAlongElement: complete ? bars.map((bar) => bar.tension?.force ?? 0) : null,
     CompressionAlongElement: complete ? bars.map((bar) => bar.compression?.force ?? 0) : null,
     [result.combinations.length > 0 ? 'ForceByCombination' : 'ForceByCase']: byRun,
+    ...supportValues(forces, result),
+  };
+}
+
+function supportValues({ support }: ElementForces, result: Result): SetValues<'Pinwright_Forces'> {
+  if (support === null) return {};
+  const { down, uplift, horizontal } = support;
+  return {
+    SupportDown: down?.force ?? 0,
+    SupportDownFrom: down?.from ?? null,
+    SupportUplift: uplift?.force ?? 0,
+    SupportUpliftFrom: uplift?.from ?? null,
+    SupportHorizontal: horizontal?.force ?? 0,
+    SupportHorizontalFrom: horizontal?.from ?? null,
+    SupportNote: `Of the whole joint at the support, all bars that meet there together (${ultimateTitle(result)}).`,
   };
 }
 

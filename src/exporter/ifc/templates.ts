@@ -2,7 +2,7 @@ import type { StepRef } from '../../step/values.ts';
 import { enumeration, ref, type ValueToWrite } from '../../step/write.ts';
 import type { Block } from './block.ts';
 import type { Common } from './property-set.ts';
-import { definitionOf, type PropertyDefinition, type SetName } from './set-definitions.ts';
+import { definitionOf, holdsQuantities, type PropertyDefinition, type SetName } from './set-definitions.ts';
 
 /** So that one relationship stays a line of reasonable length however many elements there are. */
 const SETS_A_RELATIONSHIP = 1000;
@@ -35,22 +35,22 @@ export function writeTemplates(
   block.add('IFCRELDECLARES', declares, owner, null, null, ref(project.id), templates);
 }
 
-function writeTemplate(block: Block, { owner, newton }: Common, name: SetName, globalId: string): StepRef {
-  const { says, applicableTo, properties } = definitionOf(name);
+function writeTemplate(block: Block, { owner, units }: Common, name: SetName, globalId: string): StepRef {
+  const set = definitionOf(name);
+  const { says, applicableTo, properties } = set;
   const templates = Object.entries(properties).map(([property, definition]) => {
     const id = block.globalId('template', `${globalId} ${property}`);
-    const rest = valueParameters(definition, newton);
+    const rest = valueParameters(definition, units[definition.measure] ?? null);
     return block.add('IFCSIMPLEPROPERTYTEMPLATE', id, owner, property, definition.says, ...rest);
   });
-  const type = enumeration('PSET_OCCURRENCEDRIVEN');
+  const type = enumeration(holdsQuantities(set) ? 'QTO_OCCURRENCEDRIVEN' : 'PSET_OCCURRENCEDRIVEN');
   return block.add('IFCPROPERTYSETTEMPLATE', globalId, owner, name, says, type, applicableTo, templates);
 }
 
 /** TemplateType, both measures, Enumerators, both units, Expression, AccessState. */
-function valueParameters({ kind, measure }: PropertyDefinition, newton: StepRef): readonly ValueToWrite[] {
-  const unit = measure === 'IfcForceMeasure' ? newton : null;
-  const type = { single: 'P_SINGLEVALUE', list: 'P_LISTVALUE', table: 'P_TABLEVALUE' }[kind];
-  const measures = kind === 'table' ? ['IfcLabel', measure] : [measure, null];
+function valueParameters({ kind, measure }: PropertyDefinition, unit: StepRef | null): readonly ValueToWrite[] {
+  const type = { single: 'P_SINGLEVALUE', list: 'P_LISTVALUE', table: 'P_TABLEVALUE', quantity: 'Q_LENGTH' }[kind];
+  const measures = kind === 'quantity' ? [null, null] : kind === 'table' ? ['IfcLabel', measure] : [measure, null];
   const units = kind === 'table' ? [null, unit] : [unit, null];
   return [enumeration(type), ...measures, null, ...units, null, enumeration('READONLY')];
 }

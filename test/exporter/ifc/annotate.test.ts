@@ -105,7 +105,10 @@ describe('what is appended', () => {
 
   it('says no force that was not found', () => {
     const result = someResult([BEAM, COLUMN]);
-    for (const run of [...result.cases, ...result.combinations]) run.axialForce = result.bars.map(() => null);
+    for (const run of [...result.cases, ...result.combinations]) {
+      run.axialForce = result.bars.map(() => null);
+      run.reactions = [];
+    }
     result.envelope = result.bars.map(({ id }) => ({ bar: id, tension: null, compression: null }));
     const after = annotated(model('IFC4'), result);
     expect(after).not.toContain("IFCPROPERTYSINGLEVALUE('GreatestTension'");
@@ -117,6 +120,28 @@ describe('what is appended', () => {
     const result = someResult([BEAM, COLUMN]);
     result.envelope = result.envelope.map((entry) => ({ ...entry, tension: null }));
     expect(annotated(model('IFC4'), result)).toContain("'GreatestTension',$,IFCFORCEMEASURE(0.)");
+  });
+
+  it('carries lengths as quantities in metres, whatever the unit of the project', () => {
+    const result = someResult([BEAM]);
+    const after = annotated(model('IFC4'), result);
+    const metre = /#(\d+)=IFCSIUNIT\(\*,\.LENGTHUNIT\.,\$,\.METRE\.\)/.exec(after)![1];
+    expect(after).toContain(`IFCQUANTITYLENGTH('AxisAsDrawn',$,#${metre},6.,$)`);
+    expect(after).toContain(`IFCQUANTITYLENGTH('LongestBar',$,#${metre},3.,$)`);
+    expect(after).toMatch(/IFCELEMENTQUANTITY\('[^']{22}',\$,'Pinwright_Lengths',\$,'Pinwright',\(#/);
+    expect(annotated(model('IFC2X3'), result)).toMatch(/IFCQUANTITYLENGTH\('LongestBar',\$,#\d+,3\.\)/);
+  });
+
+  it('says what comes to the supports at its ends, and nothing of that on an element that stands on none', () => {
+    const result = someResult([BEAM, COLUMN]);
+    for (const run of [...result.cases, ...result.combinations]) run.reactions = [];
+    result.combinations[0].reactions = [{ node: result.bars[0].from, force: [3000, -4000, 12_000] }];
+    result.combinations[0].limit = 'strength';
+    const after = annotated(model('IFC4'), result);
+    expect(after).toMatch(/'SupportDown',\$,IFCFORCEMEASURE\(12000\.\)/);
+    expect(after).toMatch(/'SupportHorizontal',\$,IFCFORCEMEASURE\(5000\.\)/);
+    expect(after).toMatch(/'SupportUplift',\$,IFCFORCEMEASURE\(0\.\)/);
+    expect(after.match(/IFCPROPERTYSINGLEVALUE\('SupportDown',/g)).toHaveLength(1);
   });
 
   it('lists the bars in order along the member, whichever way the result has them', () => {
@@ -153,9 +178,9 @@ describe('what is appended', () => {
   it('has no templates in IFC2X3, and declared ones in IFC4', () => {
     expect(annotated(model('IFC2X3'))).not.toContain('TEMPLATE');
     const after = annotated(model('IFC4'));
-    expect(after.match(/=IFCPROPERTYSETTEMPLATE\(/g)).toHaveLength(3);
-    expect(after.match(/=IFCRELDEFINESBYTEMPLATE\(/g)).toHaveLength(3);
-    expect(after).toMatch(/=IFCRELDECLARES\('[^']{22}',\$,\$,\$,#1,\(#\d+,#\d+,#\d+\)\)/);
+    expect(after.match(/=IFCPROPERTYSETTEMPLATE\(/g)).toHaveLength(4);
+    expect(after.match(/=IFCRELDEFINESBYTEMPLATE\(/g)).toHaveLength(4);
+    expect(after).toMatch(/=IFCRELDECLARES\('[^']{22}',\$,\$,\$,#1,\(#\d+,#\d+,#\d+,#\d+\)\)/);
   });
 
   it('uses the owner history of an IFC2X3 project, or brings its own with the time of the file', () => {
