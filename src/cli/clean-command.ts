@@ -5,6 +5,7 @@ import { setTracesAside } from '../exporter/ifc/own-traces.ts';
 import { planOutputs } from '../exporter/outputs.ts';
 import { count } from '../exporter/verdict.ts';
 import { writeOutputs } from '../exporter/write-outputs.ts';
+import { zipOne } from '../exporter/zip-one.ts';
 import { openModel } from '../importer/files/open-model.ts';
 import { namingModel } from './failure.ts';
 import { readModelBytes } from './read-files.ts';
@@ -18,20 +19,22 @@ interface CleanFlags {
 export function withCleanOptions(command: Command): Command {
   return command
     .argument('<model>', 'an IFC file with results in it')
-    .requiredOption('-o, --output <file>', 'the model without them (.ifc)')
+    .requiredOption('-o, --output <file>', 'the model without them (.ifc or .ifczip)')
     .option('--quiet', 'say nothing');
 }
 
 /** Writes the model without what Pinwright has put into it: byte for byte as it was, where our comments still stand. */
 export async function cleanCommand(model: string, { output, quiet }: CleanFlags): Promise<void> {
   const plan = planOutputs([output], model);
-  if (plan.files[0]?.content.kind !== 'ifc') throw new RequestError(`${output}: clean writes a model; name an .ifc`);
+  if (!plan.files.every(({ content }) => content.kind === 'ifc' || content.kind === 'ifczip') || plan.stdout) {
+    throw new RequestError(`${output}: clean writes a model; name an .ifc or .ifczip`);
+  }
   const bytes = readModelBytes(model);
   const { traces, cleaned } = await namingModel(model, async () => {
     const aside = setTracesAside((await openModel(bytes)).file);
     return { traces: aside, cleaned: clean(aside.file) };
   });
-  await writeOutputs(plan, () => cleaned);
+  await writeOutputs(plan, (content) => (content.kind === 'ifczip' ? zipOne(content.name, cleaned) : cleaned));
   if (!quiet) process.stdout.write(`${told(model, traces)}\nWritten: ${output}\n`);
 }
 

@@ -5,6 +5,7 @@ import { tableToCsv } from './csv.ts';
 import { annotate } from './ifc/annotate.ts';
 import { resultToJson } from './json.ts';
 import type { Content } from './outputs.ts';
+import { zipOne } from './zip-one.ts';
 
 /** What each planned file holds for this result; `file` is the model that an annotated copy is made of. */
 export function contentOf(result: Result, file: StepFile): (content: Content) => Chunks {
@@ -16,6 +17,8 @@ export function contentOf(result: Result, file: StepFile): (content: Content) =>
         return tableToCsv(result, content.table);
       case 'ifc':
         return annotate(file, result);
+      case 'ifczip':
+        return zipOne(content.name, annotate(file, result));
     }
   };
 }

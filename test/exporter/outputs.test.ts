@@ -63,7 +63,7 @@ describe('planning the outputs', () => {
     expect(readdirSync(folder)).toEqual(['roof.ifc']);
   });
 
-  it.each(['x.ifczip', 'x.xlsx', 'x.html', 'x.bcf', 'x.bcfzip', 'x.svg'])('says that %s is not written yet', (name) => {
+  it.each(['x.xlsx', 'x.html', 'x.bcf', 'x.bcfzip', 'x.svg'])('says that %s is not written yet', (name) => {
     refuses([name], /is not written yet; written are \.json \.csv \.csv\/ \.ifc/);
   });
 
