@@ -14,6 +14,18 @@ export type { Material, Member, Section } from './domain/member.ts';
 export type { Result } from './domain/result.ts';
 export type { Truss, TrussBar, TrussNode } from './domain/truss.ts';
 export type { Vec3 } from './domain/vector.ts';
+export { tellingElevations } from './drawing/elevations.ts';
+export { type RasterOptions, rasterise } from './drawing/rasterise.ts';
+export { type Scene, sceneOf } from './drawing/scene.ts';
+export { drawSheet, type SheetOptions } from './drawing/sheet.ts';
+export {
+  elevationLooking,
+  elevationThrough,
+  planBetween,
+  type View,
+  WHOLE_ISOMETRIC,
+  WHOLE_PLAN,
+} from './drawing/view.ts';
 export { annotate } from './exporter/ifc/annotate.ts';
 export { resultJsonSchema, resultToJson } from './exporter/json.ts';
 export { summarise } from './exporter/summary.ts';

@@ -25,7 +25,7 @@ export function withRunOptions(command: Command): Command {
     .option('--brief <file>', 'scope, joints, supports, loads and combinations (YAML or JSON)')
     .option(
       '-o, --output <file>',
-      'write a result; the ending picks the format (.json .csv .csv/ .ifc .ifczip), - is JSON on stdout; may be repeated',
+      'write a result; the ending picks the format (.json .csv .csv/ .ifc .ifczip .svg), - is JSON on stdout; may be repeated',
       (path: string, before: string[] = []) => [...before, path],
     )
     .option('--quiet', 'no summary and no progress')

@@ -223,7 +223,13 @@ export const resultSchema = z.strictObject({
     schema: text,
     lengthUnit: text,
     source: z.enum(['physical', 'analysis']),
+    project: z.strictObject({ globalId: text, name: textOrNull }).optional().describe('the IfcProject'),
+    written: text.optional().describe("the time stamp in the model's header, as it stands there"),
   }),
+  grid: z
+    .array(z.strictObject({ tag: text, from: vector, to: vector }))
+    .optional()
+    .describe("the straight axes of the building's grid, m, world axes"),
   members: z.array(memberSchema),
   nodes: z.array(nodeSchema),
   bars: z.array(barSchema),

@@ -1,5 +1,6 @@
 import { CAUTION } from '../domain/caution.ts';
 import type { Finding } from '../domain/finding.ts';
+import type { GridLine } from '../domain/grid-line.ts';
 import type { Member } from '../domain/member.ts';
 import type { Result } from '../domain/result.ts';
 import type { Truss } from '../domain/truss.ts';
@@ -23,6 +24,7 @@ import { resultSchedules } from './schedules/result-schedules.ts';
 export interface RunRecord {
   readonly generator: Result['generator'];
   readonly model: Result['model'];
+  readonly gridLines: readonly GridLine[];
   readonly members: readonly Member[];
   readonly truss: Truss;
   readonly supports: Supports;
@@ -54,6 +56,7 @@ export function assembleResult(run: RunRecord): Result {
     caution: CAUTION,
     units: { length: 'm', force: 'N', stress: 'Pa' },
     model: run.model,
+    ...(run.gridLines.length === 0 ? {} : { grid: run.gridLines.map(resultGridLine) }),
     members: members.map((member, index) => resultMember(member, index, truss)),
     nodes: truss.nodes.map((node, index) => ({
       id: nodeId(index),
@@ -113,6 +116,10 @@ const point = (at: Vec3): [number, number, number] => [at[0], at[1], at[2]];
 const extreme = (force: ExtremeForce | null) => force && { ...force };
 const nodalForces = (forces: readonly NodalForce[]) =>
   forces.map(({ node, force }) => ({ node: nodeId(node), force: point(force) }));
+
+function resultGridLine({ tag, from, to }: GridLine): NonNullable<Result['grid']>[number] {
+  return { tag, from: point(from), to: point(to) };
+}
 
 function resultMember(member: Member, index: number, truss: Truss): Result['members'][number] {
   const { shift, turn } = truss.faith[index];

@@ -1,6 +1,7 @@
 import type { Result } from '../domain/result.ts';
+import { drawSheet } from '../drawing/sheet.ts';
 import type { StepFile } from '../step/step-file.ts';
-import type { Chunks } from './chunks.ts';
+import { type Chunks, encodeText } from './chunks.ts';
 import { tableToCsv } from './csv.ts';
 import { annotate } from './ifc/annotate.ts';
 import { resultToJson } from './json.ts';
@@ -19,6 +20,8 @@ export function contentOf(result: Result, file: StepFile): (content: Content) =>
         return annotate(file, result);
       case 'ifczip':
         return zipOne(content.name, annotate(file, result));
+      case 'svg':
+        return encodeText([drawSheet(result)]);
     }
   };
 }

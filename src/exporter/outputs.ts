@@ -10,6 +10,7 @@ export type Content =
   | { readonly kind: 'json' }
   | { readonly kind: 'ifc' }
   | { readonly kind: 'ifczip'; readonly name: string }
+  | { readonly kind: 'svg' }
   | { readonly kind: 'csv'; readonly table: TableName };
 
 export interface PlannedFile {
@@ -28,8 +29,8 @@ export interface OutputPlan {
   readonly stdout: boolean;
 }
 
-const WRITTEN = '.json .csv .csv/ .ifc .ifczip';
-const NOT_YET = new Set(['.xlsx', '.html', '.bcf', '.bcfzip', '.svg']);
+const WRITTEN = '.json .csv .csv/ .ifc .ifczip .svg';
+const NOT_YET = new Set(['.xlsx', '.html', '.bcf', '.bcfzip']);
 
 /**
  * Finds what each output path asks for and whether it can be written, before any work is done. The endings pick the
@@ -64,6 +65,7 @@ function contentByEnding(given: string): Content {
   const ending = (/\.[a-z0-9]+$/i.exec(basename(given))?.[0] ?? '').toLowerCase();
   if (ending === '.json' || ending === '.ifc') return { kind: ending === '.ifc' ? 'ifc' : 'json' };
   if (ending === '.ifczip') return { kind: 'ifczip', name: `${basename(given, ending)}.ifc` };
+  if (ending === '.svg') return { kind: 'svg' };
   if (ending === '.csv') return { kind: 'csv', table: 'bars' };
   if (NOT_YET.has(ending)) throw new RequestError(`${given}: ${ending} is not written yet; written are ${WRITTEN}`);
   throw new RequestError(`${given}: the ending picks the format; use one of ${WRITTEN}, or - for JSON on stdout`);

@@ -1,4 +1,5 @@
 import type { Result } from '../domain/result.ts';
+import { count, verdict } from '../domain/verdict.ts';
 import { millimetres } from '../domain/words.ts';
 import { worstBars } from './summary/bars.ts';
 import { loadCases } from './summary/cases.ts';
@@ -8,7 +9,6 @@ import { memberKinds } from './summary/kinds.ts';
 import { degrees, harmless, wrapped } from './summary/layout.ts';
 import { SUMMARY_DEFAULTS, type SummaryOptions } from './summary/options.ts';
 import { reactions } from './summary/reactions.ts';
-import { count, verdict } from './verdict.ts';
 
 /** The result as plain text for a terminal; a survey, which has no cases, is told without loads and forces. */
 export function summarise(result: Result, options: Partial<SummaryOptions> = {}): string {

@@ -5,6 +5,7 @@ import { ContextBook } from './context.ts';
 import { FactsBook } from './facts.ts';
 import { noteFileProblems, noteGuessedSchema, noteMissingLengthUnit, noteRepeatedGlobalIds } from './file-remarks.ts';
 import { FindingsLog } from './findings-log.ts';
+import { gridLines } from './grid-lines.ts';
 import { type Grid, readGrids } from './grids.ts';
 import { MaterialBook } from './materials/material-book.ts';
 import { compareRounded } from './member-axis.ts';
@@ -18,7 +19,7 @@ import { readRelations } from './relations.ts';
 import { knownSchema } from './schema.ts';
 import { SectionBook } from './sections/section-book.ts';
 import { SiblingSections } from './siblings.ts';
-import type { ImportedModel } from './types.ts';
+import type { ImportedModel, Project } from './types.ts';
 import { readUnits } from './units.ts';
 
 /** A file made ready for reading, whichever of its views is read. */
@@ -77,8 +78,18 @@ export function finish(
     members: found,
     findings: log.findings(placeOf),
     placeOf,
+    gridLines: gridLines(grids, placements),
+    project: readProject(reading.file),
     elementCount: globalIds.length,
   };
+}
+
+function readProject(file: StepFile): Project | null {
+  const id = file.idsOf('IFCPROJECT')[0];
+  if (id === undefined) return null;
+  const args = file.args(id);
+  const globalId = asString(args[0])?.trim() ?? '';
+  return globalId === '' ? null : { globalId, name: asString(args[2]) };
 }
 
 function byGeometry(a: PlacelessMember, b: PlacelessMember): number {

@@ -1,8 +1,14 @@
 import type { Finding } from '../domain/finding.ts';
+import type { GridLine } from '../domain/grid-line.ts';
 import type { Member } from '../domain/member.ts';
 import type { PlaceNamer } from '../domain/place.ts';
 import type { Evidence } from './evidence/types.ts';
 import type { Given } from './given.ts';
+
+export interface Project {
+  readonly globalId: string;
+  readonly name: string | null;
+}
 
 /** What was read of a model, before any scope is applied. */
 export interface ImportedModel {
@@ -14,6 +20,10 @@ export interface ImportedModel {
   readonly members: readonly Member[];
   readonly findings: readonly Finding[];
   readonly placeOf: PlaceNamer;
+  /** The building's grid, for drawings. */
+  readonly gridLines: readonly GridLine[];
+  /** The model's IfcProject; null where there is none. */
+  readonly project: Project | null;
   /** Elements of the classes asked for, whether or not they could be read. */
   readonly elementCount: number;
   /** The model's own supports, loads and combinations; null where its physical elements were read. */

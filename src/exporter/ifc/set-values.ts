@@ -1,6 +1,6 @@
 import type { Result, ResultFinding } from '../../domain/result.ts';
+import { count, envelopeTitle, verdict } from '../../domain/verdict.ts';
 import { ultimateTitle } from '../schedules/runs.ts';
-import { count, envelopeTitle, verdict } from '../verdict.ts';
 import type { BarForces, ElementForces } from './member-forces.ts';
 import type { SetValues } from './set-definitions.ts';
 

@@ -1,5 +1,5 @@
 import type { Result } from '../../domain/result.ts';
-import { count, envelopeTitle } from '../verdict.ts';
+import { count, envelopeTitle } from '../../domain/verdict.ts';
 import { columns, harmless, kilonewtons, wrapped } from './layout.ts';
 import type { SummaryOptions } from './options.ts';
 

@@ -1,5 +1,5 @@
 import type { Result } from '../../domain/result.ts';
-import { count } from '../verdict.ts';
+import { count } from '../../domain/verdict.ts';
 import { type Column, columns, harmless, kilonewtons, wrapped } from './layout.ts';
 import type { SummaryOptions } from './options.ts';
 

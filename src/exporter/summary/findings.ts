@@ -1,6 +1,6 @@
 import type { Result, ResultFinding } from '../../domain/result.ts';
+import { count } from '../../domain/verdict.ts';
 import { millimetres } from '../../domain/words.ts';
-import { count } from '../verdict.ts';
 import { harmless, wrapped } from './layout.ts';
 import type { SummaryOptions } from './options.ts';
 

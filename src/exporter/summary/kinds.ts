@@ -1,4 +1,4 @@
-import { count } from '../verdict.ts';
+import { count } from '../../domain/verdict.ts';
 import { columns, harmless } from './layout.ts';
 import type { SummaryOptions } from './options.ts';
 

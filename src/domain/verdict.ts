@@ -1,4 +1,4 @@
-import type { Result } from '../domain/result.ts';
+import type { Result } from './result.ts';
 
 /** Whether the structure stands, in one or two sentences: the same words in every output. */
 export function verdict(result: Result): string {
