@@ -1,9 +1,9 @@
 import type { Command } from 'commander';
 import { RequestError } from '../domain/errors.ts';
+import { count } from '../domain/verdict.ts';
 import { clean } from '../exporter/ifc/annotate.ts';
 import { setTracesAside } from '../exporter/ifc/own-traces.ts';
 import { planOutputs } from '../exporter/outputs.ts';
-import { count } from '../exporter/verdict.ts';
 import { writeOutputs } from '../exporter/write-outputs.ts';
 import { zipOne } from '../exporter/zip-one.ts';
 import { openModel } from '../importer/files/open-model.ts';

@@ -1,6 +1,6 @@
 import type { Result } from '../../domain/result.ts';
+import { count } from '../../domain/verdict.ts';
 import { millimetres } from '../../domain/words.ts';
-import { count } from '../verdict.ts';
 
 /** By which rule axes were carried to meet, and why the joints are joints: one sentence a line. */
 export function joinedBy(result: Result): string[] {
