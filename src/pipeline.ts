@@ -17,6 +17,7 @@ import { assembleResult } from './exporter/assemble-result.ts';
 import { setTracesAside } from './exporter/ifc/own-traces.ts';
 import { signatureVoid } from './exporter/ifc/signature-void.ts';
 import { hasAnalysisView, readAnalysisModel } from './importer/analysis/read-analysis-model.ts';
+import type { Evidence } from './importer/evidence/types.ts';
 import { openModel } from './importer/files/open-model.ts';
 import type { Given } from './importer/given.ts';
 import { importModel } from './importer/import-model.ts';
@@ -33,6 +34,7 @@ import { assessStability } from './statics/stability/assess-stability.ts';
 import type { Supports } from './statics/types.ts';
 import { withoutBlock } from './step/splice.ts';
 import type { StepFile } from './step/step-file.ts';
+import { platesOfCleats } from './topology/cleats.ts';
 import { joinMembers } from './topology/join-members.ts';
 import { type JoinOptions, valueFor } from './topology/options.ts';
 
@@ -100,7 +102,7 @@ export async function runModel(bytes: Uint8Array, options: Partial<RunOptions> =
     given === null ? joining : joiningOfView(joining, members.length),
     {
       placeOf: imported.placeOf,
-      evidence: imported.evidence,
+      evidence: withCleats(imported.evidence, scope.cleats),
       supportedNodes: (truss) => nodesOf(supportsOf(truss).supports),
       namedPlaces: namedPlaces(brief, given),
     },
@@ -234,6 +236,12 @@ function joiningOfView(asked: JoinOptions, count: number): JoinOptions {
 function asLine(member: Member): Member {
   const { section } = member;
   return section === null ? member : { ...member, section: { ...section, depth: SHARED_POINT, width: SHARED_POINT } };
+}
+
+function withCleats(evidence: Evidence | null, cleats: readonly Member[]): Evidence | null {
+  if (evidence === null || cleats.length === 0) return evidence;
+  const { plates, related, assemblies, unreadPlates } = evidence;
+  return { plates: [...plates, ...platesOfCleats(cleats)], related, assemblies, unreadPlates };
 }
 
 function nodesOf({ restraints, springs }: Supports): ReadonlySet<number> {

@@ -1,5 +1,6 @@
 import { type Finding, finding } from '../domain/finding.ts';
 import type { Member } from '../domain/member.ts';
+import { distance } from '../domain/vector.ts';
 import { isPlainlyNotSteel } from './material-words.ts';
 import { findEmptyMemberSelectors } from './selector-empty.ts';
 import { describeSelector } from './selectors/describe-selector.ts';
@@ -36,10 +37,11 @@ const DUMMY_FLAT_BELOW = 0.0015;
 export function applyScope(
   members: readonly Member[],
   scope: Brief['scope'],
-): { members: Member[]; findings: Finding[] } {
+): { members: Member[]; findings: Finding[]; cleats: Member[] } {
   const included = scope.include.map(memberTest);
   const excluded = scope.exclude.map((selector) => ({ selector, holds: memberTest(selector) }));
   const leftOut = new Map<string, LeftOut>();
+  const cleats: Member[] = [];
   const kept = members.filter((member) => {
     const byInclude = included.some((holds) => holds(member));
     const exclusion = excluded.find(({ holds }) => holds(member));
@@ -54,6 +56,7 @@ export function applyScope(
             ? null
             : whySecondary(member);
     if (reason === null) return true;
+    if (reason === CLEAT) cleats.push(member);
     const group = leftOut.get(reason.kind) ?? { members: [], examples: new Map<string, number>() };
     leftOut.set(reason.kind, group);
     group.members.push(member);
@@ -65,7 +68,7 @@ export function applyScope(
   const findings = findEmptyMemberSelectors(members, [...scope.include, ...scope.exclude]);
   for (const [kind, group] of leftOut) findings.push(sayLeftOut(kind, group));
   if (kept.length === 0) findings.push(sayNothingLeft(members.length));
-  return { members: kept, findings };
+  return { members: kept, findings, cleats };
 }
 
 /** Why a member is left out: one note a kind, which lists its examples with their numbers. */
@@ -90,7 +93,36 @@ function whySecondary(member: Member): Reason | null {
   if (type !== undefined && SECONDARY_TYPES.has(type)) return { kind: `of predefined type ${type}` };
   if (isPlainlyNotSteel(member.material.name)) return { kind: 'not of steel', example: member.material.name };
   if (isDummy(member)) return { kind: 'too thin to be bars', example: member.section?.name ?? '' };
-  return null;
+  if (isSheet(member)) return { kind: 'sheets of decking or cladding', example: member.section?.name ?? '' };
+  return isCleat(member) ? CLEAT : null;
+}
+
+const CLEAT: Reason = {
+  kind: 'cleats and plates drawn as members, too short to be bars; what they touch counts as fastened by them',
+};
+
+/** m; wider than any flat that is used as a bar, and thinner than a tenth of that: trapezoidal decking, cladding, a floor plate. */
+const SHEET_ABOVE = 0.4;
+const SHEET_THINNESS = 0.1;
+
+function isSheet({ section }: Member): boolean {
+  if (section === null || section.shape === 'I') return false;
+  const [greater, lesser] = [Math.max(section.depth, section.width), Math.min(section.depth, section.width)];
+  return greater > SHEET_ABOVE && lesser < SHEET_THINNESS * greater;
+}
+
+/** A stub post between a beam and a rafter is about half as long again as it is deep; a cleat is shorter. */
+const CLEAT_SLENDERNESS = 1.25;
+/** A gusset or an end plate drawn as a length of flat. */
+const PLATE_SLENDERNESS = 2.5;
+/** Thickness of a flat in its width, at most. */
+const FLAT = 0.2;
+
+function isCleat({ section, axis }: Member): boolean {
+  if (section === null) return false;
+  const [greater, lesser] = [Math.max(section.depth, section.width), Math.min(section.depth, section.width)];
+  const isFlat = section.shape === 'rectangle' && lesser < FLAT * greater;
+  return distance(axis[0], axis[1]) < (isFlat ? PLATE_SLENDERNESS : CLEAT_SLENDERNESS) * greater;
 }
 
 function isDummy({ section }: Member): boolean {

@@ -109,13 +109,16 @@ function judgeSkew(a: Axis, b: Axis, sine: number, options: JoinOptions, widenin
   const bothRunThrough = runsThroughA && runsThroughB;
   const reach = bothRunThrough ? null : Math.max(runsThroughA ? 0 : reachA, runsThroughB ? 0 : reachB);
 
-  const offset = (setOffset(a, b) ?? offsetOf(a, b)) * widening;
+  // A cleat between the two widens the offset; it makes no crossing of a seat.
+  const plainOffset = setOffset(a, b) ?? offsetOf(a, b);
+  const offset = plainOffset * widening;
   const seatHeight = normal === null ? 0 : a.halfExtent(normal) + b.halfExtent(normal);
   const lean = normal === null ? 0 : a.lean * a.halfExtent(normal) + b.lean * b.halfExtent(normal);
-  const seatGap = Math.max(0, Math.abs(distance - seatHeight) - lean);
+  const low = seatHeight * TOLERANCE.flangeSeat;
+  const seatGap = Math.max(0, low - distance - lean, distance - seatHeight - lean);
   const maySit = options.seated === 'node' && (!bothRunThrough || looksLikeSeat(a, b, s, t));
-  const seatMiss = maySit ? seatGap / TOLERANCE.seatPacking : Number.POSITIVE_INFINITY;
-  const sits = distance > offset && seatMiss < distance / offset;
+  const seatMiss = maySit ? seatGap / (TOLERANCE.seatPacking * widening) : Number.POSITIVE_INFINITY;
+  const sits = distance > plainOffset && seatMiss < Math.max(1, distance / offset);
   const sideways = sits ? seatMiss : distance / offset;
   const kind = sits ? 'seat' : bothRunThrough ? 'crossing' : 'meets';
   const cost = extensionA + extensionB + (sits ? seatGap : distance);

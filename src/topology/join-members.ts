@@ -13,11 +13,13 @@ import { type Contact, findContacts } from './contacts.ts';
 import { resolveDoubles } from './doubles.ts';
 import { eccentricitiesOf, offsetJointFindings } from './eccentricity.ts';
 import { type PairEvidence, relatedMembers, touchingPlates, united } from './evidence.ts';
-import { carriedFindings, crossingFindings, crowdedFindings } from './joint-findings.ts';
+import { carriedFindings, closeJointFindings, crossingFindings, crowdedFindings } from './joint-findings.ts';
 import { makeJoints, type Refusal } from './joints.ts';
 import { labelOf } from './labels.ts';
+import { withoutLaps } from './laps.ts';
 import { type JoinLimits, limitsUsed } from './limits.ts';
 import { looseEndFindings, overhangFindings } from './loose-ends.ts';
+import { noneTwice } from './none-twice.ts';
 import { JOIN_DEFAULTS, type JoinOptions } from './options.ts';
 import { cutOverhangs } from './overhangs.ts';
 import { partFindings } from './parts.ts';
@@ -74,16 +76,17 @@ export function joinMembers(
   const findings = [
     ...zeroLengthFindings(members, drawn, placeOf),
     ...doubles.findings,
-    ...overhangFindings(tails, members, placeOf),
+    ...overhangFindings(withoutLaps(tails, axes), members, placeOf),
     ...looseEndFindings(cut, members, axes, supported, chosen, placeOf),
     ...partFindings(cut, members, axes, supported, placeOf),
     ...crossingFindings(contacts, members, axes, cut, placeOf),
     ...crowdedFindings(refused, members, cut, placeOf),
+    ...closeJointFindings(cut, members, axes, placeOf),
     ...offsetJointFindings(cut, members),
     ...carriedFindings(cut, members),
     ...axisMovedFindings(members, cut, placeOf),
   ];
-  return { truss: cut, findings, limits: limitsUsed(axes, contacts) };
+  return { truss: cut, findings: noneTwice(findings), limits: limitsUsed(axes, contacts) };
 }
 
 function trussOf(

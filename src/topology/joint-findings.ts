@@ -1,4 +1,5 @@
 import { type Finding, finding } from '../domain/finding.ts';
+import { pushTo } from '../domain/group.ts';
 import type { Member } from '../domain/member.ts';
 import type { PlaceNamer } from '../domain/place.ts';
 import type { Truss } from '../domain/truss.ts';
@@ -67,6 +68,42 @@ export function crowdedFindings(
         place: placeOf(at),
         gap: distance(p, q),
       },
+    );
+  });
+}
+
+/** Two joints of one member nearer than this many of its depths are likely meant as one. */
+const CLOSE = 2;
+/** And nearer than this share of the panels on either side of them. */
+const SHORT_PANEL = 0.25;
+
+/** Panels of a through member so short that their two ends, at each of which something frames in, are likely one joint. */
+export function closeJointFindings(
+  truss: Truss,
+  members: readonly Member[],
+  axes: readonly (Axis | null)[],
+  placeOf: PlaceNamer,
+): Finding[] {
+  const barsOf = new Map<number, number[]>();
+  truss.bars.forEach((bar, index) => {
+    pushTo(barsOf, bar.members[0], index);
+  });
+  const sits = ({ joining }: Truss['nodes'][number], member: number) =>
+    joining?.eccentricities.some((one) => one.of === 'seat' && one.member === member) ?? false;
+  const framesIn = (node: number, runner: number): boolean =>
+    truss.nodes[node].carriedBy === null &&
+    truss.nodes[node].members.some((member) => member !== runner && !sits(truss.nodes[node], member));
+  return truss.bars.flatMap(({ members: [runner], from, to, length }, index) => {
+    const depth = axes[runner]?.depth ?? 0;
+    const panels = (barsOf.get(runner) ?? []).filter((bar) => bar !== index).map((bar) => truss.bars[bar].length);
+    if (length > CLOSE * depth || panels.length < 2 || length > SHORT_PANEL * Math.min(...panels)) return [];
+    if (!framesIn(from, runner) || !framesIn(to, runner)) return [];
+    const at = meanOf([truss.nodes[from].at, truss.nodes[to].at]);
+    return finding(
+      'crowded-joint',
+      `Two joints lie ${millimetres(length)} apart on ${labelOf(members[runner])}: the axes that meet there were drawn past each other, and each joint was left where they meet it.`,
+      'Look whether they are one joint: move the members to one work point in the model, or check the piece between them for bending.',
+      { members: [members[runner].globalId], nodes: [from, to], at, place: placeOf(at), gap: length },
     );
   });
 }

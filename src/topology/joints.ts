@@ -28,12 +28,21 @@ export function makeJoints(
   const all = stations.flat();
   const groups = new Groups(all, axes, contacts);
   const stationsOfContact = sidesOf(contacts, all);
-  const refused: Refusal[] = [];
+  const left: number[] = [];
   const order = contacts.map((_, i) => i).sort((i, j) => contacts[i].cost - contacts[j].cost || i - j);
   for (const index of order) {
     const sides = stationsOfContact[index];
-    if (sides.length === 2 && !groups.join(sides[0], sides[1])) refused.push({ contact: contacts[index] });
+    if (sides.length === 2 && !groups.join(sides[0], sides[1])) left.push(index);
   }
+  // The gussets of bracing stand beside the chord's: an end that nothing else takes is better a little off than loose.
+  const isAlone = (side: number) => all[side].role !== 'through' && groups.sizeOf(side) === 1;
+  const refused = left
+    .filter((index) => {
+      const [first, second] = stationsOfContact[index];
+      const mayStretch = isAlone(first) || isAlone(second);
+      return !groups.join(first, second, mayStretch ? STRETCHED : 1);
+    })
+    .map((index): Refusal => ({ contact: contacts[index] }));
   const joints = groups
     .members()
     .filter((group) => group.length > 1)
@@ -41,6 +50,9 @@ export function makeJoints(
     .map((group) => ({ stations: group, seated: seatedMembers(group, contacts, axes) }));
   return { joints, refused };
 }
+
+/** Of a joint's bound, for an end that would be left loose. */
+const STRETCHED = 2;
 
 function sidesOf(contacts: readonly Contact[], stations: readonly Station[]): number[][] {
   const sides: number[][] = contacts.map(() => []);
@@ -66,15 +78,19 @@ class Groups {
     this.sizes = stations.map((station) => Math.max(TOLERANCE.leastJoint, axes[station.member]?.depth ?? 0));
   }
 
-  /** False where the two may not be one joint. */
-  join(i: number, j: number): boolean {
+  sizeOf(i: number): number {
+    return this.content[this.find(i)].length;
+  }
+
+  /** False where the two may not be one joint; its bound may be stretched. */
+  join(i: number, j: number, stretched = 1): boolean {
     const a = this.find(i);
     const b = this.find(j);
     if (a === b) return true;
     const [first, second] = [this.content[a], this.content[b]];
     const present = new Set(first.map((k) => this.stations[k].member));
     if (second.some((k) => present.has(this.stations[k].member))) return false;
-    const size = Math.max(...[...first, ...second].map((k) => this.sizes[k]));
+    const size = stretched * Math.max(...[...first, ...second].map((k) => this.sizes[k]));
     for (const p of first) for (const q of second) if (distance(this.points[p], this.points[q]) > size) return false;
     this.parent[b] = a;
     this.content[a] = [...first, ...second];

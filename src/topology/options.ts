@@ -45,6 +45,8 @@ export const TOLERANCE = {
   mostOfLength: 0.5,
   /** Packing, cleat thickness and camber under a seat. */
   seatPacking: 0.025,
+  /** An upright purlin on a ridge rests with the middle of its flange on the apex and not with an edge: lower by this share. */
+  flangeSeat: 0.85,
   /** Members of one assembly were drawn to belong together. */
   sameAssembly: 1.5,
   /** A plate both touch, or a relationship in the file, says that they are joined. */

@@ -15,7 +15,7 @@ describe('the default scope', () => {
       ...['IfcBeam', 'IfcBeamStandardCase', 'IfcColumn', 'IfcMember'].map((name) => member(name, { class: name })),
       member('p', { class: 'IfcBuildingElementProxy', partOf: 'IfcElementAssembly' }),
     ];
-    expect(applyScope(members, NONE)).toEqual({ members, findings: [] });
+    expect(applyScope(members, NONE)).toEqual({ members, findings: [], cleats: [] });
   });
 
   it('leaves out secondary parts and counts each kind in one note that names them', () => {
@@ -66,6 +66,33 @@ describe('the default scope', () => {
     expect(members.map(({ globalId }) => globalId)).toEqual(['strip', 'rod', 'unknown']);
     expect(findings.map(({ message }) => message)).toEqual([
       '4 members left out: too thin to be bars (1x1: 2, 200x1: 1, 2x2: 1).',
+    ]);
+  });
+
+  it('leaves out sheets, and plates and cleats drawn as members, but no stub post and no flat', () => {
+    const drawn = (shape: 'rectangle' | 'L' | 'I' | 'other', depth: number, width: number, length: number) => ({
+      section: { ...hollow(0.1), name: `${shape} ${depth * 1000}`, shape, depth, width },
+      axis: [
+        [0, 0, 0],
+        [length, 0, 0],
+      ] as const,
+    });
+    const { members, findings, cleats } = applyScope(
+      [
+        member('decking', drawn('other', 0.035, 1.04, 8.2)),
+        member('end plate', drawn('rectangle', 0.3, 0.015, 0.3)),
+        member('cleat', drawn('L', 0.21, 0.06, 0.16)),
+        member('stub post', drawn('I', 0.3, 0.1, 0.43)),
+        member('flat brace', drawn('rectangle', 0.1, 0.01, 3)),
+        member('plate girder', drawn('I', 1.2, 0.1, 12)),
+      ],
+      NONE,
+    );
+    expect(members.map(({ globalId }) => globalId)).toEqual(['stub post', 'flat brace', 'plate girder']);
+    expect(cleats.map(({ globalId }) => globalId)).toEqual(['end plate', 'cleat']);
+    expect(findings.map(({ message, members: named }) => [message.slice(0, 40), named])).toEqual([
+      ['1 member left out: sheets of decking or ', ['decking']],
+      ['2 members left out: cleats and plates dr', ['end plate', 'cleat']],
     ]);
   });
 

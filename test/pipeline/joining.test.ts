@@ -66,6 +66,13 @@ describe('an end that stops too far off for nearness alone', () => {
     expect(found.summary).toContain(`1 only by a ${kind}`);
   });
 
+  it('is joined by a cleat that is drawn as a member, too short to be a bar', async () => {
+    const model = drawn((m) => {
+      m.member({ mark: 'cleat', from: [3, 0.05, 2.75], to: [3, 0.05, 2.95], size: 0.2 });
+    });
+    expect(await shortPost(model)).toMatchObject({ joined: ['part cleat'], misses: [] });
+  });
+
   it('is joined within one assembly a little farther than without, and not with the assembly beside it', async () => {
     const assembled = (of: readonly string[]) =>
       drawn(({ writer }, ids) => {

@@ -8,7 +8,7 @@ import { distance } from '../../src/domain/vector.ts';
 import { joinMembers } from '../../src/topology/join-members.ts';
 
 /** Two roofs of every kind of truss; `npm run bench -- joining-faults` tells which others are not yet read rightly. */
-const SEEDS = [1, 2, 3, 4, 6, 7, 8, 9, 14, 16, 19, 20, 21, 24, 26, 36, 40, 68];
+const SEEDS = [1, 2, 3, 4, 6, 7, 8, 9, 14, 16, 18, 19, 20, 21, 23, 24, 26, 36, 40, 68];
 
 describe('roofs drawn at random as detailers draw them', () => {
   it.each(SEEDS)('roof %i becomes the truss of its work points, and nothing is wrong with it', (seed) => {
