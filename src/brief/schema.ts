@@ -1,4 +1,5 @@
 import { z } from 'zod';
+import { wordsFor } from '../domain/units.ts';
 import { unit, type Vec3 } from '../domain/vector.ts';
 import { gradeIn } from '../importer/materials/grades.ts';
 import { knownDesignations } from '../importer/sections/designations/known-designations.ts';
@@ -110,7 +111,7 @@ const sectionDesignation = text
 /** One length for every member, or one each for those that selectors catch. */
 const lengthByMember = z
   .union([positive('length'), z.array(z.strictObject({ on: members, use: positive('length') })).min(1)], {
-    error: 'a length, or a list of {on: ..., use: length}, is due',
+    error: `${wordsFor('length')}, or a list of {on: ..., use: 200 mm}, is due`,
   })
   .describe('a length, or a list of {on, use}; of several rules on a member the last counts, of no rule the sections');
 

@@ -165,7 +165,7 @@ function axisMovedFindings(members: readonly Member[], truss: Truss, placeOf: Pl
       'axis-moved',
       `Joining turned the axis of ${labelOf(member)} by ${degrees} degrees and moved it by ${millimetres(shift)}.`,
       `Look whether ${labelOf(member)} belongs to these joints; a smaller reach or offset in the brief keeps it apart.`,
-      { members: [member.globalId], at, place: placeOf(at) },
+      { members: [member.globalId], at, place: placeOf(at), gap: shift },
     );
   });
 }

@@ -50,7 +50,7 @@ describe('reach and offset of the brief', () => {
     expect(problemOf('  reach: [{on: {name: "D*"}, use: 200 kg}]')).toMatch(/^brief\.yaml:3:\d+: .*kg/);
     expect(problemOf('  reach: [{on: {name: "D*"}}]')).toContain('the key "use" is missing');
     expect(problemOf('  reach: [{on: {name: "D*"}, used: 200 mm}]')).toContain('did you mean "use"');
-    expect(problemOf('  offset: {use: 3}')).toContain('a length, or a list of {on: ..., use: length}, is due');
+    expect(problemOf('  offset: {use: 3}')).toContain(', or a list of {on: ..., use: 200 mm}, is due');
   });
 });
 

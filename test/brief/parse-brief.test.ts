@@ -141,7 +141,7 @@ describe('a brief that is wrong', () => {
     [
       'a value of the wrong kind',
       'pinwright: 1\njoints: {reach: true}',
-      '2:17: "true": a length (mm, m, in, ft) is due',
+      '2:17: "true": a length (mm, m, in, ft), or a list of',
     ],
     ['a quantity without its unit', 'pinwright: 1\njoints: {reach: "150"}', '2:17: "150": the unit is missing'],
     ['a decimal comma', 'pinwright: 1\njoints: {reach: "1,5 mm"}', 'decimal point'],

@@ -271,3 +271,61 @@ cases: [{name: wind, nature: wind, loads: [{point: [0, 3 kN, 0], at: {near: [2, 
     expect(result.nodes.filter(({ members }) => members.includes('purlin') && members.length > 1)).toEqual([]);
   });
 });
+
+describe('what is one bar or no bar', () => {
+  /** A frame of a tie, two rafters and a post of two tubes side by side; the left rafter runs 900 mm past its foot. */
+  const frame = (): DrawnModel => {
+    const made = new DrawnModel();
+    made.member({ mark: 'tie', from: [0, 0, 0], to: [8, 0, 0] });
+    made.member({ mark: 'rafter 1', from: [-0.72, 0, -0.54], to: [4, 0, 3] });
+    made.member({ mark: 'rafter 2', from: [8, 0, 0], to: [4, 0, 3] });
+    for (const [mark, y] of [
+      ['post a', -0.035],
+      ['post b', 0.035],
+    ] as const)
+      made.member({ mark, from: [4, y, 0.06], to: [4, y, 2.9], size: 0.06 });
+    return made;
+  };
+  const BRIEF = `supports:
+  - {at: {near: [0, 0, 0], within: 50 mm}, fix: xyz}
+  - {at: {near: [8, 0, 0], within: 50 mm}, fix: yz}
+  - {at: {joins: {name: "post*"}}, fix: y}
+cases: [{name: dead, nature: permanent, loads: [{selfWeight: 1}]}]
+`;
+  const area = (size: number) => size ** 2 - (size - 0.01) ** 2;
+  const weight = (size: number, length: number) => area(size) * length * 7850 * 9.80665;
+
+  it('a pair is one bar with both members in it, with both weights and both areas', async () => {
+    const { result } = await frame().run(BRIEF);
+    const bar = result.bars.find(({ members }) => members?.includes('post a'))!;
+    expect(bar.members).toEqual(['post a', 'post b']);
+    for (const end of [bar.from, bar.to]) {
+      expect(result.nodes.find(({ id }) => id === end)!.members).toEqual(expect.arrayContaining(['post a', 'post b']));
+    }
+    const note = result.findings.find(({ code }) => code === 'pair-joined')!;
+    expect(note.members).toEqual(['post a', 'post b']);
+    // The supports bear the weight of the tie, the rafters with the tail, and the two posts between their nodes.
+    const expected = weight(0.1, 8) + weight(0.1, 5) + weight(0.1, 5.9) + 2 * weight(0.06, 3);
+    const down = result.cases[0].reactions.reduce((sum, { force }) => sum + force[2], 0);
+    expect(down).toBeCloseTo(expected, 3);
+  });
+
+  it('a tail past the last joint is cut off and said, and its weight hangs on that joint', async () => {
+    const { result } = await frame().run(BRIEF);
+    expect(result.nodes.some(({ at }) => at[2] < -0.1)).toBe(false);
+    const [tail] = result.findings.filter(({ code }) => code === 'loose-end');
+    expect(tail).toMatchObject({ members: ['rafter 1'], gap: expect.closeTo(0.9, 6) });
+    const foot = result.nodes.find(({ at }) => Math.hypot(at[0], at[2]) < 1e-6)!;
+    const load = result.cases[0].loads.find(({ node }) => node === foot.id)!;
+    expect(load.force[2]).toBeCloseTo(-(weight(0.1, 2) + weight(0.1, 2.5) + weight(0.1, 0.9)), 3);
+  });
+
+  it('a tail whose end stands on a support is kept', async () => {
+    const { result } = await frame().run(
+      `${BRIEF.split('cases')[0]}  - {at: {near: [-0.72, 0, -0.54], within: 50 mm}, fix: xyz}\n`,
+      'survey',
+    );
+    expect(result.nodes.find(({ at }) => at[2] < -0.5)!.fixed).toBe('xyz');
+    expect(result.findings.some(({ code }) => code === 'loose-end')).toBe(false);
+  });
+});
