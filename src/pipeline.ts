@@ -17,10 +17,12 @@ import { assembleResult } from './exporter/assemble-result.ts';
 import { setTracesAside } from './exporter/ifc/own-traces.ts';
 import { signatureVoid } from './exporter/ifc/signature-void.ts';
 import { hasAnalysisView, readAnalysisModel } from './importer/analysis/read-analysis-model.ts';
+import { NO_VIEW } from './importer/analysis/remarks.ts';
 import type { Evidence } from './importer/evidence/types.ts';
 import { openModel } from './importer/files/open-model.ts';
 import type { Given } from './importer/given.ts';
 import { importModel } from './importer/import-model.ts';
+import { placedInScope } from './importer/places-in-scope.ts';
 import type { ImportedModel } from './importer/types.ts';
 import { bendingBetweenNodes } from './statics/bending/between-nodes.ts';
 import { eccentricityMoments } from './statics/bending/eccentricity-moments.ts';
@@ -191,15 +193,21 @@ async function readInScope(file: StepFile, brief: Brief) {
   const options = { classes: classesNamed(brief), axes: brief.axes, defaultMaterial: brief.materials.default };
   const ofView = () => {
     const imported = readAnalysisModel(file, options);
-    return { imported, scope: applyScope(imported.members, brief.scope) };
+    return placed(imported, applyScope(imported.members, brief.scope, hasAnalysisView(file) ? null : NO_VIEW));
   };
   if (brief.source === 'analysis') return ofView();
   const imported = await importModel(file, options);
-  const physical = { imported, scope: applyScope(imported.members, brief.scope) };
+  const physical = placed(imported, applyScope(imported.members, brief.scope));
   if (brief.source !== null || physical.scope.members.length > 0 || !hasAnalysisView(file)) return physical;
   const view = ofView();
   if (view.scope.members.length === 0) return physical;
   return { ...view, scope: { ...view.scope, findings: [...view.scope.findings, ...elementsLeft(imported)] } };
+}
+
+/** Places as they are told of the members in scope. */
+function placed(imported: ImportedModel, scope: ReturnType<typeof applyScope>) {
+  const told = placedInScope(imported, scope.members);
+  return { imported: told.imported, scope: { ...scope, members: told.members } };
 }
 
 /** What the physical half of a model held where its analysis view was read instead. */

@@ -1,4 +1,4 @@
-import { didYouMean } from './nearest-word.ts';
+import { didYouMean } from '../domain/nearest-word.ts';
 import { quoted } from './one-line.ts';
 import type { WrittenBrief } from './schema.ts';
 import type { Path, Problem, WrittenSource } from './written-source.ts';

@@ -1,6 +1,6 @@
 import type { z } from 'zod';
+import { didYouMean, nearestWord } from '../domain/nearest-word.ts';
 import { knownKeysAt } from './known-keys.ts';
-import { didYouMean, nearestWord } from './nearest-word.ts';
 import { isKeyNotYetAvailable, isValueNotYetAvailable } from './not-yet.ts';
 import { oneLine } from './one-line.ts';
 import type { Path, Problem, WrittenSource } from './written-source.ts';

@@ -34,7 +34,7 @@ const STEMS: readonly string[] = [
 ];
 
 const WORDS: ReadonlySet<string> = new Set([
-  ...['wood', 'wooden', 'glass', 'glas', 'stone', 'bois', 'tre', 'træ', 'trä', 'hout', 'puu', 'tiili', 'drevo'],
+  ...['alu', 'wood', 'wooden', 'glass', 'glas', 'stone', 'bois', 'tre', 'træ', 'trä', 'hout', 'puu', 'tiili', 'drevo'],
   ...[
     'bsh',
     'kvh',
@@ -55,8 +55,18 @@ const WORDS: ReadonlySet<string> = new Set([
   ],
 ]);
 
-// Strength classes: glued laminated timber (EN 14080), concrete (EN 206), wrought aluminium (EN 573).
-const GRADES: readonly RegExp[] = [/\bgl ?\d{2}[hc]?\b/u, /\bc ?\d{2,3}\/\d{2,3}\b/u, /\ben[ -]?aw\b/u];
+// Strength classes: timber (EN 338; C35 and above are also steels of EN 10083, and say nothing), glued laminated timber
+// (EN 14080), normal and lightweight concrete (EN 206), wrought aluminium (EN 573, and by alloy and temper).
+const GRADES: readonly RegExp[] = [
+  /(?<![\p{L}\d])c ?(?:14|16|18|20|22|24|27|30)(?![\p{L}\d/])/u,
+  /(?<![\p{L}\d])d ?(?:18|24|27|30|35|40|45|50|55|60|65|70|75|80)(?![\p{L}\d/.])/u,
+  /(?<![\p{L}\d])gl ?\d{2}[hc]?(?![\p{L}\d])/u,
+  /(?<![\p{L}\d])l?c ?\d{2,3}\/\d{2,3}(?!\d)/u,
+  /(?<![\p{L}\d])(?:en[ -]?)?aw[ -]?\d{4}/u,
+  /(?<![\p{L}\d])en[ -]?aw(?![\p{L}\d])/u,
+  /(?<![\p{L}\d])[567]\d{3}[ -]?t\d/u,
+  /(?<![\p{L}\d])almg/u,
+];
 
 const STEEL: ReadonlySet<string> = new Set([
   ...['steel', 'stahl', 'acier', 'acero', 'acciaio', 'staal', 'stål', 'aço', 'stal', 'ocel', 'teräs', 'сталь'],

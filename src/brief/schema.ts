@@ -1,10 +1,10 @@
 import { z } from 'zod';
+import { didYouMean } from '../domain/nearest-word.ts';
 import { wordsFor } from '../domain/units.ts';
 import { unit, type Vec3 } from '../domain/vector.ts';
 import { gradeIn } from '../importer/materials/grades.ts';
 import { knownDesignations } from '../importer/sections/designations/known-designations.ts';
 import { sectionFromDesignation } from '../importer/sections/designations/section-from-designation.ts';
-import { didYouMean } from './nearest-word.ts';
 import { positive, quantity, vector } from './written-quantities.ts';
 import { anyNumber, memberSelector, members, nodes, text } from './written-selectors.ts';
 

@@ -32,11 +32,12 @@ const DUMMY_FLAT_BELOW = 0.0015;
 /**
  * The members that the brief is about. With `include` these are exactly the members it catches; without, beams, columns and
  * members (and parts of assemblies) that are plausibly steel structure. `exclude` then takes out what it catches. What is left
- * out is counted in one `out-of-scope` a reason.
+ * out is counted in one `out-of-scope` a reason. `whyNone` is said where there are no members at all.
  */
 export function applyScope(
   members: readonly Member[],
   scope: Brief['scope'],
+  whyNone: Finding | null = null,
 ): { members: Member[]; findings: Finding[]; cleats: Member[] } {
   const included = scope.include.map(memberTest);
   const excluded = scope.exclude.map((selector) => ({ selector, holds: memberTest(selector) }));
@@ -67,7 +68,7 @@ export function applyScope(
   });
   const findings = findEmptyMemberSelectors(members, [...scope.include, ...scope.exclude]);
   for (const [kind, group] of leftOut) findings.push(sayLeftOut(kind, group));
-  if (kept.length === 0) findings.push(sayNothingLeft(members.length));
+  if (kept.length === 0) findings.push((members.length === 0 ? whyNone : null) ?? sayNothingLeft(members.length));
   return { members: kept, findings, cleats };
 }
 

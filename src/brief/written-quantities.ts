@@ -1,4 +1,5 @@
 import { z } from 'zod';
+import { didYouMean } from '../domain/nearest-word.ts';
 import {
   parseQuantity,
   QuantityError,
@@ -7,7 +8,6 @@ import {
   UNIT_NAMES,
   wordsFor,
 } from '../domain/units.ts';
-import { didYouMean } from './nearest-word.ts';
 import type { Range } from './types.ts';
 
 /** Quantities and ranges as a brief writes them; they come out in SI. */

@@ -2,6 +2,13 @@ import type { Vec3 } from './vector.ts';
 
 export type SectionShape = 'I' | 'U' | 'L' | 'T' | 'C' | 'Z' | 'RHS' | 'CHS' | 'rectangle' | 'circle' | 'other';
 
+/** How a hollow section was made, which decides its corners and its buckling curve. */
+export interface Making {
+  readonly finish: 'hot' | 'cold';
+  /** Nothing says so; cold formed is the safe side. */
+  readonly isAssumed: boolean;
+}
+
 /** A cross section, SI (m2, m4, m6). y is the profile's horizontal and z its vertical centroidal axis. */
 export interface Section {
   readonly name: string;
@@ -25,6 +32,8 @@ export interface Section {
   readonly width: number;
   /** Of the thickest part, m: strengths fall with it. */
   readonly thickness: number;
+  /** Of hollow sections known by their designation; left out where it is not known or not a question. */
+  readonly making?: Making;
 }
 
 /** SI: Pa, kg/m3, 1/K. Yield and ultimate strength are null where the grade is not known. */

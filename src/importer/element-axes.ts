@@ -13,6 +13,7 @@ import type { ImportOptions } from './options.ts';
 import type { Reading } from './reading.ts';
 import type { Shape } from './representations.ts';
 import { measuredInstead } from './sections/impossible-profile.ts';
+import { MERE_NAMES } from './sections/profile.ts';
 import type { SectionBook } from './sections/section-book.ts';
 import type { Transform } from './transform.ts';
 
@@ -76,9 +77,7 @@ function noteUnread(reading: Reading, sections: SectionBook, read: readonly Body
 
 /** A profile that is a mere name has no shape to be meshed. */
 const isDrawn = (reading: Reading, profile: number): boolean =>
-  profile > 0 && !MERE_NAMES.has(reading.file.typeOf(profile));
-
-const MERE_NAMES: ReadonlySet<string> = new Set(['', 'IFCPROFILEDEF', 'IFCPARAMETERIZEDPROFILEDEF']);
+  profile > 0 && reading.file.has(profile) && !MERE_NAMES.has(reading.file.typeOf(profile));
 
 /** What the parser's mesh shows, where there is one and it shows something. */
 function meshed(

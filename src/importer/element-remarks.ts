@@ -22,17 +22,40 @@ const REFUSED: Readonly<Record<string, readonly [have: string, has: string]>> = 
   'zero-length': ['have no length', 'has no length'],
 };
 
-/** Why an element, or its section, is not read. */
-export function refusal(problem: NotRead): Remark {
+/** Why an element, or its section, is not read; `tried` is the text in which a designation was looked for in vain. */
+export function refusal(problem: NotRead, tried: string | null = null): Remark {
   const [have, has] = REFUSED[problem.code] ?? ['cannot be read', 'cannot be read'];
   const reason = problem.message;
   return {
     code: problem.code,
     key: reason,
-    say: (count, first) => `${whose(count, first, have, has)}: ${count === 1 ? reason : plural(reason)}.`,
+    say: (count, first, { texts }) =>
+      `${whose(count, first, have, has)}: ${count === 1 ? reason : plural(reason)}${inVain(texts)}.`,
     advice: problem.advice,
+    ...(tried === null ? {} : { text: tried }),
   };
 }
+
+const MOST_TEXTS = 3;
+
+/** ", and 'HEA2000' is no designation that is known" */
+function inVain(texts: readonly string[]): string {
+  if (texts.length === 0) return '';
+  const shown = texts.slice(0, MOST_TEXTS).map((text) => `'${text}'`);
+  if (texts.length > MOST_TEXTS) shown.push(`${texts.length - MOST_TEXTS} more texts`);
+  const last = shown.pop();
+  return texts.length === 1
+    ? `, and ${last} is no designation that is known`
+    : `, and ${shown.join(', ')} and ${last} are no designations that are known`;
+}
+
+/** The first of an element's texts that may have been meant as a designation, cut to a readable length. */
+export function triedText(texts: readonly (string | null)[]): string | null {
+  const tried = texts.find((text) => text !== null && /\d/.test(text) && /\p{L}/u.test(text));
+  return tried == null ? null : tried.length > LONGEST_TEXT ? `${tried.slice(0, LONGEST_TEXT - 1)}…` : tried;
+}
+
+const LONGEST_TEXT = 40;
 
 /** Reasons are told of one element. */
 const plural = (reason: string): string => reason.replace(/^its /, 'their ').replace(/^it has /, 'they have ');
@@ -68,8 +91,8 @@ const approximate = (strays: number): Remark => ({
   code: 'bent-axis',
   key: 'approximate',
   gap: strays,
-  say: (count, first, most) =>
-    `${whose(count, first, 'are short bars', 'is a short bar')} of the section that ${count === 1 ? 'its name says' : 'their names say'}, split, joggled or notched over part of the length; ${count === 1 ? 'its axis is' : 'their axes are'} approximate: the body sticks out of the section carried along it by up to ${Math.round(most * 1000)} mm.`,
+  say: (count, first, { gap }) =>
+    `${whose(count, first, 'are short bars', 'is a short bar')} of the section that ${count === 1 ? 'its name says' : 'their names say'}, split, joggled or notched over part of the length; ${count === 1 ? 'its axis is' : 'their axes are'} approximate: the body sticks out of the section carried along it by up to ${Math.round(gap * 1000)} mm.`,
   advice:
     'Leave anchors and brackets out of the scope in the brief; draw a bar that carries force as a straight profile.',
 });

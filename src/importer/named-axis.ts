@@ -1,6 +1,7 @@
 import { cross, subtract, unit } from '../domain/vector.ts';
 import type { Remark } from './findings-log.ts';
 import type { MemberAxis } from './member-axis.ts';
+import { makingRemark } from './sections/making-remark.ts';
 import { namedSection } from './sections/named-section.ts';
 
 /**
@@ -10,11 +11,12 @@ import { namedSection } from './sections/named-section.ts';
 export function namedAxis(
   axis: MemberAxis,
   texts: () => readonly (string | null)[],
-): { readonly axis: MemberAxis; readonly remark: Remark | null } {
+): { readonly axis: MemberAxis; readonly remarks: readonly Remark[] } {
   const named = namedSection(axis.section, texts);
-  if (named === null) return { axis, remark: null };
+  if (named === null) return { axis, remarks: [] };
   const { section, remark, isTurned } = named;
+  const remarks = [remark, makingRemark(section)].filter((it) => it !== null);
   const along = unit(subtract(axis.ends[1], axis.ends[0]));
   const zAxis = isTurned && along !== null ? cross(along, axis.zAxis) : axis.zAxis;
-  return { axis: { ...axis, section, zAxis, noSection: null, confidence: null }, remark };
+  return { axis: { ...axis, section, zAxis, noSection: null, confidence: null }, remarks };
 }

@@ -25,23 +25,33 @@ export interface Surroundings {
   readonly grids: readonly Grid[];
   readonly placements: Placements;
   readonly storeys: readonly Storey[];
-  /** Least x and y of all members; null where there is none. */
-  readonly corner: Vec3 | null;
 }
 
-/** "C/4, +6.20" by the grid; without one "Roof, 12.3 m x and 4.5 m y from the corner, +6.20". */
-export function placeNamer(around: Surroundings): PlaceNamer {
-  const grids = planGrids(around);
-  if (grids.length > 0) return (at) => `${crossingAt(grids, at)}, ${signedLevel(at[2])}`;
-  const storeys = [...around.storeys].sort((a, b) => a.level - b.level || (a.name < b.name ? -1 : 1));
-  const { corner } = around;
-  if (corner === null) return () => null;
-  return (at) => {
-    const storey = storeyAt(storeys, at[2]);
-    const away = `${(at[0] - corner[0]).toFixed(1)} m x and ${(at[1] - corner[1]).toFixed(1)} m y from the corner`;
-    return `${storey === null ? '' : `${storey}, `}${away}, ${signedLevel(at[2])}`;
-  };
+export interface PlaceNamers {
+  readonly placeOf: PlaceNamer;
+  /** From any corner; null where a grid names places. */
+  readonly placesFrom: ((corner: Vec3) => PlaceNamer) | null;
 }
+
+/**
+ * "C/4, +6.20" by the grid; without one "Roof, x 12.3 m, y 4.5 m from the lowest, +6.20": from the lowest x and y of the
+ * members, which is `corner`, null where there are none.
+ */
+export function placeNamers(around: Surroundings, corner: Vec3 | null): PlaceNamers {
+  const grids = planGrids(around);
+  if (grids.length > 0) return { placeOf: (at) => `${crossingAt(grids, at)}, ${signedLevel(at[2])}`, placesFrom: null };
+  const storeys = [...around.storeys].sort((a, b) => a.level - b.level || (a.name < b.name ? -1 : 1));
+  const placesFrom =
+    (from: Vec3): PlaceNamer =>
+    (at) => {
+      const storey = storeyAt(storeys, at[2]);
+      const away = `x ${metres(at[0] - from[0])}, y ${metres(at[1] - from[1])} from the lowest`;
+      return `${storey === null ? '' : `${storey}, `}${away}, ${signedLevel(at[2])}`;
+    };
+  return { placeOf: corner === null ? () => null : placesFrom(corner), placesFrom };
+}
+
+const metres = (length: number): string => `${(Math.round(length * 10) / 10 || 0).toFixed(1)} m`;
 
 const signedLevel = (z: number): string => {
   const level = z.toFixed(2);

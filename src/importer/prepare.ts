@@ -1,4 +1,4 @@
-import { between, type Vec3 } from '../domain/vector.ts';
+import { between } from '../domain/vector.ts';
 import type { StepFile } from '../step/step-file.ts';
 import { asRef, asString } from '../step/values.ts';
 import { ContextBook } from './context.ts';
@@ -7,12 +7,14 @@ import { noteFileProblems, noteGuessedSchema, noteMissingLengthUnit, noteRepeate
 import { FindingsLog } from './findings-log.ts';
 import { gridLines } from './grid-lines.ts';
 import { type Grid, readGrids } from './grids.ts';
+import { markNamer } from './marks.ts';
 import { MaterialBook } from './materials/material-book.ts';
 import { compareRounded } from './member-axis.ts';
 import { NotRead } from './not-read.ts';
 import type { ImportOptions } from './options.ts';
 import { Placements } from './placements.ts';
-import { placeNamer, type Storey } from './places.ts';
+import { placeNamers, type Storey } from './places.ts';
+import { cornerOf } from './places-in-scope.ts';
 import type { PlacelessMember, Sources } from './read-element.ts';
 import { Reading } from './reading.ts';
 import { readRelations } from './relations.ts';
@@ -56,11 +58,13 @@ export function prepare(file: StepFile, options: ImportOptions): Prepared {
 
 /**
  * Puts the members in order, names their places and gathers the findings.
- * @param globalIds of the instances they were read from and of those that could not be read; '' where there is none
+ * @param elements the instances they were read from and those that could not be read
+ * @param globalIds theirs; '' where there is none
  */
 export function finish(
   { sources, grids, log }: Prepared,
   source: ImportedModel['source'],
+  elements: readonly number[],
   globalIds: readonly string[],
   members: readonly PlacelessMember[],
 ): Omit<ImportedModel, 'given' | 'evidence'> {
@@ -69,15 +73,16 @@ export function finish(
   noteRepeatedGlobalIds(reading, globalIds);
   const storeys = readStoreys(sources);
   noteFileProblems(reading);
-  const placeOf = placeNamer({ grids, placements, storeys, corner: cornerOf(found) });
+  const { placeOf, placesFrom } = placeNamers({ grids, placements, storeys }, cornerOf(found));
   for (const member of found) member.place = placeOf(between(...member.axis, 0.5));
   return {
     schema: reading.file.schema,
     lengthUnit: reading.units.lengthName,
     source,
     members: found,
-    findings: log.findings(placeOf),
+    findings: log.findings(placeOf, markNamer(reading.file, elements, globalIds)),
     placeOf,
+    placesFrom,
     gridLines: gridLines(grids, placements),
     project: readProject(reading.file),
     elementCount: globalIds.length,
@@ -97,18 +102,6 @@ function byGeometry(a: PlacelessMember, b: PlacelessMember): number {
   if (ends !== 0) return ends;
   if (a.globalId !== b.globalId) return a.globalId < b.globalId ? -1 : 1;
   return a.part - b.part;
-}
-
-function cornerOf(members: readonly PlacelessMember[]): Vec3 | null {
-  if (members.length === 0) return null;
-  let x = Number.POSITIVE_INFINITY;
-  let y = Number.POSITIVE_INFINITY;
-  for (const member of members) {
-    const [from, to] = member.axis;
-    x = Math.min(x, from[0], to[0]);
-    y = Math.min(y, from[1], to[1]);
-  }
-  return [x, y, 0];
 }
 
 function readStoreys({ reading, placements }: Sources): Storey[] {

@@ -4,7 +4,7 @@ import type { BodyMeshes } from './body-meshes.ts';
 import { writtenClass } from './class-names.ts';
 import { type ContextBook, layerOf } from './context.ts';
 import { elementAxes } from './element-axes.ts';
-import { NO_GLOBAL_ID, refusal, remarksOn } from './element-remarks.ts';
+import { NO_GLOBAL_ID, refusal, remarksOn, triedText } from './element-remarks.ts';
 import type { FactsBook } from './facts.ts';
 import type { MaterialBook } from './materials/material-book.ts';
 import { compareRounded, isSound } from './member-axis.ts';
@@ -81,9 +81,9 @@ function membersOf(
   const tag = file.stringAt(id, 7);
   return axes.map((found, part) => {
     reading.about(globalId, between(...found.ends, 0.5));
-    const { axis, remark } = namedAxis(found, texts);
-    if (remark !== null) reading.note(remark);
-    if (axis.noSection !== null) reading.note(refusal(axis.noSection));
+    const { axis, remarks } = namedAxis(found, texts);
+    for (const remark of remarks) reading.note(remark);
+    if (axis.noSection !== null) reading.note(refusal(axis.noSection, triedText(texts())));
     for (const remark of remarksOn(axis)) reading.note(remark);
     if (made.remark !== null) reading.note(made.remark);
     for (const doubt of made.doubts) reading.note(doubt);

@@ -5,6 +5,7 @@ import { IMPORT_DEFAULTS, type ImportOptions } from './options.ts';
 import { finish, prepare } from './prepare.ts';
 import { type PlacelessMember, readElement } from './read-element.ts';
 import type { ImportedModel } from './types.ts';
+import { noteUnknownClasses } from './unknown-classes.ts';
 
 const MEMBER_CLASSES = ['IfcBeam', 'IfcColumn', 'IfcMember'].flatMap((name) => [name, `${name}StandardCase`]);
 
@@ -28,7 +29,12 @@ export function readPhysicalModel(
     globalIds.push(globalId);
     for (const member of readElement(prepared.sources, id, globalId, meshes)) members.push(member);
   }
-  return { ...finish(prepared, 'physical', globalIds, members), given: null, evidence: readEvidence(prepared.sources) };
+  noteUnknownClasses(prepared.sources.reading);
+  return {
+    ...finish(prepared, 'physical', elements, globalIds, members),
+    given: null,
+    evidence: readEvidence(prepared.sources),
+  };
 }
 
 function elementsOf(file: StepFile, extra: readonly string[]): number[] {

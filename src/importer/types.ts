@@ -2,6 +2,7 @@ import type { Finding } from '../domain/finding.ts';
 import type { GridLine } from '../domain/grid-line.ts';
 import type { Member } from '../domain/member.ts';
 import type { PlaceNamer } from '../domain/place.ts';
+import type { Vec3 } from '../domain/vector.ts';
 import type { Evidence } from './evidence/types.ts';
 import type { Given } from './given.ts';
 
@@ -20,6 +21,8 @@ export interface ImportedModel {
   readonly members: readonly Member[];
   readonly findings: readonly Finding[];
   readonly placeOf: PlaceNamer;
+  /** The same told from another corner (world x and y); null where a grid names places. */
+  readonly placesFrom: ((corner: Vec3) => PlaceNamer) | null;
   /** The building's grid, for drawings. */
   readonly gridLines: readonly GridLine[];
   /** The model's IfcProject; null where there is none. */

@@ -83,6 +83,13 @@ export class InstanceTable {
     return ids;
   }
 
+  /** The first id in the file whose keyword has this code; -1 where there is none. */
+  firstOf(code: number): number {
+    this.rowsByCode ??= this.groupByCode();
+    const { order, starts } = this.rowsByCode;
+    return code + 1 < starts.length && starts[code] < starts[code + 1] ? this.ids[order[starts[code]]] : -1;
+  }
+
   /** All ids in file order. */
   *allIds(): Generator<number> {
     for (let row = 0; row < this.rows; row++) yield this.ids[row];

@@ -79,7 +79,14 @@ export class StepInstances {
 
   /** The types that occur, in the order of their first instance. */
   types(): string[] {
-    return this.keywords.names.filter((type) => type !== '' && this.idsOf(type).length > 0);
+    return this.keywords.names.filter((type, code) => type !== '' && this.table.firstOf(code) >= 0);
+  }
+
+  /** The first instance of exactly this type, found without gathering all of them; null where there is none. */
+  firstOf(type: string): number | null {
+    const code = this.keywords.names.indexOf(type);
+    const id = code <= 0 ? -1 : this.table.firstOf(code);
+    return id < 0 ? null : id;
   }
 
   /** All ids in file order. */

@@ -1,4 +1,5 @@
+import { markOf } from '../domain/mark.ts';
 import type { Member } from '../domain/member.ts';
 
 /** What a person calls a member: its mark, else its name, else its class and GlobalId. */
-export const labelOf = (member: Member): string => member.tag || member.name || `${member.class} ${member.globalId}`;
+export const labelOf = (member: Member): string => markOf(member) ?? `${member.class} ${member.globalId}`;

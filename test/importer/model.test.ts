@@ -119,10 +119,14 @@ describe('materials', () => {
     ['Holz', 450],
     ['C24', 450],
     ['GL28h', 450],
+    ['GL24h', 450],
+    ['D30', 450],
     ['Stahlbeton 65690', 2500],
     ['Concrete, Cast-in-Place gray', 2500],
     ['C30/37', 2500],
     ['Aluminium 6061', 2700],
+    ['EN AW-6060', 2700],
+    ['EN-AW 6082 T6', 2700],
     ['STEEL/NEOPRENE', 1200],
   ])('knows the kind of %s', (name, density) => {
     const model = made(name);

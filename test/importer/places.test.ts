@@ -51,7 +51,7 @@ describe('places by the grid', () => {
 });
 
 describe('places without a grid', () => {
-  it("says the storey and the way from the model's corner", () => {
+  it('says the storey and the way from the lowest x and y of the members', () => {
     const model = importText(`${plain}
 #700=IFCBUILDINGSTOREY('0lllllllllllllllllllll',$,'Roof',$,$,#701,$,$,.ELEMENT.,6000.);
 #701=IFCLOCALPLACEMENT($,#702);
@@ -59,8 +59,8 @@ describe('places without a grid', () => {
 #703=IFCCARTESIANPOINT((0.,0.,6000.));
 #710=IFCBUILDINGSTOREY('0mmmmmmmmmmmmmmmmmmmmm',$,'Ground',$,$,#711,$,$,.ELEMENT.,0.);
 #711=IFCLOCALPLACEMENT($,#11);`);
-    expect(model.placeOf([1, 2, 3])).toBe('Ground, 1.0 m x and 2.0 m y from the corner, +3.00');
-    expect(model.placeOf([1, 2, 5.9])).toBe('Roof, 1.0 m x and 2.0 m y from the corner, +5.90');
+    expect(model.placeOf([1, 2, 3])).toBe('Ground, x 1.0 m, y 2.0 m from the lowest, +3.00');
+    expect(model.placeOf([1, 2, 5.9])).toBe('Roof, x 1.0 m, y 2.0 m from the lowest, +5.90');
   });
 });
 

@@ -43,6 +43,17 @@ function forces(result: Result, of: { axialForce: readonly (number | null)[] }):
   );
 }
 
+describe('a brief that asks for an analysis view', () => {
+  it('of a model that has none is told so, once, and what to do', async () => {
+    const result = await resultOf(towerPhysical('IFC4'), { brief: brief('source: analysis') });
+    const errors = result.findings.filter(({ severity }) => severity === 'error');
+    expect(errors.map(({ code }) => code)).toEqual(['no-members']);
+    expect(errors[0]!.message).toContain('structural analysis view');
+    expect(errors[0]!.message).toContain('no IfcStructuralCurveMember');
+    expect(errors[0]!.advice).toContain('Leave `source: analysis` out');
+  });
+});
+
 describe.each(['IFC2X3', 'IFC4', 'IFC4X3'] as const)('a tower given as an analysis view in %s', (schema) => {
   it('has the forces and reactions of the same tower given physically with a brief', async () => {
     const [view, physical] = [await resultOf(towerView(schema)), await physicalResult(schema)];

@@ -29,7 +29,11 @@ export function readAnalysisModel(file: StepFile, options: Partial<ImportOptions
   noteSurfaces(sources.reading);
   const read = [...members.values()].map(({ member }) => member);
   const globalIds = ids.map((id) => file.stringAt(id, 0)?.trim() ?? '');
-  return { ...finish(prepared, 'analysis', globalIds, read), given: { supports, cases, combinations }, evidence: null };
+  return {
+    ...finish(prepared, 'analysis', ids, globalIds, read),
+    given: { supports, cases, combinations },
+    evidence: null,
+  };
 }
 
 /** Whether the file has a structural analysis view with members. */

@@ -1,3 +1,4 @@
+import { type Finding, finding } from '../../domain/finding.ts';
 import { type Remark, whose } from '../findings-log.ts';
 
 /** What a structural analysis view says and a pin-jointed truss does not take. Each kind is one finding. */
@@ -73,6 +74,13 @@ export const SURFACE_REMARK = (counts: string): Remark => ({
   say: () => `The model's analysis view has ${counts}, which are passed over: only members are read.`,
   advice: 'What they carry or hold is to be given in the brief, as loads, supports or holds.',
 });
+
+/** The brief asks for a view that the file does not have. */
+export const NO_VIEW: Finding = finding(
+  'no-members',
+  'The brief asks for the structural analysis view (source: analysis), and the file has none: no IfcStructuralCurveMember is in it.',
+  'Leave `source: analysis` out of the brief to read beams, columns and members, or export the model with its analysis view.',
+);
 
 export const LOADS_WITHOUT_CASE = (count: number): Remark => ({
   code: 'out-of-scope',

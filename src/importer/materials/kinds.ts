@@ -24,11 +24,15 @@ export const STEEL: Kind = { kind: 'steel', elasticModulus: 210e9, density: 7850
  */
 const WORDS: readonly (readonly [pattern: RegExp, kind: Kind])[] = [
   [/neopren|rubber|gummi|\bepdm\b|elastomer|caoutchouc/i, RUBBER],
-  [/concret|beton|béton|betão|hormig|calcestruzzo|cemento|бетон|\bC\s?\d{2}\/\d{2,3}\b/i, CONCRETE],
+  [/concret|beton|béton|betão|hormig|calcestruzzo|cemento|бетон|\bL?C\s?\d{2,3}\/\d{2,3}\b/i, CONCRETE],
   [/timber|\bwood|plywood|hardwood|softwood|holz|\bhout|\bbois\b|madera|madeira|legno|\bträ\b|\btre(verk)?\b/i, TIMBER],
   [/limtre|limträ|glulam|lamell|drewno|dřevo|puu\b|дерев|\b(BSH|KVH|LVL|CLT)\b|\bGL\s?\d{2}[hc]?\b/i, TIMBER],
-  [/^\s*C\s?(14|16|18|20|22|24|27|30|35|40|45|50)\s*$/i, TIMBER],
-  [/alumin|\balu\b|allumin|алюмин|\bEN AW\b/i, ALUMINIUM],
+  // EN 338. C35 and above are also steels of EN 10083.
+  [
+    /^\s*(?:C\s?(?:14|16|18|20|22|24|27|30)|D\s?(?:18|24|27|30|35|40|45|50|55|60|65|70|75|80))(?=\s*$|[\s,;(])/i,
+    TIMBER,
+  ],
+  [/alumin|\balu\b|allumin|алюмин|\b(?:EN[ -]?)?AW[ -]?\d{4}|\bEN AW\b|\b[567]\d{3}[ -]?T\d|\bAlMg/i, ALUMINIUM],
   [/masonry|brick|mauerwerk|ziegel|\bbrique|mattone|ladrillo|\bstone\b|gypsum|\bgips/i, MASONRY],
   [/\bglass?\b|\bverre\b|\bvidrio\b|\bvetro\b/i, GLASS],
   [/plastic|kunststoff|\bPVC\b|\bGRP\b|\bGFK\b|\bPU\b|polycarbonat|polyurethan/i, PLASTIC],

@@ -1,6 +1,7 @@
 import type { Section } from '../../domain/member.ts';
 import type { Remark } from '../findings-log.ts';
 import { whose } from '../findings-log.ts';
+import { isPair } from './designations/pair.ts';
 import { sectionNamedIn } from './designations/section-from-designation.ts';
 
 /** The section of a member as its names tell it. */
@@ -24,6 +25,8 @@ export function namedSection(found: Section | null, texts: () => readonly (strin
     const section = text === null ? null : sectionNamedIn(text);
     if (section === null) continue;
     if (found === null) return { section, remark: guessed(section), isTurned: false };
+    // One of the two that a pair is: each is a body of its own.
+    if (isPair(section.name) && Math.abs((2 * found.area) / section.area - 1) < SAME_AREA) return null;
     const isSame = Math.abs(found.area / section.area - 1) < SAME_AREA;
     return { section, remark: isSame ? null : differs(section, found), isTurned: liesAcross(found, section) };
   }

@@ -1,4 +1,4 @@
-import type { Section, SectionShape } from '../../domain/member.ts';
+import type { Making, Section, SectionShape } from '../../domain/member.ts';
 import { noSection } from '../not-read.ts';
 import { type Outline, type Point2, piecesOf } from './outline.ts';
 import { outlineProperties, type PlaneProperties, ringSize } from './outline-properties.ts';
@@ -15,6 +15,8 @@ export interface ProfileShape {
   readonly warping: number;
   /** Of the thickest part, m; left out where it is to be estimated from the outline. */
   readonly thickness?: number;
+  /** Of hollow sections known by their designation. */
+  readonly making?: Making;
   /** In the shape's own plane; left out where it is the centroid, as of closed and solid shapes, or unknown. */
   readonly shearCentre?: Point2;
 }
@@ -46,6 +48,7 @@ export function sectionOf(shape: ProfileShape): Section {
     depth: plane.max[1] - plane.min[1],
     width: plane.max[0] - plane.min[0],
     thickness: shape.thickness ?? meanThickness(shape.outline, area),
+    ...(shape.making === undefined ? {} : { making: shape.making }),
   };
 }
 

@@ -21,6 +21,9 @@ export interface Profile {
 
 const DEEPEST = 16;
 
+/** Classes that say no more of a profile than what it is called. */
+export const MERE_NAMES: ReadonlySet<string> = new Set(['IFCPROFILEDEF', 'IFCPARAMETERIZEDPROFILEDEF']);
+
 /** @throws NotRead (no-section) where the profile's class is not read or its dimensions make no section. */
 export function readProfile(reading: Reading, id: number, depth = 0): Profile {
   if (depth > DEEPEST) throw noSection('its profile refers to itself');
@@ -42,6 +45,7 @@ export function readProfile(reading: Reading, id: number, depth = 0): Profile {
   }
   const shape = orImpossible(name, () => parametricShape(reading, type, args, name));
   if (shape !== null) return { id, shape, map: readPlaneAxes(reading, args[2]) };
+  if (MERE_NAMES.has(type) && name !== null) throw noSection(`its profile is the mere name '${name}'`);
   throw noSection(type === '' ? 'its profile is missing' : `its profile is ${inWords(type)}, which is not read`);
 }
 

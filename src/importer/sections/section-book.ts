@@ -10,6 +10,7 @@ import { chs, circle } from './closed-shapes.ts';
 import { sectionNamedIn } from './designations/section-from-designation.ts';
 import { ImpossibleProfile, namedInstead } from './impossible-profile.ts';
 import { knownByName } from './known-outline.ts';
+import { makingRemark } from './making-remark.ts';
 import { mapOutline, mapPoint, type PlaneMap, type Point2, SAME_PLANE } from './outline.ts';
 import { type Profile, readProfile } from './profile.ts';
 import { centroidOf, type ProfileShape, sectionOf } from './profile-shape.ts';
@@ -131,6 +132,8 @@ export class SectionBook {
     if (profile instanceof NotRead) {
       const section = this.sectionWithoutOutline(id);
       if (section === null) throw profile;
+      const making = makingRemark(section);
+      if (making !== null) this.reading.note(making);
       if (profile instanceof ImpossibleProfile) this.reading.note(namedInstead(profile, section.name));
       return { section, zAxis: firstAcross(along, across(y, along)) };
     }

@@ -121,6 +121,74 @@ describe('a designation', () => {
   });
 });
 
+describe('two back to back', () => {
+  it.each([
+    ['2L 80x80x8', 'L 80x80x8'],
+    ['2L80/80/8', 'L 80x80x8'],
+    ['2 x L 100x50x8', 'L 100x50x8'],
+    ['2-L4X3X1/4', 'L4X3X1/4'],
+    ['2L4X3X1/4X3/8LLBB', 'L4X3X1/4'],
+    ['2UPN200', 'UPN 200'],
+    ['Diagonal 2L 80x80x8', 'L 80x80x8'],
+  ])('as in "%s" are reckoned as two single ones', (text, name) => {
+    const [pair, one] = [sectionNamedIn(text)!, sectionFromDesignation(name)!];
+    for (const key of ['area', 'inertiaY', 'inertiaZ', 'inertiaMajor', 'inertiaMinor', 'torsion'] as const) {
+      expect(pair[key] / one[key], key).toBeCloseTo(2, 9);
+    }
+    expect(pair.depth).toBe(one.depth);
+    expect(pair.width).toBeCloseTo(2 * one.width, 12);
+    expect(sectionFromDesignation(pair.name)).toEqual(pair);
+  });
+
+  it('have the area that the tables give two equal angles', () => {
+    // EN 10056-1: L 80x80x8 has 12.3 cm2.
+    expect(sectionFromDesignation('2L 80x80x8')!.area / 24.6e-4).toBeCloseTo(1, 2);
+  });
+
+  it.each(['2 HEA 200', '2x', '2L', '2L 80', '22L 80x80x8'])('are not seen in "%s"', (text) => {
+    expect(sectionFromDesignation(text)).toBeNull();
+  });
+});
+
+describe('a steel grade behind a designation', () => {
+  it.each([
+    ['HEA200-S355', 'HEA 200'],
+    ['HEA 200 S355J2+N', 'HEA 200'],
+    ['IPE300/S235JR', 'IPE 300'],
+    ['IPE 300 (S355)', 'IPE 300'],
+    ['RHS150x100x6.3-S355J2H', 'RHS 150x100x6.3'],
+    ['W12X26-A992', 'W12X26'],
+    ['HSS6X6X3/8 A500 Gr.B', 'HSS6X6X3/8'],
+    ['2L 80x80x8 S355', '2L 80x80x8'],
+  ])('is passed over: %s', (text, name) => {
+    expect(sectionFromDesignation(text)?.name).toBe(name);
+  });
+
+  it('is no designation by itself', () => {
+    for (const text of ['S355', 'S 235', 'A992']) expect(sectionFromDesignation(text)).toBeNull();
+  });
+});
+
+describe('how a hollow section was made', () => {
+  it.each([
+    ['SHS 100x100x5', 'cold', true],
+    ['CHS 114.3x5', 'cold', true],
+    ['SHS 100x100x5 EN 10219', 'cold', false],
+    ['CFRHS 150x100x5', 'cold', false],
+    ['RHS 150x100x5 EN 10210', 'hot', false],
+    ['VKR 100x100x5', 'hot', false],
+    ['CHS 114.3x5 EN 10210', 'hot', false],
+  ] as const)('is known of %s, or known to be assumed', (text, finish, isAssumed) => {
+    const section = sectionFromDesignation(text)!;
+    expect(section.making).toEqual({ finish, isAssumed });
+    if (!isAssumed && finish === 'hot') expect(sectionFromDesignation(section.name)).toEqual(section);
+  });
+
+  it('is no question of an I', () => {
+    expect(sectionFromDesignation('HEA 200')!.making).toBeUndefined();
+  });
+});
+
 describe('a text that says more', () => {
   it.each([
     ['UB-Universal Beam:305x165x40UB:31045', 'UB 305x165x40'],

@@ -10,8 +10,7 @@ export function parseXml(text: string, depth: number): XmlElement {
   if (/<!DOCTYPE/i.test(text)) throw new ModelError(DTD);
   const verdict = XMLValidator.validate(text);
   if (verdict !== true) {
-    const { line, msg } = verdict.err;
-    throw new ModelError(`The ifcXML is damaged or cut off, line ${line}: ${excerpt(msg)} Export it again.`);
+    throw damaged(faultOf(text, verdict.err));
   }
   const [root] = elementsIn(nodesOf(text, depth));
   if (root === undefined) throw new ModelError('The XML has no element in it.');
@@ -43,7 +42,7 @@ function nodesOf(text: string, depth: number): readonly RawNode[] {
         `The ifcXML has elements nested deeper than ${depth}; export the model as STEP text (.ifc).`,
       );
     }
-    throw new ModelError(`The ifcXML is damaged: ${excerpt(reason)} Export it again.`);
+    throw damaged(/closed/i.test(reason) ? endsEarly(text) : null);
   }
 }
 
@@ -51,8 +50,36 @@ const DTD =
   'The XML has a document type declaration (<!DOCTYPE>), which is refused, since it can make a file grow without end. ' +
   'Take it out, or export the model again without it.';
 
-function excerpt(message: string): string {
-  const line = message.replace(/[^\x20-\x7e]/g, '?').trim();
-  const short = line.length > 120 ? `${line.slice(0, 117)}...` : line;
-  return /[.!?]$/.test(short) ? short : `${short}.`;
+interface Fault {
+  readonly line: number;
+  readonly words: string;
 }
+
+const damaged = (fault: Fault | null): ModelError =>
+  new ModelError(
+    `The ifcXML is damaged or cut off${fault === null ? '' : `, line ${fault.line}: ${fault.words}`}. Export it again.`,
+  );
+
+/** What the checker's codes and words come to, in ours: its own speak of its inside. */
+const FAULTS: readonly (readonly [told: RegExp, words: string])[] = [
+  [/Expected closing tag|has not been opened|proper closing/i, 'an element is closed that is not the one last opened'],
+  [/^Attribute|Attributes for/i, 'an attribute has no value, no closing quote, or stands twice'],
+  [/char .* is not expected/i, 'a character such as & stands there that must be written as an entity'],
+  [/space after|Tag .* is an invalid name|Invalid tag/i, 'a < stands there that begins no element'],
+  [/Extra text/i, 'something follows after the end of the model'],
+  [/Start tag expected/i, 'there is no element in it'],
+];
+
+function faultOf(text: string, { line, msg }: { line: number; msg: string }): Fault {
+  // Of elements left open the checker has the names, in brackets, and no line.
+  if (/^Invalid '\[/.test(msg) || isCutWithinTag(text)) return endsEarly(text);
+  const words = FAULTS.find(([told]) => told.test(msg))?.[1] ?? 'it is not well-formed XML';
+  return { line, words };
+}
+
+const isCutWithinTag = (text: string): boolean => text.lastIndexOf('<') > text.lastIndexOf('>');
+
+const endsEarly = (text: string): Fault => ({
+  line: text.trimEnd().split('\n').length,
+  words: 'the text ends there with elements still open',
+});

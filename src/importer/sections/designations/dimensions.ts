@@ -1,3 +1,4 @@
+import type { Making } from '../../../domain/member.ts';
 import { chs, circle, rectangle, rhs } from '../closed-shapes.ts';
 import { inMillimetres, type ProfileShape } from '../profile-shape.ts';
 import { lShape } from '../rolled-shapes.ts';
@@ -6,28 +7,30 @@ import type { Rows } from './rows.ts';
 
 /** Sections whose designation states every dimension but the radii. Metres. */
 
-/** How a hollow section was made, which decides its corners; unknown ones are taken as cold formed, the lesser area. */
-export type Making = 'hot' | 'cold';
-
 /**
  * Corners of hollow rectangles for the calculation of properties: EN 10210-2:2006 Annex A (1.5 t and 1.0 t) and
  * EN 10219-2:2006 Annex B (2.0 t and 1.0 t up to 6 mm, 2.5 t and 1.5 t up to 10 mm, 3.0 t and 2.0 t above), from memory.
  */
-function corners(wall: number, making: Making): { outer: number; inner: number } {
-  if (making === 'hot') return { outer: 1.5 * wall, inner: wall };
+function corners(wall: number, finish: Making['finish']): { outer: number; inner: number } {
+  if (finish === 'hot') return { outer: 1.5 * wall, inner: wall };
   const outer = wall <= 0.006 + 1e-9 ? 2 : wall <= 0.01 + 1e-9 ? 2.5 : 3;
   return { outer: outer * wall, inner: (outer - 1) * wall };
 }
 
+/** Where nothing says how a hollow section was made: cold formed, which has the lesser area and the lower buckling curve. */
+export const ASSUMED_MAKING: Making = { finish: 'cold', isAssumed: true };
+
 export function hollowRectangle(depth: number, width: number, wall: number, making: Making): ProfileShape {
   const [long, short] = [Math.max(depth, width), Math.min(depth, width)];
   const size = long === short ? 'SHS' : 'RHS';
-  const name = `${size} ${inMillimetres(long, short, wall)}${making === 'hot' ? ' hot' : ''}`;
-  return rhs(name, { depth: long, width: short, wall, ...corners(wall, making) });
+  const name = `${size} ${inMillimetres(long, short, wall)}${making.finish === 'hot' ? ' hot' : ''}`;
+  return { ...rhs(name, { depth: long, width: short, wall, ...corners(wall, making.finish) }), making };
 }
 
-export const tube = (diameter: number, wall: number): ProfileShape =>
-  chs(`CHS ${inMillimetres(diameter, wall)}`, diameter / 2, wall);
+export function tube(diameter: number, wall: number, making: Making): ProfileShape {
+  const name = `CHS ${inMillimetres(diameter, wall)}${making.finish === 'hot' ? ' hot' : ''}`;
+  return { ...chs(name, diameter / 2, wall), making };
+}
 
 export const roundBar = (diameter: number): ProfileShape => circle(`Round ${inMillimetres(diameter)}`, diameter / 2);
 

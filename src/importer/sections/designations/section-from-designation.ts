@@ -1,14 +1,16 @@
 import type { Section } from '../../../domain/member.ts';
 import { sectionOf } from '../profile-shape.ts';
+import { pairFromDesignation } from './pair.ts';
 import { shapeFromDesignation } from './shape-from-designation.ts';
 
 /**
- * The section that `text` as a whole calls by its designation ('HEA 200', 'W12X26', '150*100*6.3 RHS'), its properties
+ * The section that `text` as a whole calls by its designation ('HEA 200', 'W12X26', '150*100*6.3 RHS', '2L 80x80x8'), its properties
  * computed from the dimensions of the standard; null where it is none that is known.
  */
 export function sectionFromDesignation(text: string): Section | null {
   const shape = shapeFromDesignation(text);
-  return shape === null ? null : { ...sectionOf(shape), from: 'name' };
+  const section = shape === null ? pairFromDesignation(text) : sectionOf(shape);
+  return section === null ? null : { ...section, from: 'name' };
 }
 
 /** Longest run of words that is tried as one designation: 'HE 200 A', 'L 3 1/2 x 3 x 1/4'. */

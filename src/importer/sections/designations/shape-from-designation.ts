@@ -1,12 +1,13 @@
+import type { Making } from '../../../domain/member.ts';
 import { NotRead } from '../../not-read.ts';
 import type { ProfileShape } from '../profile-shape.ts';
 import {
+  ASSUMED_MAKING,
   americanRectangle,
   americanTube,
   flatBar,
   hollowRectangle,
   inchAngle,
-  type Making,
   metricAngle,
   roundBar,
   tube,
@@ -28,7 +29,7 @@ const INCH = 0.0254;
 export function shapeFromDesignation(text: string): ProfileShape | null {
   // Longer texts are descriptions, not designations; and nobody reads patterns through a page of text.
   if (text.length > 60) return null;
-  const { plain, making } = withoutStandard(text);
+  const { plain, making } = withoutStandard(text.replace(GRADE_BEHIND, ''));
   const spelt = plainSpelling(plain);
   if (!/\d/.test(spelt)) return null;
   try {
@@ -44,8 +45,12 @@ function withoutStandard(text: string): { plain: string; making: Making | null }
   const standard = /[\s,(-]*(?:EN\s?-?(10210|10219)[-0-9:\s)]*|\s(HOT|COLD)$)/i.exec(text);
   if (standard === null) return { plain: text, making: null };
   const isHot = standard[1] === '10210' || standard[2]?.toUpperCase() === 'HOT';
-  return { plain: text.replace(standard[0], ' ').trim(), making: isHot ? 'hot' : 'cold' };
+  return { plain: text.replace(standard[0], ' ').trim(), making: stated(isHot ? 'hot' : 'cold') };
 }
+
+/** 'HEA200-S355', 'IPE 300 / S235JR', 'W12X26 A992': the grade of the steel behind the section, in EN and ASTM spellings. */
+const GRADE_BEHIND =
+  /(?<=\d[A-Z]?)[\s,;/(_-]+(?:S\s?(?:235|275|355|420|450|460|500|550|690)[A-Z0-9+]{0,8}|A(?:36|53|500|572|913|992|1085)(?:\s?GR\.?\s?\w{1,2})?)\)?\s*$/i;
 
 interface Sized {
   readonly family: FamilyName;
@@ -119,7 +124,7 @@ function wholeOfTee(spelt: string): Sized | null {
 }
 
 const HOLLOW = /^(HF|CF)?(RHS|SHS|RRO|QRO|VKR|KKR|KOKER|K|HUP)(HF|CF)?([\d.X/]+)$/;
-const TUBE = /^(?:HF|CF)?(?:CHS|ROHR|ROR|RO|TUBE|PIPE|D|Ø)([\d.X/]+)$/;
+const TUBE = /^(HF|CF)?(?:CHS|ROHR|ROR|RO|TUBE|PIPE|D|Ø)([\d.X/]+)$/;
 const ROUND = /^(?:ROUND|RUND|RND|ROD|RD|Ø)([\d.]+)$/;
 const SQUARE = /^(?:SQ|VKT|4KT)([\d.]+)$/;
 const FLAT = /^(?:FLAT|FLT|FLA|FL|FB|PLATE|PLT|PL|BL)([\d.X/-]+)$/;
@@ -129,7 +134,7 @@ function dimensionedShape(spelt: string, making: Making | null, inInches: boolea
   return (
     americanShape(spelt) ??
     matched(HOLLOW, spelt, (match) => hollowShape(match, making)) ??
-    matched(TUBE, spelt, (match) => sized(match[1]!, 2, (d, t) => tube(d!, t!))) ??
+    matched(TUBE, spelt, (match) => tubeShape(match, making)) ??
     matched(ROUND, spelt, (match) => sized(match[1]!, 1, (d) => roundBar(d!))) ??
     matched(SQUARE, spelt, (match) => sized(match[1]!, 1, (a) => flatBar(a!, a!))) ??
     matched(FLAT, spelt, (match) => flatShape(match[1]!, inInches)) ??
@@ -148,12 +153,20 @@ function sized(written: string, count: number, make: (...lengths: number[]) => P
   return lengths?.length === count ? make(...lengths.map((length) => length * MILLIMETRE)) : null;
 }
 
-function hollowShape(match: RegExpExecArray, stated: Making | null): ProfileShape | null {
+const stated = (finish: Making['finish']): Making => ({ finish, isAssumed: false });
+
+function tubeShape([, finish, written]: RegExpExecArray, byStandard: Making | null): ProfileShape | null {
+  const byWord = finish === undefined ? null : stated(finish === 'HF' ? 'hot' : 'cold');
+  return sized(written!, 2, (d, t) => tube(d!, t!, byStandard ?? byWord ?? ASSUMED_MAKING));
+}
+
+function hollowShape(match: RegExpExecArray, byStandard: Making | null): ProfileShape | null {
   const [, before, word, behind, written] = match;
   const finish = before ?? behind;
   // Swedish trade names: varm- and kallformat.
-  const byWord = finish === 'HF' || word === 'VKR' ? 'hot' : finish === 'CF' || word === 'KKR' ? 'cold' : null;
-  const making = stated ?? byWord ?? 'cold';
+  const isHot = finish === 'HF' || word === 'VKR';
+  const byWord = isHot || finish === 'CF' || word === 'KKR' ? stated(isHot ? 'hot' : 'cold') : null;
+  const making = byStandard ?? byWord ?? ASSUMED_MAKING;
   return (
     sized(written!, 3, (a, b, t) => hollowRectangle(a!, b!, t!, making)) ??
     sized(written!, 2, (a, t) => hollowRectangle(a!, a!, t!, making))

@@ -1,0 +1,40 @@
+import type { Finding } from '../domain/finding.ts';
+import type { Member } from '../domain/member.ts';
+import { between, type Vec3 } from '../domain/vector.ts';
+import type { ImportedModel } from './types.ts';
+
+/** Least x and y of the members' ends; null where there are none. */
+export function cornerOf(members: readonly Pick<Member, 'axis'>[]): Vec3 | null {
+  if (members.length === 0) return null;
+  let x = Number.POSITIVE_INFINITY;
+  let y = Number.POSITIVE_INFINITY;
+  for (const member of members) {
+    const [from, to] = member.axis;
+    x = Math.min(x, from[0], to[0]);
+    y = Math.min(y, from[1], to[1]);
+  }
+  return [x, y, 0];
+}
+
+/**
+ * The model with its places told from the lowest x and y of the members `inScope`, where no grid names them: a helper line
+ * a kilometre off, that nobody asked for, is no corner that anybody knows.
+ */
+export function placedInScope(
+  imported: ImportedModel,
+  inScope: readonly Member[],
+): { readonly imported: ImportedModel; readonly members: readonly Member[] } {
+  const { placesFrom } = imported;
+  const [corner, whole] = [cornerOf(inScope), cornerOf(imported.members)];
+  if (placesFrom === null || corner === null || whole === null || isSame(corner, whole)) {
+    return { imported, members: inScope };
+  }
+  const placeOf = placesFrom(corner);
+  const placed = (found: Finding): Finding => (found.at === null ? found : { ...found, place: placeOf(found.at) });
+  return {
+    imported: { ...imported, placeOf, findings: imported.findings.map(placed) },
+    members: inScope.map((member) => ({ ...member, place: placeOf(between(...member.axis, 0.5)) })),
+  };
+}
+
+const isSame = (a: Vec3, b: Vec3): boolean => a[0] === b[0] && a[1] === b[1];
