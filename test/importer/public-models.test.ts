@@ -1,6 +1,7 @@
 import { readFileSync } from 'node:fs';
 import { describe, expect, it } from 'vitest';
 import { norm, subtract } from '../../src/domain/vector.ts';
+import { openModel } from '../../src/importer/files/open-model.ts';
 import { IMPORT_DEFAULTS, type ImportOptions } from '../../src/importer/options.ts';
 import { readPhysicalModel } from '../../src/importer/read-physical-model.ts';
 import type { ImportedModel } from '../../src/importer/types.ts';
@@ -63,6 +64,52 @@ for (const [name, elements, members, sections, codes] of MODELS) {
     });
   });
 }
+
+const fabrication = publicModel('fabrication-model.ifc');
+describe.skipIf(fabrication === null)('public model fabrication-model.ifc in detail', () => {
+  it('reads split anchors and joggled plates by their names, and refuses the wall', () => {
+    const { members, findings } = read(fabrication);
+    const [refused, ...others] = findings.filter(({ code }) => code === 'no-axis');
+    expect(others).toEqual([]);
+    // PL200*3200, 6.4 m long.
+    expect(refused!.members).toEqual(['1BZFet000BfJ4oDZSrCpWu']);
+    const short = findings.find(({ code, message }) => code === 'bent-axis' && message.includes('approximate'))!;
+    const byId = new Map(members.map((member) => [member.globalId, member]));
+    expect(short.members).toHaveLength(56);
+    for (const globalId of short.members) {
+      const { section, axis } = byId.get(globalId)!;
+      expect(['Flat 60x6', 'Flat 80x10']).toContain(section!.name);
+      expect(norm(subtract(...axis))).toBeGreaterThan(0.08);
+      expect(norm(subtract(...axis))).toBeLessThan(0.14);
+    }
+    expect(short.gap).toBeGreaterThan(0.01);
+    expect(short.gap).toBeLessThan(0.06);
+  });
+
+  it('counts in its findings the members whose sections are measured, and no others', () => {
+    const { members, findings } = read(fabrication);
+    const measured = members.filter(({ section }) => section!.from === 'mesh').map(({ globalId }) => globalId);
+    const told = findings.filter(({ code }) => code === 'guessed-section');
+    expect(told.flatMap((found) => found.members).sort()).toEqual(measured.sort());
+    for (const found of told) expect(found.message).toContain(`${found.members.length} members`);
+  });
+});
+
+const lintels = publicModel('brep-lintels.ifczip');
+describe.skipIf(lintels === null)('public model brep-lintels.ifczip in detail', () => {
+  it('gives each of its 35 elements one member with the section of an angle, a slice of 5 mm too', async () => {
+    const { file } = await openModel(readFileSync(lintels!));
+    const { members, findings } = readPhysicalModel(file);
+    expect(new Set(members.map(({ globalId }) => globalId)).size).toBe(35);
+    expect(members).toHaveLength(35);
+    // Thin angles 150 x 90 and 200 x 90, drawn with the same legs throughout.
+    const areas = members.map(({ section }) => Math.round(section!.area * 1e6));
+    expect(new Set(areas)).toEqual(new Set([771, 937]));
+    const slice = members.find(({ globalId }) => globalId === '0KNmVKmh519eKhcfjdm0L1')!;
+    expect(norm(subtract(...slice.axis))).toBeCloseTo(0.005, 6);
+    expect(findings.filter(({ severity }) => severity === 'error')).toEqual([]);
+  });
+});
 
 const gridshell = publicModel('gridshell-roof.ifc');
 describe.skipIf(gridshell === null)('public model gridshell-roof.ifc in detail', () => {
