@@ -4,6 +4,8 @@ import type { MemberAxis } from './member-axis.ts';
 import { makingRemark } from './sections/making-remark.ts';
 import { namedSection } from './sections/named-section.ts';
 
+const NO_REMARKS: readonly Remark[] = [];
+
 /**
  * The axis with the section that `texts` (read only then) name, the first that names one, where its profile is not known; what is said of
  * that. A section that is named and measured alike is no guess.
@@ -13,7 +15,7 @@ export function namedAxis(
   texts: () => readonly (string | null)[],
 ): { readonly axis: MemberAxis; readonly remarks: readonly Remark[] } {
   const named = namedSection(axis.section, texts);
-  if (named === null) return { axis, remarks: [] };
+  if (named === null) return { axis, remarks: NO_REMARKS };
   const { section, remark, isTurned } = named;
   const remarks = [remark, makingRemark(section)].filter((it) => it !== null);
   const along = unit(subtract(axis.ends[1], axis.ends[0]));
