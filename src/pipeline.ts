@@ -193,21 +193,15 @@ async function readInScope(file: StepFile, brief: Brief) {
   const options = { classes: classesNamed(brief), axes: brief.axes, defaultMaterial: brief.materials.default };
   const ofView = () => {
     const imported = readAnalysisModel(file, options);
-    return placed(imported, applyScope(imported.members, brief.scope, hasAnalysisView(file) ? null : NO_VIEW));
+    return placedInScope(imported, applyScope(imported.members, brief.scope, hasAnalysisView(file) ? null : NO_VIEW));
   };
   if (brief.source === 'analysis') return ofView();
   const imported = await importModel(file, options);
-  const physical = placed(imported, applyScope(imported.members, brief.scope));
+  const physical = placedInScope(imported, applyScope(imported.members, brief.scope));
   if (brief.source !== null || physical.scope.members.length > 0 || !hasAnalysisView(file)) return physical;
   const view = ofView();
   if (view.scope.members.length === 0) return physical;
   return { ...view, scope: { ...view.scope, findings: [...view.scope.findings, ...elementsLeft(imported)] } };
-}
-
-/** Places as they are told of the members in scope. */
-function placed(imported: ImportedModel, scope: ReturnType<typeof applyScope>) {
-  const told = placedInScope(imported, scope.members);
-  return { imported: told.imported, scope: { ...scope, members: told.members } };
 }
 
 /** What the physical half of a model held where its analysis view was read instead. */

@@ -17,23 +17,25 @@ export function cornerOf(members: readonly Pick<Member, 'axis'>[]): Vec3 | null 
 }
 
 /**
- * The model with its places told from the lowest x and y of the members `inScope`, where no grid names them: a helper line
+ * The model with its places told from the lowest x and y of the members in `scope`, where no grid names them: a helper line
  * a kilometre off, that nobody asked for, is no corner that anybody knows.
  */
-export function placedInScope(
+export function placedInScope<Scope extends { readonly members: readonly Member[] }>(
   imported: ImportedModel,
-  inScope: readonly Member[],
-): { readonly imported: ImportedModel; readonly members: readonly Member[] } {
+  scope: Scope,
+): { readonly imported: ImportedModel; readonly scope: Scope } {
   const { placesFrom } = imported;
-  const [corner, whole] = [cornerOf(inScope), cornerOf(imported.members)];
-  if (placesFrom === null || corner === null || whole === null || isSame(corner, whole)) {
-    return { imported, members: inScope };
-  }
+  if (placesFrom === null) return { imported, scope };
+  const [corner, whole] = [cornerOf(scope.members), cornerOf(imported.members)];
+  if (corner === null || whole === null || isSame(corner, whole)) return { imported, scope };
   const placeOf = placesFrom(corner);
   const placed = (found: Finding): Finding => (found.at === null ? found : { ...found, place: placeOf(found.at) });
   return {
     imported: { ...imported, placeOf, findings: imported.findings.map(placed) },
-    members: inScope.map((member) => ({ ...member, place: placeOf(between(...member.axis, 0.5)) })),
+    scope: {
+      ...scope,
+      members: scope.members.map((member) => ({ ...member, place: placeOf(between(...member.axis, 0.5)) })),
+    },
   };
 }
 
