@@ -36,6 +36,7 @@ export type { Given } from './importer/given.ts';
 export { importModel } from './importer/import-model.ts';
 export type { ImportedModel } from './importer/types.ts';
 export { type Run, type RunOptions, runModel, type Stage } from './pipeline.ts';
+export { analyseWhole } from './statics/analyse-whole.ts';
 export { buildCases } from './statics/loads/build-cases.ts';
 export { combine } from './statics/solution/combine.ts';
 export { envelope } from './statics/solution/envelope.ts';

@@ -24,6 +24,7 @@ import type { Given } from './importer/given.ts';
 import { importModel } from './importer/import-model.ts';
 import { placedInScope } from './importer/places-in-scope.ts';
 import type { ImportedModel } from './importer/types.ts';
+import { analyseWhole } from './statics/analyse-whole.ts';
 import { bendingBetweenNodes } from './statics/bending/between-nodes.ts';
 import { eccentricityMoments } from './statics/bending/eccentricity-moments.ts';
 import { bendingFindings, withMoments } from './statics/bending/findings.ts';
@@ -122,12 +123,14 @@ export async function runModel(bytes: Uint8Array, options: Partial<RunOptions> =
     : () => buildCases(truss, members, brief);
   const loaded = extent === 'analyse' && members.length > 0 ? loadOn() : NO_LOADS;
   const solved = solveCases(truss, supports, stability, loaded.cases);
-  const combinations =
+  const linear =
     extent === 'analyse' ? combine(solved.cases, usesGivenCases ? given.combinations : brief.combinations) : [];
-  const forces = envelope(truss, solved.cases, combinations);
+  const { analysis } = brief;
+  const whole = analyseWhole(truss, supports, stability, solved.cases, linear, { analysis });
+  const forces = envelope(truss, whole.cases, whole.combinations);
 
-  const eccentricities = eccentricityMoments(truss, solved.cases, combinations);
-  const bending = bendingBetweenNodes(truss, solved.cases, combinations);
+  const eccentricities = eccentricityMoments(truss, whole.cases, whole.combinations);
+  const bending = bendingBetweenNodes(truss, whole.cases, whole.combinations);
 
   const isCarried = solved.cases.length > 0 && solved.cases.every(({ refused }) => refused === null);
   const findings = [
@@ -145,6 +148,7 @@ export async function runModel(bytes: Uint8Array, options: Partial<RunOptions> =
     ...loaded.findings,
     ...solved.findings,
     ...bendingFindings(bending, truss, members),
+    ...whole.findings,
   ];
   const result = assembleResult({
     generator: GENERATOR,
@@ -163,8 +167,10 @@ export async function runModel(bytes: Uint8Array, options: Partial<RunOptions> =
     supports,
     stability,
     findings,
-    cases: solved.cases,
-    combinations,
+    cases: whole.cases,
+    combinations: whole.combinations,
+    analysis: brief.analysis,
+    buckling: whole.buckling,
     envelope: forces,
     limits: given === null ? joined.limits : null,
     eccentricities,

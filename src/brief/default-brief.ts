@@ -8,6 +8,7 @@ export const DEFAULT_BRIEF: Brief = {
   scope: { include: [], exclude: [] },
   joints: { reach: null, offset: null, crossings: 'apart', seated: 'node', pairs: 'one' },
   chords: 'pinned',
+  analysis: 'first-order',
   supports: [],
   materials: { default: null },
   sections: [],

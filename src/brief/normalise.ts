@@ -38,6 +38,7 @@ export function normaliseBrief(written: WrittenBrief, lineAt: LineAt): Brief {
       }),
     },
     chords: written.chords ?? DEFAULT_BRIEF.chords,
+    analysis: written.analysis ?? DEFAULT_BRIEF.analysis,
     supports: (written.supports ?? []).map((rule, i) => toSupport(rule, ['supports', i], lineAt)),
     materials: { default: materials?.default ?? DEFAULT_BRIEF.materials.default },
     sections: (written.sections ?? []).map(({ on, use }, i) => ({

@@ -141,6 +141,12 @@ export const briefInputSchema = z.strictObject({
     })
     .optional(),
   chords: z.enum(['pinned', 'strict']).optional(),
+  analysis: z
+    .enum(['first-order', 'second-order'])
+    .optional()
+    .describe(
+      'second-order: combinations are balanced at the nodes as they have moved; without it a critical factor below 10 is said',
+    ),
   supports: z.array(support).optional(),
   materials: z.strictObject({ default: steelGrade.optional() }).optional(),
   sections: z

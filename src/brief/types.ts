@@ -17,6 +17,8 @@ export interface Brief {
     readonly pairs: 'one' | 'apart';
   };
   readonly chords: 'pinned' | 'strict';
+  /** second-order: balance at the moved nodes. */
+  readonly analysis: 'first-order' | 'second-order';
   readonly supports: readonly SupportRule[];
   readonly materials: { readonly default: string | null };
   readonly sections: readonly SectionRule[];

@@ -118,6 +118,14 @@ const stabilitySchema = z.strictObject({
   modesOmitted: z.number().int().optional(),
 });
 
+const criticalFactor = z
+  .number()
+  .nullable()
+  .optional()
+  .describe(
+    'times the load at which the truss as a whole buckles, from first-order forces; null: it does not; absent: not judged',
+  );
+
 const caseSchema = z.strictObject({
   name: text,
   nature: z.enum(['permanent', 'imposed', 'snow', 'wind', 'thermal', 'accidental']),
@@ -128,6 +136,7 @@ const caseSchema = z.strictObject({
   displacement: displacementPerNode,
   reactions: nodeForces,
   residual: z.number().nullable().describe('largest out-of-balance joint force over the largest force'),
+  criticalFactor,
 });
 
 const combinationSchema = z.strictObject({
@@ -138,7 +147,21 @@ const combinationSchema = z.strictObject({
   axialForce: forcePerBar,
   displacement: displacementPerNode,
   reactions: nodeForces,
+  criticalFactor,
 });
+
+const bucklingSchema = z
+  .strictObject({
+    from: text.describe('the combination or case that is nearest to buckling the truss as a whole'),
+    modes: z.array(
+      z.strictObject({
+        factor: z.number(),
+        nodes: z.array(text),
+        movement: z.array(vector).describe('one for each of nodes, the largest component 1'),
+      }),
+    ),
+  })
+  .describe('lowest modes first');
 
 const extreme = z.strictObject({ force: z.number(), from: text }).nullable();
 
@@ -237,6 +260,8 @@ export const resultSchema = z.strictObject({
   stability: stabilitySchema,
   cases: z.array(caseSchema),
   combinations: z.array(combinationSchema),
+  analysis: z.enum(['first-order', 'second-order']).optional(),
+  buckling: bucklingSchema.optional(),
   envelope: z.array(z.strictObject({ bar: text, tension: extreme, compression: extreme })),
   checks: z.array(checkSchema),
   joining: joiningSchema.optional(),

@@ -7,6 +7,7 @@ import type { Truss } from '../domain/truss.ts';
 import type { Vec3 } from '../domain/vector.ts';
 import type { BarBending } from '../statics/bending/between-nodes.ts';
 import type { EccentricityMoment } from '../statics/bending/eccentricity-moments.ts';
+import type { BucklingJudgement } from '../statics/buckling/judge-buckling.ts';
 import type {
   BarEnvelope,
   ExtremeForce,
@@ -37,6 +38,8 @@ export interface RunRecord {
   readonly limits: JoinLimits | null;
   readonly eccentricities: readonly EccentricityMoment[];
   readonly bending: readonly BarBending[];
+  readonly analysis: Result['analysis'];
+  readonly buckling: BucklingJudgement;
 }
 
 const MODES_LISTED = 100;
@@ -49,6 +52,10 @@ const barId = (index: number): string => `b${index + 1}`;
 export function assembleResult(run: RunRecord): Result {
   const { truss, members } = run;
   const fixed = fixedLetters(run.supports);
+  const factorOf = (name: string) => {
+    const criticalFactor = run.buckling.factors.get(name);
+    return criticalFactor === undefined ? {} : { criticalFactor };
+  };
   const result: Result = {
     format: 'pinwright-result',
     version: 1,
@@ -75,8 +82,13 @@ export function assembleResult(run: RunRecord): Result {
       at: finding.at && point(finding.at),
     })),
     stability: resultStability(run.stability),
-    cases: run.cases.map(resultCase),
-    combinations: run.combinations.map(resultCombination),
+    cases: run.cases.map((one) => ({
+      ...resultCase(one),
+      ...(run.combinations.length === 0 ? factorOf(one.name) : {}),
+    })),
+    combinations: run.combinations.map((one) => ({ ...resultCombination(one), ...factorOf(one.name) })),
+    analysis: run.analysis,
+    ...resultBuckling(run.buckling),
     envelope: run.envelope.map(({ bar, tension, compression }) => ({
       bar: barId(bar),
       tension: extreme(tension),
@@ -204,6 +216,23 @@ function resultMode({ nodes, movement, remedy, ...mode }: Mode): Result['stabili
         : { node: nodeId(step.node), direction: point(step.direction) },
     ),
   };
+}
+
+/** Movements below this share of the largest are left out of a mode. */
+const TOLD = 1e-3;
+
+function resultBuckling({ governing }: BucklingJudgement): Pick<Result, 'buckling'> {
+  if (governing === null) return {};
+  const modes = governing.modes.map(({ factor, moves }) => {
+    const vectorAt = (node: number): [number, number, number] => [
+      moves[3 * node],
+      moves[3 * node + 1],
+      moves[3 * node + 2],
+    ];
+    const nodes = [...Array(moves.length / 3).keys()].filter((node) => vectorAt(node).some((v) => Math.abs(v) > TOLD));
+    return { factor, nodes: nodes.map(nodeId), movement: nodes.map(vectorAt) };
+  });
+  return { buckling: { from: governing.from, modes } };
 }
 
 function resultCase({ refused, ...solved }: SolvedCase): Result['cases'][number] {

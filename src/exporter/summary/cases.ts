@@ -2,6 +2,7 @@ import type { Result } from '../../domain/result.ts';
 import { count } from '../../domain/verdict.ts';
 import { type Column, columns, harmless, kilonewtons, wrapped } from './layout.ts';
 import type { SummaryOptions } from './options.ts';
+import { asAWhole } from './whole.ts';
 
 /** Every load case with the sum of its loads and how well it is balanced; refused ones with the reason. */
 export function loadCases(result: Result, { extras, width }: SummaryOptions): string[] {
@@ -26,6 +27,7 @@ export function loadCases(result: Result, { extras, width }: SummaryOptions): st
     ...covered(extras, width),
     ...refusals(result, width),
     ...combinations(result, width),
+    ...asAWhole(result, width),
   ];
 }
 
@@ -47,10 +49,16 @@ function refusals({ cases, combinations }: Result, width: number): string[] {
   for (const { name, refused } of cases) {
     if (refused !== undefined) byReason.set(refused, [...(byReason.get(refused) ?? []), harmless(name)]);
   }
+  const fell = new Set(cases.filter(({ refused }) => refused !== undefined).map(({ name }) => name));
+  const withCase = ({ factors }: Result['combinations'][number]) =>
+    Object.keys(factors).some((name) => fell.has(name) || !cases.some((one) => one.name === name));
+  for (const one of combinations)
+    if (one.refused !== undefined && !withCase(one))
+      byReason.set(one.refused, [...(byReason.get(one.refused) ?? []), harmless(one.name)]);
   const lines = [...byReason].flatMap(([reason, names]) =>
     wrapped(`refused (${names.join(', ')}): ${harmless(reason)}`, width, '  ', '    '),
   );
-  const fallen = combinations.filter(({ refused }) => refused !== undefined);
+  const fallen = combinations.filter((one) => one.refused !== undefined && withCase(one));
   const words = `refused with their cases: ${fallen.map(({ name }) => harmless(name)).join('; ')}`;
   return fallen.length === 0 ? lines : [...lines, ...wrapped(words, width, '  ', '    ')];
 }

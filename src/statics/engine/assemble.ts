@@ -11,7 +11,7 @@ export interface BlockMatrix {
   readonly scale: number;
 }
 
-/** K = sum over rows of stiffness * row * row^T. */
+/** K = sum over rows of stiffness * row * row^T. The pattern must have room for every pair of blocks that a row couples. */
 export function assemble(symbolic: Symbolic, rows: SparseRows, stiffness: Float64Array): BlockMatrix {
   const { freedoms, position, pattern } = symbolic;
   const stride = freedoms.stride;
@@ -57,5 +57,6 @@ function findColumn(column: Int32Array, from: number, to: number, wanted: number
     if (column[middle] < wanted) low = middle + 1;
     else high = middle;
   }
+  if (low >= to || column[low] !== wanted) throw new Error('a row couples blocks that the pattern keeps apart');
   return low;
 }

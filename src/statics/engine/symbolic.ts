@@ -24,9 +24,11 @@ export interface Symbolic {
  */
 const WORTH_ANOTHER = 3000;
 
+export const analysePattern = (freedoms: Freedoms, rows: SparseRows): Symbolic =>
+  analyseGraph(freedoms, coupleBlocks(freedoms, rows));
+
 /** Orders the blocks (minimum degree or nested dissection, whichever costs less) and lays out the factor. */
-export function analysePattern(freedoms: Freedoms, rows: SparseRows): Symbolic {
-  const graph = coupleBlocks(freedoms, rows);
+export function analyseGraph(freedoms: Freedoms, graph: Graph): Symbolic {
   const dissected = layOut(freedoms, graph, nestedDissection(graph));
   if (dissected.work < WORTH_ANOTHER * freedoms.blocks) return dissected;
   const byDegree = layOut(freedoms, graph, minimumDegree(graph));

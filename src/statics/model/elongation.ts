@@ -27,7 +27,17 @@ export function mapElongations(truss: Truss, parts: Parts, supports: Supports, m
     lengths[row] = Math.hypot(...between);
     return unit(between) ?? [0, 0, 0];
   });
-  const rows = buildRows(bars.length + springs.length, (row, put) => {
+  const rows = mapRows(truss, movement, { bars, springs, directions });
+  return { rows, bars, springs, directions, lengths };
+}
+
+/** Rows of bars that lie along `directions`, then those of the springs. */
+export function mapRows(
+  truss: Truss,
+  movement: Movement,
+  { bars, springs, directions }: Pick<Elongations, 'bars' | 'springs' | 'directions'>,
+): SparseRows {
+  return buildRows(bars.length + springs.length, (row, put) => {
     if (row < bars.length) {
       const bar = truss.bars[bars[row]];
       spread(movement, bar.from, directions[row], -1, put);
@@ -37,7 +47,6 @@ export function mapElongations(truss: Truss, parts: Parts, supports: Supports, m
       spread(movement, spring.node, spring.direction, 1, put);
     }
   });
-  return { rows, bars, springs, directions, lengths };
 }
 
 /** Elongation of every row under given movements of all nodes. */

@@ -15,7 +15,7 @@ import { type Movement, spread } from './movement.ts';
  * - `applyStiffness(transverse, densities, q)` is K_G q;
  * - `joinRows(rows, transverse)` with the stiffnesses and the densities one after the other assembles K + K_G.
  *
- * The pattern may hold blocks that K alone has not (a bar along x that a node held along x cannot feel): order and lay out for both together.
+ * The pattern of a `System` has room for both, that of K's rows alone may not (a bar along x that a node held along x cannot feel).
  */
 export function mapTransverse(truss: Truss, movement: Movement, { bars, directions }: Elongations): SparseRows {
   return buildRows(2 * bars.length, (row, put) => {

@@ -1,5 +1,6 @@
 import type { Truss } from '../../domain/truss.ts';
 import type { Vec3 } from '../../domain/vector.ts';
+import { addCondition, type Followers, fillFollowers, type Term, throughFollowers } from '../engine/constraints.ts';
 import type { Freedoms } from '../engine/system.ts';
 import type { Restraint } from '../types.ts';
 import { leverShares } from './carriage.ts';
@@ -9,11 +10,6 @@ export const STRIDE = 3;
 
 /** Sine of the angle below which a restraint is taken to repeat the ones before it. */
 const DEPENDENT = 1e-6;
-
-export interface Term {
-  readonly unknown: number;
-  readonly factor: number;
-}
 
 /** A restraint on a carried node: a condition on several real nodes, met by making one freedom follow the others. */
 export interface CarriedRestraint {
@@ -39,7 +35,7 @@ export interface Movement {
   readonly frame: Float64Array;
   readonly freeCount: Uint8Array;
   /** Freedoms that follow others because of restraints on carried nodes. */
-  readonly followers: ReadonlyMap<number, readonly Term[]>;
+  readonly followers: Followers;
   readonly carriedRestraints: readonly CarriedRestraint[];
   /** Independent restraints on what is judged. */
   readonly restraintCount: number;
@@ -93,9 +89,7 @@ export function spread(
   put: (unknown: number, value: number) => void,
 ): void {
   spreadOwn(movement, node, direction, factor, (unknown, value) => {
-    const following = movement.followers.get(unknown);
-    if (following) for (const term of following) put(term.unknown, value * term.factor);
-    else put(unknown, value);
+    throughFollowers(movement.followers, unknown, value, put);
   });
 }
 
@@ -119,12 +113,7 @@ function spreadOwn(
 /** Movement of every node, three components each, carried ones included. */
 export function nodeMovements(movement: Movement, q: Float64Array): Float64Array {
   const { truss, frame, freeCount, followers, shares } = movement;
-  const full = q.slice();
-  for (const [unknown, terms] of followers) {
-    let value = 0;
-    for (const term of terms) value += term.factor * q[term.unknown];
-    full[unknown] = value;
-  }
+  const full = fillFollowers(followers, q);
   const own = new Float64Array(3 * truss.nodes.length);
   for (let node = 0; node < truss.nodes.length; node++)
     for (let c = 0; c < freeCount[node]; c++)
@@ -166,34 +155,10 @@ function holdCarried(
   const { node, direction } = restraint;
   const terms: Term[] = [];
   spreadOwn(movement, node, direction, 1, (unknown, factor) => terms.push({ unknown, factor }));
-  const open = new Map<number, number>();
-  spread(movement, node, direction, 1, (unknown, value) => open.set(unknown, (open.get(unknown) ?? 0) + value));
-  let follower = -1;
-  let largest = DEPENDENT;
-  for (const [unknown, value] of open)
-    if (Math.abs(value) > largest) {
-      follower = unknown;
-      largest = Math.abs(value);
-    }
+  const follower = addCondition(movement.followers, movement.freedoms.active, terms);
   if (follower < 0) return false;
-  const pivot = open.get(follower)!;
-  open.delete(follower);
-  const follows: Term[] = [...open].map(([unknown, value]) => ({ unknown, factor: -value / pivot }));
-  for (const [unknown, old] of movement.followers)
-    if (old.some((term) => term.unknown === follower))
-      movement.followers.set(unknown, substitute(old, follower, follows));
-  movement.followers.set(follower, follows);
-  movement.freedoms.active[follower] = 0;
   movement.carriedRestraints.push({ node, direction, terms, follower });
   return true;
-}
-
-function substitute(terms: readonly Term[], replaced: number, by: readonly Term[]): Term[] {
-  const sum = new Map<number, number>();
-  for (const { unknown, factor } of terms)
-    if (unknown === replaced) for (const t of by) sum.set(t.unknown, (sum.get(t.unknown) ?? 0) + factor * t.factor);
-    else sum.set(unknown, (sum.get(unknown) ?? 0) + factor);
-  return [...sum].map(([unknown, factor]) => ({ unknown, factor }));
 }
 
 /** Adds the part of `direction` at right angles to those there are; false where there is none. */

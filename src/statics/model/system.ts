@@ -1,8 +1,9 @@
 import type { Truss } from '../../domain/truss.ts';
 import { assemble } from '../engine/assemble.ts';
 import type { Stiffness } from '../engine/spectrum.ts';
-import { analysePattern, type Symbolic } from '../engine/symbolic.ts';
+import { analyseGraph, type Symbolic } from '../engine/symbolic.ts';
 import type { Restraint, Supports } from '../types.ts';
+import { coupleEnds } from './coupling.ts';
 import { type Elongations, mapElongations, unitStiffness } from './elongation.ts';
 import { type Movement, mapMovement } from './movement.ts';
 import type { Parts } from './parts.ts';
@@ -14,7 +15,7 @@ export interface Problem {
   readonly parts: Parts;
 }
 
-/** A problem in numbers, with some more directions held. */
+/** A problem in numbers, with some more directions held. The matrix's pattern has room for K_G and for nodes that move. */
 export interface System extends Stiffness {
   readonly problem: Problem;
   readonly movement: Movement;
@@ -37,6 +38,8 @@ export function buildSystem(
   const { rows } = elongations;
   const stiffness = stiffnessOf(elongations);
   const lent = like !== null && movement.followers.size === 0 ? like.matrix.symbolic : null;
-  const symbolic: Symbolic = lent ? { ...lent, freedoms: movement.freedoms } : analysePattern(movement.freedoms, rows);
+  const symbolic: Symbolic = lent
+    ? { ...lent, freedoms: movement.freedoms }
+    : analyseGraph(movement.freedoms, coupleEnds(truss, movement, elongations));
   return { problem, movement, elongations, rows, stiffness, matrix: assemble(symbolic, rows, stiffness) };
 }

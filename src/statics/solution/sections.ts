@@ -1,5 +1,6 @@
 import type { Truss } from '../../domain/truss.ts';
 import type { Elongations } from '../model/elongation.ts';
+import type { Parts } from '../model/parts.ts';
 import type { Problem } from '../model/system.ts';
 import type { Judgement } from '../stability/assess-stability.ts';
 import type { LoadCase } from '../types.ts';
@@ -19,6 +20,11 @@ export function realStiffness(truss: Truss): (elongations: Elongations) => Float
     });
     return out;
   };
+}
+
+/** The name of a bar that is solved and has no section; null where all have one. */
+export function lacksSection(truss: Truss, parts: Parts): string | null {
+  return truss.bars.find((bar, b) => bar.stiffnessEA === null && parts.liveBar[b])?.name ?? null;
 }
 
 export interface SectionJudgement {

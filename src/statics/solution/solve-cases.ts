@@ -2,6 +2,7 @@ import { type Finding, finding } from '../../domain/finding.ts';
 import type { Truss } from '../../domain/truss.ts';
 import type { Vec3 } from '../../domain/vector.ts';
 import { factorise } from '../engine/factor.ts';
+import { solveRefined } from '../engine/refine.ts';
 import { gatherForces, nodeMovements } from '../model/movement.ts';
 import { findParts } from '../model/parts.ts';
 import { buildSystem, type Problem } from '../model/system.ts';
@@ -10,7 +11,6 @@ import type { LoadCase, NodalForce, SolvedCase, Supports } from '../types.ts';
 import { balanceJoints } from './balance.ts';
 import { cleanOfModes } from './clean-of-modes.ts';
 import { loadMovesIt } from './load-moves-it.ts';
-import { solveRefined } from './refine.ts';
 import { judgeSections, realStiffness } from './sections.ts';
 
 export interface SolveOptions {

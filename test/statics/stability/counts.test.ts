@@ -6,7 +6,7 @@ import { denseMechanisms } from '../support/dense.ts';
 import { randomTruss } from '../support/trusses.ts';
 
 describe('counts of random trusses', () => {
-  const seeds = Array.from({ length: 150 }, (_, i) => i + 1);
+  const seeds = Array.from({ length: 500 }, (_, i) => i + 1);
 
   test('mechanisms equal those of a dense singular value decomposition wherever it has a clear gap', () => {
     let compared = 0;
@@ -22,8 +22,8 @@ describe('counts of random trusses', () => {
       compared++;
       if (dense.mechanisms > 0) moving++;
     }
-    expect(compared).toBeGreaterThan(100);
-    expect(moving).toBeGreaterThan(30);
+    expect(compared).toBeGreaterThan(330);
+    expect(moving).toBeGreaterThan(100);
   });
 
   test('with every remedy of the modes applied nothing moves, and each alone takes one mechanism away', () => {
