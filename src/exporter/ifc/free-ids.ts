@@ -15,7 +15,7 @@ export function firstFreeId(
   amount: number,
 ): number {
   if (highestId + amount <= HIGHEST_ID) return highestId + 1;
-  const ids = Float64Array.from([...file.ids(), ...dangling]).sort();
+  const ids = Float64Array.from([...file.ids(), ...dangling()]).sort();
   let free = 1;
   for (const id of ids) {
     if (id - free >= amount) return free;

@@ -11,12 +11,12 @@ export class UsedGlobalIds {
 
   /** Notes the text between two offsets if it has a GlobalId's length. */
   addText(bytes: Uint8Array, begin: number, end: number): void {
-    if (end - begin === LENGTH) this.add(fingerprint((k) => bytes[begin + k]));
+    if (end - begin === LENGTH) this.add(fingerprint(bytes, begin));
   }
 
   has(globalId: string): boolean {
     if (globalId.length !== LENGTH) return false;
-    const print = fingerprint((k) => globalId.charCodeAt(k));
+    const print = fingerprint(Buffer.from(globalId, 'latin1'), 0);
     return this.slots[this.slotOf(print)] === print;
   }
 
@@ -43,12 +43,11 @@ export class UsedGlobalIds {
 }
 
 /** A number from 1 to 2^53 made of two 32-bit FNV-1a hashes, of the first and of the second half of the characters. */
-function fingerprint(code: (index: number) => number): number {
+function fingerprint(bytes: Uint8Array, begin: number): number {
   let first = 0x811c9dc5;
   let second = 0x811c9dc5;
-  for (let k = 0; k < LENGTH / 2; k++) {
-    first = Math.imul(first ^ code(k), 0x01000193);
-    second = Math.imul(second ^ code(k + LENGTH / 2), 0x01000193);
-  }
+  const middle = begin + LENGTH / 2;
+  for (let k = begin; k < middle; k++) first = Math.imul(first ^ bytes[k], 0x01000193);
+  for (let k = middle; k < begin + LENGTH; k++) second = Math.imul(second ^ bytes[k], 0x01000193);
   return (first >>> 11) * 2 ** 32 + (second >>> 0) + 1;
 }

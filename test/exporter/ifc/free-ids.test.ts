@@ -6,7 +6,7 @@ import { firstFreeId } from '../../../src/exporter/ifc/free-ids.ts';
 const LIMIT = 2 ** 31 - 1;
 const NONE: ReadonlySet<number> = new Set();
 const firstFree = (ids: readonly number[], amount: number, dangling = NONE) =>
-  firstFreeId({ ids: () => ids }, { highestId: Math.max(0, ...ids, ...dangling), dangling }, amount);
+  firstFreeId({ ids: () => ids }, { highestId: Math.max(0, ...ids, ...dangling), dangling: () => dangling }, amount);
 
 describe('the first free id', () => {
   it('begins a run that no instance is in, within 31 bits', () => {
