@@ -5,6 +5,7 @@ import { tmpdir } from 'node:os';
 import { join } from 'node:path';
 import { fileURLToPath } from 'node:url';
 
+const COMPILER = process.env.CC ?? 'cc';
 const SOURCE = fileURLToPath(new URL('./cholmod.c', import.meta.url));
 
 /** Compiles the C side; null, with the reason said, where it cannot be. */
@@ -12,7 +13,7 @@ export function compileCholmod() {
   const folder = mkdtempSync(join(tmpdir(), 'pinwright-bench-'));
   const program = join(folder, 'cholmod');
   try {
-    execFileSync('cc', ['-O2', '-I/usr/include/suitesparse', '-o', program, SOURCE, '-lcholmod', '-lm'], {
+    execFileSync(COMPILER, ['-O2', '-I/usr/include/suitesparse', '-o', program, SOURCE, '-lcholmod', '-lm'], {
       stdio: 'pipe',
     });
   } catch (error) {
