@@ -3,6 +3,7 @@ import { DEFAULT_BRIEF } from './brief/default-brief.ts';
 import { jointLimits } from './brief/joint-limits.ts';
 import { type MemberKind, memberKinds } from './brief/member-kinds.ts';
 import { namedPlaces } from './brief/named-places.ts';
+import { resolveOneWay } from './brief/one-way.ts';
 import { applyScope } from './brief/scope.ts';
 import { applySections, withoutSettled } from './brief/sections.ts';
 import { type TopLevel, topLevels } from './brief/selectors/top-levels.ts';
@@ -24,15 +25,13 @@ import type { Given } from './importer/given.ts';
 import { importModel } from './importer/import-model.ts';
 import { placedInScope } from './importer/places-in-scope.ts';
 import type { ImportedModel } from './importer/types.ts';
-import { analyseWhole } from './statics/analyse-whole.ts';
 import { bendingBetweenNodes } from './statics/bending/between-nodes.ts';
 import { eccentricityMoments } from './statics/bending/eccentricity-moments.ts';
 import { bendingFindings, withMoments } from './statics/bending/findings.ts';
+import { listed } from './statics/combinations/listed.ts';
 import { type BuiltCases, buildCases, type Coverage } from './statics/loads/build-cases.ts';
 import { buildGivenCases } from './statics/loads/given-cases.ts';
-import { combine } from './statics/solution/combine.ts';
-import { envelope } from './statics/solution/envelope.ts';
-import { solveCases } from './statics/solution/solve-cases.ts';
+import { solveRun } from './statics/solution/solve-run.ts';
 import { assessStability } from './statics/stability/assess-stability.ts';
 import type { Supports } from './statics/types.ts';
 import { withoutBlock } from './step/splice.ts';
@@ -122,15 +121,15 @@ export async function runModel(bytes: Uint8Array, options: Partial<RunOptions> =
     ? () => buildGivenCases(truss, members, given.cases)
     : () => buildCases(truss, members, brief);
   const loaded = extent === 'analyse' && members.length > 0 ? loadOn() : NO_LOADS;
-  const solved = solveCases(truss, supports, stability, loaded.cases);
-  const linear =
-    extent === 'analyse' ? combine(solved.cases, usesGivenCases ? given.combinations : brief.combinations) : [];
-  const { analysis } = brief;
-  const whole = analyseWhole(truss, supports, stability, solved.cases, linear, { analysis });
-  const forces = envelope(truss, whole.cases, whole.combinations);
+  const { oneWay, findings: oneWayFindings } = resolveOneWay(truss, members, brief);
+  const solved = solveRun(truss, supports, stability, loaded.cases, {
+    brief,
+    given: usesGivenCases ? given.combinations : null,
+    oneWay,
+  });
 
-  const eccentricities = eccentricityMoments(truss, whole.cases, whole.combinations);
-  const bending = bendingBetweenNodes(truss, whole.cases, whole.combinations);
+  const eccentricities = eccentricityMoments(truss, solved.cases, solved.combinations);
+  const bending = bendingBetweenNodes(truss, solved.cases, solved.combinations);
 
   const isCarried = solved.cases.length > 0 && solved.cases.every(({ refused }) => refused === null);
   const findings = [
@@ -146,9 +145,9 @@ export async function runModel(bytes: Uint8Array, options: Partial<RunOptions> =
     ...supportFinding(supports, extent, members.length),
     ...stability.findings.map((found) => withSeverity(found, isCarried)),
     ...loaded.findings,
+    ...oneWayFindings,
     ...solved.findings,
     ...bendingFindings(bending, truss, members),
-    ...whole.findings,
   ];
   const result = assembleResult({
     generator: GENERATOR,
@@ -167,11 +166,12 @@ export async function runModel(bytes: Uint8Array, options: Partial<RunOptions> =
     supports,
     stability,
     findings,
-    cases: whole.cases,
-    combinations: whole.combinations,
+    cases: solved.cases,
+    oneWay,
+    ...listed(solved.combinations, solved.envelope, solved.generated, solved.buckling),
     analysis: brief.analysis,
-    buckling: whole.buckling,
-    envelope: forces,
+    buckling: solved.buckling,
+    envelope: solved.envelope,
     limits: given === null ? joined.limits : null,
     eccentricities,
     bending,

@@ -6,8 +6,7 @@ import type { Path, Problem, WrittenSource } from './written-source.ts';
 /** Names that stand twice among cases and combinations, and factors of cases that do not exist. */
 export function findNameProblems(written: WrittenBrief, source: WrittenSource): Problem[] {
   const cases = (written.cases ?? []).map((rule) => rule.name);
-  const combinations =
-    written.combinations === undefined || written.combinations === 'none' ? [] : written.combinations;
+  const combinations = Array.isArray(written.combinations) ? written.combinations : [];
   const places: { name: string; path: Path }[] = [
     ...cases.map((name, i) => ({ name, path: ['cases', i, 'name'] })),
     ...combinations.map(({ name }, i) => ({ name, path: ['combinations', i, 'name'] })),

@@ -12,6 +12,10 @@ export const DEFAULT_BRIEF: Brief = {
   supports: [],
   materials: { default: null },
   sections: [],
+  tensionOnly: [],
+  compressionOnly: [],
   cases: [],
   combinations: [],
+  codeRule: null,
+  site: { altitude: null, nordic: false },
 };

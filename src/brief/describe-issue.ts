@@ -15,7 +15,7 @@ interface PlainIssue {
 
 /** Says the issues of the schema in the words of a brief, each at its place in the file. */
 export function describeIssues(issues: readonly Issue[], source: WrittenSource): Problem[] {
-  const plain = issues.flatMap((issue) => resolveUnions(issue, []));
+  const plain = issues.flatMap((issue) => resolveUnions(issue, [], source.value));
   const unknown = new Map<string, string[]>();
   for (const { issue, path } of plain)
     if (issue.code === 'unrecognized_keys') unknown.set(JSON.stringify(path), issue.keys);
@@ -28,19 +28,21 @@ export function describeIssues(issues: readonly Issue[], source: WrittenSource):
  * Of a union the branch that was most likely meant: one of the right kind (text, list, mapping), then with the fewest unknown
  * keys, then with the fewest issues. Where no branch is of the right kind the union itself is the issue.
  */
-function resolveUnions(issue: Issue, around: Path): PlainIssue[] {
+function resolveUnions(issue: Issue, around: Path, root: unknown): PlainIssue[] {
   const path = [...around, ...issue.path];
   if (issue.code !== 'invalid_union' || issue.errors.length === 0) return [{ issue, path }];
+  const isMapping = typeof valueAt(root, path) === 'object';
   const fitting = issue.errors.filter(
-    (branch) => !branch.some((inner) => inner.path.length === 0 && isWrongKind(inner)),
+    (branch) => !branch.some((inner) => inner.path.length === 0 && isWrongKind(inner, isMapping)),
   );
   const [best] = fitting.toSorted((a, b) => unknownKeys(a) - unknownKeys(b) || a.length - b.length);
-  return best === undefined ? [{ issue, path }] : best.flatMap((inner) => resolveUnions(inner, path));
+  return best === undefined ? [{ issue, path }] : best.flatMap((inner) => resolveUnions(inner, path, root));
 }
 
-const isWrongKind = (issue: Issue): boolean =>
+/** A mapping or list where one of some words is due is of the wrong kind; a wrong word is not, unless there is but one. */
+const isWrongKind = (issue: Issue, isMapping: boolean): boolean =>
   issue.code === 'invalid_type' ||
-  (issue.code === 'invalid_value' && issue.values.length === 1) ||
+  (issue.code === 'invalid_value' && (isMapping || issue.values.length === 1)) ||
   issue.code === 'invalid_union';
 
 const unknownKeys = (issues: readonly Issue[]): number =>

@@ -10,6 +10,7 @@ import type {
   NodeSelector,
   SupportRule,
 } from './types.ts';
+import { toCodeRule, type WrittenCombinations } from './written-combinations.ts';
 import type { WrittenMemberSelector, WrittenNodeSelector } from './written-selectors.ts';
 import type { Path } from './written-source.ts';
 
@@ -46,8 +47,12 @@ export function normaliseBrief(written: WrittenBrief, lineAt: LineAt): Brief {
       on: toMemberSelectors(on, ['sections', i, 'on'], lineAt),
       use: { ...use, from: 'brief' },
     })),
+    tensionOnly: toMemberSelectors(written.tensionOnly ?? [], ['tensionOnly'], lineAt),
+    compressionOnly: toMemberSelectors(written.compressionOnly ?? [], ['compressionOnly'], lineAt),
     cases: (written.cases ?? []).map((rule, i) => toCase(rule, ['cases', i], lineAt)),
     combinations: toCombinations(written.combinations ?? 'none', lineAt),
+    codeRule: toCodeRule(written.combinations),
+    site: { ...DEFAULT_BRIEF.site, ...withoutUndefined(written.site ?? {}) },
   };
 }
 
@@ -76,6 +81,8 @@ function toCase(written: WrittenCase, path: Path, lineAt: LineAt): CaseRule {
     line: lineAt(path),
     name: written.name,
     nature: written.nature,
+    ...(written.category === undefined ? {} : { category: written.category }),
+    ...(written.alternative === undefined ? {} : { alternative: written.alternative }),
     loads: written.loads.map((load, i) => toLoad(load, [...path, 'loads', i], lineAt)),
   };
 }
@@ -97,8 +104,8 @@ function toLoad(written: WrittenLoad, path: Path, lineAt: LineAt): LoadRule {
   return { kind: 'point', line, force: written.point, at: toNodeSelectors(written.at, [...path, 'at'], lineAt) };
 }
 
-function toCombinations(written: NonNullable<WrittenBrief['combinations']>, lineAt: LineAt): CombinationRule[] {
-  if (written === 'none') return [];
+function toCombinations(written: WrittenCombinations, lineAt: LineAt): CombinationRule[] {
+  if (!Array.isArray(written)) return [];
   return written.map((rule, i) => ({ line: lineAt(['combinations', i]), ...rule }));
 }
 

@@ -7,17 +7,11 @@ const KEYS: ReadonlySet<string> = new Set([
   'outline',
   'openings',
   'edge',
-  'category',
-  'alternative',
-  'altitude',
   'imperfections',
 ]);
 
 const VALUES: readonly { readonly path: string; readonly value: RegExp }[] = [
   { path: 'chords', value: /^continuous$/u },
-  { path: 'combinations', value: /^(EN1990|ASCE7)(\b.*)?$/u },
-  { path: 'checks', value: /^(EN1993-1-1|AISC360)(\b.*)?$/u },
-  { path: 'checks.rule', value: /^(EN1993-1-1|AISC360)(\b.*)?$/u },
 ];
 
 export const isKeyNotYetAvailable = (key: string): boolean => KEYS.has(key);

@@ -1,5 +1,6 @@
 import { RequestError } from '../domain/errors.ts';
 import { findNameProblems } from './check-names.ts';
+import { findCheckProblems } from './check-rules.ts';
 import { describeIssues } from './describe-issue.ts';
 import { normaliseBrief } from './normalise.ts';
 import { oneLine } from './one-line.ts';
@@ -32,8 +33,8 @@ export function parseBrief(text: string | Uint8Array, fileName: string): Brief {
   if (version !== null) throw problemsIn(file, [version]);
   const checked = briefInputSchema.safeParse(source.value);
   if (!checked.success) throw problemsIn(file, describeIssues(checked.error.issues, source));
-  const names = findNameProblems(checked.data, source);
-  if (names.length > 0) throw problemsIn(file, names);
+  const further = [...findNameProblems(checked.data, source), ...findCheckProblems(checked.data, source)];
+  if (further.length > 0) throw problemsIn(file, further);
   return normaliseBrief(checked.data, (path) => source.place(path).line);
 }
 

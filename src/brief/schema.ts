@@ -5,6 +5,7 @@ import { unit, type Vec3 } from '../domain/vector.ts';
 import { gradeIn } from '../importer/materials/grades.ts';
 import { knownDesignations } from '../importer/sections/designations/known-designations.ts';
 import { sectionFromDesignation } from '../importer/sections/designations/section-from-designation.ts';
+import { category, combinations } from './written-combinations.ts';
 import { positive, quantity, vector } from './written-quantities.ts';
 import { anyNumber, memberSelector, members, nodes, text } from './written-selectors.ts';
 
@@ -79,17 +80,26 @@ const line = z.strictObject({
 
 const point = z.strictObject({ point: vector('force').describe('global axes; in full at every node'), at: nodes });
 
-const loadCase = z.strictObject({
-  name: text,
-  nature: z.enum(['permanent', 'imposed', 'snow', 'wind', 'thermal', 'accidental']),
-  loads: z.array(z.union([selfWeight, area, line, point])),
-});
-
-const combination = z.strictObject({
-  name: text,
-  limit: z.enum(['strength', 'equilibrium', 'accidental', 'characteristic', 'frequent', 'quasi-permanent']),
-  factors: z.record(z.string(), z.number()).describe('factor of each case, by its name'),
-});
+const loadCase = z
+  .strictObject({
+    name: text,
+    nature: z.enum(['permanent', 'imposed', 'snow', 'wind', 'thermal', 'accidental']),
+    category: category.optional(),
+    alternative: text
+      .optional()
+      .describe(
+        'cases of one name never act together; default: one group each of wind, snow and thermal; none: no group',
+      ),
+    loads: z.array(z.union([selfWeight, area, line, point])),
+  })
+  .refine((rule) => rule.category === undefined || rule.nature === 'imposed', {
+    message: 'only imposed loads have a category',
+    path: ['category'],
+  })
+  .refine((rule) => rule.alternative === undefined || rule.nature !== 'permanent', {
+    message: 'permanent cases always act together',
+    path: ['alternative'],
+  });
 
 const steelGrade = text
   .refine((name) => gradeIn(name) !== null, 'this is no steel grade that is known: name one like S355, S275J2H or A992')
@@ -114,11 +124,8 @@ const lengthByMember = z
     error: `${wordsFor('length')}, or a list of {on: ..., use: 200 mm}, is due`,
   })
   .describe('a length, or a list of {on, use}; of several rules on a member the last counts, of no rule the sections');
-
-/** A list that may stand in a brief and may not catch anything in this version. */
-const nothingYet = z
-  .array(z.unknown())
-  .refine((list) => list.length === 0, 'this is not available yet; an empty list may stand');
+/** Only `none` can be honoured yet: check-rules.ts says so. */
+const checkRule = z.enum(['none', 'EN1993-1-1', 'EN1993-1-1:2005', 'EN1993-1-1:2005+A1', 'AISC360', 'AISC360-22']);
 
 export const briefInputSchema = z.strictObject({
   pinwright: z.literal(1),
@@ -153,15 +160,17 @@ export const briefInputSchema = z.strictObject({
     .array(z.strictObject({ on: members, use: sectionDesignation }))
     .optional()
     .describe('sections that go before those of the model; of several rules on a member the last counts'),
-  tensionOnly: nothingYet.optional(),
-  compressionOnly: nothingYet.optional(),
+  tensionOnly: anyNumber(memberSelector).optional().describe('members that only pull: rods, flats, cables'),
+  compressionOnly: anyNumber(memberSelector).optional().describe('members that only push'),
   cases: z.array(loadCase).optional(),
-  combinations: z
-    .union([z.literal('none'), z.array(combination)], { error: 'none, or a list of combinations, is due' })
+  site: z
+    .strictObject({
+      altitude: quantity('length').optional().describe('above sea level'),
+      nordic: z.boolean().optional().describe('in Finland, Iceland, Norway or Sweden'),
+    })
     .optional(),
-  checks: z
-    .union([z.literal('none'), z.strictObject({ rule: z.literal('none') })], { error: 'none is due' })
-    .optional(),
+  combinations: combinations.optional(),
+  checks: z.union([checkRule, z.strictObject({ rule: checkRule })], { error: 'none is due' }).optional(),
 });
 
 /** A brief that fits the schema, in SI, before its defaults are filled in. */

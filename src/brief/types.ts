@@ -1,5 +1,8 @@
 import type { Section } from '../domain/member.ts';
 import type { Vec3 } from '../domain/vector.ts';
+import type { Category, CodeRule, Limit } from './code-rule.ts';
+
+export type { Limit } from './code-rule.ts';
 
 /** A validated brief: SI throughout, defaults filled in. Each rule keeps its line in the file, for findings. */
 export interface Brief {
@@ -22,8 +25,18 @@ export interface Brief {
   readonly supports: readonly SupportRule[];
   readonly materials: { readonly default: string | null };
   readonly sections: readonly SectionRule[];
+  /** Members that only pull, and that only push. */
+  readonly tensionOnly: readonly MemberSelector[];
+  readonly compressionOnly: readonly MemberSelector[];
   readonly cases: readonly CaseRule[];
+  /** Those listed one by one; none where a code makes them. */
   readonly combinations: readonly CombinationRule[];
+  readonly codeRule: CodeRule | null;
+  readonly site: {
+    /** m above sea level. */
+    readonly altitude: number | null;
+    readonly nordic: boolean;
+  };
 }
 
 /** An end left null is open. */
@@ -103,6 +116,10 @@ export interface CaseRule {
   readonly line: number;
   readonly name: string;
   readonly nature: Nature;
+  /** Of an imposed load. */
+  readonly category?: Category;
+  /** Cases of one group never act together. */
+  readonly alternative?: string;
   readonly loads: readonly LoadRule[];
 }
 
@@ -126,8 +143,6 @@ export type LoadRule =
       readonly per: 'length' | 'plan';
     }
   | { readonly kind: 'point'; readonly line: number; readonly force: Vec3; readonly at: readonly NodeSelector[] };
-
-export type Limit = 'strength' | 'equilibrium' | 'accidental' | 'characteristic' | 'frequent' | 'quasi-permanent';
 
 export interface CombinationRule {
   readonly line: number;

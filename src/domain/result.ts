@@ -125,6 +125,7 @@ const criticalFactor = z
   .describe(
     'times the load at which the truss as a whole buckles, from first-order forces; null: it does not; absent: not judged',
   );
+const slack = z.array(text).optional().describe('bars of `oneWay` that carry nothing');
 
 const caseSchema = z.strictObject({
   name: text,
@@ -137,6 +138,7 @@ const caseSchema = z.strictObject({
   reactions: nodeForces,
   residual: z.number().nullable().describe('largest out-of-balance joint force over the largest force'),
   criticalFactor,
+  slack,
 });
 
 const combinationSchema = z.strictObject({
@@ -148,6 +150,19 @@ const combinationSchema = z.strictObject({
   displacement: displacementPerNode,
   reactions: nodeForces,
   criticalFactor,
+  slack,
+});
+
+/** How the combinations came about where a code made them; `combinations` lists those of them that govern something. */
+const combiningSchema = z.strictObject({
+  rule: text.describe('edition and method'),
+  generated: z.number().int().describe('combinations the code asks for, repeats left out'),
+  between: z.number().int().describe('left out before solving: they lie between two others and can never govern'),
+  solved: z.record(text, z.number().int()).describe('how many were solved, by limit'),
+  notGoverning: z
+    .array(z.strictObject({ name: text, limit: text, factors: z.record(text, z.number()) }))
+    .describe('solved, and neither a bar, nor a support, nor a movement is greatest in them'),
+  notes: z.array(text),
 });
 
 const bucklingSchema = z
@@ -262,6 +277,13 @@ export const resultSchema = z.strictObject({
   combinations: z.array(combinationSchema),
   analysis: z.enum(['first-order', 'second-order']).optional(),
   buckling: bucklingSchema.optional(),
+  oneWay: z
+    .strictObject({ tensionOnly: z.array(text), compressionOnly: z.array(text) })
+    .optional()
+    .describe(
+      'bars that only pull, and that only push: forces of cases do not add up, every combination is solved for itself',
+    ),
+  combining: combiningSchema.optional(),
   envelope: z.array(z.strictObject({ bar: text, tension: extreme, compression: extreme })),
   checks: z.array(checkSchema),
   joining: joiningSchema.optional(),

@@ -19,7 +19,14 @@ export function count(number: number, one: string, many = `${one}s`): string {
 
 /** What the envelope runs over, which every output has to say. */
 export function envelopeTitle(result: Result): string {
-  return result.combinations.length === 0 ? 'unfactored, case by case' : 'strength and accidental combinations';
+  if (countCombinations(result) === 0) return 'unfactored, case by case';
+  const { combining } = result;
+  return `strength and accidental combinations${combining === undefined ? '' : ` of ${combining.rule}`}`;
+}
+
+/** Those solved, listed in full or not. */
+export function countCombinations({ combinations, combining }: Result): number {
+  return combinations.length + (combining?.notGoverning.length ?? 0);
 }
 
 function judgement(result: Result): string {

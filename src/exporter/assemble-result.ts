@@ -13,6 +13,7 @@ import type {
   ExtremeForce,
   Mode,
   NodalForce,
+  OneWay,
   SolvedCase,
   SolvedCombination,
   Stability,
@@ -33,6 +34,8 @@ export interface RunRecord {
   readonly findings: readonly Finding[];
   readonly cases: readonly SolvedCase[];
   readonly combinations: readonly SolvedCombination[];
+  readonly oneWay: OneWay;
+  readonly combining?: Result['combining'];
   readonly envelope: readonly BarEnvelope[];
   /** Null where the model's own view says which points are shared. */
   readonly limits: JoinLimits | null;
@@ -89,6 +92,8 @@ export function assembleResult(run: RunRecord): Result {
     combinations: run.combinations.map((one) => ({ ...resultCombination(one), ...factorOf(one.name) })),
     analysis: run.analysis,
     ...resultBuckling(run.buckling),
+    ...oneWayBars(run.oneWay),
+    ...(run.combining === undefined ? {} : { combining: run.combining }),
     envelope: run.envelope.map(({ bar, tension, compression }) => ({
       bar: barId(bar),
       tension: extreme(tension),
@@ -235,10 +240,16 @@ function resultBuckling({ governing }: BucklingJudgement): Pick<Result, 'bucklin
   return { buckling: { from: governing.from, modes } };
 }
 
-function resultCase({ refused, ...solved }: SolvedCase): Result['cases'][number] {
+function oneWayBars({ tensionOnly, compressionOnly }: OneWay): Pick<Result, 'oneWay'> {
+  if (tensionOnly.length + compressionOnly.length === 0) return {};
+  return { oneWay: { tensionOnly: tensionOnly.map(barId), compressionOnly: compressionOnly.map(barId) } };
+}
+
+function resultCase({ refused, slack, ...solved }: SolvedCase): Result['cases'][number] {
   return {
     ...solved,
     ...(refused === null ? {} : { refused }),
+    ...(slack === undefined ? {} : { slack: slack.map(barId) }),
     loads: nodalForces(solved.loads),
     loadSum: point(solved.loadSum),
     axialForce: [...solved.axialForce],
@@ -247,10 +258,11 @@ function resultCase({ refused, ...solved }: SolvedCase): Result['cases'][number]
   };
 }
 
-function resultCombination({ refused, ...solved }: SolvedCombination): Result['combinations'][number] {
+function resultCombination({ refused, slack, ...solved }: SolvedCombination): Result['combinations'][number] {
   return {
     ...solved,
     ...(refused === null ? {} : { refused }),
+    ...(slack === undefined ? {} : { slack: slack.map(barId) }),
     factors: { ...solved.factors },
     axialForce: [...solved.axialForce],
     displacement: solved.displacement.map((movement) => movement && point(movement)),

@@ -1,3 +1,4 @@
+import type { Category } from '../brief/code-rule.ts';
 import type { Limit, Nature } from '../brief/types.ts';
 import type { Finding } from '../domain/finding.ts';
 import type { Vec3 } from '../domain/vector.ts';
@@ -26,11 +27,31 @@ export interface NodalForce {
   readonly force: Vec3;
 }
 
+/** How far a support moves a node, m, global axes, along directions it holds. */
+export interface Settlement {
+  readonly node: number;
+  readonly movement: Vec3;
+}
+
+export interface BarStretch {
+  readonly bar: number;
+  /** m. */
+  readonly by: number;
+}
+
 /** One entry a loaded node; loads on carried nodes are listed at the carried node. */
 export interface LoadCase {
   readonly name: string;
   readonly nature: Nature;
+  /** What combining has to know of it besides its nature. */
+  readonly category?: Category;
+  readonly alternative?: string;
+  readonly isSettlement?: boolean;
   readonly loads: readonly NodalForce[];
+  /** m that bars would be longer without force: warmth, misfit. A bar may stand several times. */
+  readonly freeStretch?: readonly BarStretch[];
+  /** How far supports move their nodes. */
+  readonly settlements?: readonly Settlement[];
   /** What of the case could not be put on the truss: the case is refused, since without it its forces would be too small. */
   readonly incomplete?: string;
 }
@@ -84,6 +105,14 @@ export interface SolvedCase {
   readonly reactions: readonly NodalForce[];
   /** Largest out-of-balance joint force over the largest force. */
   readonly residual: number | null;
+  /** Bars that only pull or only push and are slack in this case. */
+  readonly slack?: readonly number[];
+}
+
+/** Bars whose force has one sign only, by index. */
+export interface OneWay {
+  readonly tensionOnly: readonly number[];
+  readonly compressionOnly: readonly number[];
 }
 
 export interface SolvedCombination {
@@ -94,6 +123,7 @@ export interface SolvedCombination {
   readonly axialForce: readonly (number | null)[];
   readonly displacement: readonly (Vec3 | null)[];
   readonly reactions: readonly NodalForce[];
+  readonly slack?: readonly number[];
 }
 
 export interface ExtremeForce {

@@ -56,7 +56,9 @@ describe('the result as JSON', () => {
 describe('the JSON Schema of the result', () => {
   it('names every key of the result', () => {
     const schema = resultJsonSchema() as { properties: Record<string, unknown>; required: string[] };
-    expect(Object.keys(schema.properties).sort()).toEqual(Object.keys(someResult(['a'])).sort());
+    const keys = Object.keys(someResult(['a']));
+    expect(Object.keys(schema.properties)).toEqual(expect.arrayContaining(keys));
+    expect(keys).toEqual(expect.arrayContaining(schema.required));
     expect(schema.required).toContain('envelope');
   });
 });

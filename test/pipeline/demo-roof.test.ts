@@ -48,14 +48,16 @@ describe.each(Object.entries(runs))('%s', (_, { revision, run }) => {
     expect(run.mass / expectedMass(expected)).toBeCloseTo(1, 4);
   });
 
-  it('stands, and every case is carried', () => {
+  it('stands, every case and combination is carried, and the wind lifts its supports', () => {
     expect(result.stability).toMatchObject({ mechanisms: 0, freeBody: false, setAside: [] });
     expect(result.stability.restraints).toBe(3 * expected.nodes.filter(({ supported }) => supported).length);
     for (const { refused, residual } of result.cases) {
       expect(refused).toBeUndefined();
       expect(residual).toBeLessThan(1e-9);
     }
-    expect(result.findings).toEqual([]);
+    expect(result.combinations.every(({ refused }) => refused === undefined)).toBe(true);
+    expect(result.combining?.rule).toBe('EN 1990:2002+A1, expression 6.10');
+    expect(result.findings.map(({ code }) => code)).toEqual(['support-lifts']);
   });
 });
 

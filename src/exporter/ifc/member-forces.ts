@@ -36,7 +36,7 @@ export function elementForces(result: Result): (globalId: string) => ElementForc
   const at = new Map(result.nodes.map((node) => [node.id, node.at]));
   const envelope = new Map(result.envelope.map((entry) => [entry.bar, entry]));
   const bearingOf = new Map(bearings(result).map((bearing) => [bearing.node, bearing]));
-  const runs = result.combinations.length > 0 ? result.combinations : result.cases;
+  const runs = tabled(result);
 
   return (globalId) => {
     const indices = barsOf.get(globalId);
@@ -70,6 +70,13 @@ export function elementForces(result: Result): (globalId: string) => ElementForc
       missingRuns: runs.filter((run) => ordered.some((index) => (run.axialForce[index] ?? null) === null)).length,
     };
   };
+}
+
+/** Of the many combinations a code makes only those that design bars are worth a row on every element. */
+function tabled({ combinations, combining, cases }: Result): Result['cases'] | Result['combinations'] {
+  if (combinations.length === 0) return cases;
+  if (combining === undefined) return combinations;
+  return combinations.filter(({ limit }) => limit === 'strength' || limit === 'accidental');
 }
 
 const elementsOf = (bar: ResultBar): readonly string[] => [...new Set(bar.members ?? [bar.member])];

@@ -1,5 +1,5 @@
 import type { Result, ResultFinding } from '../../domain/result.ts';
-import { count, envelopeTitle, verdict } from '../../domain/verdict.ts';
+import { count, countCombinations, envelopeTitle, verdict } from '../../domain/verdict.ts';
 import { ultimateTitle } from '../schedules/runs.ts';
 import type { BarForces, ElementForces } from './member-forces.ts';
 import type { SetValues } from './set-definitions.ts';
@@ -108,7 +108,7 @@ export function runValues(result: Result): SetValues<'Pinwright_Run'> {
     Warnings: ofSeverity('warning'),
     Notes: ofSeverity('note'),
     LoadCases: result.cases.length,
-    Combinations: result.combinations.length,
+    Combinations: countCombinations(result),
     EnvelopeOver: result.cases.length === 0 ? null : envelopeTitle(result),
   };
 }

@@ -47,7 +47,7 @@ export function worstBars(result: Result, options: SummaryOptions): string[] {
   const more = loaded.length - shown.length;
   const idle = result.envelope.length - loaded.length;
   return [
-    `Worst bars, kN (${envelopeTitle(result)})`,
+    ...wrapped(`Worst bars, kN (${envelopeTitle(result)})`, options.width, '', '  '),
     ...table,
     ...(more > 0 || idle > 0 ? [`  and ${count(more, 'more bar')}${idle > 0 ? `, ${idle} of no force` : ''}`] : []),
     ...names.flatMap((name, i) => wrapped(`(${i + 1}) ${described(name, result)}`, options.width, '  ', '      ')),

@@ -25,6 +25,7 @@ export function loadCases(result: Result, { extras, width }: SummaryOptions): st
     'Load cases',
     ...columns(heads, rows),
     ...covered(extras, width),
+    ...slackBars(result, width),
     ...refusals(result, width),
     ...combinations(result, width),
     ...asAWhole(result, width),
@@ -43,6 +44,24 @@ function covered({ coverage = [] }: SummaryOptions['extras'], width: number): st
   );
 }
 
+/** Bars that only pull or only push, and how many of them are slack in each case. */
+function slackBars({ oneWay, cases }: Result, width: number): string[] {
+  if (oneWay === undefined) return [];
+  const { tensionOnly, compressionOnly } = oneWay;
+  const kinds = [
+    ...(tensionOnly.length > 0 ? [`${count(tensionOnly.length, 'bar')} only pull`] : []),
+    ...(compressionOnly.length > 0 ? [`${count(compressionOnly.length, 'bar')} only push`] : []),
+  ];
+  const slack = cases.flatMap(({ name, slack: bars }) =>
+    bars === undefined ? [] : [`${harmless(name)} ${bars.length}`],
+  );
+  const words = `${kinds.join(', ')}; slack: ${slack.join(', ')}. Forces of cases do not add up: every combination is solved for itself.`;
+  return wrapped(words, width, '  ', '    ');
+}
+
+/** Of many refused combinations the first few are named. */
+const FALLEN_NAMED = 5;
+
 /** Each reason once, with all it keeps from being carried; combinations fall with their cases. */
 function refusals({ cases, combinations }: Result, width: number): string[] {
   const byReason = new Map<string, string[]>();
@@ -59,13 +78,30 @@ function refusals({ cases, combinations }: Result, width: number): string[] {
     wrapped(`refused (${names.join(', ')}): ${harmless(reason)}`, width, '  ', '    '),
   );
   const fallen = combinations.filter((one) => one.refused !== undefined && withCase(one));
-  const words = `refused with their cases: ${fallen.map(({ name }) => harmless(name)).join('; ')}`;
+  const named = fallen.slice(0, FALLEN_NAMED).map(({ name }) => harmless(name));
+  const more = fallen.length - named.length;
+  const words = `refused with their cases: ${named.join('; ')}${more > 0 ? `; and ${more} more combinations` : ''}`;
   return fallen.length === 0 ? lines : [...lines, ...wrapped(words, width, '  ', '    ')];
 }
 
-function combinations({ combinations: all }: Result, width: number): string[] {
+function combinations({ combinations: all, combining }: Result, width: number): string[] {
   if (all.length === 0) return [];
-  const limits = [...new Set(all.map(({ limit }) => limit))];
-  const words = limits.map((limit) => `${all.filter((one) => one.limit === limit).length} ${limit}`);
-  return wrapped(`${count(all.length, 'combination')}: ${words.join(', ')}`, width, '  ', '  ');
+  const tally = combining?.solved ?? tallyOf(all.map(({ limit }) => limit));
+  const words = Object.entries(tally).map(([limit, number]) => `${number} ${limit}`);
+  const total = Object.values(tally).reduce((sum, number) => sum + number, 0);
+  const by = combining === undefined ? '' : ` by ${combining.rule}`;
+  const between =
+    combining === undefined || combining.between === 0
+      ? ''
+      : `; ${combining.between} more lie between two of these and can never govern`;
+  return [
+    ...wrapped(`${count(total, 'combination')}${by}: ${words.join(', ')}${between}`, width, '  ', '    '),
+    ...(combining?.notes ?? []).flatMap((note) => wrapped(harmless(note), width, '  - ', '    ')),
+  ];
+}
+
+function tallyOf(words: readonly string[]): Record<string, number> {
+  const tally: Record<string, number> = {};
+  for (const word of words) tally[word] = (tally[word] ?? 0) + 1;
+  return tally;
 }

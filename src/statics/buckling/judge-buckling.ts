@@ -27,7 +27,8 @@ export interface BucklingJudgement {
   readonly findings: readonly Finding[];
 }
 
-const NOT_JUDGED: BucklingJudgement = { factors: new Map(), governing: null, findings: [] };
+/** Nothing is known. */
+export const NOT_JUDGED: BucklingJudgement = { factors: new Map(), governing: null, findings: [] };
 
 /**
  * Critical load factors of the pin-jointed truss under every strength and accidental combination, or under the cases where there is no

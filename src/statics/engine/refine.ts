@@ -15,12 +15,28 @@ export interface Refined {
 /**
  * Solves K q = f for all loads and refines until the joints balance. The bar forces are added up from the steps, not taken from the
  * final q: where displacements are large against elongations, q alone cannot hold them to more digits than the condition leaves.
+ * @param freeStretch m, one entry a row: how much longer each would be without force (warmth, misfit, a settled end); null for none
  */
-export function solveRefined(system: Stiffness, factor: Factor, loads: readonly Float64Array[]): Refined[] {
+export function solveRefined(
+  system: Stiffness,
+  factor: Factor,
+  loads: readonly Float64Array[],
+  freeStretch: readonly (Float64Array | null)[] = [],
+): Refined[] {
   const { rows, stiffness } = system;
   const { active } = system.matrix.symbolic.freedoms;
-  const results = loads.map(() => ({ q: new Float64Array(active.length), axial: new Float64Array(rows.count) }));
-  const rest = loads.map((load) => mask(load, active));
+  const results = loads.map((_, i) => ({
+    q: new Float64Array(active.length),
+    axial: Float64Array.from(stiffness, (k, row) => -k * (freeStretch[i]?.[row] ?? 0)),
+  }));
+  const rest = loads.map((load, i) => {
+    if (freeStretch[i] == null) return mask(load, active);
+    const given = combineRows(rows, results[i].axial, active.length);
+    return mask(
+      load.map((f, u) => f - given[u]),
+      active,
+    );
+  });
   const worst = rest.map(() => Number.POSITIVE_INFINITY);
   let open = loads.map((_, i) => i);
   for (let step = 0; step < MOST_STEPS && open.length > 0; step++) {

@@ -67,7 +67,9 @@ function buildCase(truss: Truss, members: readonly Member[], rule: CaseRule) {
   const isSaid = findings.some(({ code }) => code === 'no-load');
   if (loads.length === 0 && !isSaid) findings.push(sayEmpty(rule));
   const incomplete = notPut.length === 0 ? {} : { incomplete: notPut.join('; ') };
-  return { loadCase: { name: rule.name, nature: rule.nature, loads, ...incomplete }, coverage, findings };
+  const { name, nature, category, alternative } = rule;
+  const combining = { ...(category && { category }), ...(alternative && { alternative }) };
+  return { loadCase: { name, nature, ...combining, loads, ...incomplete }, coverage, findings };
 }
 
 function findEmptySelectors(truss: Truss, members: readonly Member[], load: LoadRule): Finding[] {

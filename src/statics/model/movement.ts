@@ -135,6 +135,12 @@ export function gatherForces(movement: Movement, forces: Float64Array): Float64A
   return out;
 }
 
+/** Direction c of a node's frame. */
+export function frameDirection({ frame }: Movement, node: number, c: number): Vec3 {
+  const at = 9 * node + 3 * c;
+  return [frame[at], frame[at + 1], frame[at + 2]];
+}
+
 /** Fills in the movement of the carried nodes from that of the real ones. */
 export function carryMovements(truss: Truss, shares: Movement['shares'], own: Float64Array): Float64Array {
   truss.nodes.forEach((node, i) => {

@@ -1,6 +1,6 @@
 import { Matrix, solve } from 'ml-matrix';
 import type { Vec3 } from '../../domain/vector.ts';
-import { type Movement, STRIDE } from '../model/movement.ts';
+import { frameDirection, type Movement, STRIDE } from '../model/movement.ts';
 import type { System } from '../model/system.ts';
 import type { NodalForce, Restraint } from '../types.ts';
 
@@ -92,11 +92,6 @@ function carriedReactions(movement: Movement, left: Float64Array): number[] {
 
 function isHeld(movement: Movement, node: number): boolean {
   return movement.truss.nodes[node].carriedBy === null && movement.live[node] === 1;
-}
-
-function frameDirection(movement: Movement, node: number, c: number): Vec3 {
-  const at = 9 * node + 3 * c;
-  return [movement.frame[at], movement.frame[at + 1], movement.frame[at + 2]];
 }
 
 function along(forces: Float64Array, node: number, direction: Vec3): number {

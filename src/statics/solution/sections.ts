@@ -47,12 +47,14 @@ export function judgeSections({ truss, parts }: Problem, stability: Judgement): 
   );
   return {
     refuse: (one) => {
-      const load = one.loads.find(
-        ({ node, force }) =>
-          parts.liveNode[node] && indeterminate.has(parts.partOf[node]) && force.some((component) => component !== 0),
-      );
-      if (load === undefined) return null;
-      const bars = lacking.get(parts.partOf[load.node])!;
+      const strained = [
+        ...one.loads.filter(({ force }) => force.some((component) => component !== 0)).map(({ node }) => node),
+        ...(one.freeStretch ?? []).map(({ bar }) => truss.bars[bar].from),
+        ...(one.settlements ?? []).map(({ node }) => node),
+      ];
+      const node = strained.find((n) => parts.liveNode[n] && indeterminate.has(parts.partOf[n]));
+      if (node === undefined) return null;
+      const bars = lacking.get(parts.partOf[node])!;
       const names = bars.slice(0, 3).map((b) => truss.bars[b].name);
       const rest = bars.length > 3 ? ` and ${bars.length - 3} more` : '';
       const verb = bars.length === 1 ? 'has' : 'have';

@@ -1,0 +1,66 @@
+import type { Brief } from '../../brief/types.ts';
+import { RequestError } from '../../domain/errors.ts';
+import type { Truss } from '../../domain/truss.ts';
+import { analyseWhole, type Whole } from '../analyse-whole.ts';
+import { NOT_JUDGED } from '../buckling/judge-buckling.ts';
+import { combinationsFor } from '../combinations/combinations-for.ts';
+import type { Generated, NamedCombination } from '../combinations/generate.ts';
+import type { Judgement } from '../stability/assess-stability.ts';
+import type { BarEnvelope, LoadCase, OneWay, Supports } from '../types.ts';
+import { combine } from './combine.ts';
+import { envelope } from './envelope.ts';
+import { solveCombinations } from './solve-combinations.ts';
+import { Solver } from './solver.ts';
+import { supportLifts } from './support-lifts.ts';
+
+export interface RunRules {
+  readonly brief: Pick<Brief, 'combinations' | 'codeRule' | 'site' | 'analysis'>;
+  /** The model's own combinations, where its cases are used; else null. */
+  readonly given: readonly NamedCombination[] | null;
+  readonly oneWay: OneWay;
+}
+
+export interface RunSolution extends Whole {
+  /** How a code made the combinations; null where they were listed. */
+  readonly generated: Generated | null;
+  readonly envelope: readonly BarEnvelope[];
+}
+
+/** Cases, their combinations and the envelope. Combinations are sums of cases, unless some bars only pull or only push. */
+export function solveRun(
+  truss: Truss,
+  supports: Supports,
+  stability: Judgement,
+  cases: readonly LoadCase[],
+  { brief, given, oneWay }: RunRules,
+): RunSolution {
+  const superposable = oneWay.tensionOnly.length + oneWay.compressionOnly.length === 0;
+  refuseTogether(cases, brief.analysis === 'second-order', superposable);
+  const solver = new Solver(truss, supports, stability, { oneWay });
+  const solved = solver.solve(cases);
+  const { combinations: rules, generated } = combinationsFor(cases, brief, given, superposable);
+  const combined = superposable
+    ? { combinations: combine(solved.cases, rules), findings: [] }
+    : solveCombinations(solver, cases, rules);
+  const whole = superposable
+    ? analyseWhole(truss, supports, stability, solved.cases, combined.combinations, { analysis: brief.analysis })
+    : { cases: solved.cases, combinations: combined.combinations, buckling: NOT_JUDGED, findings: [] };
+  return {
+    ...whole,
+    generated,
+    envelope: envelope(truss, whole.cases, whole.combinations),
+    findings: [...solved.findings, ...combined.findings, ...supportLifts(truss, whole.combinations), ...whole.findings],
+  };
+}
+
+/** The search for slack bars and the balance at moved nodes are not made together. */
+function refuseTogether(cases: readonly LoadCase[], isSecondOrder: boolean, superposable: boolean): void {
+  const strained = cases.find((one) => one.freeStretch?.length || one.settlements?.length);
+  if (!isSecondOrder || (superposable && strained === undefined)) return;
+  const what = superposable
+    ? `temperature, misfit or settlement (case ${strained!.name})`
+    : 'bars that only pull or only push';
+  throw new RequestError(
+    `the brief: analysis: second-order is not available together with ${what} yet; take one of them out`,
+  );
+}
