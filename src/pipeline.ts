@@ -165,6 +165,7 @@ export async function runModel(bytes: Uint8Array, options: Partial<RunOptions> =
     truss,
     supports,
     stability,
+    families: joined.families,
     findings,
     cases: solved.cases,
     oneWay,

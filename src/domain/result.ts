@@ -80,6 +80,19 @@ const barSchema = z.strictObject({
   length: z.number(),
 });
 
+const familySchema = z
+  .strictObject({
+    role: z.enum(['column', 'chord', 'purlin', 'post', 'diagonal', 'bracing', 'beam']).describe('told by geometry'),
+    section: textOrNull,
+    length: z.number().describe('m, as drawn'),
+    members: z.array(text).describe('GlobalIds'),
+    oddBeside: z
+      .strictObject({ length: z.number().describe('m'), count: z.number().int() })
+      .nullable()
+      .describe('the far larger family of nearly this length beside which these few look like a slip'),
+  })
+  .describe('members alike in role, section and length, the odd ones first');
+
 const findingSchema = z.strictObject({
   code: z.enum(Object.keys(FINDING_SEVERITY) as [FindingCode, ...FindingCode[]]),
   severity: z.enum(['error', 'warning', 'note']),
@@ -271,6 +284,7 @@ export const resultSchema = z.strictObject({
   members: z.array(memberSchema),
   nodes: z.array(nodeSchema),
   bars: z.array(barSchema),
+  families: z.array(familySchema).optional(),
   findings: z.array(findingSchema),
   stability: stabilitySchema,
   cases: z.array(caseSchema),

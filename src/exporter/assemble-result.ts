@@ -20,6 +20,7 @@ import type {
   Supports,
 } from '../statics/types.ts';
 import type { JoinLimits } from '../topology/limits.ts';
+import type { Family } from '../topology/regularity/families.ts';
 import { resultSchedules } from './schedules/result-schedules.ts';
 
 /** Everything a run found, by index; the result says the same by name. */
@@ -31,6 +32,7 @@ export interface RunRecord {
   readonly truss: Truss;
   readonly supports: Supports;
   readonly stability: Stability;
+  readonly families: readonly Family[];
   readonly findings: readonly Finding[];
   readonly cases: readonly SolvedCase[];
   readonly combinations: readonly SolvedCombination[];
@@ -78,6 +80,10 @@ export function assembleResult(run: RunRecord): Result {
       ...(node.joining === undefined ? {} : { joinedBy: [...node.joining.by] }),
     })),
     bars: truss.bars.map((bar, index) => resultBar(bar, index, members)),
+    families: run.families.map((family) => ({
+      ...family,
+      members: family.members.map((member) => members[member].globalId),
+    })),
     findings: run.findings.map((finding) => ({
       ...finding,
       members: concerned(finding, truss, members),

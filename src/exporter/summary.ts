@@ -3,6 +3,7 @@ import { count, verdict } from '../domain/verdict.ts';
 import { millimetres } from '../domain/words.ts';
 import { worstBars } from './summary/bars.ts';
 import { loadCases } from './summary/cases.ts';
+import { oddMembers } from './summary/families.ts';
 import { findings } from './summary/findings.ts';
 import { joinedBy } from './summary/joined.ts';
 import { memberKinds } from './summary/kinds.ts';
@@ -17,6 +18,7 @@ export function summarise(result: Result, options: Partial<SummaryOptions> = {})
     [title(result), ...edited(chosen)],
     readAndJoined(result, chosen),
     memberKinds(chosen),
+    oddMembers(result, chosen),
     findings(result, chosen),
     standing(result, chosen),
     loadCases(result, chosen),

@@ -19,6 +19,7 @@ export interface Axis {
   /** Of which it is part; two of one name are two. */
   readonly assembly: Assembly | null;
   readonly sectionName: string | null;
+  readonly shape: SectionShape;
   /** Half the section's extent in a unit direction. */
   readonly halfExtent: (direction: Vec3) => number;
   /** How far the centroid may lie from the middle of the section, as a share of the half extent. */
@@ -50,6 +51,7 @@ export function makeAxes(
       depth: member.section ? Math.max(member.section.depth, member.section.width) : TOLERANCE.unknownDepth,
       assembly: assemblies?.get(member.globalId) ?? assemblyByName(member),
       sectionName: member.section?.name ?? null,
+      shape: member.section?.shape ?? 'other',
       halfExtent: halfExtentOf(member, direction),
       lean: LEANING.has(member.section?.shape ?? 'other') ? 0.5 : 0,
       reach: valueFor(reach, index),

@@ -16,7 +16,8 @@ export function findCarriers(
   axes: readonly (Axis | null)[],
   options: JoinOptions,
 ): (number | null)[] {
-  const frame: Frame = { graph, axes, lines: straightLines(graph, axes) };
+  const lines = straightLines(graph, axes);
+  const frame: Frame = { graph, axes, lines, meetElsewhere: meetings(graph, lines) };
   const carriers = graph.vertices.map((_, index) => (options.chords === 'strict' ? null : carrierOf(index, frame)));
   breakCycles(graph, carriers);
   return carriers;
@@ -26,7 +27,28 @@ interface Frame {
   readonly graph: VertexGraph;
   readonly axes: readonly (Axis | null)[];
   /** For each member the vertices of its line. */
-  readonly lines: readonly (readonly number[])[];
+  readonly lines: readonly Line[];
+  /** Whether two lines share a vertex other than the one given. */
+  readonly meetElsewhere: (a: Line, b: Line, vertex: number) => boolean;
+}
+
+type Line = readonly number[];
+
+/** A line spliced of many members runs the length of the roof: the vertices that two lines share are looked for once. */
+function meetings({ vertices }: VertexGraph, lines: readonly Line[]): Frame['meetElsewhere'] {
+  const known = new Map<Line, Map<Line, readonly number[]>>();
+  return (a, b, vertex) => sharedBy(a, b).some((other) => other !== vertex);
+
+  function sharedBy(a: Line, b: Line): readonly number[] {
+    const [short, long] = a.length <= b.length ? [a, b] : [b, a];
+    const ofLong = known.get(long) ?? new Map<Line, readonly number[]>();
+    known.set(long, ofLong);
+    const found = ofLong.get(short);
+    if (found) return found;
+    const shared = short.filter((one) => vertices[one].stations.some(({ member }) => lines[member] === long));
+    ofLong.set(short, shared);
+    return shared;
+  }
 }
 
 function carrierOf(index: number, frame: Frame): number | null {
@@ -34,6 +56,7 @@ function carrierOf(index: number, frame: Frame): number | null {
   const through = vertex.stations.filter(({ role }) => role === 'through').map(({ member }) => member);
   if (through.length === 0) return null;
   if (through.some((member) => isTriangulated(member, index, frame))) return null;
+  if (through.some((member) => isLastBeforeTail(member, index, frame))) return null;
   const supporting = through.filter((member) => !vertex.seated.has(member));
   if (supporting.length === 0) return null;
   const depth = (member: number) => frame.axes[member]?.depth ?? 0;
@@ -44,22 +67,49 @@ function carrierOf(index: number, frame: Frame): number | null {
  * Whether some member that frames in at the vertex closes a triangle on `runner`: its far end is tied, by a third
  * member, back to the runner elsewhere. A column that stands on the ground holds its vertex as well.
  */
-function isTriangulated(runner: number, index: number, { graph, axes, lines }: Frame): boolean {
+function isTriangulated(runner: number, index: number, frame: Frame): boolean {
+  const { graph, axes, lines, meetElsewhere } = frame;
   const { vertices, chains } = graph;
   const vertex = vertices[index];
-  const onRunner = new Set(lines[runner]);
-  onRunner.delete(index);
   for (const { member } of vertex.stations) {
     if (member === runner || vertex.seated.has(member)) continue;
-    for (const far of neighboursOn(chains[member], index)) {
+    for (const far of neighboursOn(chains[member], index).map((next) => beyondSplices(next, member, frame))) {
       if (isFoot(vertices[far], vertex, axes[member])) return true;
       for (const { member: third } of vertices[far].stations) {
-        if (third === member || lines[third] === lines[runner]) continue;
-        if (lines[third].some((other) => onRunner.has(other))) return true;
+        if (lines[third] === lines[member] || lines[third] === lines[runner]) continue;
+        if (meetElsewhere(lines[third], lines[runner], index)) return true;
       }
     }
   }
   return false;
+}
+
+/** The next vertex along a member's line at which something else is: a splice in a web leads on to its far end. */
+function beyondSplices(next: number, member: number, { graph: { vertices, chains }, lines }: Frame): number {
+  let [vertex, along] = [next, member];
+  for (;;) {
+    const { stations } = vertices[vertex];
+    const other = stations.find((station) => station.member !== along);
+    if (stations.length !== 2 || other === undefined || lines[other.member] !== lines[along]) return vertex;
+    const beyond = neighboursOn(chains[other.member], vertex)[0];
+    if (beyond === undefined || beyond === next) return vertex;
+    [vertex, along] = [beyond, other.member];
+  }
+}
+
+/**
+ * Whether a member ends free just beyond the vertex: between a joint and the air nothing can be carried by the lever
+ * rule. A foot on the ground is no such end.
+ */
+function isLastBeforeTail(runner: number, index: number, { graph: { vertices, chains }, axes }: Frame): boolean {
+  const vertex = vertices[index];
+  const frames = vertex.stations.some(({ member, role }) => role !== 'through' && !vertex.seated.has(member));
+  if (!frames) return false;
+  const chain = chains[runner];
+  const at = chain.indexOf(index);
+  const isTail = (end: number, isLast: boolean): boolean =>
+    isLast && isFreeEnd(vertices[end]) && !isFoot(vertices[end], vertex, axes[runner]);
+  return isTail(chain[at - 1], at === 1) !== isTail(chain[at + 1], at === chain.length - 2);
 }
 
 function isFoot(far: Vertex, near: Vertex, axis: Axis | null): boolean {

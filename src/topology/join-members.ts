@@ -18,17 +18,20 @@ import { makeJoints, type Refusal } from './joints.ts';
 import { labelOf } from './labels.ts';
 import { withoutLaps } from './laps.ts';
 import { type JoinLimits, limitsUsed } from './limits.ts';
-import { looseEndFindings, overhangFindings } from './loose-ends.ts';
+import { findLooseEnds, looseEndFinding, overhangFindings } from './loose-ends.ts';
+import { nearMissFindings } from './near-misses.ts';
 import { noneTwice } from './none-twice.ts';
 import { JOIN_DEFAULTS, type JoinOptions } from './options.ts';
 import { cutOverhangs } from './overhangs.ts';
-import { partFindings } from './parts.ts';
+import { partFindings, partsAside } from './parts.ts';
 import { cutPieces, joinSplices } from './pieces.ts';
 import { reasonsFor } from './reasons.ts';
+import { type Family, findFamilies } from './regularity/families.ts';
+import { rolesOf } from './regularity/roles.ts';
 import { findSplices, namedSplices } from './splices.ts';
 import { findStations } from './stations.ts';
 import { withoutTwisting } from './twisted.ts';
-import { makeVertices, type Vertex } from './vertices.ts';
+import { makeVertices, type Vertex, type VertexGraph } from './vertices.ts';
 
 export interface JoinContext {
   readonly placeOf: PlaceNamer;
@@ -50,6 +53,7 @@ const NO_CONTEXT: JoinContext = {
 export interface Joined {
   readonly truss: Truss;
   readonly findings: Finding[];
+  readonly families: Family[];
   readonly limits: JoinLimits;
 }
 
@@ -70,15 +74,19 @@ export function joinMembers(
   const { axes } = doubles;
 
   const contacts = findContacts(axes, chosen, pairEvidence(members, axes, evidence));
-  const { truss: whole, refused } = trussOf(members, axes, contacts, chosen, known);
+  const { truss: whole, refused, graph } = trussOf(members, axes, contacts, chosen, known);
   const { truss: cut, cut: tails } = cutOverhangs(whole, supportedNodes(whole));
   const supported = supportedNodes(cut);
+  const roles = rolesOf(axes, graph);
+  const { misses, loose } = findLooseEnds(cut, axes, supported, chosen);
+  const aside = partsAside(cut, supported, misses);
   const findings = [
     ...zeroLengthFindings(members, drawn, placeOf),
     ...doubles.findings,
     ...overhangFindings(withoutLaps(tails, axes), members, placeOf),
-    ...looseEndFindings(cut, members, axes, supported, chosen, placeOf),
-    ...partFindings(cut, members, axes, supported, placeOf),
+    ...nearMissFindings(aside.otherMisses, members, { axes, graph, roles }, placeOf),
+    ...loose.map((end) => looseEndFinding(end, members, placeOf)),
+    ...partFindings(aside.parts, cut, members, axes, placeOf),
     ...crossingFindings(contacts, members, axes, cut, placeOf),
     ...crowdedFindings(refused, members, cut, placeOf),
     ...closeJointFindings(cut, members, axes, placeOf),
@@ -86,7 +94,12 @@ export function joinMembers(
     ...carriedFindings(cut, members),
     ...axisMovedFindings(members, cut, placeOf),
   ];
-  return { truss: cut, findings: noneTwice(findings), limits: limitsUsed(axes, contacts) };
+  return {
+    truss: cut,
+    findings: noneTwice(findings),
+    families: findFamilies(members, roles),
+    limits: limitsUsed(axes, contacts),
+  };
 }
 
 function trussOf(
@@ -95,7 +108,7 @@ function trussOf(
   contacts: readonly Contact[],
   options: JoinOptions,
   { placeOf, namedPlaces }: JoinContext,
-): { truss: Truss; refused: readonly Refusal[] } {
+): { truss: Truss; refused: readonly Refusal[]; graph: VertexGraph } {
   const joining = contacts.filter(({ kind }) => kind !== 'crossing' || options.crossings === 'joined');
   const { graph, refused, contacts: kept } = untwisted(axes, joining);
   const pieces = cutPieces(graph, findCarriers(graph, axes, options));
@@ -105,7 +118,7 @@ function trussOf(
     by: reasonsFor(vertex, kept),
     eccentricities: eccentricitiesOf(vertex, axes),
   });
-  return { truss: buildTruss(graph, runs, members, axes, placeOf, joiningOf), refused };
+  return { truss: buildTruss(graph, runs, members, axes, placeOf, joiningOf), refused, graph };
 }
 
 function zeroLengthFindings(

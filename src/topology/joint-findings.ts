@@ -18,7 +18,8 @@ export function crossingFindings(
   truss: Truss,
   placeOf: PlaceNamer,
 ): Finding[] {
-  const together = membersByNode(truss);
+  if (!contacts.some(({ kind }) => kind === 'crossing')) return [];
+  const together = nodesByMember(truss);
   return contacts.flatMap(({ a, b, s, t, kind, cost, point }) => {
     const [first, second] = [axes[a], axes[b]];
     if (kind !== 'crossing' || first === null || second === null || looksCrossed(first, second, s, t)) return [];
@@ -33,10 +34,10 @@ export function crossingFindings(
   });
 }
 
-function membersByNode(truss: Truss): Map<number, number[]> {
+function nodesByMember(truss: Truss): Map<number, number[]> {
   const nodes = new Map<number, number[]>();
   truss.nodes.forEach(({ members }, node) => {
-    for (const member of members) nodes.set(member, [...(nodes.get(member) ?? []), node]);
+    for (const member of members) pushTo(nodes, member, node);
   });
   return nodes;
 }
@@ -48,9 +49,11 @@ export function crowdedFindings(
   truss: Truss,
   placeOf: PlaceNamer,
 ): Finding[] {
+  if (refused.length === 0) return [];
+  const nodesOf = nodesByMember(truss);
   const said = new Set<string>();
   return refused.flatMap(({ contact: { a, b, point } }) => {
-    const near = [a, b].map((member) => nearestNode(truss, member, point));
+    const near = [a, b].map((member) => nearestNode(truss, nodesOf.get(member) ?? [], point));
     if (near[0] === near[1] || near.includes(-1)) return [];
     const key = [...near].sort((p, q) => p - q).join(' ');
     if (said.has(key)) return [];
@@ -108,12 +111,11 @@ export function closeJointFindings(
   });
 }
 
-function nearestNode(truss: Truss, member: number, point: Axis['start']): number {
+function nearestNode({ nodes }: Truss, own: readonly number[], point: Axis['start']): number {
   let best = -1;
-  truss.nodes.forEach(({ members, at }, node) => {
-    if (members.includes(member) && (best < 0 || distance(at, point) < distance(truss.nodes[best].at, point)))
-      best = node;
-  });
+  for (const node of own) {
+    if (best < 0 || distance(nodes[node].at, point) < distance(nodes[best].at, point)) best = node;
+  }
   return best;
 }
 

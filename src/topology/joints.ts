@@ -1,4 +1,4 @@
-import { distance, meanOf, type Vec3 } from '../domain/vector.ts';
+import { along, distance, meanOf, type Vec3 } from '../domain/vector.ts';
 import type { Axis } from './axes.ts';
 import type { Contact } from './contacts.ts';
 import { TOLERANCE } from './options.ts';
@@ -69,6 +69,8 @@ class Groups {
   private readonly stations: readonly Station[];
   private readonly points: Vec3[];
   private readonly sizes: number[];
+  /** Half the height of a station's seats: what sits is that much farther from the joint than what meets. */
+  private readonly lifts: number[];
 
   constructor(stations: readonly Station[], axes: readonly (Axis | null)[], contacts: readonly Contact[]) {
     this.stations = stations;
@@ -76,6 +78,8 @@ class Groups {
     this.content = stations.map((_, i) => [i]);
     this.points = stations.map((station) => meanOf(station.contacts.map((c) => contacts[c].point)));
     this.sizes = stations.map((station) => Math.max(TOLERANCE.leastJoint, axes[station.member]?.depth ?? 0));
+    const lifts = contacts.map((contact) => (contact.kind === 'seat' ? seatHeight(contact, axes) / 2 : 0));
+    this.lifts = stations.map((station) => station.contacts.reduce((most, c) => Math.max(most, lifts[c]), 0));
   }
 
   sizeOf(i: number): number {
@@ -91,7 +95,12 @@ class Groups {
     const present = new Set(first.map((k) => this.stations[k].member));
     if (second.some((k) => present.has(this.stations[k].member))) return false;
     const size = stretched * Math.max(...[...first, ...second].map((k) => this.sizes[k]));
-    for (const p of first) for (const q of second) if (distance(this.points[p], this.points[q]) > size) return false;
+    for (const p of first) {
+      for (const q of second) {
+        const lift = Math.max(this.lifts[p], this.lifts[q]);
+        if (distance(this.points[p], this.points[q]) > size + lift) return false;
+      }
+    }
     this.parent[b] = a;
     this.content[a] = [...first, ...second];
     this.content[b] = [];
@@ -108,6 +117,12 @@ class Groups {
     this.parent[i] = root;
     return root;
   }
+}
+
+function seatHeight({ a, b, s, t }: Contact, axes: readonly (Axis | null)[]): number {
+  const [first, second] = [axes[a], axes[b]];
+  if (first === null || second === null) return 0;
+  return distance(along(first.start, first.direction, s), along(second.start, second.direction, t));
 }
 
 /**

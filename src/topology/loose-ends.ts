@@ -1,59 +1,62 @@
 import { type Finding, finding } from '../domain/finding.ts';
-import { pushTo } from '../domain/group.ts';
 import type { Member } from '../domain/member.ts';
 import type { PlaceNamer } from '../domain/place.ts';
 import type { Truss } from '../domain/truss.ts';
 import { distance, type Vec3 } from '../domain/vector.ts';
 import { millimetres } from '../domain/words.ts';
 import { type Axis, distanceToAxis } from './axes.ts';
-import { boxAround, judgePair, largestReach } from './contacts.ts';
+import { boxAround, type Contact, judgePair, largestReach } from './contacts.ts';
 import { labelOf } from './labels.ts';
 import { type JoinOptions, TOLERANCE } from './options.ts';
 import { isFreeEnd, type Overhang } from './overhangs.ts';
 import { indexBoxes, searchBoxes } from './spatial-index.ts';
+import { stationOf } from './stations.ts';
 
 const STEEP = Math.sin(Math.PI / 3);
 
-/** Every end that no joint took and nothing supports: a near miss where another axis is close, else a loose end. */
-export function looseEndFindings(
-  truss: Truss,
-  members: readonly Member[],
-  axes: readonly (Axis | null)[],
-  supported: ReadonlySet<number>,
-  options: JoinOptions,
-  placeOf: PlaceNamer,
-): Finding[] {
-  const search = nearMissSearch(axes, options);
-  const ends = freeEnds(truss, axes);
-  const endsOf = new Map<Axis, FreeEnd[]>();
-  for (const end of ends) pushTo(endsOf, end.axis, end);
-  const findings: Finding[] = [];
-  for (const end of ends) {
-    if (supported.has(end.node)) continue;
-    const miss = search(end);
-    const isFoot = end.axis.direction[2] * (end.atStart ? 1 : -1) > STEEP && supported.size === 0;
-    if (miss !== null) findings.push(nearMiss(end, miss, members, placeOf));
-    else if (!isFoot && !isLone(end)) findings.push(looseEnd(end, members, placeOf));
-  }
-  return findings;
-
-  /** Both ends of a lone bar are free; that is one finding of its own. */
-  function isLone({ axis }: FreeEnd): boolean {
-    return endsOf.get(axis)?.length === 2;
-  }
-}
-
-interface FreeEnd {
+/** An end that nothing else meets. */
+export interface FreeEnd {
   readonly axis: Axis;
   readonly node: number;
   readonly at: Vec3;
   readonly atStart: boolean;
 }
 
-interface Miss {
+/** A free end with the axis it should probably meet. */
+export interface Miss {
+  readonly end: FreeEnd;
   readonly other: Axis;
+  /** m, from the end straight to the nearest point of the other axis. */
   readonly gap: number;
-  readonly ratio: number;
+  /** m by which the end would have to be carried along its own axis, and m by which the two axes pass each other. */
+  readonly lengthwise: number;
+  readonly sideways: number;
+}
+
+/** Every end that no joint took and nothing supports: a miss where another axis is close, else loose. */
+export function findLooseEnds(
+  truss: Truss,
+  axes: readonly (Axis | null)[],
+  supported: ReadonlySet<number>,
+  options: JoinOptions,
+): { misses: Miss[]; loose: FreeEnd[] } {
+  const ends = freeEnds(truss, axes);
+  const misses: Miss[] = [];
+  const loose: FreeEnd[] = [];
+  if (ends.length === 0) return { misses, loose };
+  const search = nearMissSearch(axes, options);
+  const endsOf = new Map<Axis, number>();
+  for (const { axis } of ends) endsOf.set(axis, (endsOf.get(axis) ?? 0) + 1);
+  for (const end of ends) {
+    if (supported.has(end.node)) continue;
+    const miss = search(end);
+    const isFoot = end.axis.direction[2] * (end.atStart ? 1 : -1) > STEEP && supported.size === 0;
+    // Both ends of a lone bar are free; that is one finding of its own.
+    const isLone = endsOf.get(end.axis) === 2;
+    if (miss !== null) misses.push(miss);
+    else if (!isFoot && !isLone) loose.push(end);
+  }
+  return { misses, loose };
 }
 
 function freeEnds(truss: Truss, axes: readonly (Axis | null)[]): FreeEnd[] {
@@ -79,28 +82,59 @@ function nearMissSearch(axes: readonly (Axis | null)[], options: JoinOptions): (
     boxes.set(boxAround(axis, TOLERANCE.nearMiss * largestReach(axis)), 6 * i);
   });
   const index = indexBoxes(boxes);
-  return ({ axis, at, atStart }) => {
+  return (end) => {
+    const { axis, at, atStart } = end;
     const margin = TOLERANCE.nearMiss * largestReach(axis);
-    let best: Miss | null = null;
+    const found: Candidate[] = [];
     const box = [...at.map((x) => x - margin), ...at.map((x) => x + margin)];
     searchBoxes(index, box, (i) => {
       const other = present[i];
       if (other === axis) return;
       const judged = judgePair(axis, other, options);
       if (judged === null || judged.ratio > TOLERANCE.nearMiss || judged.contact.kind === 'crossing') return;
-      const { s } = judged.contact;
+      const s = stationOf(judged.contact, axis.member);
       if (s < axis.length / 2 !== atStart) return;
       const { distance: gap } = distanceToAxis(at, other);
       if (gap > TOLERANCE.nearMiss * largestGap(axis, other)) return;
-      if (
-        best === null ||
-        judged.ratio < best.ratio ||
-        (judged.ratio === best.ratio && other.member < best.other.member)
-      )
-        best = { other, gap, ratio: judged.ratio };
+      const miss = { end, other, gap, ...missOf(judged.contact, s, axis) };
+      found.push({ miss, ratio: judged.ratio, s, runsOn: runsThrough(judged.contact, other) });
     });
-    return best;
+    return likeliest(found)?.miss ?? null;
   };
+}
+
+interface Candidate {
+  readonly miss: Miss;
+  readonly ratio: number;
+  readonly s: number;
+  /** Whether the other member runs on past the place. */
+  readonly runsOn: boolean;
+}
+
+/**
+ * The nearest by its own limits; of several at one joint the member that runs through it, which the others end on too,
+ * and where none does the deepest: webs are slighter than the chord they end on.
+ */
+function likeliest(found: readonly Candidate[]): Candidate | null {
+  if (found.length === 0) return null;
+  const least = (some: readonly Candidate[]) => some.reduce((best, one) => (isNearer(one, best) ? one : best));
+  const nearest = least(found);
+  if (nearest.runsOn) return nearest;
+  const size = nearest.miss.end.axis.depth + TOLERANCE.detailingGap;
+  const there = found.filter(({ s }) => Math.abs(s - nearest.s) <= size);
+  const through = there.filter(({ runsOn }) => runsOn);
+  if (through.length > 0) return least(through);
+  const deepest = Math.max(...there.map(({ miss }) => miss.other.depth));
+  return least(there.filter(({ miss }) => miss.other.depth === deepest));
+}
+
+const isNearer = (a: Candidate, b: Candidate): boolean =>
+  a.ratio < b.ratio || (a.ratio === b.ratio && a.miss.other.member < b.miss.other.member);
+
+function runsThrough(contact: Contact, other: Axis): boolean {
+  const t = stationOf(contact, other.member);
+  const margin = other.depth + TOLERANCE.detailingGap;
+  return t > margin && t < other.length - margin;
 }
 
 /** What a joint of the two could bridge straight across, however slanting they meet. */
@@ -108,24 +142,12 @@ function largestGap(own: Axis, other: Axis): number {
   return Math.max(own.reach ?? 0, own.depth, other.depth) + TOLERANCE.detailingGap;
 }
 
-function nearMiss(end: FreeEnd, miss: Miss, members: readonly Member[], placeOf: PlaceNamer): Finding {
-  const own = members[end.axis.member];
-  const other = members[miss.other.member];
-  return finding(
-    'near-miss',
-    `An end of ${labelOf(own)} misses ${labelOf(other)} by ${millimetres(miss.gap)} and joins nothing.`,
-    `Carry the end of ${labelOf(own)} on to the axis of ${labelOf(other)}, or widen the reach in the brief if the gap is meant.`,
-    {
-      members: [own.globalId, other.globalId],
-      nodes: [end.node],
-      at: end.at,
-      place: placeOf(end.at),
-      gap: miss.gap,
-    },
-  );
+function missOf({ cost }: Contact, s: number, axis: Axis): Pick<Miss, 'lengthwise' | 'sideways'> {
+  const lengthwise = Math.max(0, -s, s - axis.length);
+  return { lengthwise, sideways: Math.max(0, cost - lengthwise) };
 }
 
-function looseEnd(end: FreeEnd, members: readonly Member[], placeOf: PlaceNamer): Finding {
+export function looseEndFinding(end: FreeEnd, members: readonly Member[], placeOf: PlaceNamer): Finding {
   const own = members[end.axis.member];
   return finding(
     'loose-end',

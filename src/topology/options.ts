@@ -32,7 +32,7 @@ export const JOIN_DEFAULTS: JoinOptions = {
 /** Tolerances of joining, in metres or as plain ratios. Starting values of METHODS 2.2. */
 export const TOLERANCE = {
   /** Detailing gap that a gusset bridges whatever the size of the member. */
-  detailingGap: 0.12,
+  detailingGap: 0.15,
   /** Share of a member's own depth that a gusset, a neighbouring brace or a notch may keep it away beyond its corner. */
   ownDepthShare: 1.25,
   /** How far an end may run past the far side of what it meets before that is an overhang. */

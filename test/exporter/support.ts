@@ -128,6 +128,7 @@ export function someResult(globalIds: readonly string[], { withCombinations = tr
     members,
     nodes,
     bars,
+    families: [],
     findings: [
       ...named.map((globalId, k) => ({
         code: 'near-miss',

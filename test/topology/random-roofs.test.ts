@@ -1,10 +1,12 @@
 import { describe, expect, it } from 'vitest';
+import { otherRoof } from '../../scripts/bench/other-roofs/other-roof.ts';
 import { JOINED_FAULTS } from '../../scripts/bench/roofs/fault-tools.ts';
 import { plantFaults } from '../../scripts/bench/roofs/faults.ts';
 import { membersOf, randomRoof } from '../../scripts/bench/roofs/random-roof.ts';
 import { isRight, joined, score } from '../../scripts/bench/roofs/score.ts';
 import { differences, truthOf } from '../../scripts/bench/roofs/truth.ts';
 import { distance } from '../../src/domain/vector.ts';
+import { assessStability } from '../../src/statics/stability/assess-stability.ts';
 import { joinMembers } from '../../src/topology/join-members.ts';
 
 /** Two roofs of every kind of truss; `npm run bench -- joining-faults` tells which others are not yet read rightly. */
@@ -19,9 +21,27 @@ describe('roofs drawn at random as detailers draw them', () => {
   });
 
   it('every fault that leaves something unjoined is found', () => {
-    const { missed, planted } = score(SEEDS, joinMembers);
+    const { missed, planted } = score(SEEDS, { join: joinMembers, judge: assessStability });
     expect(missed.filter(({ fault }) => !JOINED_FAULTS.includes(fault.kind))).toEqual([]);
     for (const [kind, { planted: count }] of Object.entries(planted)) expect(count, kind).toBeGreaterThan(0);
+  });
+});
+
+/** One roof of every kind that the other hand draws, and one more of each. */
+const OTHER_SEEDS = [0, 1, 2, 3, 4, 5, 6, 7, 9, 10, 12, 13, 16, 18];
+
+describe('roofs drawn at random by another hand', () => {
+  it.each(OTHER_SEEDS)('roof %i becomes the truss of its work points, and nothing is wrong with it', (seed) => {
+    const roof = otherRoof(seed);
+    const { members, truss, findings } = joined(roof, joinMembers);
+    expect(differences(roof, members, truss)).toEqual([]);
+    expect(findings.filter((finding) => !isRight(finding, roof))).toEqual([]);
+  });
+
+  it('every fault that leaves something unjoined is found, and none is told twice under two codes', () => {
+    const { missed, toldTwice } = score(OTHER_SEEDS, { join: joinMembers, judge: assessStability }, otherRoof);
+    expect(missed.filter(({ fault }) => !JOINED_FAULTS.includes(fault.kind))).toEqual([]);
+    expect(toldTwice).toEqual([]);
   });
 });
 

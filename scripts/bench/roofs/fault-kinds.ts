@@ -5,6 +5,7 @@ import type { DrawnMember, Role } from './drawing-board.ts';
 import {
   changeEnds,
   directionOf,
+  distanceToAxis,
   endOf,
   type FaultKind,
   FRAMES_IN,
@@ -117,6 +118,9 @@ function partOf(drawn: readonly DrawnMember[], chance: Chance): DrawnMember[] {
   }
 }
 
+/** m, more than the reach of ordinary columns and chords. */
+const OUT_OF_REACH = 0.5;
+
 const movedPart: Plant = (roof, drawn, chance) => {
   const group = partOf(drawn, chance);
   if (group.length < 3) return null;
@@ -132,7 +136,10 @@ const movedPart: Plant = (roof, drawn, chance) => {
       const moved = changed.get(mark);
       if (moved) return isClear(nearestOn(moved, add(joint.at, by)), drawn, (m) => marks.has(m.mark));
       const left = drawn.find((m) => m.mark === mark);
-      return !left || isClear(nearestOn(left, joint.at), [...changed.values()], () => false);
+      if (!left) return true;
+      // Along a column that runs on, a part that slides is still joined to it.
+      if (distanceToAxis(add(joint.at, by), left) < OUT_OF_REACH) return false;
+      return isClear(nearestOn(left, joint.at), [...changed.values()], () => false);
     }),
   );
   if (!isApart || seams.length === 0) return null;

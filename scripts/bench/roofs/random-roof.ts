@@ -2,19 +2,19 @@ import type { Member } from '../../../src/domain/member.ts';
 import { cross, dot, scale, subtract, unit, type Vec3 } from '../../../src/domain/vector.ts';
 import { bracingPlan, drawBracing, drawTies } from './bracing.ts';
 import { chanceOf } from './chance.ts';
-import { type Family, randomDesign } from './design.ts';
+import { randomDesign } from './design.ts';
 import { DrawingBoard, type DrawnMember, type TrueJoint, type TrueLine } from './drawing-board.ts';
 import { FrameDrawing } from './frame.ts';
 import { frameDetail } from './frame-plan.ts';
 import { sectionOf } from './profiles.ts';
 import { drawPurlins, extraStops, purlinPlan } from './purlins.ts';
-import { TRUSS_KINDS, type TrussKind, trussShape } from './truss-shapes.ts';
+import { TRUSS_KINDS, trussShape } from './truss-shapes.ts';
 
 /** A roof as drawn, with the truth it was drawn from. World metres throughout. */
 export interface Roof {
   readonly seed: number;
-  readonly kind: TrussKind;
-  readonly family: Family;
+  readonly kind: string;
+  readonly family: string;
   /** One line on what was drawn, for reports. */
   readonly title: string;
   readonly drawn: readonly DrawnMember[];

@@ -1,7 +1,9 @@
 import type { Finding } from '../../../src/domain/finding.ts';
 import type { Member } from '../../../src/domain/member.ts';
 import type { Truss } from '../../../src/domain/truss.ts';
-import { distance } from '../../../src/domain/vector.ts';
+import { distance, type Vec3 } from '../../../src/domain/vector.ts';
+import type { Supports } from '../../../src/statics/types.ts';
+import type { Joined } from '../../../src/topology/join-members.ts';
 import { FAULT_KINDS, type Fault, type FaultKind } from './fault-tools.ts';
 import { type FaultyRoof, plantFaults } from './faults.ts';
 import { membersOf, type Roof, randomRoof } from './random-roof.ts';
@@ -12,12 +14,19 @@ export type Join = (
   members: readonly Member[],
   options: object,
   context: { readonly placeOf: () => null; readonly supportedNodes: (truss: Truss) => ReadonlySet<number> },
-) => { readonly truss: Truss; readonly findings: readonly Finding[] };
+) => Pick<Joined, 'truss' | 'findings' | 'families'>;
+
+/** The stages that see faults: joining what is not joined, judging what is missing. */
+export interface Stages {
+  readonly join: Join;
+  readonly judge: (truss: Truss, supports: Supports) => { readonly findings: readonly Finding[] };
+}
 
 export interface RoofResult {
   readonly members: readonly Member[];
   readonly truss: Truss;
   readonly findings: readonly Finding[];
+  readonly families: Joined['families'];
 }
 
 export function joined(roof: Roof, join: Join): RoofResult {
@@ -81,10 +90,22 @@ export function isRight(finding: Finding, roof: Roof): boolean {
   }
 }
 
+/** How often a kind was planted, found by joining, and shown by what else is told: a mechanism there, an odd length. */
+export interface Found {
+  planted: number;
+  found: number;
+  byMechanism: number;
+  byLength: number;
+}
+
 export interface Score {
   readonly roofs: number;
-  readonly planted: Readonly<Record<FaultKind, { planted: number; found: number }>>;
+  readonly planted: Readonly<Record<FaultKind, Found>>;
+  /** Findings of one roof that name the same member at the same place under another code. */
+  readonly toldTwice: readonly { readonly seed: number; readonly findings: readonly [Finding, Finding] }[];
   readonly findings: ReadonlyMap<string, { right: number; wrong: number }>;
+  /** The codes that tell each kind, of the faults planted. */
+  readonly codes: Readonly<Record<FaultKind, ReadonlySet<string>>>;
   readonly missed: readonly { readonly seed: number; readonly fault: Fault }[];
   readonly falseFindings: readonly { readonly seed: number; readonly finding: Finding }[];
   /** Of the roofs without faults. */
@@ -98,22 +119,39 @@ export interface Score {
 }
 
 /** Joins every seed's roof once as drawn and once with up to ten faults. */
-export function score(seeds: readonly number[], join: Join): Score {
-  const planted = Object.fromEntries(FAULT_KINDS.map((kind) => [kind, { planted: 0, found: 0 }])) as Score['planted'];
+export function score(seeds: readonly number[], stages: Stages, roofOf: (seed: number) => Roof = randomRoof): Score {
+  const { join } = stages;
+  const toldTwice: { seed: number; findings: [Finding, Finding] }[] = [];
+  const planted = Object.fromEntries(
+    FAULT_KINDS.map((kind) => [kind, { planted: 0, found: 0, byMechanism: 0, byLength: 0 }]),
+  ) as Score['planted'];
+  const codes = Object.fromEntries(FAULT_KINDS.map((kind) => [kind, new Set<string>()])) as Record<
+    FaultKind,
+    Set<string>
+  >;
   const counts = new Map<string, { right: number; wrong: number }>();
   const missed: { seed: number; fault: Fault }[] = [];
   const falseFindings: { seed: number; finding: Finding }[] = [];
   const sound = seeds.map((seed) => {
-    const roof = randomRoof(seed);
-    const { members, truss, findings } = joined(roof, join);
+    const roof = roofOf(seed);
+    const sound = joined(roof, join);
+    const { members, truss, findings } = sound;
     const truth = truthOf(roof);
     const faulty: FaultyRoof = plantFaults(roof, seed, seed % 11);
     const result = joined(faulty.roof, join);
     const before = new Set(findings.map(spelling));
+    const isMobile = mobility(roof, sound, stages);
+    const isMobileNow = mobility(faulty.roof, result, stages);
+    const odd = oddMarks(sound);
+    const oddNow = oddMarks(result);
+    toldTwice.push(...doublesOf(result.findings).map((pair) => ({ seed, findings: pair })));
     for (const fault of faulty.faults) {
       planted[fault.kind].planted++;
+      for (const code of fault.codes) codes[fault.kind].add(code);
       if (isFound(fault, result.findings, before)) planted[fault.kind].found++;
       else missed.push({ seed, fault });
+      if (fault.places.some((place) => isMobileNow(place) && !isMobile(place))) planted[fault.kind].byMechanism++;
+      if (fault.marks.some((mark) => oddNow.has(mark) && !odd.has(mark))) planted[fault.kind].byLength++;
     }
     for (const finding of result.findings) {
       const isGood =
@@ -136,5 +174,43 @@ export function score(seeds: readonly number[], join: Join): Score {
       findings: wrong,
     };
   });
-  return { roofs: seeds.length, planted, findings: counts, missed, falseFindings, sound };
+  return { roofs: seeds.length, planted, toldTwice, codes, findings: counts, missed, falseFindings, sound };
 }
+
+/** Whether a mechanism moves the node nearest to a place. */
+function mobility(roof: Roof, { truss }: RoofResult, { judge }: Stages): (place: Vec3) => boolean {
+  const restraints = [...supportedNodes(roof, truss)].flatMap((node) =>
+    (
+      [
+        [1, 0, 0],
+        [0, 1, 0],
+        [0, 0, 1],
+      ] as const
+    ).map((direction) => ({ node, direction })),
+  );
+  const { findings } = judge(truss, { restraints, springs: [] });
+  const mobile = new Set(findings.filter(({ code }) => code === 'moves-freely').flatMap(({ nodes }) => nodes));
+  return (place) => truss.nodes.some(({ at }, node) => mobile.has(node) && distance(at, place) <= NEAR);
+}
+
+const oddMarks = ({ families, members }: RoofResult): Set<string> =>
+  new Set(
+    families
+      .filter(({ oddBeside }) => oddBeside !== null)
+      .flatMap((family) => family.members.map((i) => members[i].globalId)),
+  );
+
+/** Notes group many places and tell no fault. */
+function doublesOf(findings: readonly Finding[]): [Finding, Finding][] {
+  const told = findings.filter(({ severity, at }) => severity !== 'note' && at !== null);
+  return told.flatMap((one, i) =>
+    told
+      .slice(i + 1)
+      .filter((other) => other.code !== one.code && one.members[0] === other.members[0])
+      .filter((other) => distance(one.at as Vec3, other.at as Vec3) < SAME_PLACE)
+      .map((other): [Finding, Finding] => [one, other]),
+  );
+}
+
+/** m: one end of one member. */
+const SAME_PLACE = 0.3;

@@ -24,6 +24,7 @@ export interface SummaryOptions {
   readonly reactions: number;
   readonly modes: number;
   readonly kinds: number;
+  readonly families: number;
 }
 
 export const SUMMARY_DEFAULTS: SummaryOptions = {
@@ -34,4 +35,5 @@ export const SUMMARY_DEFAULTS: SummaryOptions = {
   reactions: 10,
   modes: 5,
   kinds: 12,
+  families: 5,
 };
