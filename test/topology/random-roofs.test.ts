@@ -27,8 +27,8 @@ describe('roofs drawn at random as detailers draw them', () => {
   });
 });
 
-/** One roof of every kind that the other hand draws, and one more of each. */
-const OTHER_SEEDS = [0, 1, 2, 3, 4, 5, 6, 7, 9, 10, 12, 13, 16, 18];
+/** Two roofs of every kind that the other hand draws; `npm run bench -- joining-faults` tells what is not yet found. */
+const OTHER_SEEDS = [0, 1, 2, 17, 4, 5, 6, 7, 9, 10, 12, 13, 16, 18];
 
 describe('roofs drawn at random by another hand', () => {
   it.each(OTHER_SEEDS)('roof %i becomes the truss of its work points, and nothing is wrong with it', (seed) => {

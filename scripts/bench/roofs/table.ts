@@ -3,7 +3,7 @@ import type { Score } from './score.ts';
 
 const share = (part: number, whole: number): string => (whole === 0 ? '-' : (part / whole).toFixed(3));
 const row = (...cells: (string | number)[]): string =>
-  cells.map((cell, i) => (i === 0 ? String(cell).padEnd(28) : String(cell).padStart(9))).join('');
+  cells.map((cell, i) => (i === 0 ? String(cell).padEnd(24) : String(cell).padStart(11))).join('');
 
 /**
  * Of all that is said under the codes that tell a kind, the share that is right; false findings count for every kind
