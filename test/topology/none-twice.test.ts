@@ -33,4 +33,11 @@ describe('what is wrong at one place is told once', () => {
       member(mark, [x, 0, 0], [x, 0, 0.75 * x - 0.45], { section: hollow(0.06) });
     expect(told([...frame, short('S', 2), short('R', 3)])).toEqual(['near-miss S T', 'near-miss R T']);
   });
+
+  it('two pieces that run in one another are one overlap, and their ends no near miss', () => {
+    const pieces = [member('A', [0, 5, 0], [4.4, 5, 0]), member('B', [4, 5, 0], [8, 5, 0])];
+    const found = told([...frame, ...pieces]).filter((one) => /[AB]/.test(one.split(' ').slice(1).join(' ')));
+    expect(found.filter((one) => one.startsWith('overlap'))).toHaveLength(1);
+    expect(found.filter((one) => one.startsWith('near-miss'))).toEqual([]);
+  });
 });
