@@ -11,7 +11,7 @@ import { resolveGivenSupports, resolveSupports } from './brief/supports.ts';
 import type { Brief } from './brief/types.ts';
 import { type Finding, finding } from './domain/finding.ts';
 import { GENERATOR } from './domain/generator.ts';
-import type { Member } from './domain/member.ts';
+import { type Member, recordOf } from './domain/member.ts';
 import type { Result } from './domain/result.ts';
 import type { Truss } from './domain/truss.ts';
 import { assembleResult } from './exporter/assemble-result.ts';
@@ -162,6 +162,7 @@ export async function runModel(bytes: Uint8Array, options: Partial<RunOptions> =
     },
     gridLines: imported.gridLines,
     members,
+    placeOf: imported.placeOf,
     truss,
     supports,
     stability,
@@ -244,7 +245,9 @@ function joiningOfView(asked: JoinOptions, count: number): JoinOptions {
 /** In an analysis view the depth of a section says nothing of how near two joints may be. */
 function asLine(member: Member): Member {
   const { section } = member;
-  return section === null ? member : { ...member, section: { ...section, depth: SHARED_POINT, width: SHARED_POINT } };
+  return section === null
+    ? member
+    : { ...recordOf(member), section: { ...section, depth: SHARED_POINT, width: SHARED_POINT } };
 }
 
 function withCleats(evidence: Evidence | null, cleats: readonly Member[]): Evidence | null {

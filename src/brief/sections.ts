@@ -1,5 +1,5 @@
 import type { Finding, FindingCode } from '../domain/finding.ts';
-import type { Member } from '../domain/member.ts';
+import { type Member, recordOf } from '../domain/member.ts';
 import { strengthened } from '../importer/materials/material-book.ts';
 import { findEmptyMemberSelectors } from './selector-empty.ts';
 import { memberTest } from './selectors/select-members.ts';
@@ -17,7 +17,7 @@ export function applySections(
   const changed = members.map((member): Member => {
     const rule = tests.find(({ on }) => on.some((holds) => holds(member)));
     if (rule === undefined) return member;
-    return { ...member, section: rule.use, material: strengthened(member.material, rule.use) };
+    return { ...recordOf(member), section: rule.use, material: strengthened(member.material, rule.use) };
   });
   const selectors = rules.flatMap(({ on }) => on);
   return { members: changed, findings: findEmptyMemberSelectors(members, selectors) };

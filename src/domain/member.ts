@@ -74,7 +74,6 @@ export interface Member {
   readonly partOf: string | null;
   readonly storey: string | null;
   readonly layer: string | null;
-  readonly place: string | null;
   readonly axisFrom: 'axis' | 'extrusion' | 'swept' | 'mesh' | 'analysis-view';
   readonly axis: readonly [Vec3, Vec3];
   /** The centroid line of the body, where `axis` is drawn apart from the body and a body shows it. */
@@ -84,4 +83,28 @@ export interface Member {
   readonly section: Section | null;
   readonly material: Material;
   readonly facts?: ElementFacts;
+}
+
+/** A member as a plain record. Those of a file are none (most of what they say is looked up), so that spreading one loses it. */
+export function recordOf(member: Member): Member {
+  return {
+    globalId: member.globalId,
+    part: member.part,
+    name: member.name,
+    tag: member.tag,
+    class: member.class,
+    predefinedType: member.predefinedType,
+    type: member.type,
+    assembly: member.assembly,
+    partOf: member.partOf,
+    storey: member.storey,
+    layer: member.layer,
+    axisFrom: member.axisFrom,
+    axis: member.axis,
+    centroidAxis: member.centroidAxis ?? null,
+    zAxis: member.zAxis,
+    section: member.section,
+    material: member.material,
+    ...(member.facts === undefined ? {} : { facts: member.facts }),
+  };
 }

@@ -2,9 +2,10 @@ import { CAUTION } from '../domain/caution.ts';
 import type { Finding } from '../domain/finding.ts';
 import type { GridLine } from '../domain/grid-line.ts';
 import type { Member } from '../domain/member.ts';
+import type { PlaceNamer } from '../domain/place.ts';
 import type { Result } from '../domain/result.ts';
 import type { Truss } from '../domain/truss.ts';
-import type { Vec3 } from '../domain/vector.ts';
+import { between, type Vec3 } from '../domain/vector.ts';
 import type { BarBending } from '../statics/bending/between-nodes.ts';
 import type { EccentricityMoment } from '../statics/bending/eccentricity-moments.ts';
 import type { BucklingJudgement } from '../statics/buckling/judge-buckling.ts';
@@ -29,6 +30,8 @@ export interface RunRecord {
   readonly model: Result['model'];
   readonly gridLines: readonly GridLine[];
   readonly members: readonly Member[];
+  /** Names where a member's middle is. */
+  readonly placeOf: PlaceNamer;
   readonly truss: Truss;
   readonly supports: Supports;
   readonly stability: Stability;
@@ -69,7 +72,7 @@ export function assembleResult(run: RunRecord): Result {
     units: { length: 'm', force: 'N', stress: 'Pa' },
     model: run.model,
     ...(run.gridLines.length === 0 ? {} : { grid: run.gridLines.map(resultGridLine) }),
-    members: members.map((member, index) => resultMember(member, index, truss)),
+    members: members.map((member, index) => resultMember(member, index, run)),
     nodes: truss.nodes.map((node, index) => ({
       id: nodeId(index),
       at: point(node.at),
@@ -144,7 +147,7 @@ function resultGridLine({ tag, from, to }: GridLine): NonNullable<Result['grid']
   return { tag, from: point(from), to: point(to) };
 }
 
-function resultMember(member: Member, index: number, truss: Truss): Result['members'][number] {
+function resultMember(member: Member, index: number, { truss, placeOf }: RunRecord): Result['members'][number] {
   const { shift, turn } = truss.faith[index];
   return {
     id: memberId(index),
@@ -157,7 +160,7 @@ function resultMember(member: Member, index: number, truss: Truss): Result['memb
     type: member.type,
     assembly: member.assembly,
     storey: member.storey,
-    place: member.place,
+    place: placeOf(between(...member.axis, 0.5)),
     axisFrom: member.axisFrom,
     axis: [point(member.axis[0]), point(member.axis[1])],
     zAxis: point(member.zAxis),

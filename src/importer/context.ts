@@ -1,4 +1,3 @@
-import { asEnum } from '../step/values.ts';
 import { writtenClass } from './class-names.ts';
 import type { Reading } from './reading.ts';
 import { type Relations, wholesAbove } from './relations.ts';
@@ -24,6 +23,8 @@ const SPATIAL = new Set([
   'IFCBRIDGEPART',
 ]);
 
+const WHOLE_ITSELF = { assembly: null, partOf: null };
+
 /** What stands around the elements of a file; what many share is read once. */
 export class ContextBook {
   private readonly reading: Reading;
@@ -37,21 +38,29 @@ export class ContextBook {
   }
 
   of(id: number): ElementContext {
-    const { file } = this.reading;
     const wholes = wholesAbove(this.relations, id);
+    const typeId = this.relations.typeOf.get(id);
+    const storey = this.storeyOf(id, wholes);
+    const { assembly, partOf } = wholes.length === 0 ? WHOLE_ITSELF : this.wholeAmong(wholes);
+    return {
+      predefinedType: this.predefinedType(id, typeId),
+      type: typeId === undefined ? null : this.named(typeId),
+      assembly,
+      partOf,
+      storey: storey === null ? null : this.named(storey),
+    };
+  }
+
+  private wholeAmong(wholes: readonly number[]): Pick<ElementContext, 'assembly' | 'partOf'> {
+    const { file } = this.reading;
     const elements = wholes.filter((whole) => !SPATIAL.has(file.typeOf(whole)));
     const assembly = elements.find((whole) => file.typeOf(whole) === 'IFCELEMENTASSEMBLY') ?? elements[0];
     // A baluster within an assembly within a stair is part of the stair.
     const foreign = elements.find((whole) => file.typeOf(whole) !== 'IFCELEMENTASSEMBLY');
     const whole = foreign ?? assembly;
-    const typeId = this.relations.typeOf.get(id);
-    const storey = this.storeyOf(id, wholes);
     return {
-      predefinedType: this.predefinedType(id, typeId),
-      type: typeId === undefined ? null : this.named(typeId),
       assembly: assembly === undefined ? null : assemblyName(this.reading, assembly),
       partOf: whole === undefined ? null : writtenClass(file.typeOf(whole)),
-      storey: storey === null ? null : this.named(storey),
     };
   }
 
@@ -67,9 +76,9 @@ export class ContextBook {
   /** IFC2X3 has a predefined type on the element's type only. */
   private predefinedType(id: number, typeId: number | undefined): string | null {
     const { file, family } = this.reading;
-    const own = family === 'IFC2X3' ? null : asEnum(file.valueAt(id, 8));
+    const own = family === 'IFC2X3' ? null : file.enumAt(id, 8);
     if (own !== null && own !== 'NOTDEFINED') return own;
-    return (typeId === undefined ? null : asEnum(file.valueAt(typeId, 9))) ?? own;
+    return (typeId === undefined ? null : file.enumAt(typeId, 9)) ?? own;
   }
 
   /** From the element or the first of its wholes that is contained somewhere, up to a storey. */

@@ -37,16 +37,18 @@ export function elementAxes(
   known: KnownSections,
   parsedMesh: () => readonly Polygon[] | null,
 ): MemberAxis[] {
-  const lines = orRefusal<Chord>(() => readAxisLines(reading, shape.axis, world));
-  const read = orRefusal<BodyAxis>(() => readBody(reading, sections, shape.body, world, known));
+  const lines = linesOrRefusal(reading, shape.axis, world);
+  const read = bodiesOrRefusal(reading, sections, shape.body, world, known);
   const bodies = isUnknown(reading, sections, read) ? meshed(read, parsedMesh(), world, known) : read;
   if (bodies !== read) noteUnread(reading, sections, read);
-  const drawn = Array.isArray(lines) ? lines.filter((line) => !(distance(line.from, line.to) < SHORTEST)) : [];
+  const drawn = Array.isArray(lines) ? lines.filter(isLong) : [];
   const solids = Array.isArray(bodies) ? distinctAxes(bodies) : [];
   const members = solids.length === 0 ? [] : memberSolids(sections, solids, profiles);
   const isGiven = options.axes === 'given' && !isLattice(drawn, members);
   if (drawn.length > 0 && (isGiven || members.length === 0)) {
-    return drawn.map((line) => axisOfLine(sections, line, solids, profiles, world));
+    const axes: MemberAxis[] = [];
+    for (const line of drawn) axes.push(axisOfLine(sections, line, solids, profiles, world));
+    return axes;
   }
   if (members.length > 0) {
     if (members.length < solids.length) reading.note(FITTINGS);
@@ -57,14 +59,44 @@ export function elementAxes(
   throw noAxis('it has no shape');
 }
 
+const isLong = (line: Chord): boolean => !(distance(line.from, line.to) < SHORTEST);
+
+function linesOrRefusal(reading: Reading, items: readonly number[], world: Transform): Chord[] | NotRead {
+  try {
+    return readAxisLines(reading, items, world);
+  } catch (problem) {
+    return refusalIn(problem);
+  }
+}
+
+function bodiesOrRefusal(
+  reading: Reading,
+  sections: SectionBook,
+  items: readonly number[],
+  world: Transform,
+  known: KnownSections,
+): BodyAxis[] | NotRead {
+  try {
+    return readBody(reading, sections, items, world, known);
+  } catch (problem) {
+    return refusalIn(problem);
+  }
+}
+
+function refusalIn(problem: unknown): NotRead {
+  if (problem instanceof NotRead) return problem;
+  throw problem;
+}
+
 /** Whether a body is of a kind that only a parser can tell of, or has a drawn profile that is not read. */
 function isUnknown(reading: Reading, sections: SectionBook, read: readonly BodyAxis[] | NotRead): boolean {
   if (read instanceof NotRead) return read instanceof NeedsParser;
-  return read.some(({ profile }) => profile !== null && isUnread(reading, sections, profile));
+  for (const { profile } of read) if (profile !== null && isUnread(reading, sections, profile)) return true;
+  return false;
 }
 
 const isUnread = (reading: Reading, sections: SectionBook, profile: number): boolean =>
-  isDrawn(reading, profile) && sections.refusalOf(profile) !== null;
+  sections.refusalOf(profile) !== null && isDrawn(reading, profile);
 
 /** Why the body was measured although profiles are drawn. */
 function noteUnread(reading: Reading, sections: SectionBook, read: readonly BodyAxis[] | NotRead): void {
@@ -87,16 +119,15 @@ function meshed(
   known: KnownSections,
 ): BodyAxis[] | NotRead {
   if (mesh === null) return read;
-  const fitted = orRefusal<BodyAxis>(() => meshAxes(mesh, world.z, known));
+  const fitted = fittedOrRefusal(mesh, world, known);
   return fitted instanceof NotRead && !(read instanceof NotRead) ? read : fitted;
 }
 
-function orRefusal<T>(read: () => T[]): T[] | NotRead {
+function fittedOrRefusal(mesh: readonly Polygon[], world: Transform, known: KnownSections): BodyAxis[] | NotRead {
   try {
-    return read();
+    return meshAxes(mesh, world.z, known);
   } catch (problem) {
-    if (problem instanceof NotRead) return problem;
-    throw problem;
+    return refusalIn(problem);
   }
 }
 

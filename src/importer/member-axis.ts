@@ -1,5 +1,5 @@
 import type { Section } from '../domain/member.ts';
-import { cross, distance, dot, norm, subtract, unit, type Vec3 } from '../domain/vector.ts';
+import { cross, distance, dot, hypot, norm, subtract, unit, type Vec3 } from '../domain/vector.ts';
 import { type BodyAxis, lengthOf } from './geometry/body-axis.ts';
 import { type Chord, isStraight } from './geometry/curve-piece.ts';
 import { NotRead, noSection } from './not-read.ts';
@@ -44,17 +44,15 @@ const isNear = (coordinate: number): boolean => Math.abs(coordinate) <= FARTHEST
 /** Ends are told apart to a tenth of a millimetre. */
 const ROUNDED = 1e4;
 
+export const rounded = (coordinate: number): number => Math.round(coordinate * ROUNDED);
+
 /** The end with the lower rounded x, then y, then z first, so that the drawing direction does not matter. */
 export function inOrder(a: Vec3, b: Vec3): readonly [Vec3, Vec3] {
   return compareRounded(a, b) <= 0 ? [a, b] : [b, a];
 }
 
 export function compareRounded(a: Vec3, b: Vec3): number {
-  return (
-    Math.round(a[0] * ROUNDED) - Math.round(b[0] * ROUNDED) ||
-    Math.round(a[1] * ROUNDED) - Math.round(b[1] * ROUNDED) ||
-    Math.round(a[2] * ROUNDED) - Math.round(b[2] * ROUNDED)
-  );
+  return rounded(a[0]) - rounded(b[0]) || rounded(a[1]) - rounded(b[1]) || rounded(a[2]) - rounded(b[2]);
 }
 
 /** The centroid line of a body, with the section that its profile shows across it. */
@@ -88,9 +86,12 @@ export function axisOfLine(
 ): MemberAxis {
   const ends = inOrder(line.from, line.to);
   const along = directionOf(ends);
-  const centroidEnds = centroidBeside(bodies, line);
-  const body = alongside(bodies, along);
-  const seen = body === null ? null : sectionOfBody(book, body, profiles);
+  const beside = centroidBeside(bodies, line);
+  const centroidEnds = beside !== null && isSame(beside, ends) ? ends : beside;
+  // Drawn where the one body's centroid line is, as most axes are, the line and the body run alike.
+  const isBody = centroidEnds === ends && bodies.length === 1;
+  const body = isBody ? bodies[0]! : alongside(bodies, along);
+  const seen = body === null ? null : sectionAcross(book, body, isBody ? along : directionOfBody(body), profiles);
   const isSeen = seen !== null && dot(seen.zAxis, along) ** 2 < 0.99;
   const zAxis = firstAcross(along, isSeen ? seen.zAxis : upOf(world, along));
   const { section, noSection } = seen ?? sectionOfProfiles(book, profiles, along, zAxis);
@@ -106,8 +107,8 @@ export function axisOfLine(
     confidence: body?.measured?.confidence ?? null,
     hasRaggedEnd: false,
     strays: null,
-    centroidEnds: centroidEnds !== null && isSame(centroidEnds, ends) ? ends : centroidEnds,
-    isBeside: centroidEnds !== null && isFarFrom(line, along, centroidEnds),
+    centroidEnds,
+    isBeside: centroidEnds !== null && centroidEnds !== ends && isFarFrom(line, along, centroidEnds),
   };
 }
 
@@ -131,6 +132,8 @@ const isSamePoint = (a: Vec3, b: Vec3): boolean =>
 
 /** The only body that is nearly as long as the longest. */
 function longestByFar(bodies: readonly BodyAxis[]): BodyAxis | null {
+  const [only] = bodies;
+  if (only !== undefined && bodies.length === 1) return lengthOf(only) > 0 ? only : null;
   let longest = 0;
   for (const body of bodies) longest = Math.max(longest, lengthOf(body));
   let found: BodyAxis | null = null;
@@ -155,15 +158,19 @@ function directionOf([from, to]: readonly [Vec3, Vec3]): Vec3 {
       'Export the element again at its true place.',
     );
   }
-  const direction = distance(from, to) < SHORTEST ? null : unit(subtract(to, from));
-  if (direction === null) {
+  const dx = to[0] - from[0];
+  const dy = to[1] - from[1];
+  const dz = to[2] - from[2];
+  const length = hypot(dx, dy, dz);
+  if (!(length >= SHORTEST)) {
     throw new NotRead(
       'zero-length',
       'its ends coincide to a millimetre',
       'Delete the element, or draw it at its true length.',
     );
   }
-  return direction;
+  const size = 1 / length;
+  return [dx * size, dy * size, dz * size];
 }
 
 /** The longest body that runs within some 25 degrees of the line. */
@@ -185,9 +192,7 @@ function upOf(world: Transform, along: Vec3): Vec3 {
 
 type SectionFound = Pick<MemberAxis, 'section' | 'noSection' | 'zAxis'>;
 
-function sectionOfBody(book: SectionBook, body: BodyAxis, profiles: readonly number[]): SectionFound {
-  return sectionAcross(book, body, directionOf(inOrder(body.start, body.end)), profiles);
-}
+const directionOfBody = (body: BodyAxis): Vec3 => directionOf(inOrder(body.start, body.end));
 
 function sectionAcross(book: SectionBook, body: BodyAxis, along: Vec3, profiles: readonly number[]): SectionFound {
   const { measured, profile } = body;

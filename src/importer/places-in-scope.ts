@@ -1,6 +1,6 @@
 import type { Finding } from '../domain/finding.ts';
 import type { Member } from '../domain/member.ts';
-import { between, type Vec3 } from '../domain/vector.ts';
+import type { Vec3 } from '../domain/vector.ts';
 import type { ImportedModel } from './types.ts';
 
 /** Least x and y of the members' ends; null where there are none. */
@@ -30,13 +30,7 @@ export function placedInScope<Scope extends { readonly members: readonly Member[
   if (corner === null || whole === null || isSame(corner, whole)) return { imported, scope };
   const placeOf = placesFrom(corner);
   const placed = (found: Finding): Finding => (found.at === null ? found : { ...found, place: placeOf(found.at) });
-  return {
-    imported: { ...imported, placeOf, findings: imported.findings.map(placed) },
-    scope: {
-      ...scope,
-      members: scope.members.map((member) => ({ ...member, place: placeOf(between(...member.axis, 0.5)) })),
-    },
-  };
+  return { imported: { ...imported, placeOf, findings: imported.findings.map(placed) }, scope };
 }
 
 const isSame = (a: Vec3, b: Vec3): boolean => a[0] === b[0] && a[1] === b[1];

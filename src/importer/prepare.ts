@@ -1,25 +1,27 @@
-import { between } from '../domain/vector.ts';
+import type { Member } from '../domain/member.ts';
 import type { StepFile } from '../step/step-file.ts';
 import { asRef, asString } from '../step/values.ts';
 import { ContextBook } from './context.ts';
 import { FactsBook } from './facts.ts';
 import { noteFileProblems, noteGuessedSchema, noteMissingLengthUnit, noteRepeatedGlobalIds } from './file-remarks.ts';
 import { FindingsLog } from './findings-log.ts';
+import { inGeometricOrder } from './geometric-order.ts';
 import { gridLines } from './grid-lines.ts';
 import { type Grid, readGrids } from './grids.ts';
 import { markNamer } from './marks.ts';
 import { MaterialBook } from './materials/material-book.ts';
-import { compareRounded } from './member-axis.ts';
+import { MemberStore } from './member-store.ts';
 import { NotRead } from './not-read.ts';
 import type { ImportOptions } from './options.ts';
 import { Placements } from './placements.ts';
 import { placeNamers, type Storey } from './places.ts';
 import { cornerOf } from './places-in-scope.ts';
-import type { PlacelessMember, Sources } from './read-element.ts';
+import type { Sources } from './read-element.ts';
 import { Reading } from './reading.ts';
 import { readRelations } from './relations.ts';
 import { knownSchema } from './schema.ts';
 import { SectionBook } from './sections/section-book.ts';
+import { SharedDirections } from './shared-directions.ts';
 import { SiblingSections } from './siblings.ts';
 import type { ImportedModel, Project } from './types.ts';
 import { readUnits } from './units.ts';
@@ -40,6 +42,7 @@ export function prepare(file: StepFile, options: ImportOptions): Prepared {
   const grids = readGrids(reading);
   const relations = readRelations(file);
   const sections = new SectionBook(reading);
+  const facts = new FactsBook(file, units, relations);
   const sources: Sources = {
     reading,
     placements: new Placements(reading, grids),
@@ -48,7 +51,9 @@ export function prepare(file: StepFile, options: ImportOptions): Prepared {
     sections,
     siblings: new SiblingSections(reading, relations, sections),
     materials: new MaterialBook(reading, options.defaultMaterial),
-    facts: new FactsBook(file, units, relations),
+    facts,
+    members: new MemberStore(file, facts),
+    directions: new SharedDirections(),
     options,
   };
   if (schema.guessed) noteGuessedSchema(reading, file.schema);
@@ -57,7 +62,7 @@ export function prepare(file: StepFile, options: ImportOptions): Prepared {
 }
 
 /**
- * Puts the members in order, names their places and gathers the findings.
+ * Puts the members in order and gathers the findings.
  * @param elements the instances they were read from and those that could not be read
  * @param globalIds theirs; '' where there is none
  */
@@ -66,15 +71,14 @@ export function finish(
   source: ImportedModel['source'],
   elements: readonly number[],
   globalIds: readonly string[],
-  members: readonly PlacelessMember[],
+  members: readonly Member[],
 ): Omit<ImportedModel, 'given' | 'evidence'> {
   const { reading, placements } = sources;
-  const found = [...members].sort(byGeometry);
+  const found = inGeometricOrder(members);
   noteRepeatedGlobalIds(reading, globalIds);
   const storeys = readStoreys(sources);
   noteFileProblems(reading);
   const { placeOf, placesFrom } = placeNamers({ grids, placements, storeys }, cornerOf(found));
-  for (const member of found) member.place = placeOf(between(...member.axis, 0.5));
   return {
     schema: reading.file.schema,
     lengthUnit: reading.units.lengthName,
@@ -95,13 +99,6 @@ function readProject(file: StepFile): Project | null {
   const args = file.args(id);
   const globalId = asString(args[0])?.trim() ?? '';
   return globalId === '' ? null : { globalId, name: asString(args[2]) };
-}
-
-function byGeometry(a: PlacelessMember, b: PlacelessMember): number {
-  const ends = compareRounded(a.axis[0], b.axis[0]) || compareRounded(a.axis[1], b.axis[1]);
-  if (ends !== 0) return ends;
-  if (a.globalId !== b.globalId) return a.globalId < b.globalId ? -1 : 1;
-  return a.part - b.part;
 }
 
 function readStoreys({ reading, placements }: Sources): Storey[] {

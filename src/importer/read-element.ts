@@ -1,5 +1,4 @@
 import type { Member } from '../domain/member.ts';
-import { between } from '../domain/vector.ts';
 import type { BodyMeshes } from './body-meshes.ts';
 import { writtenClass } from './class-names.ts';
 import { type ContextBook, layerOf } from './context.ts';
@@ -8,6 +7,7 @@ import { NO_GLOBAL_ID, refusal, remarksOn, triedText } from './element-remarks.t
 import type { FactsBook } from './facts.ts';
 import type { MaterialBook } from './materials/material-book.ts';
 import { compareRounded, isSound } from './member-axis.ts';
+import type { MemberStore } from './member-store.ts';
 import { namedAxis } from './named-axis.ts';
 import { NotRead } from './not-read.ts';
 import type { ImportOptions } from './options.ts';
@@ -17,6 +17,7 @@ import type { Relations } from './relations.ts';
 import { readShape } from './representations.ts';
 import { knownSections } from './sections/known-sections.ts';
 import type { SectionBook } from './sections/section-book.ts';
+import type { SharedDirections } from './shared-directions.ts';
 import type { SiblingSections } from './siblings.ts';
 import type { Transform } from './transform.ts';
 
@@ -30,16 +31,13 @@ export interface Sources {
   readonly siblings: SiblingSections;
   readonly materials: MaterialBook;
   readonly facts: FactsBook;
+  readonly directions: SharedDirections;
+  readonly members: MemberStore;
   readonly options: ImportOptions;
 }
 
-/** A member whose place is still to be named, since that takes the whole model. */
-export interface PlacelessMember extends Member {
-  place: string | null;
-}
-
 /** The members that one element holds; none, with a finding, where it cannot be read. */
-export function readElement(sources: Sources, id: number, stated: string, meshes: BodyMeshes): PlacelessMember[] {
+export function readElement(sources: Sources, id: number, stated: string, meshes: BodyMeshes): Member[] {
   const { reading, placements } = sources;
   const { file } = reading;
   const globalId = stated === '' ? `#${id}` : stated;
@@ -58,40 +56,29 @@ export function readElement(sources: Sources, id: number, stated: string, meshes
   }
 }
 
-function membersOf(
-  sources: Sources,
-  id: number,
-  globalId: string,
-  world: Transform,
-  meshes: BodyMeshes,
-): PlacelessMember[] {
-  const { reading, relations, materials } = sources;
+function membersOf(sources: Sources, id: number, globalId: string, world: Transform, meshes: BodyMeshes): Member[] {
+  const { reading, relations, materials, directions } = sources;
   const { file } = reading;
   const shape = file.refAt(id, 6);
   const made = materials.madeOf(materialId(relations, id));
   const context = sources.contexts.of(id);
-  const name = file.stringAt(id, 2);
-  const texts = () => [context.type, file.stringAt(id, 4), name, file.stringAt(id, 3)];
+  const texts = () => [context.type, file.stringAt(id, 4), file.stringAt(id, 2), file.stringAt(id, 3)];
   const known = () => knownSections(texts(), () => sources.siblings.of(id));
   const axes = elementAxes(sources, readShape(reading, shape), world, made.profiles, known, () => meshes.of(id));
   if (axes.length > 1)
     axes.sort((a, b) => compareRounded(a.ends[0], b.ends[0]) || compareRounded(a.ends[1], b.ends[1]));
 
   const layer = layerOf(reading, relations, shape);
-  const tag = file.stringAt(id, 7);
-  return axes.map((found, part) => {
-    reading.about(globalId, between(...found.ends, 0.5));
+  const members: Member[] = [];
+  for (const found of axes) {
+    reading.about(globalId, found.ends[0], found.ends[1]);
     const { axis, remarks } = namedAxis(found, texts);
     for (const remark of remarks) reading.note(remark);
     if (axis.noSection !== null) reading.note(refusal(axis.noSection, triedText(texts())));
     for (const remark of remarksOn(axis)) reading.note(remark);
     if (made.remark !== null) reading.note(made.remark);
     for (const doubt of made.doubts) reading.note(doubt);
-    return {
-      globalId,
-      part,
-      name,
-      tag,
+    const kind = {
       class: writtenClass(file.typeOf(id)),
       predefinedType: context.predefinedType,
       type: context.type,
@@ -99,16 +86,14 @@ function membersOf(
       partOf: context.partOf,
       storey: context.storey,
       layer,
-      place: null,
       axisFrom: axis.axisFrom,
-      axis: axis.ends,
-      centroidAxis: axis.centroidEnds,
-      zAxis: axis.zAxis,
+      zAxis: directions.shared(axis.zAxis),
       section: axis.section,
       material: materials.inSection(made.material, axis.section),
-      facts: sources.facts.of(id),
     };
-  });
+    members.push(sources.members.add(id, globalId, members.length, axis.ends, axis.centroidEnds, kind));
+  }
+  return members;
 }
 
 function materialId(relations: Relations, id: number): number | null {

@@ -1,9 +1,10 @@
+import type { Member } from '../domain/member.ts';
 import type { StepFile } from '../step/step-file.ts';
 import { type BodyMeshes, WantedMeshes } from './body-meshes.ts';
 import { readEvidence } from './evidence/read-evidence.ts';
 import { IMPORT_DEFAULTS, type ImportOptions } from './options.ts';
 import { finish, prepare } from './prepare.ts';
-import { type PlacelessMember, readElement } from './read-element.ts';
+import { readElement } from './read-element.ts';
 import type { ImportedModel } from './types.ts';
 import { noteUnknownClasses } from './unknown-classes.ts';
 
@@ -22,7 +23,7 @@ export function readPhysicalModel(
 ): ImportedModel {
   const prepared = prepare(file, chosen);
   const elements = elementsOf(file, chosen.classes);
-  const members: PlacelessMember[] = [];
+  const members: Member[] = [];
   const globalIds: string[] = [];
   for (const id of elements) {
     const globalId = file.stringAt(id, 0)?.trim() ?? '';

@@ -1,9 +1,10 @@
-import type { Vec3 } from '../domain/vector.ts';
+import { between, ORIGIN, UP, type Vec3 } from '../domain/vector.ts';
 import type { StepFile } from '../step/step-file.ts';
 import { asNumber, asRef, type StepValue } from '../step/values.ts';
 import type { FindingsLog, Remark } from './findings-log.ts';
 import { whose } from './findings-log.ts';
 import type { SchemaFamily } from './schema.ts';
+import { AHEAD } from './transform.ts';
 import { kindOf, type UnitKind } from './unit-kinds.ts';
 import type { Units } from './units.ts';
 
@@ -15,7 +16,8 @@ export class Reading {
   private readonly log: FindingsLog;
   /** The element that findings are about at the moment; null between elements. */
   private subject: string | null = null;
-  private subjectAt: Vec3 | null = null;
+  private subjectFrom: Vec3 | null = null;
+  private subjectTo: Vec3 | null = null;
   private readonly numbers = new Float64Array(3);
 
   constructor(file: StepFile, family: SchemaFamily, units: Units, log: FindingsLog) {
@@ -25,13 +27,16 @@ export class Reading {
     this.log = log;
   }
 
-  about(globalId: string | null, at: Vec3 | null = null): void {
+  /** Findings are placed in the middle between `from` and `to`. */
+  about(globalId: string | null, from: Vec3 | null = null, to: Vec3 | null = from): void {
     this.subject = globalId;
-    this.subjectAt = globalId === null ? null : at;
+    this.subjectFrom = globalId === null ? null : from;
+    this.subjectTo = globalId === null ? null : to;
   }
 
   note(remark: Remark): void {
-    this.log.add(remark, this.subject, this.subjectAt);
+    const { subjectFrom: from, subjectTo: to } = this;
+    this.log.add(remark, this.subject, from === null || to === null || from === to ? from : between(from, to, 0.5));
   }
 
   /** The instance's arguments; where the file does not hold it, none, and a finding. */
@@ -120,7 +125,8 @@ export class Reading {
     if (count < 0) return null;
     const x = count > 0 ? numbers[0]! * factor : 0;
     const y = count > 1 ? numbers[1]! * factor : 0;
-    return [x, y, count > 2 ? numbers[2]! * factor : 0];
+    const z = count > 2 ? numbers[2]! * factor : 0;
+    return known(x, y, z) ?? [x, y, z];
   }
 
   coordinates(list: StepValue | undefined | null, factor: number): Vec3 {
@@ -140,6 +146,13 @@ export class Reading {
       advice: 'Export the model again: something was left out of the file or deleted from it.',
     });
   }
+}
+
+/** The origin and the directions that most placements name: each always the same triple, which `frame` knows by its address. */
+function known(x: number, y: number, z: number): Vec3 | null {
+  if (y !== 0) return null;
+  if (x === 0) return z === 0 ? ORIGIN : z === 1 ? UP : null;
+  return x === 1 && z === 0 ? AHEAD : null;
 }
 
 /** The file uses numbers of a kind and does not say their unit, or one that cannot be taken. */

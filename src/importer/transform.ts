@@ -1,4 +1,4 @@
-import { along, cross, dot, ORIGIN, scale, unit, type Vec3 } from '../domain/vector.ts';
+import { along, cross, dot, hypot, ORIGIN, scale, UP, unit, unitOf, type Vec3 } from '../domain/vector.ts';
 
 /** The map `origin + x px + y py + z pz`; x, y, z need be neither unit vectors nor at right angles. */
 export interface Transform {
@@ -8,7 +8,10 @@ export interface Transform {
   readonly origin: Vec3;
 }
 
-export const IDENTITY: Transform = { x: [1, 0, 0], y: [0, 1, 0], z: [0, 0, 1], origin: ORIGIN };
+export const AHEAD: Vec3 = [1, 0, 0];
+const ASIDE: Vec3 = [0, 1, 0];
+
+export const IDENTITY: Transform = { x: AHEAD, y: ASIDE, z: UP, origin: ORIGIN };
 
 export function mapDirection(t: Transform, d: Vec3): Vec3 {
   return [
@@ -54,10 +57,13 @@ export const across = (d: Vec3, u: Vec3): Vec3 => along(d, u, -dot(d, u));
 
 /**
  * A right-handed frame with its z along `axis` and its x as near `reference` as may be (IfcBuildAxes, ISO 16739).
- * What is missing or without direction takes the standard's own default.
+ * What is missing or without direction takes the standard's own default. The plainest frame of all, which most solids
+ * have, is known by its address, so that nothing need be made of it.
  */
 export function frame(origin: Vec3, axis: Vec3 | null, reference: Vec3 | null): Transform {
-  const z = (axis === null ? null : unit(axis)) ?? ([0, 0, 1] as const);
+  const isUpright = axis === null || axis === UP;
+  if (isUpright && origin === ORIGIN && (reference === null || reference === AHEAD)) return IDENTITY;
+  const z = isUpright ? UP : (unit(axis) ?? UP);
   const x = firstAcross(z, reference);
   return { x, y: cross(z, x), z, origin };
 }
@@ -66,18 +72,23 @@ export function frame(origin: Vec3, axis: Vec3 | null, reference: Vec3 | null): 
 export function firstAcross(z: Vec3, reference: Vec3 | null): Vec3 {
   return (
     (reference === null ? null : projectedAcross(z, reference)) ??
-    projectedAcross(z, X) ??
-    projectedAcross(z, Y) ??
+    projectedAcross(z, AHEAD) ??
+    projectedAcross(z, ASIDE) ??
     scale(z, 0)
   );
 }
 
-const X: Vec3 = [1, 0, 0];
-const Y: Vec3 = [0, 1, 0];
-
+/** `unit(across(unit(reference), z))`, component by component: it is asked for some ten times a member. */
 function projectedAcross(z: Vec3, reference: Vec3): Vec3 | null {
-  const direction = unit(reference);
-  if (direction === null) return null;
-  const projected = across(direction, z);
-  return dot(projected, projected) > 1e-12 ? unit(projected) : null;
+  const length = hypot(reference[0], reference[1], reference[2]);
+  if (!(length > 0 && length < Number.POSITIVE_INFINITY)) return null;
+  const size = 1 / length;
+  const x = reference[0] * size;
+  const y = reference[1] * size;
+  const w = reference[2] * size;
+  const lean = -(x * z[0] + y * z[1] + w * z[2]);
+  const px = x + lean * z[0];
+  const py = y + lean * z[1];
+  const pz = w + lean * z[2];
+  return px * px + py * py + pz * pz > 1e-12 ? unitOf(px, py, pz) : null;
 }

@@ -15,19 +15,22 @@ export class InstanceTable {
   /** Row + 1 by id, or by hash of the id; 0 where there is none. */
   private rowPlusOne = new Uint32Array(0);
   private hashMask = 0;
-  /** Rows by code, and where each code's rows begin; made when first asked for. */
-  private rowsByCode: { readonly order: Uint32Array; readonly starts: Uint32Array } | null = null;
+  /** Of the file, by which the tables grow. */
+  private readonly length: number;
+  /** By code: how many rows have it, and the first and the last of them. */
+  private readonly spans: CodeSpan[] = [];
 
-  constructor(expectedRows: number) {
-    const capacity = Math.max(FIRST_ROWS, Math.ceil(expectedRows));
-    this.ids = new Uint32Array(capacity);
-    this.offsets = new Uint32Array(capacity);
-    this.codes = new Uint16Array(capacity);
+  /** @param length of the file, bytes */
+  constructor(length: number) {
+    this.length = length;
+    this.ids = new Uint32Array(FIRST_ROWS);
+    this.offsets = new Uint32Array(FIRST_ROWS);
+    this.codes = new Uint16Array(FIRST_ROWS);
   }
 
   add(id: number, offset: number, code: number): void {
     const row = this.rows++;
-    if (row === this.ids.length) this.grow();
+    if (row === this.ids.length) this.grow(offset);
     this.ids[row] = id;
     this.offsets[row] = offset;
     this.codes[row] = code;
@@ -51,9 +54,12 @@ export class InstanceTable {
         doubled(id);
         continue;
       }
-      this.ids[kept] = id;
-      this.offsets[kept] = this.offsets[row];
-      this.codes[kept] = this.codes[row];
+      if (kept !== row) {
+        this.ids[kept] = id;
+        this.offsets[kept] = this.offsets[row];
+        this.codes[kept] = this.codes[row];
+      }
+      this.countIn(this.codes[kept], kept);
       this.rowPlusOne[slot] = ++kept;
     }
     this.rows = kept;
@@ -75,19 +81,17 @@ export class InstanceTable {
 
   /** Ids whose keyword has this code, in file order. */
   idsOf(code: number): number[] {
-    this.rowsByCode ??= this.groupByCode();
-    const { order, starts } = this.rowsByCode;
-    const ids: number[] = [];
-    if (code + 1 >= starts.length) return ids;
-    for (let i = starts[code]; i < starts[code + 1]; i++) ids.push(this.ids[order[i]]);
+    const span = this.spans[code];
+    if (span === undefined) return [];
+    const ids = new Array<number>(span.count);
+    for (let row = span.first, i = 0; row <= span.last; row++) if (this.codes[row] === code) ids[i++] = this.ids[row];
     return ids;
   }
 
   /** The first id in the file whose keyword has this code; -1 where there is none. */
   firstOf(code: number): number {
-    this.rowsByCode ??= this.groupByCode();
-    const { order, starts } = this.rowsByCode;
-    return code + 1 < starts.length && starts[code] < starts[code + 1] ? this.ids[order[starts[code]]] : -1;
+    const span = this.spans[code];
+    return span === undefined ? -1 : this.ids[span.first];
   }
 
   /** All ids in file order. */
@@ -107,30 +111,32 @@ export class InstanceTable {
     }
   }
 
-  /** A counting sort: stable, so file order is kept within a code. */
-  private groupByCode(): { order: Uint32Array; starts: Uint32Array } {
-    const { codes, rows } = this;
-    let greatest = 0;
-    for (let row = 0; row < rows; row++) if (codes[row] > greatest) greatest = codes[row];
-    const starts = new Uint32Array(greatest + 2);
-    for (let row = 0; row < rows; row++) starts[codes[row] + 1]++;
-    for (let code = 0; code <= greatest; code++) starts[code + 1] += starts[code];
-    const next = starts.slice();
-    const order = new Uint32Array(rows);
-    for (let row = 0; row < rows; row++) order[next[codes[row]]++] = row;
-    return { order, starts };
+  private countIn(code: number, row: number): void {
+    const span = this.spans[code];
+    if (span === undefined) this.spans[code] = { count: 1, first: row, last: row };
+    else {
+      span.count++;
+      span.last = row;
+    }
   }
 
-  private grow(): void {
-    const capacity = Math.ceil(this.ids.length * 1.5);
-    const ids = new Uint32Array(capacity);
-    const offsets = new Uint32Array(capacity);
-    const codes = new Uint16Array(capacity);
-    ids.set(this.ids);
-    offsets.set(this.offsets);
-    codes.set(this.codes);
-    this.ids = ids;
-    this.offsets = offsets;
-    this.codes = codes;
+  /** To what the whole file takes if it goes on as it did up to `offset`: copying half a table costs more than a page too many. */
+  private grow(offset: number): void {
+    const expected = (this.rows * this.length) / offset;
+    const capacity = Math.ceil(Math.min(Math.max(1.5 * this.rows, 1.05 * expected), 16 * this.rows));
+    this.ids = enlarged(this.ids, new Uint32Array(capacity));
+    this.offsets = enlarged(this.offsets, new Uint32Array(capacity));
+    this.codes = enlarged(this.codes, new Uint16Array(capacity));
   }
+}
+
+interface CodeSpan {
+  count: number;
+  readonly first: number;
+  last: number;
+}
+
+function enlarged<T extends Uint16Array | Uint32Array>(array: T, larger: T): T {
+  larger.set(array);
+  return larger;
 }

@@ -2,9 +2,9 @@ import type { InstanceTable } from './instance-table.ts';
 import type { Keywords } from './keywords.ts';
 import { ParameterReader, type StepRecord } from './parameters.ts';
 import { ABSENT, MIXED, PlainLists } from './plain-list.ts';
-import { plainNumbers, plainRef, plainRefs } from './plain-values.ts';
+import { plainNumbers, plainRefs } from './plain-values.ts';
 import type { StepProblem, StepProblems } from './problems.ts';
-import { asNumber, asRef, asRefs, asString, type StepValue } from './values.ts';
+import { asEnum, asNumber, asRef, asRefs, asString, type StepValue } from './values.ts';
 
 /** What the index pass hands over. */
 export interface IndexedInstances {
@@ -124,8 +124,11 @@ export class StepInstances {
 
   /** The id that parameter `index` refers to; null where it refers to nothing. */
   refAt(id: number, index: number): number | null {
-    const at = this.plainAt(id, index);
-    return at > 0 ? plainRef(this.bytes, at) : asRef(this.argAt(id, index, at));
+    const row = this.table.rowOf(id);
+    if (row < 0) return null;
+    const ref = this.isComplex(row) ? MIXED : this.plain.refOf(this.table.offsetOf(row), row, index);
+    if (ref >= 0) return ref;
+    return ref === MIXED ? asRef(this.args(id)[index]) : null;
   }
 
   /** The ids in the list of references that parameter `index` is; empty where it is none. */
@@ -142,6 +145,11 @@ export class StepInstances {
   /** The string in parameter `index`; null where there is none. */
   stringAt(id: number, index: number): string | null {
     return asString(this.valueAt(id, index));
+  }
+
+  /** The enumeration name in parameter `index`; null where there is none. */
+  enumAt(id: number, index: number): string | null {
+    return asEnum(this.valueAt(id, index));
   }
 
   /** The number in parameter `index`; null where there is none. */

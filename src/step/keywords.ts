@@ -4,8 +4,9 @@ import { IN_KEYWORD, latin1, UPPER_IN_KEYWORD } from './bytes.ts';
 /** A code is two bytes an instance; the largest schema has some two thousand keywords. */
 const MOST_KEYWORDS = 0xffff;
 const SLOTS = 1 << 17;
-/** A power of two less one: some two or three keywords are told apart. */
+/** A power of two less one: the last six keywords have a part in it, two bits of a number each after the other. */
 const LATELY = 0xfff;
+const SPREAD = 0x2f5;
 /** Between the keywords of an instance of several types: `LENGTH_UNIT+SI_UNIT`. No keyword holds it. */
 const TYPE_JOIN = '+';
 
@@ -47,7 +48,7 @@ export class Keywords {
     const isExpected = this.isSpelt(expected, bytes, at);
     const code = isExpected ? expected : this.lookUp(bytes, at);
     if (!isExpected) this.following[this.lately] = code;
-    this.lately = ((this.lately << 5) ^ code) & LATELY;
+    this.lately = ((this.lately << 2) ^ Math.imul(code, SPREAD)) & LATELY;
     return code;
   }
 

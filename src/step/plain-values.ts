@@ -3,14 +3,6 @@ import { exactReal } from './exact-real.ts';
 
 /** Values that stand in a list which PlainLists has found plain, so that nothing about them needs to be tried again. */
 
-/** The id of the reference at `at` in a plain list; null where something else stands there. */
-export function plainRef(bytes: Uint8Array, at: number): number | null {
-  if (bytes[at] !== HASH) return null;
-  let id = 0;
-  for (let p = at + 1; isDigit(bytes[p]); p++) id = id * 10 + (bytes[p] - DIGIT_0);
-  return id;
-}
-
 /** The ids in the list of nothing but references at `at` in a plain list; null where something else stands there. */
 export function plainRefs(bytes: Uint8Array, at: number): number[] | null {
   if (bytes[at] !== OPEN) return null;

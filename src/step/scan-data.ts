@@ -31,8 +31,6 @@ import { unclosedString } from './unclosed.ts';
 
 /** Ids are kept in 32 bits. */
 const ID_LIMIT = 2 ** 32;
-/** Bytes of a usual instance, for the first size of the tables. */
-const USUAL_INSTANCE = 56;
 /** 1 for the bytes at which counting brackets has to look closer. */
 const STOPS = new Uint8Array(256);
 for (const byte of [APOSTROPHE, OPEN, CLOSE, SLASH, SEMICOLON, EQUALS]) STOPS[byte] = 1;
@@ -52,7 +50,7 @@ export class DataScanner {
   constructor(bytes: Uint8Array) {
     this.bytes = bytes;
     this.lines = new LineCounter(bytes);
-    this.model = emptyIndex(bytes.length / USUAL_INSTANCE);
+    this.model = emptyIndex(bytes);
     this.current = this.model;
   }
 
@@ -105,7 +103,7 @@ export class DataScanner {
       );
     }
     this.blockBegin = at;
-    this.blockContent = emptyIndex(0);
+    this.blockContent = emptyIndex(this.bytes);
     this.current = this.blockContent;
   }
 
@@ -270,8 +268,8 @@ export class DataScanner {
   }
 }
 
-function emptyIndex(expectedRows: number): IndexedInstances {
-  return { table: new InstanceTable(expectedRows), keywords: new Keywords(), problems: new StepProblems() };
+function emptyIndex(bytes: Uint8Array): IndexedInstances {
+  return { table: new InstanceTable(bytes.length), keywords: new Keywords(), problems: new StepProblems() };
 }
 
 /** The offset, not before `from`, of the `#` in `#12 =` whose equals sign stands at `equals`; -1 where there is none. */

@@ -15,7 +15,6 @@ export function makeMember(changes: Partial<Member> = {}): Member {
     partOf: null,
     storey: null,
     layer: null,
-    place: null,
     axisFrom: 'axis',
     axis: [
       [0, 0, 0],

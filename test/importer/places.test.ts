@@ -1,4 +1,5 @@
 import { describe, expect, it } from 'vitest';
+import { between } from '../../src/domain/vector.ts';
 import { beamWith, importText } from './support/model-text.ts';
 
 const BODY = '#100=IFCEXTRUDEDAREASOLID(#20,$,#13,3000.);';
@@ -46,7 +47,8 @@ describe('places by the grid', () => {
   });
 
   it('names the middle of each member', () => {
-    expect(importText(plain + grid('0.,0.,0.')).members[0]?.place).toBe('A/1, +1.50');
+    const { members, placeOf } = importText(plain + grid('0.,0.,0.'));
+    expect(placeOf(between(...members[0]!.axis, 0.5))).toBe('A/1, +1.50');
   });
 });
 
@@ -207,12 +209,13 @@ describe('a curved axis of a grid', () => {
 
 describe('place, storey, assembly and mark', () => {
   it('stand on every member, and the place on every finding that has a point', () => {
-    const { members, findings } = importText(`${plain}${grid('0.,0.,0.')}
+    const { members, findings, placeOf } = importText(`${plain}${grid('0.,0.,0.')}
 #700=IFCBUILDINGSTOREY('0lllllllllllllllllllll',$,'Roof',$,$,#16,$,$,.ELEMENT.,0.);
 #701=IFCELEMENTASSEMBLY('0nnnnnnnnnnnnnnnnnnnnn',$,'Truss 3',$,$,#16,$,'A3',.SITE.,.TRUSS.);
 #702=IFCRELAGGREGATES('0ooooooooooooooooooooo',$,$,$,#701,(#50));
 #703=IFCRELCONTAINEDINSPATIALSTRUCTURE('0ppppppppppppppppppppp',$,$,$,(#701),#700);`);
-    expect(members[0]).toMatchObject({ storey: 'Roof', assembly: 'Truss 3', tag: 'T1', place: 'A/1, +1.50' });
+    expect(members[0]).toMatchObject({ storey: 'Roof', assembly: 'Truss 3', tag: 'T1' });
+    expect(placeOf(between(...members[0]!.axis, 0.5))).toBe('A/1, +1.50');
     const noMaterial = findings.find(({ code }) => code === 'no-material');
     expect(noMaterial).toMatchObject({ members: ['0bbbbbbbbbbbbbbbbbbbbb'], place: 'A/1, +1.50' });
   });

@@ -4,7 +4,7 @@ import { describe, expect, it } from 'vitest';
 import { parseBrief } from '../../src/brief/parse-brief.ts';
 import { resolveSupports } from '../../src/brief/supports.ts';
 import type { Brief, Range } from '../../src/brief/types.ts';
-import type { Member } from '../../src/domain/member.ts';
+import { type Member, recordOf } from '../../src/domain/member.ts';
 import type { Vec3 } from '../../src/domain/vector.ts';
 import { importModel } from '../../src/importer/import-model.ts';
 import { buildCases } from '../../src/statics/loads/build-cases.ts';
@@ -99,7 +99,7 @@ describe('the forces in the demo roof do not depend on', () => {
         };
         const members = drawn.map(
           (member): Member => ({
-            ...member,
+            ...recordOf(member),
             axis: [move(member.axis[0]), move(member.axis[1])],
             zAxis: turn(member.zAxis),
           }),

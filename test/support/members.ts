@@ -62,7 +62,6 @@ export function member(mark: string, from: Vec3, to: Vec3, wish: MemberWish = {}
     partOf: null,
     storey: null,
     layer: null,
-    place: null,
     axisFrom: 'extrusion',
     axis: [from, to],
     zAxis: cross(direction, anyNormal(direction)),

@@ -136,7 +136,6 @@ function memberOf(drawn: DrawnMember, isReversed: boolean, hasAssembly: boolean)
     partOf: null,
     storey: null,
     layer: null,
-    place: null,
     axisFrom: 'extrusion',
     axis,
     zAxis: unit(square) ?? unit(cross(direction, [0, 0, 1]))!,

@@ -1,10 +1,11 @@
+import type { Member } from '../../domain/member.ts';
 import { add, between, cross, distance, norm, scale, subtract, unit, type Vec3 } from '../../domain/vector.ts';
 import { asEnum, asRef, asString } from '../../step/values.ts';
 import { writtenClass } from '../class-names.ts';
 import { BENT, refusal } from '../element-remarks.ts';
 import { inOrder, isSound, SHORTEST } from '../member-axis.ts';
 import { NotRead, noAxis, noSection } from '../not-read.ts';
-import type { PlacelessMember, Sources } from '../read-element.ts';
+import type { Sources } from '../read-element.ts';
 import type { SeenSection } from '../sections/section-book.ts';
 import { across, firstAcross } from '../transform.ts';
 import { elementsBehind } from './elements-behind.ts';
@@ -23,7 +24,7 @@ const CLASSES = ['IFCSTRUCTURALCURVEMEMBER', 'IFCSTRUCTURALCURVEMEMBERVARYING'];
 
 /** A curve member with what its loads need: its ends in its own sense and its local axes, unit, world. */
 export interface CurveMember {
-  readonly member: PlacelessMember;
+  readonly member: Member;
   readonly start: Vec3;
   readonly end: Vec3;
   readonly axes: readonly [Vec3, Vec3, Vec3];
@@ -82,7 +83,7 @@ function readCurveMember(
   for (const doubt of made.doubts) reading.note(doubt);
 
   const context = sources.contexts.of(element ?? id);
-  const member: PlacelessMember = {
+  const member: Member = {
     globalId: globalIdOf(sources, id),
     part: 0,
     name: asString(args[2]),
@@ -94,7 +95,6 @@ function readCurveMember(
     partOf: context.partOf,
     storey: context.storey,
     layer: null,
-    place: null,
     axisFrom: 'analysis-view',
     axis: inOrder(start, end),
     // The profile's own position may turn it against the member's axes.

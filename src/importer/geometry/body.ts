@@ -32,6 +32,20 @@ export function readBody(
   known?: KnownSections,
   depth = 0,
 ): BodyAxis[] {
+  const [only] = items;
+  const sole = only !== undefined && items.length === 1 ? readSolid(reading, book, only, world, known, depth) : [];
+  if (sole.length > 0) return sole;
+  return readSeveral(reading, book, items, world, known, depth);
+}
+
+function readSeveral(
+  reading: Reading,
+  book: SectionBook,
+  items: readonly number[],
+  world: Transform,
+  known: KnownSections | undefined,
+  depth: number,
+): BodyAxis[] {
   const axes: BodyAxis[] = [];
   let refusal: NotRead | null = null;
   for (const item of items) {

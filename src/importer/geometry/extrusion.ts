@@ -1,7 +1,8 @@
-import { add, scale, unit, type Vec3 } from '../../domain/vector.ts';
+import { add, scale, UP, unit, type Vec3 } from '../../domain/vector.ts';
 import { noAxis } from '../not-read.ts';
 import { axesOf } from '../placement-axes.ts';
 import type { Reading } from '../reading.ts';
+import type { Point2 } from '../sections/outline.ts';
 import type { SectionBook } from '../sections/section-book.ts';
 import { compose, mapDirection, mapPosition, type Transform } from '../transform.ts';
 import type { BodyAxis } from './body-axis.ts';
@@ -22,8 +23,9 @@ export function readExtrusion(reading: Reading, id: number, world: Transform): E
   const profile = reading.refAt(id, 0);
   if (profile === null) throw noAxis('its extrusion has no profile');
   const position = file.refAt(id, 1);
-  const depth = reading.length(file.valueAt(id, 3));
-  const direction = unit(reading.directionOf(file.refAt(id, 2)) ?? [0, 0, 1]);
+  const depth = (file.numberAt(id, 3) ?? Number.NaN) * reading.units.length;
+  const stated = reading.directionOf(file.refAt(id, 2)) ?? UP;
+  const direction = stated === UP ? UP : unit(stated);
   if (direction === null || Number.isNaN(depth) || depth === 0) throw noAxis('its extrusion has no depth');
   return {
     profile,
@@ -36,13 +38,15 @@ export function readExtrusion(reading: Reading, id: number, world: Transform): E
 /** The line of the centroids from the swept plane to the far end. */
 export function extrusionAxis(book: SectionBook, extrusion: Extrusion): BodyAxis {
   const { plane, profile, endProfile, sweep } = extrusion;
-  const [x, y] = book.centroidOrOrigin(profile);
-  const [endX, endY] = endProfile === null ? [x, y] : book.centroidOrOrigin(endProfile);
-  const start = mapPosition(plane, [x, y, 0]);
+  const centroid = book.centroidOrOrigin(profile);
+  const start = mapPosition(plane, [centroid[0], centroid[1], 0]);
   return {
     from: 'extrusion',
     start,
-    end: endProfile === null ? add(start, mapDirection(plane, sweep)) : mapPosition(plane, add([endX, endY, 0], sweep)),
+    end:
+      endProfile === null
+        ? add(start, mapDirection(plane, sweep))
+        : farEnd(plane, book.centroidOrOrigin(endProfile), sweep),
     x: plane.x,
     y: plane.y,
     profile,
@@ -52,3 +56,5 @@ export function extrusionAxis(book: SectionBook, extrusion: Extrusion): BodyAxis
     measured: null,
   };
 }
+
+const farEnd = (plane: Transform, [x, y]: Point2, sweep: Vec3): Vec3 => mapPosition(plane, add([x, y, 0], sweep));

@@ -1,5 +1,5 @@
 import type { Section } from '../../domain/member.ts';
-import { cross, dot, norm, unit, type Vec3 } from '../../domain/vector.ts';
+import { dot, norm, scale, type Vec3 } from '../../domain/vector.ts';
 import { asString } from '../../step/values.ts';
 import type { Remark } from '../findings-log.ts';
 import { NotRead, noSection } from '../not-read.ts';
@@ -23,15 +23,24 @@ export interface SeenSection {
   readonly zAxis: Vec3;
 }
 
+/** A profile that is read, with the sections that it has shown. */
+interface Known {
+  readonly profile: Profile;
+  /** In the plane that is swept, metres. */
+  readonly centroid: Point2;
+  /** What the file states otherwise than it draws. */
+  readonly contradictions: readonly Remark[];
+  readonly views: Map<string, Section>;
+  /** The view that was asked for last, in millionths: most members show what the one before them did. */
+  readonly last: { a: number; b: number; c: number; section: Section | null };
+}
+
 /** The profiles of a file and their sections, each read and integrated once. */
 export class SectionBook {
   private readonly reading: Reading;
-  private readonly profiles = new Map<number, Profile | NotRead>();
-  private readonly centroids = new Map<number, Point2>();
-  private readonly views = new Map<number, Map<number | string, Section>>();
+  private readonly profiles = new Map<number, Known | NotRead>();
   private readonly disks = new Map<string, number>();
   private readonly withoutOutline = new Map<number, Section | null>();
-  private readonly contradictions = new Map<number, readonly Remark[]>();
   private stated: ReadonlyMap<number, StatedSection> | null = null;
 
   constructor(reading: Reading) {
@@ -40,27 +49,26 @@ export class SectionBook {
 
   /** @throws NotRead (no-section), the same one whenever the profile is asked for. */
   profile(id: number): Profile {
-    const found = this.profileOrRefusal(id);
+    const found = this.knownOrRefusal(id);
     if (found instanceof NotRead) throw found;
-    return found;
+    return found.profile;
   }
 
   /** Why the profile gives no section, not even by its name or its stated numbers where it is impossible; null where it does. */
   refusalOf(id: number): NotRead | null {
-    const found = this.profileOrRefusal(id);
+    const found = this.knownOrRefusal(id);
     if (!(found instanceof NotRead)) return null;
     return found instanceof ImpossibleProfile && this.sectionWithoutOutline(id) !== null ? null : found;
   }
 
-  private profileOrRefusal(id: number): Profile | NotRead {
+  private knownOrRefusal(id: number): Known | NotRead {
     return this.profiles.get(id) ?? this.keep(id, () => readProfile(this.reading, id));
   }
 
-  private keep(id: number, read: () => Profile): Profile | NotRead {
-    let found: Profile | NotRead;
+  private keep(id: number, read: () => Profile): Known | NotRead {
+    let found: Known | NotRead;
     try {
       found = this.withWhatIsKnown(id, read());
-      this.centroids.set(id, mapPoint(found.map, centroidOf(found.shape)));
     } catch (problem) {
       if (!(problem instanceof NotRead)) throw problem;
       found = problem;
@@ -70,17 +78,20 @@ export class SectionBook {
   }
 
   /** What an outline alone does not tell, from the profile's name and from the numbers that the file states of it. */
-  private withWhatIsKnown(id: number, profile: Profile): Profile {
-    const shape = knownByName(profile.shape);
+  private withWhatIsKnown(id: number, drawn: Profile): Known {
+    let shape = knownByName(drawn.shape);
     const stated = this.statedOf(id);
-    const remarks = [
+    const contradictions = [
       calledOtherwise(shape, shape.name),
       stated === null ? null : disagreement(sectionOf(shape), stated),
     ].filter((remark) => remark !== null);
-    if (remarks.length > 0) this.contradictions.set(id, remarks);
-    if (stated === null) return { ...profile, shape };
-    const warping = shape.shape === 'other' && shape.warping === 0 ? (stated.warping ?? 0) : shape.warping;
-    return { ...profile, shape: { ...shape, torsion: shape.torsion ?? stated.torsion ?? null, warping } };
+    if (stated !== null) {
+      const warping = shape.shape === 'other' && shape.warping === 0 ? (stated.warping ?? 0) : shape.warping;
+      shape = { ...shape, torsion: shape.torsion ?? stated.torsion ?? null, warping };
+    }
+    const centroid = mapPoint(drawn.map, centroidOf(shape));
+    const last = { a: Number.NaN, b: Number.NaN, c: Number.NaN, section: null };
+    return { profile: { ...drawn, shape }, centroid, contradictions, views: new Map(), last };
   }
 
   private statedOf(id: number): StatedSection | null {
@@ -103,8 +114,8 @@ export class SectionBook {
 
   /** The centroid in the plane that is swept, metres; its origin where the profile cannot be read. */
   centroidOrOrigin(id: number): Point2 {
-    this.profileOrRefusal(id);
-    return this.centroids.get(id) ?? [0, 0];
+    const found = this.knownOrRefusal(id);
+    return found instanceof NotRead ? [0, 0] : found.centroid;
   }
 
   /** A profile that no instance of the file defines: a round bar, or a tube where there is an inner radius. */
@@ -128,47 +139,56 @@ export class SectionBook {
    * stretched copy gives its true section.
    */
   seenAlong(id: number, along: Vec3, x: Vec3, y: Vec3): SeenSection {
-    const profile = this.profileOrRefusal(id);
-    if (profile instanceof NotRead) {
+    const known = this.knownOrRefusal(id);
+    if (known instanceof NotRead) {
       const section = this.sectionWithoutOutline(id);
-      if (section === null) throw profile;
+      if (section === null) throw known;
       const making = makingRemark(section);
       if (making !== null) this.reading.note(making);
-      if (profile instanceof ImpossibleProfile) this.reading.note(namedInstead(profile, section.name));
+      if (known instanceof ImpossibleProfile) this.reading.note(namedInstead(known, section.name));
       return { section, zAxis: firstAcross(along, across(y, along)) };
     }
-    const contradictions = this.contradictions.get(id);
-    if (contradictions !== undefined) for (const remark of contradictions) this.reading.note(remark);
-    const { shape, map } = profile;
-    const own = (d: Point2): Vec3 => [x[0] * d[0] + y[0] * d[1], x[1] * d[0] + y[1] * d[1], x[2] * d[0] + y[2] * d[1]];
-    const sideways = across(own(map.x), along);
-    const upwards = across(own(map.y), along);
-    const zAxis = unit(upwards);
-    if (zAxis === null || !(norm(sideways) > 0)) throw noSection('its profile lies along its length');
-    const yAxis = cross(zAxis, along);
-    const view: PlaneMap = {
-      x: [dot(sideways, yAxis), dot(sideways, zAxis)],
-      y: [0, norm(upwards)],
-      origin: [0, 0],
-    };
-    return { section: this.view(id, shape, view), zAxis };
+    for (const remark of known.contradictions) this.reading.note(remark);
+    const { map } = known.profile;
+    const sideways = seenOnPlane(x, y, map.x, along);
+    const upwards = seenOnPlane(x, y, map.y, along);
+    const size = norm(upwards);
+    if (!(size > 0 && size < Number.POSITIVE_INFINITY && norm(sideways) > 0)) {
+      throw noSection('its profile lies along its length');
+    }
+    const zAxis = scale(upwards, 1 / size);
+    // Across the member to the right, cross(zAxis, along), of what was the profile's x.
+    const right =
+      sideways[0] * (zAxis[1] * along[2] - zAxis[2] * along[1]) +
+      sideways[1] * (zAxis[2] * along[0] - zAxis[0] * along[2]) +
+      sideways[2] * (zAxis[0] * along[1] - zAxis[1] * along[0]);
+    return { section: view(known, right, dot(sideways, zAxis), size), zAxis };
   }
+}
 
-  private view(id: number, shape: ProfileShape, view: PlaneMap): Section {
-    let views = this.views.get(id);
-    if (views === undefined) {
-      views = new Map();
-      this.views.set(id, views);
-    }
-    const [a, b, c] = [Math.round(view.x[0] * 1e6), Math.round(view.x[1] * 1e6), Math.round(view.y[1] * 1e6)];
-    const key = b === 0 && c === 1e6 ? a : `${a} ${b} ${c}`;
-    let section = views.get(key);
-    if (section === undefined) {
-      section = sectionOf(viewedShape(shape, view));
-      views.set(key, section);
-    }
-    return section;
+/** What the direction `d` of the profile's own plane, swept along `x` and `y`, shows across the unit vector `along`. */
+function seenOnPlane(x: Vec3, y: Vec3, d: Point2, along: Vec3): Vec3 {
+  const a = x[0] * d[0] + y[0] * d[1];
+  const b = x[1] * d[0] + y[1] * d[1];
+  const c = x[2] * d[0] + y[2] * d[1];
+  const lean = -(a * along[0] + b * along[1] + c * along[2]);
+  return [a + lean * along[0], b + lean * along[1], c + lean * along[2]];
+}
+
+/** The section that a profile shows whose x has become (`right`, `up`) and whose y is seen `size` times as long. */
+function view({ profile, views, last }: Known, right: number, up: number, size: number): Section {
+  const a = Math.round(right * 1e6);
+  const b = Math.round(up * 1e6);
+  const c = Math.round(size * 1e6);
+  if (last.section !== null && a === last.a && b === last.b && c === last.c) return last.section;
+  const key = `${a} ${b} ${c}`;
+  let section = views.get(key);
+  if (section === undefined) {
+    section = sectionOf(viewedShape(profile.shape, { x: [right, up], y: [0, size], origin: [0, 0] }));
+    views.set(key, section);
   }
+  Object.assign(last, { a, b, c, section });
+  return section;
 }
 
 /** Directions in files are rounded to five or six digits; a view nearer than this to a true one is taken as one. */

@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest';
-import type { Member } from '../../../src/domain/member.ts';
+import { type Member, recordOf } from '../../../src/domain/member.ts';
 import { openModel } from '../../../src/importer/files/open-model.ts';
 import { importModel } from '../../../src/importer/import-model.ts';
 import { FRAME_IFC2X3_STEP, FRAME_IFC2X3_XML, FRAME_IFC4_STEP, FRAME_IFC4_XML } from './support/frame.ts';
@@ -9,7 +9,7 @@ async function membersOf(text: string): Promise<readonly Member[]> {
   const { members, findings, lengthUnit } = await importModel(file);
   expect(findings).toEqual([]);
   expect(lengthUnit).toBe('mm');
-  return members;
+  return members.map(recordOf);
 }
 
 describe('one frame written as STEP text and as ifcXML', () => {
