@@ -5,12 +5,12 @@ import type { EigenPair } from './spectrum.ts';
 import { inner, scatter } from './vectors.ts';
 
 export interface PencilOptions {
-  /** Residual of a pair, as a share of the highest eigenvalue, at which it counts as found. */
+  /** Residual of a pair, as a share of the highest eigenvalue, at which it counts as found: the eigenvalue's error goes with its square. */
   readonly tolerance: number;
   readonly mostSteps: number;
 }
 
-export const PENCIL_DEFAULTS: PencilOptions = { tolerance: 1e-9, mostSteps: 200 };
+export const PENCIL_DEFAULTS: PencilOptions = { tolerance: 1e-6, mostSteps: 200 };
 
 /** Steps between two looks at what has been found. */
 const LOOK = 6;

