@@ -1,8 +1,10 @@
 import { createHash } from 'node:crypto';
 import { DEFAULT_BRIEF } from './brief/default-brief.ts';
+import { resolveHolds } from './brief/holds.ts';
 import { jointLimits } from './brief/joint-limits.ts';
 import { type MemberKind, memberKinds } from './brief/member-kinds.ts';
 import { namedPlaces } from './brief/named-places.ts';
+import { supportFinding } from './brief/no-support.ts';
 import { resolveOneWay } from './brief/one-way.ts';
 import { applyScope } from './brief/scope.ts';
 import { applySections, withoutSettled } from './brief/sections.ts';
@@ -31,6 +33,7 @@ import { bendingFindings, withMoments } from './statics/bending/findings.ts';
 import { listed } from './statics/combinations/listed.ts';
 import { type BuiltCases, buildCases, type Coverage } from './statics/loads/build-cases.ts';
 import { buildGivenCases } from './statics/loads/given-cases.ts';
+import { withSeverity } from './statics/solution/severity.ts';
 import { solveRun } from './statics/solution/solve-run.ts';
 import { assessStability } from './statics/stability/assess-stability.ts';
 import type { Supports } from './statics/types.ts';
@@ -110,10 +113,12 @@ export async function runModel(bytes: Uint8Array, options: Partial<RunOptions> =
     },
   );
   const { truss } = joined;
-  const { supports, findings: supportFindings } = supportsOf(truss);
+  const { supports: placed, findings: supportFindings } = supportsOf(truss);
+  const held = resolveHolds(truss, members, brief.holds);
+  const supports = { ...placed, holds: held.holds };
 
   clock.enter('stability');
-  const stability = assessStability(truss, supports);
+  const stability = assessStability(truss, supports, { members });
 
   clock.enter('solve');
   const usesGivenCases = given !== null && brief.cases.length === 0;
@@ -126,12 +131,12 @@ export async function runModel(bytes: Uint8Array, options: Partial<RunOptions> =
     brief,
     given: usesGivenCases ? given.combinations : null,
     oneWay,
+    members,
   });
 
   const eccentricities = eccentricityMoments(truss, solved.cases, solved.combinations);
   const bending = bendingBetweenNodes(truss, solved.cases, solved.combinations);
 
-  const isCarried = solved.cases.length > 0 && solved.cases.every(({ refused }) => refused === null);
   const findings = [
     ...opened.findings,
     ...signatureVoid(file),
@@ -140,10 +145,10 @@ export async function runModel(bytes: Uint8Array, options: Partial<RunOptions> =
     ...sectionFindings,
     ...limitFindings,
     ...withMoments(joined.findings, eccentricities),
-    ...(members.length > 0 ? supportFindings : []),
+    ...(members.length > 0 ? [...supportFindings, ...held.findings] : []),
     ...unusedCases(given, brief, extent),
     ...supportFinding(supports, extent, members.length),
-    ...stability.findings.map((found) => withSeverity(found, isCarried)),
+    ...stability.findings.map((found) => withSeverity(found, solved)),
     ...loaded.findings,
     ...oneWayFindings,
     ...solved.findings,
@@ -174,6 +179,7 @@ export async function runModel(bytes: Uint8Array, options: Partial<RunOptions> =
     analysis: brief.analysis,
     buckling: solved.buckling,
     envelope: solved.envelope,
+    holds: solved.holds,
     limits: given === null ? joined.limits : null,
     eccentricities,
     bending,
@@ -271,23 +277,6 @@ function unusedCases(given: Given | null, brief: Brief, extent: RunOptions['exte
       "Leave `cases:` out of the brief to use the model's.",
     ),
   ];
-}
-
-function supportFinding(supports: Supports, extent: RunOptions['extent'], memberCount: number): Finding[] {
-  if (memberCount === 0 || supports.restraints.length + supports.springs.length > 0) return [];
-  return [
-    finding(
-      'no-support',
-      'Nothing supports the truss.',
-      'Say where it stands under `supports:` in the brief, for example `- {at: {lowest: true}, fix: xyz}`.',
-      { severity: extent === 'survey' ? 'note' : 'error' },
-    ),
-  ];
-}
-
-/** A mechanism that every load leaves alone is a warning (CONTRACT section 4). */
-function withSeverity(found: Finding, isCarried: boolean): Finding {
-  return found.code === 'moves-freely' && isCarried ? { ...found, severity: 'warning' } : found;
 }
 
 function stageClock(onStage: (stage: Stage) => void) {

@@ -10,6 +10,7 @@ export const DEFAULT_BRIEF: Brief = {
   chords: 'pinned',
   analysis: 'first-order',
   supports: [],
+  holds: [],
   materials: { default: null },
   sections: [],
   tensionOnly: [],

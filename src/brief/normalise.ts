@@ -4,6 +4,7 @@ import type {
   Brief,
   CaseRule,
   CombinationRule,
+  HoldRule,
   LengthRule,
   LoadRule,
   MemberSelector,
@@ -16,6 +17,7 @@ import type { Path } from './written-source.ts';
 
 type LineAt = (path: Path) => number;
 type WrittenSupport = NonNullable<WrittenBrief['supports']>[number];
+type WrittenHold = NonNullable<WrittenBrief['holds']>[number];
 type WrittenCase = NonNullable<WrittenBrief['cases']>[number];
 type WrittenLoad = WrittenCase['loads'][number];
 
@@ -41,6 +43,7 @@ export function normaliseBrief(written: WrittenBrief, lineAt: LineAt): Brief {
     chords: written.chords ?? DEFAULT_BRIEF.chords,
     analysis: written.analysis ?? DEFAULT_BRIEF.analysis,
     supports: (written.supports ?? []).map((rule, i) => toSupport(rule, ['supports', i], lineAt)),
+    holds: (written.holds ?? []).map((rule, i) => toHold(rule, ['holds', i], lineAt)),
     materials: { default: materials?.default ?? DEFAULT_BRIEF.materials.default },
     sections: (written.sections ?? []).map(({ on, use }, i) => ({
       line: lineAt(['sections', i]),
@@ -73,6 +76,16 @@ function toSupport(written: WrittenSupport, path: Path, lineAt: LineAt): Support
     at: toNodeSelectors(written.at, [...path, 'at'], lineAt),
     fix: written.fix ?? [],
     springs: written.spring ?? [],
+  };
+}
+
+function toHold({ on, nodes, along, because }: WrittenHold, path: Path, lineAt: LineAt): HoldRule {
+  return {
+    line: lineAt(path),
+    on: on === undefined ? null : toMemberSelectors(on, [...path, 'on'], lineAt),
+    nodes: nodes === undefined ? null : toNodeSelectors(nodes, [...path, 'nodes'], lineAt),
+    along: along ?? null,
+    because,
   };
 }
 

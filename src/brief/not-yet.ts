@@ -1,6 +1,5 @@
 /** What the brief will be able to say and this version cannot honour: refused by name, never passed over. */
 const KEYS: ReadonlySet<string> = new Set([
-  'holds',
   'settle',
   'temperature',
   'misfit',

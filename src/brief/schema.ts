@@ -6,6 +6,7 @@ import { gradeIn } from '../importer/materials/grades.ts';
 import { knownDesignations } from '../importer/sections/designations/known-designations.ts';
 import { sectionFromDesignation } from '../importer/sections/designations/section-from-designation.ts';
 import { category, combinations } from './written-combinations.ts';
+import { hold } from './written-holds.ts';
 import { positive, quantity, vector } from './written-quantities.ts';
 import { anyNumber, memberSelector, members, nodes, text } from './written-selectors.ts';
 
@@ -155,6 +156,7 @@ export const briefInputSchema = z.strictObject({
       'second-order: combinations are balanced at the nodes as they have moved; without it a critical factor below 10 is said',
     ),
   supports: z.array(support).optional(),
+  holds: z.array(hold).optional(),
   materials: z.strictObject({ default: steelGrade.optional() }).optional(),
   sections: z
     .array(z.strictObject({ on: members, use: sectionDesignation }))

@@ -23,6 +23,7 @@ export interface Brief {
   /** second-order: balance at the moved nodes. */
   readonly analysis: 'first-order' | 'second-order';
   readonly supports: readonly SupportRule[];
+  readonly holds: readonly HoldRule[];
   readonly materials: { readonly default: string | null };
   readonly sections: readonly SectionRule[];
   /** Members that only pull, and that only push. */
@@ -108,6 +109,18 @@ export interface SupportRule {
   readonly fix: readonly Vec3[];
   /** Stiffness in N/m along a unit direction. */
   readonly springs: readonly { readonly direction: Vec3; readonly stiffness: number }[];
+}
+
+/** Nodes held by something that is not in the model. */
+export interface HoldRule {
+  readonly line: number;
+  /** Members whose nodes are meant; null: all. */
+  readonly on: readonly MemberSelector[] | null;
+  /** Which of their nodes; null: all. */
+  readonly nodes: readonly NodeSelector[] | null;
+  /** Unit direction; null: across the plane of each node's own truss. */
+  readonly along: Vec3 | null;
+  readonly because: string;
 }
 
 export type Nature = 'permanent' | 'imposed' | 'snow' | 'wind' | 'thermal' | 'accidental';

@@ -105,15 +105,19 @@ const findingSchema = z.strictObject({
   advice: text,
 });
 
+const remedySchema = z.union([
+  z.strictObject({ node: text, direction: vector }),
+  z.strictObject({ bar: z.tuple([text, text]) }),
+]);
+
 const modeSchema = z.strictObject({
   kind: z.enum(['local', 'part', 'whole']),
   nodes: z.array(text),
   movement: z.array(vector),
   order: z.enum(['infinitesimal', 'finite', 'undecided']),
   words: text,
-  remedy: z.array(
-    z.union([z.strictObject({ node: text, direction: vector }), z.strictObject({ bar: z.tuple([text, text]) })]),
-  ),
+  remedy: z.array(remedySchema).describe('with the remedies of all modes in place nothing moves'),
+  otherRemedy: z.array(remedySchema).optional().describe('bars that do the same in place of `remedy`'),
 });
 
 const stabilitySchema = z.strictObject({
@@ -140,6 +144,11 @@ const criticalFactor = z
   );
 const slack = z.array(text).optional().describe('bars of `oneWay` that carry nothing');
 
+const unstable = z
+  .strictObject({ bars: z.array(text) })
+  .optional()
+  .describe('the balance is carried but not stable: bars that give way, none where it is only indifferent');
+
 const caseSchema = z.strictObject({
   name: text,
   nature: z.enum(['permanent', 'imposed', 'snow', 'wind', 'thermal', 'accidental']),
@@ -152,6 +161,7 @@ const caseSchema = z.strictObject({
   residual: z.number().nullable().describe('largest out-of-balance joint force over the largest force'),
   criticalFactor,
   slack,
+  unstable,
 });
 
 const combinationSchema = z.strictObject({
@@ -164,6 +174,7 @@ const combinationSchema = z.strictObject({
   reactions: nodeForces,
   criticalFactor,
   slack,
+  unstable,
 });
 
 /** How the combinations came about where a code made them; `combinations` lists those of them that govern something. */
@@ -262,6 +273,16 @@ const jointSchema = z.strictObject({
   ),
 });
 
+const holdSchema = z.strictObject({
+  node: text,
+  direction: vector,
+  because: text,
+  supported: z.boolean().describe('whether a support stands at the node too'),
+  force: extreme.describe('N along the direction, the greatest by size'),
+  compression: extreme.describe('N, greatest in a bar at the node'),
+  usual: z.number().nullable().describe('N, 1/100 of that compression: EN 1993-1-1 5.3.3(4), from memory'),
+});
+
 export const resultSchema = z.strictObject({
   format: z.literal('pinwright-result'),
   version: z.literal(1),
@@ -300,6 +321,7 @@ export const resultSchema = z.strictObject({
   combining: combiningSchema.optional(),
   envelope: z.array(z.strictObject({ bar: text, tension: extreme, compression: extreme })),
   checks: z.array(checkSchema),
+  holds: z.array(holdSchema).optional(),
   joining: joiningSchema.optional(),
   eccentricities: z.array(eccentricitySchema).optional(),
   bending: z

@@ -59,11 +59,17 @@ function aside({ stability }: Result): string | null {
   return `${count(bars, 'bar')} of parts that nothing supports ${bars === 1 ? 'is' : 'are'} left out, with the loads on them.`;
 }
 
-function carried({ cases, stability }: Result): string | null {
+function carried({ cases, combinations, stability }: Result): string | null {
   if (cases.length === 0) return null;
   const refused = cases.filter((loadCase) => loadCase.refused !== undefined).length;
-  if (refused === 0 && stability.mechanisms > 0)
-    return 'The load cases are carried because none of them pushes it that way; whether that balance is stable is not judged.';
-  if (refused === 0) return cases.length === 1 ? 'The load case is carried.' : 'All load cases are carried.';
-  return `${refused} of ${count(cases.length, 'load case')} cannot be carried.`;
+  if (refused > 0) return `${refused} of ${count(cases.length, 'load case')} cannot be carried.`;
+  const all = cases.length === 1 ? 'The load case is carried' : 'All load cases are carried';
+  const last = combinations.length > 0 ? combinations : cases;
+  const unstable = last.filter((one) => one.unstable !== undefined).length;
+  if (unstable > 0) {
+    const what = combinations.length > 0 ? 'combination' : 'load case';
+    return `${all}, but the balance is not stable in ${unstable} of ${count(last.length, what)}: the bar forces do not bring back what moves freely.`;
+  }
+  if (innerMechanisms(stability) === 0) return `${all}.`;
+  return `${all}: none of them pushes it that way, and the bar forces bring it back where it moves.`;
 }

@@ -12,9 +12,11 @@ import type { BucklingJudgement } from '../statics/buckling/judge-buckling.ts';
 import type {
   BarEnvelope,
   ExtremeForce,
+  HoldForce,
   Mode,
   NodalForce,
   OneWay,
+  Remedy,
   SolvedCase,
   SolvedCombination,
   Stability,
@@ -42,6 +44,7 @@ export interface RunRecord {
   readonly oneWay: OneWay;
   readonly combining?: Result['combining'];
   readonly envelope: readonly BarEnvelope[];
+  readonly holds: readonly HoldForce[];
   /** Null where the model's own view says which points are shared. */
   readonly limits: JoinLimits | null;
   readonly eccentricities: readonly EccentricityMoment[];
@@ -109,6 +112,7 @@ export function assembleResult(run: RunRecord): Result {
       compression: extreme(compression),
     })),
     checks: [],
+    ...(run.holds.length === 0 ? {} : { holds: run.holds.map((hold) => resultHold(hold, run.supports)) }),
     ...(run.limits === null ? {} : { joining: resultLimits(run.limits) }),
     eccentricities: run.eccentricities.map(({ node, eccentricity: { of, member, e }, moment, from }) => ({
       node: nodeId(node),
@@ -219,16 +223,13 @@ function resultStability(stability: Stability): Result['stability'] {
   };
 }
 
-function resultMode({ nodes, movement, remedy, ...mode }: Mode): Result['stability']['modes'][number] {
+function resultMode({ nodes, movement, remedy, otherRemedy, ...mode }: Mode): Result['stability']['modes'][number] {
   return {
     ...mode,
     nodes: nodes.map(nodeId),
     movement: movement.map(point),
-    remedy: remedy.map((step) =>
-      'bar' in step
-        ? { bar: [nodeId(step.bar[0]), nodeId(step.bar[1])] }
-        : { node: nodeId(step.node), direction: point(step.direction) },
-    ),
+    remedy: remedy.map(resultRemedy),
+    ...(otherRemedy.length === 0 ? {} : { otherRemedy: otherRemedy.map(resultRemedy) }),
   };
 }
 
@@ -254,11 +255,31 @@ function oneWayBars({ tensionOnly, compressionOnly }: OneWay): Pick<Result, 'one
   return { oneWay: { tensionOnly: tensionOnly.map(barId), compressionOnly: compressionOnly.map(barId) } };
 }
 
-function resultCase({ refused, slack, ...solved }: SolvedCase): Result['cases'][number] {
+function resultHold(hold: HoldForce, { restraints, springs }: Supports): NonNullable<Result['holds']>[number] {
+  const { node, direction, because, force, compression, usual } = hold;
+  return {
+    node: nodeId(node),
+    direction: point(direction),
+    because,
+    supported: [...restraints, ...springs].some((support) => support.node === node),
+    force: extreme(force),
+    compression: extreme(compression),
+    usual,
+  };
+}
+
+function resultRemedy(step: Remedy): Result['stability']['modes'][number]['remedy'][number] {
+  return 'bar' in step
+    ? { bar: [nodeId(step.bar[0]), nodeId(step.bar[1])] }
+    : { node: nodeId(step.node), direction: point(step.direction) };
+}
+
+function resultCase({ refused, slack, unstable, ...solved }: SolvedCase): Result['cases'][number] {
   return {
     ...solved,
     ...(refused === null ? {} : { refused }),
     ...(slack === undefined ? {} : { slack: slack.map(barId) }),
+    ...(unstable === undefined ? {} : { unstable: { bars: unstable.bars.map(barId) } }),
     loads: nodalForces(solved.loads),
     loadSum: point(solved.loadSum),
     axialForce: [...solved.axialForce],
@@ -267,11 +288,12 @@ function resultCase({ refused, slack, ...solved }: SolvedCase): Result['cases'][
   };
 }
 
-function resultCombination({ refused, slack, ...solved }: SolvedCombination): Result['combinations'][number] {
+function resultCombination({ refused, slack, unstable, ...solved }: SolvedCombination): Result['combinations'][number] {
   return {
     ...solved,
     ...(refused === null ? {} : { refused }),
     ...(slack === undefined ? {} : { slack: slack.map(barId) }),
+    ...(unstable === undefined ? {} : { unstable: { bars: unstable.bars.map(barId) } }),
     factors: { ...solved.factors },
     axialForce: [...solved.axialForce],
     displacement: solved.displacement.map((movement) => movement && point(movement)),

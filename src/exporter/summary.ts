@@ -5,6 +5,7 @@ import { worstBars } from './summary/bars.ts';
 import { loadCases } from './summary/cases.ts';
 import { oddMembers } from './summary/families.ts';
 import { findings } from './summary/findings.ts';
+import { holds } from './summary/holds.ts';
 import { joinedBy } from './summary/joined.ts';
 import { memberKinds } from './summary/kinds.ts';
 import { degrees, harmless, wrapped } from './summary/layout.ts';
@@ -24,6 +25,7 @@ export function summarise(result: Result, options: Partial<SummaryOptions> = {})
     loadCases(result, chosen),
     worstBars(result, chosen),
     reactions(result, chosen),
+    holds(result, chosen),
     wrapped(result.caution, chosen.width),
   ];
   return `${paragraphs

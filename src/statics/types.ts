@@ -19,6 +19,23 @@ export interface GroundSpring {
 export interface Supports {
   readonly restraints: readonly Restraint[];
   readonly springs: readonly GroundSpring[];
+  /** What holds nodes and is no support: it keeps them like a restraint, and makes nothing stand that has no support. */
+  readonly holds?: readonly Hold[];
+}
+
+export interface Hold extends Restraint {
+  /** What holds it, in the words of the brief. */
+  readonly because: string;
+}
+
+/** What a hold has to take. */
+export interface HoldForce extends Hold {
+  /** N along `direction`, the greatest by size; null where nothing was solved. */
+  readonly force: ExtremeForce | null;
+  /** N, the greatest compression in a bar at the node; null where there is none. */
+  readonly compression: ExtremeForce | null;
+  /** N, what a brace for that compression is usually made for; null where there is none. */
+  readonly usual: number | null;
 }
 
 export interface NodalForce {
@@ -64,7 +81,10 @@ export interface Mode {
   readonly movement: readonly Vec3[];
   readonly order: 'infinitesimal' | 'finite' | 'undecided';
   readonly words: string;
+  /** What to hold: with the remedies of all modes nothing moves. */
   readonly remedy: readonly Remedy[];
+  /** The bars that do the same in place of `remedy`, of sensible length between nodes that exist; empty where none were found. */
+  readonly otherRemedy: readonly Remedy[];
 }
 
 export type Remedy = { readonly node: number; readonly direction: Vec3 } | { readonly bar: readonly [number, number] };
@@ -89,6 +109,11 @@ export interface Stability {
   readonly findings: readonly Finding[];
 }
 
+/** Set where bar forces do not bring the mechanisms back: the bars that those move. Their forces cannot last. */
+export interface Unstable {
+  readonly bars: readonly number[];
+}
+
 /** Forces of one case. Entries are null where the case is refused or the bar or node is set aside. */
 export interface SolvedCase {
   readonly name: string;
@@ -107,6 +132,7 @@ export interface SolvedCase {
   readonly residual: number | null;
   /** Bars that only pull or only push and are slack in this case. */
   readonly slack?: readonly number[];
+  readonly unstable?: Unstable;
 }
 
 /** Bars whose force has one sign only, by index. */
@@ -124,6 +150,7 @@ export interface SolvedCombination {
   readonly displacement: readonly (Vec3 | null)[];
   readonly reactions: readonly NodalForce[];
   readonly slack?: readonly number[];
+  readonly unstable?: Unstable;
 }
 
 export interface ExtremeForce {

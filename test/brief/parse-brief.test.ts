@@ -225,7 +225,6 @@ describe('a brief that is wrong', () => {
   });
 
   it.each([
-    ['holds: []', '2:1: "holds": this key'],
     ['chords: continuous', '2:9: "continuous": this'],
     ['checks: {rule: "EN1993-1-1:2005"}', '"EN1993-1-1:2005": this'],
     ['checks: AISC360', '2:9: "AISC360": this'],

@@ -59,15 +59,15 @@ describe.skipIf(path === null)('the real gridshell', () => {
     expect(solved.reactions.reduce((sum, r) => sum + r.force[2], 0)).toBeCloseTo(1806e3, 3);
   });
 
-  test('held at its 120 lowest nodes only, it has no clear gap, and the one finding says so with the numbers', () => {
+  test('held at its 120 lowest nodes only, it has no clear gap, and a finding says so with the numbers', () => {
     const supports = held([...all].sort((a, b) => points[a][2] - points[b][2]).slice(0, 120));
     const judged = assessStability(truss, supports);
     expect(judged.gap).toBeNull();
     expect(judged.mechanisms).toBeGreaterThan(90);
     expect(judged.mechanisms).toBeLessThan(110);
-    expect(judged.findings.map((f) => f.code)).toEqual(['nearly-moves']);
-    expect(judged.findings[0].message).toMatch(/1\d\d eigenvalues .* run from .* to 1e-8 of the highest/);
-    expect(judged.findings[0].message).toContain(`the ${judged.mechanisms} below 1e-10`);
+    const [unclear] = judged.findings.filter((f) => f.code === 'nearly-moves');
+    expect(unclear.message).toMatch(/1\d\d eigenvalues .* run from .* to 1e-8 of the highest/);
+    expect(unclear.message).toContain(`the ${judged.mechanisms} below 1e-10`);
     const { cases, findings } = solveCases(truss, supports, judged, [caseOf([{ node: 900, force: [0, 0, -1e3] }])]);
     expect(cases[0].refused).not.toBeNull();
     expect(findings.length).toBe(1);

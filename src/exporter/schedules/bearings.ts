@@ -30,11 +30,13 @@ const SIZE: Readonly<Record<BearingKind, (reaction: Vec3) => number>> = {
   horizontal: (reaction) => Math.hypot(reaction[0], reaction[1]),
 };
 
-/** The greatest reactions of each support, in the order of nodes. */
+/** The greatest reactions of each support, in the order of nodes. Nodes that are only held are no bearings: they stand with the holds. */
 export function bearings(result: Result): Bearing[] {
   const found = new Map<string, Record<BearingKind, GoverningReaction | null>>();
+  const held = new Set((result.holds ?? []).filter(({ supported }) => !supported).map(({ node }) => node));
   for (const { name, reactions } of ultimateRuns(result)) {
     for (const { node, force: reaction } of reactions) {
+      if (held.has(node)) continue;
       const bearing = found.get(node) ?? { down: null, uplift: null, horizontal: null };
       found.set(node, bearing);
       for (const kind of BEARING_KINDS) {

@@ -25,7 +25,8 @@ export function listed(
 ): { combinations: readonly SolvedCombination[]; combining?: CombiningRecord } {
   if (generated === null) return { combinations };
   const chosen = new Set(governing(combinations, envelope));
-  for (const one of combinations) if (one.name === buckling.governing?.from) chosen.add(one);
+  for (const one of combinations)
+    if (one.name === buckling.governing?.from || one.unstable !== undefined) chosen.add(one);
   const solved: Record<string, number> = {};
   for (const { limit } of combinations) solved[limit] = (solved[limit] ?? 0) + 1;
   const { rule, between, notes } = generated;

@@ -33,7 +33,7 @@ export function buildSystem(
   like: System | null = null,
 ): System {
   const { truss, supports, parts } = problem;
-  const movement = mapMovement(truss, parts, [...supports.restraints, ...pivots]);
+  const movement = mapMovement(truss, parts, [...supports.restraints, ...(supports.holds ?? []), ...pivots]);
   const elongations = mapElongations(truss, parts, supports, movement);
   const { rows } = elongations;
   const stiffness = stiffnessOf(elongations);

@@ -49,7 +49,8 @@ export function balanceJoints(
     put(to, elongations.directions[row], -axial[row]);
     largestForce = Math.max(largestForce, Math.abs(axial[row]));
   });
-  for (const { node } of problem.supports.restraints) if (problem.parts.liveNode[node]) given.set(node, [0, 0, 0]);
+  for (const { node } of [...problem.supports.restraints, ...(problem.supports.holds ?? [])])
+    if (problem.parts.liveNode[node]) given.set(node, [0, 0, 0]);
   elongations.springs.forEach((spring, s) => {
     give(spring.node, spring.direction, -axial[elongations.bars.length + s]);
   });

@@ -65,7 +65,7 @@ function mostMoved(truss: Truss, modes: readonly Mode[], loads: Float64Array) {
 }
 
 /** Loads on carried nodes go to the ends of their bars; one step after another, whatever carries what. */
-function onRealNodes(truss: Truss, loads: Float64Array): Float64Array {
+export function onRealNodes(truss: Truss, loads: Float64Array): Float64Array {
   const out = new Float64Array(loads.length);
   const put = (node: number, axis: number, force: number): void => {
     const carriage = truss.nodes[node].carriedBy;

@@ -6,11 +6,14 @@ import { NOT_JUDGED } from '../buckling/judge-buckling.ts';
 import { combinationsFor } from '../combinations/combinations-for.ts';
 import type { Generated, NamedCombination } from '../combinations/generate.ts';
 import type { Judgement } from '../stability/assess-stability.ts';
-import type { BarEnvelope, LoadCase, OneWay, Supports } from '../types.ts';
+import type { Named } from '../stability/names.ts';
+import type { BarEnvelope, HoldForce, LoadCase, OneWay, Supports } from '../types.ts';
 import { combine } from './combine.ts';
 import { envelope } from './envelope.ts';
+import { holdForces } from './hold-forces.ts';
 import { solveCombinations } from './solve-combinations.ts';
 import { Solver } from './solver.ts';
+import { judgeBalance } from './stable-balance.ts';
 import { supportLifts } from './support-lifts.ts';
 
 export interface RunRules {
@@ -18,12 +21,17 @@ export interface RunRules {
   /** The model's own combinations, where its cases are used; else null. */
   readonly given: readonly NamedCombination[] | null;
   readonly oneWay: OneWay;
+  /** Those the truss was made of, for their marks. */
+  readonly members: readonly Named[];
 }
 
 export interface RunSolution extends Whole {
   /** How a code made the combinations; null where they were listed. */
   readonly generated: Generated | null;
   readonly envelope: readonly BarEnvelope[];
+  readonly holds: readonly HoldForce[];
+  /** Every case is carried in stable balance. */
+  readonly isStable: boolean;
 }
 
 /** Cases, their combinations and the envelope. Combinations are sums of cases, unless some bars only pull or only push. */
@@ -32,7 +40,7 @@ export function solveRun(
   supports: Supports,
   stability: Judgement,
   cases: readonly LoadCase[],
-  { brief, given, oneWay }: RunRules,
+  { brief, given, oneWay, members }: RunRules,
 ): RunSolution {
   const superposable = oneWay.tensionOnly.length + oneWay.compressionOnly.length === 0;
   refuseTogether(cases, brief.analysis === 'second-order', superposable);
@@ -42,14 +50,23 @@ export function solveRun(
   const combined = superposable
     ? { combinations: combine(solved.cases, rules), findings: [] }
     : solveCombinations(solver, cases, rules);
+  const balance = judgeBalance(truss, stability, solved.cases, combined.combinations, members);
   const whole = superposable
-    ? analyseWhole(truss, supports, stability, solved.cases, combined.combinations, { analysis: brief.analysis })
-    : { cases: solved.cases, combinations: combined.combinations, buckling: NOT_JUDGED, findings: [] };
+    ? analyseWhole(truss, supports, stability, balance.cases, balance.combinations, { analysis: brief.analysis })
+    : { cases: balance.cases, combinations: balance.combinations, buckling: NOT_JUDGED, findings: [] };
   return {
     ...whole,
     generated,
     envelope: envelope(truss, whole.cases, whole.combinations),
-    findings: [...solved.findings, ...combined.findings, ...supportLifts(truss, whole.combinations), ...whole.findings],
+    holds: holdForces(truss, supports, whole.cases, whole.combinations),
+    isStable: balance.isStable,
+    findings: [
+      ...solved.findings,
+      ...combined.findings,
+      ...balance.findings,
+      ...supportLifts(truss, whole.combinations),
+      ...whole.findings,
+    ],
   };
 }
 

@@ -13,20 +13,30 @@ import { oneWayRows } from '../one-way/one-way-rows.ts';
 import { looseBars, notCarried } from '../one-way/words.ts';
 import type { Judgement } from '../stability/assess-stability.ts';
 import type { LoadCase, NodalForce, OneWay, SolvedCase, Supports } from '../types.ts';
-import { balanceJoints } from './balance.ts';
+import { type Balance, balanceJoints } from './balance.ts';
 import { cleanOfModes } from './clean-of-modes.ts';
 import { leaveOutSetAside } from './leave-out-set-aside.ts';
-import { loadMovesIt } from './load-moves-it.ts';
+import { loadMovesIt, onRealNodes } from './load-moves-it.ts';
+import { groupModes, type ModeGroup } from './mode-groups.ts';
 import { judgeSections, realStiffness, type SectionJudgement } from './sections.ts';
+import { settlesBy } from './settles.ts';
 
 export interface SolveOptions {
   /** Largest force a mode's pivot may have to give, as a share of the case's largest force, for the load to count as doing no work on it. */
   readonly workTolerance: number;
+  /**
+   * A load that does more work than that, and less than `leanTolerance` of the largest force, is carried where the bar forces bring the truss
+   * back within `settling` (m): it does not hang quite straight, as drawn. What has no stable balance is left to the judgement of balance.
+   */
+  readonly leanTolerance: number;
+  readonly settling: number;
   readonly oneWay: OneWay;
 }
 
 export const SOLVE_DEFAULTS: SolveOptions = {
   workTolerance: 1e-8,
+  leanTolerance: 1e-4,
+  settling: 0.01,
   oneWay: { tensionOnly: [], compressionOnly: [] },
 };
 
@@ -48,19 +58,20 @@ interface Work {
 export class Solver {
   readonly #problem: Problem;
   readonly #stability: Judgement;
-  readonly #workTolerance: number;
+  readonly #settings: Omit<SolveOptions, 'oneWay'>;
   readonly #base: System;
   readonly #held: System;
   readonly #factor: Factor;
   readonly #sections: SectionJudgement;
   readonly #oneWay: OneWayBars | null;
+  #groups: readonly ModeGroup[] | null = null;
 
   /** @param stability the judgement of this truss on these supports */
   constructor(truss: Truss, supports: Supports, stability: Judgement, options: Partial<SolveOptions> = {}) {
-    const { workTolerance, oneWay } = { ...SOLVE_DEFAULTS, ...options };
+    const { oneWay, ...settings } = { ...SOLVE_DEFAULTS, ...options };
     this.#problem = { truss, supports, parts: findParts(truss, supports) };
     this.#stability = stability;
-    this.#workTolerance = workTolerance;
+    this.#settings = settings;
     const { pivots } = stability;
     const stiffnessOf = realStiffness(truss);
     this.#base = buildSystem(this.#problem, [], stiffnessOf);
@@ -137,7 +148,8 @@ export class Solver {
     }
     const { q, axial } = answer;
     const balance = balanceJoints(this.#base, this.#held, pivots, axial, loads);
-    if (balance.pivotForces.some((force) => Math.abs(force) > this.#workTolerance * balance.largestForce)) {
+    const axialForce = this.#byBar(axial);
+    if (!this.#isLeftAlone(balance, axialForce, loads)) {
       const moved = loadMovesIt(truss, this.#stability, one, loads, balance.pivotForces);
       findings.push(moved.finding);
       return refusedCase(truss, one, moved.sentence);
@@ -147,12 +159,25 @@ export class Solver {
     return {
       ...headOf(one),
       refused: null,
-      axialForce: this.#byBar(axial),
+      axialForce,
       displacement: this.#byNode(cleanOfModes(this.#base, this.#held, this.#factor, pivots, moved)),
       reactions: balance.reactions,
       residual: balance.largestForce > 0 ? balance.outOfBalance / balance.largestForce : 0,
       ...(this.#oneWay === null ? {} : { slack }),
     };
+  }
+
+  /** Whether the load does no work on any mode, or so little that the truss hangs straight after a hair's breadth. */
+  #isLeftAlone({ pivotForces, largestForce }: Balance, axialForce: readonly (number | null)[], loads: Float64Array) {
+    const { workTolerance, leanTolerance, settling } = this.#settings;
+    const work = largestOf(pivotForces) / (largestForce || 1);
+    if (work <= workTolerance) return true;
+    const { modes, mechanisms } = this.#stability;
+    if (work > leanTolerance || modes.length < mechanisms) return false;
+    const { truss } = this.#problem;
+    this.#groups ??= groupModes(truss, modes);
+    const by = settlesBy(truss, this.#groups, axialForce, onRealNodes(truss, loads), workTolerance * largestForce);
+    return by <= settling || by === Number.POSITIVE_INFINITY;
   }
 
   /** Says of a solved case where its slack bars hang loose: with nothing that answers to their opening further. */

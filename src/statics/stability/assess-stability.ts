@@ -4,15 +4,19 @@ import { countFreedoms } from '../engine/system.ts';
 import { findParts } from '../model/parts.ts';
 import { buildSystem, type Problem, type System } from '../model/system.ts';
 import type { Mode, Restraint, Stability, Supports } from '../types.ts';
-import { type FoundMode, findModes } from './find-modes.ts';
+import { type FoundMode, type FoundModes, findModes } from './find-modes.ts';
 import { movesFreely, nearlyMoves } from './findings.ts';
+import { leftWithBars, leftWithHeld } from './judged-again.ts';
 import { kindOf } from './kind.ts';
 import { movingNodes } from './localise.ts';
+import { modeInWords } from './mode-words.ts';
+import { Names } from './names.ts';
 import { STABILITY_DEFAULTS, type StabilityOptions } from './options.ts';
 import { stiffenedBySelfStress } from './order.ts';
 import { countParts, type PartCounts } from './part-counts.ts';
-import { sliceSpectrum } from './slicing.ts';
-import { modeInWords } from './words.ts';
+import { barsAgainst, type NewBar } from './remedy-bars.ts';
+import { type Spectrum, sliceSpectrum } from './slicing.ts';
+import { worksInBending } from './works-in-bending.ts';
 
 /** The judgement with what the solution needs of it. */
 export interface Judgement extends Stability {
@@ -34,13 +38,20 @@ export function assessStability(truss: Truss, supports: Supports, options: Parti
   const spectrum = sliceSpectrum(base, settings);
   const found = findModes(base, spectrum, settings);
   const counts = countParts(base, found.pivots, spectrum.mechanisms);
-  const modes = describe(base, found.modes, found.pivots, counts);
+  const names = new Names(truss, settings.members);
+  const braces = braceAll(problem, found);
+  const modes = describe(base, names, found, braces, counts);
 
   const nodes = truss.nodes.filter((node, i) => parts.liveNode[i] && node.carriedBy === null).length;
   const { bars, springs } = base.elongations;
   const rank = countFreedoms(base.movement.freedoms) - spectrum.mechanisms;
   const nearly = nearlyMoves(spectrum, settings);
   const expected = (i: number) => parts.freeBody && found.modes[i].rigid !== null;
+  const bending = worksInBending(
+    truss,
+    names,
+    modes.filter((_, i) => !expected(i)),
+  );
   return {
     nodes,
     bars: bars.length,
@@ -56,8 +67,11 @@ export function assessStability(truss: Truss, supports: Supports, options: Parti
     findings: [
       ...movesFreely(
         truss,
-        modes.filter((_, i) => !expected(i)),
+        names,
+        { modes: modes.filter((_, i) => !expected(i)), more: spectrum.gap === null ? [] : notListed(found) },
+        judgeAgain(base, found, braces, spectrum),
       ),
+      ...(bending ? [bending] : []),
       ...(nearly ? [nearly] : []),
     ],
     pivots: found.pivots,
@@ -65,10 +79,42 @@ export function assessStability(truss: Truss, supports: Supports, options: Parti
   };
 }
 
+/** What moves in more ways than there are modes listed for it. */
+function notListed({ modes, components }: FoundModes) {
+  return components.flatMap(({ nodes, pivots }, c) => {
+    const ways = pivots.length - modes.filter((mode) => mode.component === c).length;
+    return ways > 0 ? [{ nodes, ways }] : [];
+  });
+}
+
+/** For each mode the bar that takes it away, where all modes of its component have one. */
+function braceAll(problem: Problem, { modes, components }: FoundModes): Map<FoundMode, NewBar> {
+  const braces = new Map<FoundMode, NewBar>();
+  const moving = new Set(components.flatMap(({ nodes }) => nodes));
+  components.forEach((component, c) => {
+    const own = modes.filter((mode) => mode.component === c);
+    barsAgainst(problem, component, own, moving)?.forEach((bar, i) => {
+      braces.set(own[i], bar);
+    });
+  });
+  return braces;
+}
+
+/** The proof of the remedies: the count again with them in place. Modes without a bar of their own are held instead. */
+function judgeAgain(base: System, found: FoundModes, braces: ReadonlyMap<FoundMode, NewBar>, spectrum: Spectrum) {
+  if (found.pivots.length === 0) return { held: null, barred: null };
+  const others = found.pivots.filter((pivot) => !found.modes.some((mode) => mode.pivot === pivot && braces.has(mode)));
+  return {
+    held: leftWithHeld(base, found.pivots, spectrum),
+    barred: braces.size === 0 ? null : leftWithBars(base, [...braces.values()], others, spectrum),
+  };
+}
+
 function describe(
   base: System,
-  found: readonly FoundMode[],
-  pivots: readonly Restraint[],
+  names: Names,
+  { modes: found, pivots }: FoundModes,
+  braces: ReadonlyMap<FoundMode, NewBar>,
   counts: readonly PartCounts[],
 ): Mode[] {
   const { problem } = base;
@@ -91,8 +137,9 @@ function describe(
       nodes,
       movement: nodes.map((i) => movementOf(mode.moves, i)),
       order: finite ? 'finite' : stiffened[stress] ? 'infinitesimal' : 'undecided',
-      words: modeInWords(truss, mode, kind),
+      words: modeInWords(truss, names, mode, kind),
       remedy: [{ node: mode.pivot.node, direction: mode.pivot.direction }],
+      otherRemedy: braces.has(mode) ? [{ bar: braces.get(mode)! }] : [],
     };
   });
 }

@@ -1,109 +1,73 @@
 import { type Finding, finding } from '../../domain/finding.ts';
 import type { Truss } from '../../domain/truss.ts';
-import type { Mode, Remedy } from '../types.ts';
-import { groupByNodes } from './localise.ts';
+import type { Remedy } from '../types.ts';
+import { listed, type Names } from './names.ts';
 import type { StabilityOptions } from './options.ts';
-import { tidyDirection } from './reduce.ts';
 import type { Rung, Spectrum } from './slicing.ts';
+import { type Movable, type Statement, statements } from './statements.ts';
 import { count, directionInWords, nodeInWords } from './words.ts';
 
-/** More modes than this over common nodes, each moving many, are one thing to know and not many. */
-const TANGLED = { modes: 3, nodesEach: 6 };
+/** Remedies that a sentence names one by one. */
+const FEW = 3;
 
-/** One finding for each mode, for each group of modes that are alike, and for each tangle of modes over the same nodes. */
-export function movesFreely(truss: Truss, modes: readonly Mode[]): Finding[] {
-  const tangles: Mode[][] = [];
-  const single: Mode[] = [];
-  const groups = groupByNodes(modes.map((mode) => mode.nodes)).map((group) => group.map((i) => modes[i]));
-  for (const group of groups) {
-    const each = group.reduce((sum, mode) => sum + mode.nodes.length, 0) / group.length;
-    if (group.length > TANGLED.modes && each > TANGLED.nodesEach) tangles.push(group);
-    else single.push(...group);
-  }
-  return [
-    ...alike(single).map((group) => aboutAlike(truss, group)),
-    ...tangles.map((group) => aboutTangle(truss, group)),
-  ];
+/** One finding for each thing that can move, for all places together where it is the same. */
+export function movesFreely(truss: Truss, names: Names, movable: Movable, again: JudgedAgain): Finding[] {
+  const groups = new Map<string, Statement[]>();
+  for (const statement of statements(truss, names, movable))
+    groups.set(statement.key, [...(groups.get(statement.key) ?? []), statement]);
+  return [...groups.values()].map((group) => {
+    const first = group[0];
+    const nodes = [...new Set(group.flatMap((one) => one.nodes))].sort((a, b) => a - b);
+    const { at, place } = truss.nodes[first.shown];
+    return finding('moves-freely', `${capitalised(first.sentence)}${elsewhere(group)}.`, advise(truss, group, again), {
+      nodes,
+      at,
+      place,
+    });
+  });
 }
 
-/** The modes over one and the same nodes. */
-type Bundle = readonly Mode[];
-
-function alike(modes: readonly Mode[]): Bundle[][] {
-  const bundles = groupBy(modes, (mode) => (mode.kind === 'local' ? mode.nodes.join(' ') : mode.words));
-  return groupBy(bundles, (bundle) => bundle.map(likenessOf).join('|'));
+/** How the judgement came out with the remedies in place: mechanisms left, null where there are no such remedies. */
+export interface JudgedAgain {
+  readonly held: number | null;
+  readonly barred: number | null;
 }
 
-function groupBy<T>(items: readonly T[], keyOf: (item: T) => string): T[][] {
-  const groups = new Map<string, T[]>();
-  for (const item of items) {
-    const key = keyOf(item);
-    const group = groups.get(key);
-    if (group) group.push(item);
-    else groups.set(key, [item]);
-  }
-  return [...groups.values()];
-}
-
-function aboutAlike(truss: Truss, group: readonly Bundle[]): Finding {
-  const bundle = group[0];
-  const first = bundle[0];
-  const ways = bundle.slice(1).map((mode) => directionInWords(tidyDirection(mode.movement[indexOfMost(mode)])));
-  const also = ways.length > 0 ? `; and in ${count(ways.length, 'more way')}: ${ways.join(', ')}` : '';
-  const others = group.length > 1 ? `; the same at ${group.length} places in all` : '';
-  return finding(
-    'moves-freely',
-    `${capitalised(first.words)}${also}${others}.`,
-    advise(
-      truss,
-      bundle.flatMap((mode) => mode.remedy),
-      first.order,
-      group.length,
-    ),
-    whereOf(truss, group.flat()),
-  );
-}
-
-function aboutTangle(truss: Truss, group: readonly Mode[]): Finding {
-  const first = group.reduce((least, mode) => (mode.nodes.length < least.nodes.length ? mode : least));
-  const where = whereOf(truss, [first, ...group]);
-  const message = `${where.nodes.length} nodes can move in ${group.length} independent ways without straining a bar; one of them: ${first.words}.`;
-  return finding('moves-freely', message, advise(truss, first.remedy, first.order, group.length), where);
-}
-
-function whereOf(truss: Truss, group: readonly Mode[]) {
-  const first = group[0];
-  const nodes = [...new Set(group.flatMap((mode) => mode.nodes))].sort((a, b) => a - b);
-  const most = truss.nodes[first.nodes[indexOfMost(first)]];
-  return { nodes, at: most.at, place: most.place };
+function elsewhere(group: readonly Statement[]): string {
+  if (group.length === 1) return '';
+  const owners = group.map((one) => one.owner);
+  const names = [...new Set(owners.filter((owner): owner is string => owner !== null))];
+  if (names.length === group.length) return `; the same at ${listed(names.slice(1))} (${group.length} in all)`;
+  return `; the same at ${group.length} places in all`;
 }
 
 const capitalised = (text: string): string => text.charAt(0).toUpperCase() + text.slice(1);
 
-/** Alike: of one kind, as many nodes, moving the same ways by the same amounts. */
-function likenessOf(mode: Mode): string {
-  const moves = mode.movement.map((v) => v.map((c) => Math.abs(c).toFixed(2)).join(' ')).sort();
-  return [mode.kind, mode.order, ...moves].join('|');
+function advise(truss: Truss, group: readonly Statement[], again: JudgedAgain): string {
+  const first = group[0];
+  const each = group.length > 1 ? `, and likewise at each of the ${group.length}` : '';
+  const ways: string[] = [];
+  if (first.hold !== null) ways.push(`Hold ${first.hold}${each}`);
+  else if (first.remedy.length > 0) ways.push(`Hold ${remediesInWords(truss, first.remedy)}${each}`);
+  if (first.bars.length > 0 && again.barred === 0) ways.push(`put ${remediesInWords(truss, first.bars)}${each}`);
+  else ways.push('add bars that hold it');
+  ways.push('say under `holds:` in the brief what holds it and is not in the model');
+  const stiffens = first.order === 'infinitesimal' ? ' It is stiffened only by prestress.' : '';
+  const still =
+    again.held !== null && again.held > 0
+      ? ' Judged again with all that is held so, it still moves: the spectrum has no clear gap.'
+      : '';
+  return `${capitalised(ways.join('; or '))}.${stiffens}${still}`;
 }
 
-function indexOfMost(mode: Mode): number {
-  let best = 0;
-  const size = (i: number) => Math.hypot(...mode.movement[i]);
-  mode.movement.forEach((_, i) => {
-    if (size(i) > size(best) + 1e-9) best = i;
-  });
-  return best;
-}
-
-function advise(truss: Truss, remedies: readonly Remedy[], order: Mode['order'], places: number): string {
-  const what = remedies.map((remedy) => remedyInWords(truss, remedy)).join(' and ');
-  const each = places > 1 ? `, and likewise for each of the ${places}` : '';
-  const stiffens = order === 'infinitesimal' ? ' It is stiffened only by prestress.' : '';
-  return `Hold ${what}${each}, or add bars that do; or say in the brief what holds it and is not in the model.${stiffens}`;
+function remediesInWords(truss: Truss, remedies: readonly Remedy[]): string {
+  const shown = remedies.slice(0, FEW).map((remedy) => remedyInWords(truss, remedy));
+  const more = remedies.length - shown.length;
+  return `${shown.join(' and ')}${more > 0 ? ` and ${more} more (the result lists them)` : ''}`;
 }
 
 function remedyInWords(truss: Truss, remedy: Remedy): string {
-  if ('bar' in remedy) return `${nodeInWords(truss, remedy.bar[0])} to ${nodeInWords(truss, remedy.bar[1])}`;
+  if ('bar' in remedy) return `a bar from ${nodeInWords(truss, remedy.bar[0])} to ${nodeInWords(truss, remedy.bar[1])}`;
   return `the node at ${nodeInWords(truss, remedy.node)} ${directionInWords(remedy.direction).replace('up and down', 'vertically')}`;
 }
 

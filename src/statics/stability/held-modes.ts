@@ -1,4 +1,4 @@
-import { factorise } from '../engine/factor.ts';
+import { type Factor, factorise } from '../engine/factor.ts';
 import { solveMany } from '../engine/solve.ts';
 import { combineRows, multiplyRows } from '../engine/system.ts';
 import { largest } from '../engine/vectors.ts';
@@ -8,20 +8,30 @@ import { pivotUnknowns } from '../model/pivot-unknowns.ts';
 import { buildSystem, type System } from '../model/system.ts';
 import type { Restraint } from '../types.ts';
 
-/** Modes are worked out this many at a time, to bound memory. */
+/** Movements are worked out this many at a time, to bound memory. */
 const TOGETHER = 8;
 
 /** Rounding below this share of a mode's largest movement is cut away. */
 const CUT = 1e-11;
 
-/**
- * For each of `moved` the way the truss goes when that pivot is moved by 1 and all other `pivots` are held: a mode, where the pivots fit
- * the mechanisms. Three components a node, largest 1.
- */
-export function modesOfPivots(base: System, pivots: readonly Restraint[], moved: readonly Restraint[]): Float64Array[] {
-  const { truss } = base.problem;
+/** The system with a pivot held for each mechanism: nothing moves freely in it. */
+export interface HeldSystem {
+  readonly base: System;
+  readonly held: System;
+  readonly factor: Factor;
+}
+
+export function holdPivots(base: System, pivots: readonly Restraint[]): HeldSystem {
   const held = buildSystem(base.problem, pivots, undefined, base);
-  const factor = factorise(held.matrix);
+  return { base, held, factor: factorise(held.matrix) };
+}
+
+/**
+ * Lets the truss follow each of `starts` (three components a node), which it keeps at the pivots, without straining a bar. What moves the
+ * pivots alone becomes the mode that goes with them; what is nearly a mode is taken down to rounding.
+ */
+export function follow({ base, held, factor }: HeldSystem, starts: readonly Float64Array[]): Float64Array[] {
+  const { truss } = base.problem;
   const unknowns = held.matrix.symbolic.freedoms.active.length;
   const loadOf = (elongation: Float64Array): Float64Array =>
     combineRows(
@@ -30,9 +40,9 @@ export function modesOfPivots(base: System, pivots: readonly Restraint[], moved:
       unknowns,
     );
   const out: Float64Array[] = [];
-  for (let from = 0; from < moved.length; from += TOGETHER) {
-    const start = moved.slice(from, from + TOGETHER).map((pivot) => pivotMovement(base, pivot));
-    const stretch = start.map((moves) => elongationsOf(truss, base.elongations, moves));
+  for (let from = 0; from < starts.length; from += TOGETHER) {
+    const together = starts.slice(from, from + TOGETHER);
+    const stretch = together.map((moves) => elongationsOf(truss, base.elongations, moves));
     const answers = stretch.map(() => new Float64Array(unknowns));
     // The second pass is the refinement that takes the stretch down to rounding.
     for (let pass = 0; pass < 2; pass++) {
@@ -47,17 +57,28 @@ export function modesOfPivots(base: System, pivots: readonly Restraint[], moved:
     }
     answers.forEach((answer, t) => {
       const moves = nodeMovements(held.movement, answer);
-      for (let i = 0; i < moves.length; i++) moves[i] = moves[i] + start[t][i];
-      out.push(tidyMode(moves));
+      for (let i = 0; i < moves.length; i++) moves[i] = moves[i] + together[t][i];
+      out.push(moves);
     });
   }
   return out;
 }
 
-function pivotMovement(base: System, pivot: Restraint): Float64Array {
+/** Moves the pivots by the given amounts and nothing else: three components a node. */
+export function movePivots(
+  base: System,
+  pivots: readonly { readonly pivot: Restraint; readonly amount: number }[],
+): Float64Array {
   const q = new Float64Array(base.movement.freedoms.active.length);
-  for (const [unknown, value] of pivotUnknowns(base.movement, pivot)) q[unknown] = value;
+  for (const { pivot, amount } of pivots)
+    for (const [unknown, value] of pivotUnknowns(base.movement, pivot)) q[unknown] = q[unknown] + amount * value;
   return nodeMovements(base.movement, q);
+}
+
+/** For each of `moved` the mode in which that pivot moves and all others are at rest. Three components a node, largest 1. */
+export function modesOfPivots(system: HeldSystem, moved: readonly Restraint[]): Float64Array[] {
+  const starts = moved.map((pivot) => movePivots(system.base, [{ pivot, amount: 1 }]));
+  return follow(system, starts).map(tidyMode);
 }
 
 export function tidyMode(moves: Float64Array): Float64Array {

@@ -2,7 +2,7 @@ import type { Vec3 } from '../../domain/vector.ts';
 import type { Problem } from '../model/system.ts';
 import { UnionFind } from '../model/union-find.ts';
 import type { Mode } from '../types.ts';
-import { movingNodes } from './localise.ts';
+import { AT_REST, movingNodes } from './localise.ts';
 import { movementAt } from './rigid.ts';
 
 /** Bars that must move together for a mode to be the motion of a part rather than of a few nodes. */
@@ -10,7 +10,7 @@ const SEVERAL = 2;
 
 /** `whole` where every node moves as one body, `part` where several bars do, `local` else. */
 export function kindOf(problem: Problem, moves: Float64Array): Mode['kind'] {
-  const moving = movingNodes(problem.truss, moves);
+  const moving = movingNodes(problem.truss, moves, AT_REST);
   const live = problem.truss.nodes.filter((node, i) => problem.parts.liveNode[i] && node.carriedBy === null).length;
   if (moving.length === live && isRigid(problem, moving, moves)) return 'whole';
   const { nodes, bars } = largestCluster(problem, moving);
@@ -56,7 +56,7 @@ function isRigid(problem: Problem, nodes: readonly number[], moves: Float64Array
     if (size > 1e-9 * before && size > 0) basis.push(left.map((v) => v / size));
   }
   for (const b of basis) rest = without(rest, b);
-  return rest.every((v) => Math.abs(v) < 1e-6);
+  return rest.every((v) => Math.abs(v) < AT_REST);
 }
 
 const axisOr = (k: number): Vec3 => [k === 0 ? 1 : 0, k === 1 ? 1 : 0, k === 2 ? 1 : 0];

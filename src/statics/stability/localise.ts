@@ -1,38 +1,25 @@
 import type { Truss } from '../../domain/truss.ts';
 import { UnionFind } from '../model/union-find.ts';
-import { type ReducedModes, reduceModes } from './reduce.ts';
 
-/** Movements below this share of the largest count as standing still. */
-export const STILL = 1e-7;
+/** Movements below this share of the largest are rounding. */
+export const STILL = 1e-9;
 
-/** Nodes (carried ones left out) that move. */
-export function movingNodes(truss: Truss, moves: Float64Array): number[] {
+/**
+ * Movements below this share of the largest are none to the reader: coordinates are drawn to a tenth of a millimetre, so that a flat truss
+ * is flat to 1e-4 and what moves out of its plane drags the rest along by as much.
+ */
+export const AT_REST = 1e-3;
+
+/** Nodes (carried ones left out) that move by more than a share of the largest movement. */
+export function movingNodes(truss: Truss, moves: Float64Array, share = STILL): number[] {
   let most = 0;
   for (const v of moves) most = Math.max(most, Math.abs(v));
   const out: number[] = [];
   truss.nodes.forEach((node, i) => {
     if (node.carriedBy !== null) return;
     const size = Math.max(Math.abs(moves[3 * i]), Math.abs(moves[3 * i + 1]), Math.abs(moves[3 * i + 2]));
-    if (size > STILL * most) out.push(i);
+    if (size > share * most) out.push(i);
   });
-  return out;
-}
-
-/** Works modes that share nodes into ones of few nodes each, group by group. */
-export function localise(truss: Truss, modes: readonly Float64Array[]): ReducedModes {
-  const moving = modes.map((mode) => movingNodes(truss, mode));
-  const groups = groupByNodes(moving);
-  const out: ReducedModes = { modes: [], pivots: [] };
-  for (const group of groups) {
-    const nodes = [...new Set(group.flatMap((i) => moving[i]))].sort((a, b) => a - b);
-    const reduced = reduceModes(
-      truss,
-      group.map((i) => modes[i]),
-      nodes,
-    );
-    out.modes.push(...reduced.modes);
-    out.pivots.push(...reduced.pivots);
-  }
   return out;
 }
 

@@ -1,4 +1,8 @@
+import type { Named } from './names.ts';
+
 export interface StabilityOptions {
+  /** The members that the truss was made of, for their marks; with none, nodes are known by their places. */
+  readonly members: readonly Named[];
   /** Ratio between neighbouring eigenvalues from which a gap is clear. */
   readonly clearGap: number;
   /**
@@ -16,6 +20,7 @@ export interface StabilityOptions {
 }
 
 export const STABILITY_DEFAULTS: StabilityOptions = {
+  members: [],
   clearGap: 1e3,
   threshold: 1e-10,
   nearly: 1e-9,

@@ -27,8 +27,9 @@ export function rigidMotions(system: System): RigidMotion[] {
     if (part >= 0 && parts.liveNode[node] && truss.nodes[node].carriedBy === null) nodesOf[part].push(node);
   });
   const supportsOf: { node: number; direction: Vec3 }[][] = nodesOf.map(() => []);
-  for (const support of [...problem.supports.restraints, ...problem.supports.springs])
-    supportsOf[parts.partOf[support.node]].push(support);
+  const { restraints, springs, holds = [] } = problem.supports;
+  for (const support of [...restraints, ...springs, ...holds])
+    if (parts.partOf[support.node] >= 0) supportsOf[parts.partOf[support.node]].push(support);
   return nodesOf.flatMap((nodes, part) =>
     nodes.length === 0 ? [] : partMotions(problem, system.movement.shares, part, nodes, supportsOf[part]),
   );

@@ -1,6 +1,6 @@
 import type { Vec3 } from '../../domain/vector.ts';
 import type { Problem } from '../model/system.ts';
-import { movingNodes } from './localise.ts';
+import { AT_REST, movingNodes } from './localise.ts';
 import { type ReducedModes, reduceModes } from './reduce.ts';
 import { movementAt, type RigidMotion } from './rigid.ts';
 
@@ -12,18 +12,6 @@ export function holdRigid(problem: Problem, motions: readonly RigidMotion[], bas
   const moves = motions.map((m) => m.moves);
   const atBase = reduceModes(problem.truss, moves, base);
   return atBase.pivots.length === motions.length ? atBase : reduceModes(problem.truss, moves);
-}
-
-/** The mode less what of the rigid motions it makes at their pivots: it leaves all of those at rest. */
-export function withoutRigid(rigid: ReducedModes, mode: Float64Array): Float64Array {
-  const out = mode.slice();
-  rigid.pivots.forEach(({ node, direction }, r) => {
-    let k = 0;
-    for (let axis = 0; axis < 3; axis++) k += direction[axis] * mode[3 * node + axis];
-    const motion = rigid.modes[r];
-    if (k !== 0) for (let i = 0; i < out.length; i++) out[i] = out[i] - k * motion[i];
-  });
-  return out;
 }
 
 /** Triangles of bars spread over the part; pairs of joined nodes where there is none. */
@@ -60,7 +48,7 @@ export function bestBase(
   let least = Number.POSITIVE_INFINITY;
   for (const base of candidates) {
     let moving = 0;
-    for (const mode of modes) moving += movingNodes(problem.truss, atRest(motions, base, mode)).length;
+    for (const mode of modes) moving += movingNodes(problem.truss, atRest(motions, base, mode), AT_REST).length;
     if (moving < least) {
       best = base;
       least = moving;
