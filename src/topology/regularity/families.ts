@@ -22,6 +22,10 @@ const TIMES_MORE = 8;
 const NEARLY = 0.1;
 const NEARLY_LENGTH = 0.3;
 
+/** A kind is regular, and an odd length in it odd, where this share of it comes in families of so many: no free-form grid. */
+const REGULAR_SHARE = 0.75;
+const FEW = 4;
+
 interface Cut {
   readonly length: number;
   readonly members: readonly number[];
@@ -42,7 +46,11 @@ export function findFamilies(members: readonly Member[], roles: readonly (Member
   const lengths = members.map(({ axis }) => distance(axis[0], axis[1]));
   const families = [...kinds.values()].flatMap(({ role, section, own }) => {
     const cuts = byLength(own, lengths);
-    return cuts.map((cut): Family => ({ role, section, ...cut, oddBeside: besideLarger(cut, cuts) }));
+    const inFamilies = cuts.reduce((sum, cut) => sum + (cut.members.length >= FEW ? cut.members.length : 0), 0);
+    const isRegular = inFamilies >= REGULAR_SHARE * own.length;
+    return cuts.map(
+      (cut): Family => ({ role, section, ...cut, oddBeside: isRegular ? besideLarger(cut, cuts) : null }),
+    );
   });
   return families.sort(compareFamilies);
 }
