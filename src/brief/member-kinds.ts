@@ -1,5 +1,4 @@
-import type { Member } from '../domain/member.ts';
-import { distance } from '../domain/vector.ts';
+import { developedLength, type Member } from '../domain/member.ts';
 
 /** Members that a scope would name alike. */
 export interface MemberKind {
@@ -27,7 +26,7 @@ export function memberKinds(read: readonly Member[], inScope: readonly Member[])
       material: member.material.name,
       count: (so?.count ?? 0) + 1,
       inScope: (so?.inScope ?? 0) + (taken.has(member) ? 1 : 0),
-      length: (so?.length ?? 0) + distance(...member.axis),
+      length: (so?.length ?? 0) + developedLength(member),
     });
   }
   return [...kinds]

@@ -1,4 +1,4 @@
-import type { Vec3 } from './vector.ts';
+import { distance, type Vec3 } from './vector.ts';
 
 export type SectionShape = 'I' | 'U' | 'L' | 'T' | 'C' | 'Z' | 'RHS' | 'CHS' | 'rectangle' | 'circle' | 'other';
 
@@ -58,6 +58,12 @@ export interface ElementFacts {
   property(name: string): readonly (string | number | boolean)[];
 }
 
+/** m, along the bow of a bent member. */
+export function developedLength({ axis, bow }: Pick<Member, 'axis' | 'bow'>): number {
+  const points = bow ?? axis;
+  return points.slice(1).reduce((sum, point, i) => sum + distance(points[i], point), 0);
+}
+
 /** An element of the model read as a line of force. All lengths in metres, in the model's own world axes. */
 export interface Member {
   readonly globalId: string;
@@ -76,6 +82,8 @@ export interface Member {
   readonly layer: string | null;
   readonly axisFrom: 'axis' | 'extrusion' | 'swept' | 'mesh' | 'analysis-view';
   readonly axis: readonly [Vec3, Vec3];
+  /** Of a bent member: points along its line from one end of `axis` to the other, near enough that straight pieces stand for it. */
+  readonly bow?: readonly Vec3[] | null;
   /** The centroid line of the body, where `axis` is drawn apart from the body and a body shows it. */
   readonly centroidAxis?: readonly [Vec3, Vec3] | null;
   /** Unit direction of the section's z axis; at right angles to the member's axis. */
@@ -101,6 +109,7 @@ export function recordOf(member: Member): Member {
     layer: member.layer,
     axisFrom: member.axisFrom,
     axis: member.axis,
+    ...(member.bow ? { bow: member.bow } : {}),
     centroidAxis: member.centroidAxis ?? null,
     zAxis: member.zAxis,
     section: member.section,

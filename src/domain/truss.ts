@@ -48,6 +48,8 @@ export interface TrussBar {
   readonly to: number;
   /** m, between the nodes. */
   readonly length: number;
+  /** m, of bent members: how far they leave the straight line between the bar's ends, as drawn. */
+  readonly strays?: number;
   /** EA in N, in series or added over the bar's members; null where a member has no section. */
   readonly stiffnessEA: number | null;
   /** kg per metre of bar; 0 where a member has no section. */

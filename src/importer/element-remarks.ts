@@ -6,7 +6,8 @@ import type { NotRead } from './not-read.ts';
 
 export function remarksOn(axis: MemberAxis): Remark[] {
   const remarks: Remark[] = [];
-  if (axis.isBent) remarks.push(BENT);
+  // Where its course is known, joining says how far its bars stray from it.
+  if (axis.isBent && axis.bow === null) remarks.push(BENT);
   if (axis.isRun) remarks.push(RUNS);
   if (axis.isTapered && axis.section !== null) remarks.push(TAPERED);
   if (axis.confidence !== null) remarks.push(axis.confidence < DOUBTFUL ? UNEVEN : MEASURED);

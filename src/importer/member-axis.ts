@@ -15,6 +15,8 @@ export interface MemberAxis {
   /** Why there is no section. */
   readonly noSection: NotRead | null;
   readonly isBent: boolean;
+  /** Points along a bent line, in the order of its ends; null where it is straight or its course is not known. */
+  readonly bow: readonly Vec3[] | null;
   /** One of several straight runs of a line with bends. */
   readonly isRun: boolean;
   readonly isTapered: boolean;
@@ -66,6 +68,7 @@ export function axisOfBody(book: SectionBook, body: BodyAxis, profiles: readonly
     section,
     noSection,
     isBent: !isStraight(body.rise, lengthOf(body)),
+    bow: fromFirst(body.bow, ends),
     isRun: body.isRun,
     isTapered: body.endProfile !== null,
     confidence: body.measured?.confidence ?? null,
@@ -74,6 +77,12 @@ export function axisOfBody(book: SectionBook, body: BodyAxis, profiles: readonly
     centroidEnds: null,
     isBeside: false,
   };
+}
+
+/** A bow's points in the order of the member's ends. */
+function fromFirst(bow: readonly Vec3[] | null, [first]: readonly [Vec3, Vec3]): readonly Vec3[] | null {
+  if (bow === null) return null;
+  return distance(bow[0]!, first) <= distance(bow.at(-1)!, first) ? bow : [...bow].reverse();
 }
 
 /** A drawn axis, with the section of the body that runs along it, else of the material's profile. */
@@ -102,6 +111,7 @@ export function axisOfLine(
     section,
     noSection,
     isBent: !isStraight(line.rise, distance(line.from, line.to)),
+    bow: fromFirst(line.bow ?? null, ends),
     isRun: line.isRun ?? false,
     isTapered: body !== null && body.endProfile !== null,
     confidence: body?.measured?.confidence ?? null,

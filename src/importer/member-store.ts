@@ -37,6 +37,8 @@ export class MemberStore {
   readonly facts: FactsBook;
   private lines = new Float64Array(SIZE * FIRST_LINES);
   private count = 0;
+  /** Of the few that are bent, by where their lines stand. */
+  private readonly bows = new Map<number, readonly Vec3[]>();
   private readonly kinds = new Map<Kind['section'], Kind[]>();
 
   constructor(file: StepFile, facts: FactsBook) {
@@ -45,8 +47,17 @@ export class MemberStore {
   }
 
   /** @param centroidLine `line` itself where the two are the same */
-  add(id: number, globalId: string, part: number, line: Line, centroidLine: Line | null, kind: Kind): Member {
+  add(
+    id: number,
+    globalId: string,
+    part: number,
+    line: Line,
+    centroidLine: Line | null,
+    kind: Kind,
+    bow: readonly Vec3[] | null = null,
+  ): Member {
     const at = this.keepLine(line);
+    if (bow !== null) this.bows.set(at, bow);
     return new StoredMember(
       this,
       id,
@@ -64,6 +75,10 @@ export class MemberStore {
       [lines[at]!, lines[at + 1]!, lines[at + 2]!],
       [lines[at + 3]!, lines[at + 4]!, lines[at + 5]!],
     ];
+  }
+
+  bowAt(at: number): readonly Vec3[] | null {
+    return this.bows.get(at) ?? null;
   }
 
   private keepLine([from, to]: Line): number {
@@ -178,6 +193,10 @@ class StoredMember implements Member {
 
   get axis(): Line {
     return this.store.lineAt(this.at);
+  }
+
+  get bow(): readonly Vec3[] | null {
+    return this.store.bowAt(this.at);
   }
 
   get centroidAxis(): Line | null {

@@ -91,7 +91,7 @@ function membersOf(sources: Sources, id: number, globalId: string, world: Transf
       section: axis.section,
       material: materials.inSection(made.material, axis.section),
     };
-    members.push(sources.members.add(id, globalId, members.length, axis.ends, axis.centroidEnds, kind));
+    members.push(sources.members.add(id, globalId, members.length, axis.ends, axis.centroidEnds, kind, axis.bow));
   }
   return members;
 }

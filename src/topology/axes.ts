@@ -1,5 +1,5 @@
-import type { Member, SectionShape } from '../domain/member.ts';
-import { cross, dot, norm, scale, subtract, unit, type Vec3 } from '../domain/vector.ts';
+import { developedLength, type Member, type SectionShape } from '../domain/member.ts';
+import { add, along, cross, dot, norm, scale, subtract, unit, type Vec3 } from '../domain/vector.ts';
 import type { Assembly } from '../importer/evidence/types.ts';
 import { type JoinOptions, TOLERANCE, valueFor } from './options.ts';
 
@@ -13,7 +13,15 @@ export interface Axis {
   readonly finish: Vec3;
   /** Unit, from start to finish. */
   readonly direction: Vec3;
+  /** m, along the bow of a bent member. */
   readonly length: number;
+  /**
+   * Of a bent member the straight pieces that its line is read as, in a row: each is an axis whose own line is the piece's and
+   * on which places count from the start of the whole member. Null where the member is straight.
+   */
+  readonly facets: readonly Axis[] | null;
+  /** From where to where along the member it follows this line; without end where the member ends on it. */
+  readonly span: readonly [number, number];
   /** The greater extent of the section. */
   readonly depth: number;
   /** Of which it is part; two of one name are two. */
@@ -38,26 +46,60 @@ export function makeAxes(
   return members.map((member, index) => {
     const [start, finish] = member.axis;
     const line = subtract(finish, start);
-    const length = norm(line);
     const direction = unit(line);
-    if (direction === null || length < TOLERANCE.zeroLength) return null;
-    return {
+    if (direction === null || norm(line) < TOLERANCE.zeroLength) return null;
+    const length = member.bow ? developedLength(member) : norm(line);
+    const axis: Axis = {
       member: index,
       also: [],
       start,
       finish,
       direction,
       length,
+      facets: null,
+      span: ENDLESS,
       depth: member.section ? Math.max(member.section.depth, member.section.width) : TOLERANCE.unknownDepth,
       assembly: assemblies?.get(member.globalId) ?? assemblyByName(member),
       sectionName: member.section?.name ?? null,
       shape: member.section?.shape ?? 'other',
-      halfExtent: halfExtentOf(member, direction),
+      halfExtent: halfExtentOf(member, direction, member.zAxis),
       lean: LEANING.has(member.section?.shape ?? 'other') ? 0.5 : 0,
       reach: valueFor(reach, index),
       offset: valueFor(offset, index),
     };
+    return member.bow ? { ...axis, facets: facetsAlong(member.bow, axis, member) } : axis;
   });
+}
+
+const ENDLESS: readonly [number, number] = [Number.NEGATIVE_INFINITY, Number.POSITIVE_INFINITY];
+
+function facetsAlong(bow: readonly Vec3[], axis: Axis, member: Member): Axis[] {
+  let passed = 0;
+  const facets = bow.slice(1).flatMap((to, i): Axis[] => {
+    const line = subtract(to, bow[i]);
+    const direction = unit(line);
+    if (direction === null) return [];
+    const from = passed;
+    passed += norm(line);
+    const start = along(bow[i], direction, -from);
+    const halfExtent = halfExtentOf(member, direction, turnedWith(member.zAxis, axis.direction, direction));
+    const finish = along(start, direction, axis.length);
+    return [{ ...axis, start, finish, direction, halfExtent, span: [from, passed] }];
+  });
+  return facets.map((facet, i) => ({
+    ...facet,
+    span: [i === 0 ? ENDLESS[0] : facet.span[0], i === facets.length - 1 ? ENDLESS[1] : facet.span[1]],
+  }));
+}
+
+/** A direction square to `from`, turned as `from` is turned by the shortest way into `to`; all unit. */
+function turnedWith(z: Vec3, from: Vec3, to: Vec3): Vec3 {
+  const cosine = dot(from, to);
+  const pivot = cross(from, to);
+  // Half a turn has no shortest way: straight back, z may stay.
+  if (1 + cosine < 1e-9) return z;
+  const turned = add(scale(z, cosine), cross(pivot, z));
+  return along(turned, pivot, dot(pivot, z) / (1 + cosine));
 }
 
 /** Without the file's own word, what bears one name is taken for one assembly. */
@@ -68,11 +110,10 @@ function assemblyByName({ partOf, assembly }: Member): Assembly | null {
 /** Sections whose centroid lies off their middle: an equal angle's at 0.28 of its leg, a tee's at about 0.25 of its depth. */
 const LEANING: ReadonlySet<SectionShape> = new Set(['L', 'T', 'U', 'C', 'Z', 'other']);
 
-function halfExtentOf(member: Member, axis: Vec3): (direction: Vec3) => number {
+function halfExtentOf(member: Member, axis: Vec3, z: Vec3): (direction: Vec3) => number {
   const section = member.section;
   if (section === null) return () => TOLERANCE.unknownDepth / 2;
   if (section.shape === 'CHS' || section.shape === 'circle') return () => section.depth / 2;
-  const z = member.zAxis;
   const y = cross(z, axis);
   return (direction) => (Math.abs(dot(direction, y)) * section.width + Math.abs(dot(direction, z)) * section.depth) / 2;
 }
@@ -105,13 +146,6 @@ export const sineBetween = (a: Axis, b: Axis): number => norm(cross(a.direction,
 export function approachDirection(a: Axis, b: Axis): Vec3 {
   const square = subtract(a.direction, scale(b.direction, dot(a.direction, b.direction)));
   return unit(square) as Vec3;
-}
-
-/** Distance from a point to the axis between its ends, and where the nearest point lies along it. */
-export function distanceToAxis(point: Vec3, axis: Axis): { readonly distance: number; readonly s: number } {
-  const w = subtract(point, axis.start);
-  const s = Math.min(Math.max(dot(w, axis.direction), 0), axis.length);
-  return { distance: norm(subtract(w, scale(axis.direction, s))), s };
 }
 
 /** Two members alike that cross near the middle of both, at `s` and `t` along them, are crossed bracing laid back to back. */

@@ -5,6 +5,7 @@ import { between, distance, dot, subtract, type Vec3 } from '../domain/vector.ts
 import type { Axis } from './axes.ts';
 import { nameBars } from './bar-names.ts';
 import { barProperties, membersOfPiece } from './bar-properties.ts';
+import { strayOf } from './bows.ts';
 import { faithOf } from './faith.ts';
 import { endsOf, type PieceRun } from './pieces.ts';
 import { isFreeEnd, type Vertex, type VertexGraph } from './vertices.ts';
@@ -64,7 +65,9 @@ export function buildTruss(
   function makeBar(run: PieceRun, [from, to]: readonly [number, number], name: string): TrussBar {
     const own = [...new Set(run.flatMap((piece) => membersOfPiece(axes, piece.member)))];
     const length = distance(positionOf(ordered[from]), positionOf(ordered[to]));
-    return { name, members: own, from, to, length, ...barProperties(run, members, axes, graph) };
+    const strays = strayOf(run, axes, graph);
+    const bow = strays === null ? {} : { strays };
+    return { name, members: own, from, to, length, ...bow, ...barProperties(run, members, axes, graph) };
   }
 
   function makeNode(vertex: number): TrussNode {

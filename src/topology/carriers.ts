@@ -1,7 +1,9 @@
+import { facetAt } from './along-axes.ts';
 import type { Axis } from './axes.ts';
+import { offCourse } from './bows.ts';
 import type { JoinOptions } from './options.ts';
 import { straightLines } from './straight-lines.ts';
-import { isFreeEnd, type Vertex, type VertexGraph } from './vertices.ts';
+import { isFreeEnd, stationOn, type Vertex, type VertexGraph } from './vertices.ts';
 
 /** Slope above which a member that frames in from below and ends free is a column standing on the ground: 60 degrees. */
 const STEEP = Math.sin(Math.PI / 3);
@@ -19,6 +21,7 @@ export function findCarriers(
   const lines = straightLines(graph, axes);
   const frame: Frame = { graph, axes, lines, meetElsewhere: meetings(graph, lines) };
   const carriers = graph.vertices.map((_, index) => (options.chords === 'strict' ? null : carrierOf(index, frame)));
+  for (const vertex of offCourse(graph, axes, carriers)) carriers[vertex] = null;
   breakCycles(graph, carriers);
   return carriers;
 }
@@ -74,7 +77,7 @@ function isTriangulated(runner: number, index: number, frame: Frame): boolean {
   for (const { member } of vertex.stations) {
     if (member === runner || vertex.seated.has(member)) continue;
     for (const far of neighboursOn(chains[member], index).map((next) => beyondSplices(next, member, frame))) {
-      if (isFoot(vertices[far], vertex, axes[member])) return true;
+      if (isFoot(vertices[far], vertex, axes[member], stationOn(vertex, member))) return true;
       for (const { member: third } of vertices[far].stations) {
         if (lines[third] === lines[member] || lines[third] === lines[runner]) continue;
         if (meetElsewhere(lines[third], lines[runner], index)) return true;
@@ -108,12 +111,12 @@ function isLastBeforeTail(runner: number, index: number, { graph: { vertices, ch
   const chain = chains[runner];
   const at = chain.indexOf(index);
   const isTail = (end: number, isLast: boolean): boolean =>
-    isLast && isFreeEnd(vertices[end]) && !isFoot(vertices[end], vertex, axes[runner]);
+    isLast && isFreeEnd(vertices[end]) && !isFoot(vertices[end], vertex, axes[runner], stationOn(vertex, runner));
   return isTail(chain[at - 1], at === 1) !== isTail(chain[at + 1], at === chain.length - 2);
 }
 
-function isFoot(far: Vertex, near: Vertex, axis: Axis | null): boolean {
-  return axis !== null && isFreeEnd(far) && far.at[2] < near.at[2] && Math.abs(axis.direction[2]) > STEEP;
+function isFoot(far: Vertex, near: Vertex, axis: Axis | null, s: number): boolean {
+  return axis !== null && isFreeEnd(far) && far.at[2] < near.at[2] && Math.abs(facetAt(axis, s).direction[2]) > STEEP;
 }
 
 function neighboursOn(chain: readonly number[], vertex: number): number[] {

@@ -1,4 +1,5 @@
 import { along, between, dot, scale, subtract, type Vec3 } from '../domain/vector.ts';
+import { boxAround, facetsOf, mayMeet, rangeOf } from './along-axes.ts';
 import { type Axis, approach, approachDirection, looksCrossed, sineBetween } from './axes.ts';
 import { type PairEvidence, pairKey } from './evidence.ts';
 import { type JoinOptions, TOLERANCE } from './options.ts';
@@ -55,26 +56,20 @@ export function findContacts(
     const [a, b] = [axes[Math.floor(key / axes.length)], axes[key % axes.length]];
     if (a !== null && b !== null) accept(a, b, words);
   }
-  return contacts.sort((p, q) => p.a - q.a || p.b - q.b);
+  return contacts.sort((p, q) => p.a - q.a || p.b - q.b || p.s - q.s);
 
   function accept(a: Axis, b: Axis, words: readonly string[]): void {
     const widening = words.length === 0 ? wideningFor(a, b) : TOLERANCE.withEvidence;
-    const judged = judgePair(a, b, options, widening);
-    if (judged === null || judged.ratio > 1) return;
-    const by = inOneAssembly(a, b) ? [...words, `assembly ${a.assembly?.name ?? a.assembly?.globalId}`] : words;
-    if (by.length === 0) contacts.push(judged.contact);
-    else contacts.push({ ...judged.contact, by, isNear: (judgePair(a, b, options, 1)?.ratio ?? 2) <= 1 });
+    for (const { contact, ratio, lines } of judgeMeetings(a, b, options, widening)) {
+      if (ratio > 1) continue;
+      const by = inOneAssembly(a, b) ? [...words, `assembly ${a.assembly?.name ?? a.assembly?.globalId}`] : words;
+      if (by.length === 0) contacts.push(contact);
+      else contacts.push({ ...contact, by, isNear: (judgePair(...lines, options, 1)?.ratio ?? 2) <= 1 });
+    }
   }
 }
 
 const NO_WORDS: readonly string[] = [];
-
-/** The box of an axis, widened on all sides. */
-export function boxAround(axis: Axis, margin: number): number[] {
-  const least = [0, 1, 2].map((k) => Math.min(axis.start[k], axis.finish[k]) - margin);
-  const greatest = [0, 1, 2].map((k) => Math.max(axis.start[k], axis.finish[k]) + margin);
-  return [...least, ...greatest];
-}
 
 /**
  * No pair accepts a miss greater than the sum of its two axes' largest reaches: the one's notch and the other's half
@@ -87,8 +82,50 @@ export function largestReach(axis: Axis): number {
   return Math.max(bySection, (axis.reach ?? 0) * TOLERANCE.sameAssembly, (axis.offset ?? 0) * TOLERANCE.sameAssembly);
 }
 
+/** A place where two members come together, with the lines that they follow there. */
+export interface Meeting extends JudgedContact {
+  readonly lines: readonly [Axis, Axis];
+}
+
+/** Wherever two members come together: straight ones in one place at most, an arch and its tie in two. */
+export function judgeMeetings(a: Axis, b: Axis, options: JoinOptions, widening = wideningFor(a, b)): Meeting[] {
+  if (a.facets === null && b.facets === null) {
+    const judged = judgePair(a, b, options, widening);
+    return judged === null ? [] : [{ ...judged, lines: [a, b] }];
+  }
+  const margin = TOLERANCE.nearMiss * (largestReach(a) + largestReach(b));
+  const found: { readonly meeting: Meeting; readonly aside: number }[] = [];
+  for (const p of facetsOf(a)) {
+    for (const q of facetsOf(b)) {
+      if (!mayMeet(p, q, margin)) continue;
+      const judged = judgePair(p, q, options, widening);
+      if (judged === null) continue;
+      const aside = Math.max(asideOf(judged.contact.s, p), asideOf(judged.contact.t, q));
+      if (aside <= 1) found.push({ meeting: { ...judged, lines: [p, q] }, aside });
+    }
+  }
+  found.sort((p, q) => p.aside - q.aside || p.meeting.ratio - q.meeting.ratio);
+  // Where two facets of one member meet a line next to each other, the one that it crosses within its own length counts.
+  const size = Math.max(a.depth, b.depth, TOLERANCE.leastJoint);
+  const kept: Meeting[] = [];
+  for (const { meeting } of found) {
+    const { s, t } = meeting.contact;
+    const isKnown = kept.some(({ contact }) => Math.abs(contact.s - s) < size && Math.abs(contact.t - t) < size);
+    if (!isKnown) kept.push(meeting);
+  }
+  return kept;
+}
+
+/** How far a place lies outside of a facet, as a share of half its length: beyond 1 it is another facet's. */
+function asideOf(s: number, facet: Axis): number {
+  const outside = Math.max(facet.span[0] - s, s - facet.span[1], 0);
+  if (outside === 0) return 0;
+  const [from, to] = rangeOf(facet);
+  return (2 * outside) / (to - from);
+}
+
 /**
- * How two axes come together, if they do at all. Reach and offset, from the brief or the sections, are multiplied by
+ * How two straight axes come together, if they do at all. Reach and offset, from the brief or the sections, are multiplied by
  * `widening`.
  */
 export function judgePair(a: Axis, b: Axis, options: JoinOptions, widening = wideningFor(a, b)): JudgedContact | null {
@@ -147,6 +184,7 @@ function judgeParallel(a: Axis, b: Axis, widening: number): JudgedContact | null
   let best: JudgedContact | null = null;
   for (const endA of [0, 1]) {
     const endB = sameWay ? 1 - endA : endA;
+    if (!endsHere(a, endA) || !endsHere(b, endB)) continue;
     const p = endA === 0 ? a.start : a.finish;
     const q = endB === 0 ? b.start : b.finish;
     const outward = scale(a.direction, endA === 0 ? -1 : 1);
@@ -166,6 +204,9 @@ function judgeParallel(a: Axis, b: Axis, widening: number): JudgedContact | null
   }
   return best;
 }
+
+/** Whether a bent member's start (0) or finish (1) lies on this facet; a straight one's always does. */
+const endsHere = ({ span }: Axis, end: number): boolean => !Number.isFinite(span[end]);
 
 /** How far an end of `own` may be carried to a member that has this half extent on its way (METHODS 2.2). */
 function reachOf(own: Axis, halfExtentMet: number, sine: number): number {

@@ -1,10 +1,10 @@
 import { type Finding, finding } from '../domain/finding.ts';
 import type { Member } from '../domain/member.ts';
 import type { PlaceNamer } from '../domain/place.ts';
-import { along, between, dot, meanOf, norm, scale, subtract, unit, type Vec3 } from '../domain/vector.ts';
+import { add, along, dot, meanOf, norm, scale, subtract, unit, type Vec3 } from '../domain/vector.ts';
 import { millimetres } from '../domain/words.ts';
+import { boxAround, chordOf, middleOf } from './along-axes.ts';
 import { type Axis, sineBetween } from './axes.ts';
-import { boxAround } from './contacts.ts';
 import { labelOf } from './labels.ts';
 import type { JoinOptions } from './options.ts';
 import { indexBoxes, searchBoxes } from './spatial-index.ts';
@@ -20,6 +20,8 @@ const COINCIDENT = 1e-4;
 const SAME_LENGTH = 0.5;
 /** Depths of one section, named or rounded in two ways. */
 const SAME_DEPTH = 0.9;
+/** Two that bow alike do so to this share of their depth. */
+const SAME_BOW = 0.25;
 /** Members in line may run into each other by this share of their depth, as mitred and notched ends do. */
 const NOTCH = 1.5;
 
@@ -80,7 +82,21 @@ function relatedPairs(axes: readonly (Axis | null)[]) {
   );
 }
 
+/** Bent members are doubles where their chords are and they bow alike. */
 function relationOf(a: Axis, b: Axis): Relation | null {
+  if (a.facets === null && b.facets === null) return relationOfStraight(a, b);
+  if (a.facets === null || b.facets === null) return null;
+  const [p, q] = [chordOf(a), chordOf(b)];
+  const relation = relationOfStraight(p, q);
+  if (relation === null || relation === 'overlap') return null;
+  const bows = [
+    [a, p],
+    [b, q],
+  ].map(([whole, chord]) => subtract(middleOf(whole), middleOf(chord)));
+  return norm(subtract(bows[0], bows[1])) < SAME_BOW * Math.max(a.depth, b.depth) ? relation : null;
+}
+
+function relationOfStraight(a: Axis, b: Axis): Relation | null {
   if (sineBetween(a, b) > PARALLEL) return null;
   const overlap = overlapOf(a, b);
   const depth = Math.max(a.depth, b.depth);
@@ -107,13 +123,11 @@ function overlapOf(a: Axis, b: Axis): number {
   return Math.min(Math.max(...stations), a.length) - Math.max(Math.min(...stations), 0);
 }
 
-/** From the line of `a`, square to it, to the middle of `b`. */
+/** From the line of `a`, square to it, to the middle of `b`; of bent ones, from chord to chord. */
 function asideOf(a: Axis, b: Axis): Vec3 {
-  const arm = subtract(middleOf(b), a.start);
+  const arm = subtract(middleOf(chordOf(b)), a.start);
   return subtract(arm, scale(a.direction, dot(arm, a.direction)));
 }
-
-const middleOf = (axis: Axis): Vec3 => between(axis.start, axis.finish, 0.5);
 
 function sharedMiddle(a: Axis, b: Axis): Vec3 {
   const stations = [b.start, b.finish].map((p) => dot(subtract(p, a.start), a.direction));
@@ -132,16 +146,18 @@ function asOne(a: Axis, b: Axis): Axis {
   const finish = meanOf([a.finish, sameWay ? b.finish : b.start]);
   const half = scale(asideOf(a, b), 0.5);
   const line = subtract(finish, start);
-  return {
-    ...a,
+  const halfExtentWith = (own: Axis) => (direction: Vec3) =>
+    Math.abs(dot(half, direction)) + Math.max(own.halfExtent(direction), b.halfExtent(direction));
+  const common = { also: [b.member], direction: unit(line) ?? a.direction, halfExtent: halfExtentWith(a) };
+  if (a.facets === null) return { ...a, ...common, start, finish, length: norm(line) };
+  const beside = (own: Axis): Axis => ({
+    ...own,
     also: [b.member],
-    start,
-    finish,
-    direction: unit(line) ?? a.direction,
-    length: norm(line),
-    halfExtent: (direction) =>
-      Math.abs(dot(half, direction)) + Math.max(a.halfExtent(direction), b.halfExtent(direction)),
-  };
+    start: add(own.start, half),
+    finish: add(own.finish, half),
+    halfExtent: halfExtentWith(own),
+  });
+  return { ...beside(a), facets: a.facets.map(beside) };
 }
 
 const dataOf = (member: Member): number =>

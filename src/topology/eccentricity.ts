@@ -3,6 +3,7 @@ import type { Member } from '../domain/member.ts';
 import type { Eccentricity, Truss } from '../domain/truss.ts';
 import { along, cross, dot, norm, scale, subtract, unit, type Vec3 } from '../domain/vector.ts';
 import { millimetres } from '../domain/words.ts';
+import { facetAt } from './along-axes.ts';
 import { type Axis, approach, sineBetween } from './axes.ts';
 import { labelOf } from './labels.ts';
 import { TOLERANCE } from './options.ts';
@@ -17,8 +18,8 @@ const OUTER = 0.25;
 
 /** The eccentricities of a joint as drawn: of braces that meet off the only chord's axis, and of members that sit. */
 export function eccentricitiesOf(vertex: Vertex, axes: readonly (Axis | null)[]): Eccentricity[] {
-  const seats = vertex.stations.flatMap(({ member }): Eccentricity[] => {
-    const axis = axes[member];
+  const seats = vertex.stations.flatMap(({ member, s }): Eccentricity[] => {
+    const axis = lineOf(axes[member], s);
     if (axis === null || !vertex.seated.has(member)) return [];
     return [{ of: 'seat', member, others: [], e: distanceToLine(vertex.at, axis), share: null }];
   });
@@ -52,8 +53,8 @@ export function offsetJointFindings(truss: Truss, members: readonly Member[]): F
 }
 
 function bracesOn(vertex: Vertex, chord: Axis, axes: readonly (Axis | null)[]): Axis[] {
-  return vertex.stations.flatMap(({ member, role }) => {
-    const axis = axes[member];
+  return vertex.stations.flatMap(({ member, role, s }) => {
+    const axis = lineOf(axes[member], s);
     const frames = role !== 'through' && !vertex.seated.has(member) && axis !== null;
     return frames && sineBetween(axis, chord) > TOLERANCE.leastSine ? [axis] : [];
   });
@@ -61,8 +62,11 @@ function bracesOn(vertex: Vertex, chord: Axis, axes: readonly (Axis | null)[]): 
 
 function onlyChord(vertex: Vertex, axes: readonly (Axis | null)[]): Axis | null {
   const through = vertex.stations.filter(({ member, role }) => role === 'through' && !vertex.seated.has(member));
-  return through.length === 1 ? axes[through[0].member] : null;
+  return through.length === 1 ? lineOf(axes[through[0].member], through[0].s) : null;
 }
+
+/** The line that a member follows at the joint. */
+const lineOf = (axis: Axis | null, s: number): Axis | null => (axis === null ? null : facetAt(axis, s));
 
 type OfBraces = Eccentricity & { readonly share: number };
 

@@ -9,6 +9,8 @@ export interface EvidenceAxis {
   readonly finish: Vec3;
   /** Half the section's extent in a unit direction, m. */
   readonly halfExtent: (direction: Vec3) => number;
+  /** The straight pieces of a bent member. */
+  readonly pieces?: readonly EvidenceAxis[];
 }
 
 /** Why two members are taken to be fastened to one another, by `pairKey`: "plate GP-12", "IfcRelConnectsElements"; sorted, none twice. */
@@ -136,12 +138,13 @@ function touchesOf(plates: readonly Plate[], axes: readonly (EvidenceAxis | null
   });
   const index = indexBoxes(boxes);
   axes.forEach((axis, member) => {
-    if (axis === null) return;
-    const halves = UPRIGHT.map((direction) => axis.halfExtent(direction));
-    searchBoxes(index, boundsOfLine(axis.start, axis.finish, halves), (plate) => {
-      const touch = touchOf(plates[plate]!, axis, member, margin);
-      if (touch !== null) touched[plate]!.push(touch);
-    });
+    for (const piece of axis === null ? [] : (axis.pieces ?? [axis])) {
+      const halves = UPRIGHT.map((direction) => piece.halfExtent(direction));
+      searchBoxes(index, boundsOfLine(piece.start, piece.finish, halves), (plate) => {
+        const touch = touchOf(plates[plate]!, piece, member, margin);
+        if (touch !== null) touched[plate]!.push(touch);
+      });
+    }
   });
   return touched;
 }

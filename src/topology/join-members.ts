@@ -6,7 +6,9 @@ import type { Joining, Truss } from '../domain/truss.ts';
 import { between } from '../domain/vector.ts';
 import { millimetres } from '../domain/words.ts';
 import type { Evidence } from '../importer/evidence/types.ts';
+import { drawnPieces } from './along-axes.ts';
 import { type Axis, makeAxes } from './axes.ts';
+import { bentFindings } from './bent-findings.ts';
 import { buildTruss } from './build-truss.ts';
 import { findCarriers } from './carriers.ts';
 import { type Contact, findContacts } from './contacts.ts';
@@ -92,6 +94,7 @@ export function joinMembers(
     ...closeJointFindings(cut, members, axes, placeOf),
     ...offsetJointFindings(cut, members),
     ...carriedFindings(cut, members),
+    ...bentFindings(cut, members, placeOf),
     ...axisMovedFindings(members, cut, placeOf),
   ];
   return {
@@ -112,7 +115,7 @@ function trussOf(
   const joining = contacts.filter(({ kind }) => kind !== 'crossing' || options.crossings === 'joined');
   const { graph, refused, contacts: kept } = untwisted(axes, joining);
   const pieces = cutPieces(graph, findCarriers(graph, axes, options));
-  const splices = findSplices(pieces, graph.vertices);
+  const splices = findSplices(pieces, graph.vertices, axes);
   const runs = joinSplices(pieces, splices, namedSplices(splices, graph.vertices, namedPlaces), options.chords);
   const joiningOf = (vertex: Vertex): Joining => ({
     by: reasonsFor(vertex, kept),
@@ -158,7 +161,8 @@ function pairEvidence(
 ): PairEvidence {
   if (evidence === null) return new Map();
   const globalIds = members.map((member) => member.globalId);
-  return united(touchingPlates(evidence.plates, axes), relatedMembers(evidence.related, globalIds));
+  const lines = axes.map((axis) => (axis?.facets ? { ...axis, pieces: drawnPieces(axis) } : axis));
+  return united(touchingPlates(evidence.plates, lines), relatedMembers(evidence.related, globalIds));
 }
 
 /** Beyond this turn (5 degrees) the truss is no longer what was drawn. */

@@ -1,4 +1,5 @@
-import { along, distance, meanOf, type Vec3 } from '../domain/vector.ts';
+import { distance, meanOf, type Vec3 } from '../domain/vector.ts';
+import { pointAt } from './along-axes.ts';
 import type { Axis } from './axes.ts';
 import type { Contact } from './contacts.ts';
 import { TOLERANCE } from './options.ts';
@@ -122,7 +123,7 @@ class Groups {
 function seatHeight({ a, b, s, t }: Contact, axes: readonly (Axis | null)[]): number {
   const [first, second] = [axes[a], axes[b]];
   if (first === null || second === null) return 0;
-  return distance(along(first.start, first.direction, s), along(second.start, second.direction, t));
+  return distance(pointAt(first, s), pointAt(second, t));
 }
 
 /**
@@ -168,4 +169,4 @@ function framedIn(group: readonly Station[], inside: readonly Contact[]): Set<nu
   return framed;
 }
 
-const heightAt = (axis: Axis | null, s: number): number => (axis ? axis.start[2] + axis.direction[2] * s : 0);
+const heightAt = (axis: Axis | null, s: number): number => (axis ? pointAt(axis, s)[2] : 0);

@@ -1,6 +1,6 @@
 import { dot, norm, scale, subtract } from '../domain/vector.ts';
+import { boxAround, distanceToAxis, facetAt } from './along-axes.ts';
 import { type Axis, sineBetween } from './axes.ts';
-import { boxAround } from './contacts.ts';
 import type { Overhang } from './overhangs.ts';
 import { indexBoxes, searchBoxes } from './spatial-index.ts';
 
@@ -22,11 +22,13 @@ export function withoutLaps(tails: readonly Overhang[], axes: readonly (Axis | n
     let isLap = false;
     searchBoxes(index, [...tail.at, ...tail.at], (i) => {
       const other = present[i];
-      isLap ||= !tail.members.includes(other.member) && liesAlong(tail, own, other);
+      isLap ||= !tail.members.includes(other.member) && liesAlong(tail, lineNear(own, tail), lineNear(other, tail));
     });
     return !isLap;
   });
 }
+
+const lineNear = (axis: Axis, { at }: Overhang): Axis => facetAt(axis, distanceToAxis(at, axis).s);
 
 /** Whether the free end lies beside the other, near where that one begins. */
 function liesAlong({ at, length }: Overhang, own: Axis, other: Axis): boolean {

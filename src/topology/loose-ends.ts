@@ -4,8 +4,9 @@ import type { PlaceNamer } from '../domain/place.ts';
 import type { Truss } from '../domain/truss.ts';
 import { distance, type Vec3 } from '../domain/vector.ts';
 import { millimetres } from '../domain/words.ts';
-import { type Axis, distanceToAxis } from './axes.ts';
-import { boxAround, type Contact, judgePair, largestReach } from './contacts.ts';
+import { boxAround, distanceToAxis } from './along-axes.ts';
+import type { Axis } from './axes.ts';
+import { type Contact, judgeMeetings, largestReach } from './contacts.ts';
 import { labelOf } from './labels.ts';
 import { type JoinOptions, TOLERANCE } from './options.ts';
 import { isFreeEnd, type Overhang } from './overhangs.ts';
@@ -90,14 +91,15 @@ function nearMissSearch(axes: readonly (Axis | null)[], options: JoinOptions): (
     searchBoxes(index, box, (i) => {
       const other = present[i];
       if (other === axis) return;
-      const judged = judgePair(axis, other, options);
-      if (judged === null || judged.ratio > TOLERANCE.nearMiss || judged.contact.kind === 'crossing') return;
-      const s = stationOf(judged.contact, axis.member);
-      if (s < axis.length / 2 !== atStart) return;
       const { distance: gap } = distanceToAxis(at, other);
       if (gap > TOLERANCE.nearMiss * largestGap(axis, other)) return;
-      const miss = { end, other, gap, ...missOf(judged.contact, s, axis) };
-      found.push({ miss, ratio: judged.ratio, s, runsOn: runsThrough(judged.contact, other) });
+      for (const { contact, ratio, lines } of judgeMeetings(axis, other, options)) {
+        if (ratio > TOLERANCE.nearMiss || contact.kind === 'crossing') continue;
+        const s = stationOf(contact, axis.member);
+        if (s < axis.length / 2 !== atStart) continue;
+        const miss = { end, other, gap, ...missOf(contact, s, lines[0]) };
+        found.push({ miss, ratio, s, runsOn: runsThrough(contact, other) });
+      }
     });
     return likeliest(found)?.miss ?? null;
   };

@@ -1,14 +1,20 @@
 import type { NamedPlace } from '../brief/named-places.ts';
 import { pushTo } from '../domain/group.ts';
-import { cross, distance, dot, norm, subtract, unit, type Vec3 } from '../domain/vector.ts';
+import { cross, distance, dot, norm, scale, subtract, unit, type Vec3 } from '../domain/vector.ts';
+import { facetAt } from './along-axes.ts';
+import type { Axis } from './axes.ts';
 import type { Piece } from './pieces.ts';
-import type { Vertex } from './vertices.ts';
+import { stationOn, type Vertex } from './vertices.ts';
 
 /** Sine of the kink (5 degrees) up to which two members end to end with nothing else at the node are one bar. */
 const STRAIGHT = 0.087;
 
 /** Vertices where two members go on in line and nothing else meets them: no nodes, as if one member ran through. */
-export function findSplices(pieces: readonly Piece[], vertices: readonly Vertex[]): Set<number> {
+export function findSplices(
+  pieces: readonly Piece[],
+  vertices: readonly Vertex[],
+  axes: readonly (Axis | null)[],
+): Set<number> {
   const at = new Map<number, Piece[]>();
   for (const piece of pieces) for (const vertex of [piece.from, piece.to]) pushTo(at, vertex, piece);
   const splices = new Set<number>();
@@ -21,6 +27,12 @@ export function findSplices(pieces: readonly Piece[], vertices: readonly Vertex[
 
   function leaving(piece: Piece, vertex: number): Vec3 {
     const other = piece.from === vertex ? piece.to : piece.from;
+    const axis = axes[piece.member];
+    // A bent member leaves along its curve, not along the bar.
+    if (axis?.facets) {
+      const { direction } = facetAt(axis, stationOn(vertices[vertex], piece.member));
+      return scale(direction, piece.from === vertex ? 1 : -1);
+    }
     return subtract(vertices[other].at, vertices[vertex].at);
   }
 }

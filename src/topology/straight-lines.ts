@@ -1,3 +1,4 @@
+import { facetAt } from './along-axes.ts';
 import { type Axis, sineBetween } from './axes.ts';
 import type { VertexGraph } from './vertices.ts';
 
@@ -18,17 +19,19 @@ export function straightLines(graph: VertexGraph, axes: readonly (Axis | null)[]
   return lines;
 }
 
+const lineOf = (axis: Axis | null, s: number): Axis | null => (axis === null ? null : facetAt(axis, s));
+
 /** The members that carry each member's line on at its ends. */
 function continuations({ vertices, chains }: VertexGraph, axes: readonly (Axis | null)[]): number[][] {
   const next: number[][] = chains.map(() => []);
   for (const { stations } of vertices) {
-    const ends = stations.filter(({ role }) => role !== 'through').map(({ member }) => member);
+    const ends = stations.filter(({ role }) => role !== 'through');
     ends.forEach((a, i) => {
       for (const b of ends.slice(i + 1)) {
-        const [first, second] = [axes[a], axes[b]];
+        const [first, second] = [a, b].map(({ member, s }) => lineOf(axes[member], s));
         if (first === null || second === null || sineBetween(first, second) > IN_LINE) continue;
-        next[a].push(b);
-        next[b].push(a);
+        next[a.member].push(b.member);
+        next[b.member].push(a.member);
       }
     });
   }

@@ -1,7 +1,8 @@
-import { dot, norm, subtract, type Vec3 } from '../domain/vector.ts';
+import { dot, norm, subtract, unit, type Vec3 } from '../domain/vector.ts';
+import { distanceToLine, pointAt } from './along-axes.ts';
 import type { Axis } from './axes.ts';
 import type { Contact } from './contacts.ts';
-import { isFreeEnd, type VertexGraph } from './vertices.ts';
+import { isFreeEnd, stationOn, type Vertex, type VertexGraph } from './vertices.ts';
 
 /** Cosine of 20 degrees: an axis turned by more is not the member that was drawn. */
 const LEAST_COSINE = Math.cos(Math.PI / 9);
@@ -21,7 +22,11 @@ export function withoutTwisting(
     const chain = graph.chains[member];
     const [first, last] = [chain[0], chain[chain.length - 1]];
     const line = subtract(graph.vertices[last].at, graph.vertices[first].at);
-    if (dot(line, axis.direction) >= LEAST_COSINE * norm(line)) return;
+    if (
+      dot(line, drawnDirection(axis, member, graph.vertices[first], graph.vertices[last])) >=
+      LEAST_COSINE * norm(line)
+    )
+      return;
     const worse = offAxis(graph.vertices[first].at, axis) > offAxis(graph.vertices[last].at, axis) ? first : last;
     const given = isFreeEnd(graph.vertices[worse]) ? (worse === first ? last : first) : worse;
     const station = graph.vertices[given].stations.find((one) => one.member === member);
@@ -30,7 +35,11 @@ export function withoutTwisting(
   return dropped.size === 0 ? null : contacts.filter((_, index) => !dropped.has(index));
 }
 
-function offAxis(point: Vec3, axis: Axis): number {
-  const arm = subtract(point, axis.start);
-  return Math.sqrt(Math.max(0, dot(arm, arm) - dot(arm, axis.direction) ** 2));
+/** Of a bent member, between the places on its curve that its ends were cut or carried to. */
+function drawnDirection(axis: Axis, member: number, first: Vertex, last: Vertex): Vec3 {
+  if (axis.facets === null) return axis.direction;
+  const [from, to] = [first, last].map((vertex) => pointAt(axis, stationOn(vertex, member)));
+  return unit(subtract(to, from)) ?? axis.direction;
 }
+
+const offAxis = (point: Vec3, axis: Axis): number => distanceToLine(point, axis).distance;

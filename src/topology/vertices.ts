@@ -44,4 +44,9 @@ export function makeVertices(axes: readonly (Axis | null)[], joints: readonly Jo
   }
 }
 
+/** Where along a member that comes to it a vertex was found, m from the member's start. */
+export function stationOn(vertex: Vertex, member: number): number {
+  return vertex.stations.find((station) => station.member === member)?.s ?? 0;
+}
+
 export const isFreeEnd = (vertex: Vertex): boolean => vertex.stations.length === 1;

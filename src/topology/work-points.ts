@@ -1,7 +1,9 @@
 import { EigenvalueDecomposition, Matrix } from 'ml-matrix';
 import { along, dot, meanOf, subtract, type Vec3 } from '../domain/vector.ts';
+import { facetAt, pointAt } from './along-axes.ts';
 import type { Axis } from './axes.ts';
 import type { Joint } from './joints.ts';
+import type { Station } from './stations.ts';
 
 /** Below this share of the stiffest direction the axes do not say where along it they meet. */
 const UNDETERMINED = 0.03;
@@ -13,7 +15,7 @@ const UNDETERMINED = 0.03;
 export function workPoint(joint: Joint, axes: readonly (Axis | null)[]): Vec3 {
   const lines = joint.stations
     .filter((station) => !joint.seated.has(station.member))
-    .map((station) => ({ axis: axes[station.member] as Axis, station }));
+    .map((station) => ({ axis: lineAt(axes, station), station }));
   const through = lines.filter(({ station }) => station.role === 'through');
   const drawn = meanOf(
     lines.map(({ axis, station }) => along(axis.start, axis.direction, clampToAxis(station.s, axis))),
@@ -28,15 +30,31 @@ export function workPoint(joint: Joint, axes: readonly (Axis | null)[]): Vec3 {
       through.map(({ axis }) => axis),
       drawn,
     );
-  const runner = through[0].axis;
+  const [{ axis: runner, station }] = through;
   const others = lines.filter(({ axis }) => axis !== runner).map(({ axis }) => axis);
-  return nearestOnLine(runner, others, through[0].station.s);
+  return nearestOnRunner(axes[station.member] as Axis, others, station.s);
+}
+
+/** The line that the station's member follows there. */
+const lineAt = (axes: readonly (Axis | null)[], { member, s }: Station): Axis => facetAt(axes[member] as Axis, s);
+
+/** So often the nearest point may move on to another facet of a bent member. */
+const MOST_STEPS = 4;
+
+/** The point of a member that is nearest to the other lines, near `s` along it. */
+function nearestOnRunner(runner: Axis, others: readonly Axis[], s: number): Vec3 {
+  let at = nearestOnLine(facetAt(runner, s), others, s);
+  for (let step = 1; step < MOST_STEPS && facetAt(runner, at) !== facetAt(runner, s); step++) {
+    s = at;
+    at = nearestOnLine(facetAt(runner, s), others, s);
+  }
+  return pointAt(runner, at);
 }
 
 const clampToAxis = (s: number, axis: Axis): number => Math.min(Math.max(s, 0), axis.length);
 
-/** Minimises the sum of squared distances from a point on `runner` to the other lines. */
-function nearestOnLine(runner: Axis, others: readonly Axis[], fallback: number): Vec3 {
+/** How far along `runner` the sum of squared distances to the other lines is least. */
+function nearestOnLine(runner: Axis, others: readonly Axis[], fallback: number): number {
   let stiffness = 0;
   let pull = 0;
   for (const other of others) {
@@ -45,8 +63,7 @@ function nearestOnLine(runner: Axis, others: readonly Axis[], fallback: number):
     stiffness += 1 - uv * uv;
     pull += dot(w, runner.direction) - uv * dot(w, other.direction);
   }
-  const s = stiffness > UNDETERMINED * Math.max(others.length, 1) ? pull / stiffness : fallback;
-  return along(runner.start, runner.direction, s);
+  return stiffness > UNDETERMINED * Math.max(others.length, 1) ? pull / stiffness : fallback;
 }
 
 /** Minimises the sum of squared distances to the lines; moves from `start` only in the directions they determine. */

@@ -1,6 +1,7 @@
 import { describe, expect, it } from 'vitest';
 import type { Vec3 } from '../../src/domain/vector.ts';
 import type { ImportOptions } from '../../src/importer/options.ts';
+import { expectBow } from './support/expect-bow.ts';
 import { beamWith, importText } from './support/model-text.ts';
 
 function only(data: string, schema = 'IFC4', options: Partial<ImportOptions> = {}) {
@@ -239,7 +240,7 @@ ${extrusion(102, '$', '#13', '3000.')}
     expect(member.section?.area).toBeCloseTo(Math.PI * (0.05 ** 2 - 0.045 ** 2), 12);
   });
 
-  it('takes the chord of a revolved body, and says that it is bent', () => {
+  it('takes the chord of a revolved body, with its arc', () => {
     const model = importText(
       beamWith({
         body: '#100',
@@ -250,7 +251,7 @@ ${extrusion(102, '$', '#13', '3000.')}
     );
     expectEnds(model.members[0]!.axis, [0, 0, 0], [2, 0, 2]);
     expect(model.members[0]!.section?.area).toBeCloseTo(0.02, 10);
-    expect(model.findings.map((f) => f.code)).toContain('bent-axis');
+    expectBow(model.members[0]!, [2, 0, 0], 2, Math.PI / 2);
   });
 
   it.each([
@@ -367,7 +368,7 @@ describe('a drawn Axis', () => {
     expect(member.material).toMatchObject({ name: 'S355', yieldStrength: 315e6, from: 'name' });
   });
 
-  it('that is kinked or an arc becomes its chord with a finding', () => {
+  it('that is an arc becomes its chord, with the arc', () => {
     const model = importText(
       beamWith({
         axis: '#200',
@@ -377,6 +378,8 @@ describe('a drawn Axis', () => {
       }),
     );
     expectEnds(model.members[0]!.axis, [0, 0, 0], [0, 0, 3]);
-    expect(model.findings.map((f) => f.code)).toContain('bent-axis');
+    // The circle through three points: (c/2)^2 = h (2 r - h).
+    const radius = (1.5 ** 2 + 0.2 ** 2) / (2 * 0.2);
+    expectBow(model.members[0]!, [0.2 - radius, 0, 1.5], radius, 2 * Math.asin(1.5 / radius));
   });
 });

@@ -44,7 +44,7 @@ describe('a line with bends', () => {
     expect(codes(model)).toEqual(['bent-axis']);
   });
 
-  it('that is a bow in facets, or an arc, is its chord', () => {
+  it('that is a bow in facets is its chord, with the bow', () => {
     const bow = Array.from({ length: 13 }, (_, i) => {
       const t = (i - 6) * 0.05;
       return `${5000 * Math.sin(t)},0.,${5000 * Math.cos(t) - 5000}`;
@@ -52,7 +52,10 @@ describe('a line with bends', () => {
     const model = disk(bow.map((p) => p.replace(/(^|,)(-?\d+)(?=,|$)/g, '$1$2.')));
     expect(model.members).toHaveLength(1);
     expect(distance(...model.members[0]!.axis)).toBeCloseTo(10 * Math.sin(0.3), 9);
-    expect(codes(model)).toEqual(['bent-axis']);
+    // Drawn in facets, its corners are its points.
+    expect(model.members[0]!.bow).toHaveLength(13);
+    for (const point of model.members[0]!.bow!) expect(distance(point, [0, 0, -5])).toBeCloseTo(5, 9);
+    expect(codes(model)).toEqual([]);
   });
 
   it('that turns by less than a degree is straight', () => {

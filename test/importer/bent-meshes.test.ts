@@ -1,5 +1,6 @@
 import { describe, expect, it } from 'vitest';
 import { add, along, distance, dot, norm, subtract, unit, type Vec3 } from '../../src/domain/vector.ts';
+import { expectBow } from './support/expect-bow.ts';
 import { circleRing, type Faces, indexed, prismFaces, shellOf } from './support/mesh-faces.ts';
 import { importText } from './support/model-text.ts';
 import { trussModel } from './support/space-truss.ts';
@@ -194,7 +195,8 @@ for (const [way, read, isMerged] of ways) {
       expect(distance(...model.members[0]!.axis)).toBeCloseTo(2 * radius * Math.sin(sweep / 2), 6);
       const area = 0.06 * 0.006 + 0.054 * 0.006;
       expect(Math.abs(model.members[0]!.section!.area / area - 1)).toBeLessThan(0.001);
-      expect(codes(model)).toEqual(['bent-axis', 'guessed-section']);
+      expectBow(model.members[0]!, [0, 0, 0], radius, sweep, 2e-3);
+      expect(codes(model)).toEqual(['guessed-section']);
     });
 
     it('that is a pipe with two bends in space is three members with the area of a tube', () => {

@@ -87,6 +87,7 @@ function axisAlong(run: Chord, mesh: Mesh, walk: Walk, upright: Vec3): MeasuredA
     profile: null,
     endProfile: null,
     rise: run.rise,
+    bow: run.bow?.map((p) => add(p, mesh.base)) ?? null,
     isRun: run.isRun ?? false,
     measured: {
       section: measuredSection(cut.outline),

@@ -29,6 +29,8 @@ export interface BodyAxis {
   readonly endProfile: number | null;
   /** How far the true axis leaves the straight line, metres. */
   readonly rise: number;
+  /** Points along the true axis from `start` to `end`; null where it is straight, or not known so well. */
+  readonly bow: readonly Vec3[] | null;
   /** One of several straight runs of a body that bends between them. */
   readonly isRun: boolean;
   /** Of a mesh: what its cuts show. */
@@ -44,6 +46,7 @@ const TURN = 0.01;
 
 /** The two as one axis where they lie in one line and touch or overlap; the longer gives the section. */
 export function joinedInLine(a: BodyAxis, b: BodyAxis): BodyAxis | null {
+  if (a.bow !== null || b.bow !== null) return isSameBow(a, b) ? a : null;
   const [long, short] = lengthOf(a) >= lengthOf(b) ? [a, b] : [b, a];
   const d = unit(subtract(long.end, long.start));
   const e = unit(subtract(short.end, short.start));
@@ -63,6 +66,15 @@ export function joinedInLine(a: BodyAxis, b: BodyAxis): BodyAxis | null {
     end: high > length ? along(long.start, d, high) : long.end,
     rise: Math.max(long.rise, short.rise),
   };
+}
+
+/** Whether two bent axes are one drawn twice. */
+function isSameBow(a: BodyAxis, b: BodyAxis): boolean {
+  const sameWay = distance(a.start, b.start) < distance(a.start, b.end);
+  const [start, end] = sameWay ? [b.start, b.end] : [b.end, b.start];
+  const [middle, other] = [a, b].map(({ bow }) => bow?.[Math.floor(bow.length / 2)]);
+  if (middle === undefined || other === undefined) return false;
+  return [distance(a.start, start), distance(a.end, end), distance(middle, other)].every((d) => d < SIDEWAYS);
 }
 
 /** Each distinct axis once: repeated solids and pieces in line are one. */

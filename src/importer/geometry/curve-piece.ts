@@ -1,4 +1,4 @@
-import { add, along, cross, dot, norm, scale, subtract, unit, type Vec3 } from '../../domain/vector.ts';
+import { add, along, cross, distance, dot, norm, scale, subtract, unit, type Vec3 } from '../../domain/vector.ts';
 import { mapDirection, mapPosition, type Transform } from '../transform.ts';
 
 /** A curve in space as a chain of straight pieces and elliptical arcs, metres. */
@@ -68,6 +68,8 @@ export interface Chord {
   readonly rise: number;
   /** One of several straight runs of a line that bends between them. */
   readonly isRun?: boolean;
+  /** Of a curve that is not straight: points along it from `from` to `to`. */
+  readonly bow?: readonly Vec3[];
 }
 
 export function chordOf(pieces: readonly CurvePiece[]): Chord | null {
@@ -83,7 +85,37 @@ export function chordOf(pieces: readonly CurvePiece[]): Chord | null {
   };
   let rise = 0;
   for (const piece of pieces) for (const p of samples(piece)) rise = Math.max(rise, away(p));
-  return { from, to, rise };
+  return isStraight(rise, distance(from, to)) ? { from, to, rise } : { from, to, rise, bow: pointsAlong(pieces) };
+}
+
+/** Straight pieces between points along an arc leave it by no more, m. */
+const FACET_RISE = 1e-3;
+
+/** And turn by no more than 4 degrees, each against the last. */
+const FACET_TURN = Math.PI / 45;
+
+/** Nearer points are one, m. */
+const SAME_POINT = 1e-4;
+
+/** Points along a chain of pieces: all corners, and as many on its arcs that straight pieces between them stand for it. */
+function pointsAlong(pieces: readonly CurvePiece[]): Vec3[] {
+  const points: Vec3[] = [];
+  for (const piece of pieces) {
+    const own = piece.kind === 'line' ? [piece.from, piece.to] : pointsOnArc(piece);
+    for (const point of own) {
+      const last = points.at(-1);
+      if (last === undefined || distance(last, point) > SAME_POINT) points.push(point);
+    }
+  }
+  return points;
+}
+
+function pointsOnArc(arc: ArcPiece): Vec3[] {
+  const radius = Math.max(norm(arc.u), norm(arc.v));
+  const step = Math.min(FACET_TURN, Math.sqrt((8 * FACET_RISE) / radius));
+  const sweep = arc.end - arc.start;
+  const count = Math.max(2, Math.ceil(Math.abs(sweep) / step));
+  return Array.from({ length: count + 1 }, (_, i) => pointAt(arc, arc.start + (i / count) * sweep));
 }
 
 function samples(piece: CurvePiece): Vec3[] {

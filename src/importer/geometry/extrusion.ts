@@ -52,6 +52,7 @@ export function extrusionAxis(book: SectionBook, extrusion: Extrusion): BodyAxis
     profile,
     endProfile,
     rise: 0,
+    bow: null,
     isRun: false,
     measured: null,
   };

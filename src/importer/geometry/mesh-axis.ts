@@ -99,6 +99,7 @@ function meshAxis(mesh: Mesh, upright: Vec3): { axis: BodyAxis; isAstray: boolea
     profile: null,
     endProfile: null,
     rise,
+    bow: null,
     isRun: false,
     measured: {
       section,

@@ -35,6 +35,7 @@ export function revolutionAxis(reading: Reading, book: SectionBook, id: number, 
     profile,
     endProfile: isTapered ? asRef(args[4]) : null,
     rise: chord.rise,
+    bow: chord.bow ?? null,
     isRun: false,
     measured: null,
   };

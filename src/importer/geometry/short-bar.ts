@@ -148,6 +148,7 @@ function barAlong(mesh: Mesh, direction: Vec3, upright: Vec3, section: Section):
     profile: null,
     endProfile: null,
     rise: 0,
+    bow: null,
     isRun: false,
     measured: {
       section: measuredSection(typical.outline),

@@ -44,6 +44,7 @@ function profileAlong(book: SectionBook, profile: number, run: Chord, plane: Tra
     profile,
     endProfile: null,
     rise: run.rise,
+    bow: run.bow?.map((point) => mapPosition(frame, add(point, offset))) ?? null,
     isRun: run.isRun ?? false,
     measured: null,
   };
@@ -81,6 +82,7 @@ export function sectionedAxis(reading: Reading, book: SectionBook, id: number, w
   const [start, end] = [centroids[0]!, centroids.at(-1)!];
   const chord = chordOf(centroids.slice(1).map((point, i) => linePiece(centroids[i]!, point)));
   if (chord === null || unit(subtract(end, start)) === null) throw noAxis('its sectioned body has no length');
+  const rise = Math.max(chord.rise, directrixRise(reading, args[0]));
   return {
     from: 'swept',
     start,
@@ -89,11 +91,16 @@ export function sectionedAxis(reading: Reading, book: SectionBook, id: number, w
     y: planes[0]!.y,
     profile: first,
     endProfile: last === first ? null : last,
-    rise: Math.max(chord.rise, directrixRise(reading, args[0])),
+    rise,
+    // Between cross sections that lie far apart the directrix may bow by itself.
+    bow: rise > chord.rise + BETWEEN_SECTIONS ? null : (chord.bow ?? null),
     isRun: false,
     measured: null,
   };
 }
+
+/** m by which a directrix may rise more than the straight lines between cross sections that are read for it. */
+const BETWEEN_SECTIONS = 0.01;
 
 function spinePlane(reading: Reading, id: number): Transform {
   return readAxes(reading, new StepRef(id));

@@ -42,6 +42,7 @@ function diskAlong(run: Chord, profile: number, world: Transform): BodyAxis {
     profile,
     endProfile: null,
     rise: run.rise,
+    bow: run.bow ?? null,
     isRun: run.isRun ?? false,
     measured: null,
   };

@@ -1,5 +1,6 @@
-import { along, type Vec3 } from '../../domain/vector.ts';
-import { type Axis, distanceToAxis } from '../axes.ts';
+import type { Vec3 } from '../../domain/vector.ts';
+import { distanceToAxis } from '../along-axes.ts';
+import type { Axis } from '../axes.ts';
 import type { VertexGraph } from '../vertices.ts';
 import type { MemberRole } from './roles.ts';
 
@@ -48,5 +49,4 @@ export function joinedEnds(
   return found;
 }
 
-const endOf = (axis: Axis, role: 'start' | 'finish'): Vec3 =>
-  along(axis.start, axis.direction, role === 'start' ? 0 : axis.length);
+const endOf = (axis: Axis, role: 'start' | 'finish'): Vec3 => (role === 'start' ? axis.start : axis.finish);
