@@ -43,10 +43,16 @@ export class DrawnModel {
     return this.element(keyword, mark, this.box(from, to, profile), more);
   }
 
-  private element(keyword: string, mark: string, body: string, more: string): string {
+  /** A member with the body that the writer holds, and with an Axis where there is one. */
+  memberOf(mark: string, body: string, axis: string | null = null): string {
+    return this.element('IFCMEMBER', mark, body, `'${mark}',$`, axis);
+  }
+
+  private element(keyword: string, mark: string, body: string, more: string, axis: string | null = null): string {
     const w = this.writer;
-    const shape = w.add(`IFCSHAPEREPRESENTATION(${this.context},'Body','SweptSolid',(${body}))`);
-    const product = w.add(`IFCPRODUCTDEFINITIONSHAPE($,$,(${shape}))`);
+    const shapes = [w.add(`IFCSHAPEREPRESENTATION(${this.context},'Body','SweptSolid',(${body}))`)];
+    if (axis !== null) shapes.unshift(w.add(`IFCSHAPEREPRESENTATION(${this.context},'Axis','Curve3D',(${axis}))`));
+    const product = w.add(`IFCPRODUCTDEFINITIONSHAPE($,$,(${shapes.join(',')}))`);
     const placement = w.add(`IFCLOCALPLACEMENT($,${this.origin})`);
     return w.add(`${keyword}('${mark}',$,'${mark}',$,$,${placement},${product},${more})`);
   }
