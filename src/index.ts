@@ -1,5 +1,10 @@
 /** The public library: the whole run, and each stage by itself. */
 
+export { makeTopics } from './bcf/make-topics.ts';
+export { type ReadBcfOptions, readBcf } from './bcf/read-bcf.ts';
+export type { BcfVersion, ReturnedBcf, ReturnedTopic, Topic, TopicView } from './bcf/types.ts';
+export { withReplies } from './bcf/with-replies.ts';
+export { type BcfOptions, writeBcf } from './bcf/write-bcf.ts';
 export { briefJsonSchema } from './brief/json-schema.ts';
 export { parseBrief } from './brief/parse-brief.ts';
 export { applyScope } from './brief/scope.ts';
@@ -14,10 +19,14 @@ export type { Material, Member, Section } from './domain/member.ts';
 export type { Result } from './domain/result.ts';
 export type { Truss, TrussBar, TrussNode } from './domain/truss.ts';
 export type { Vec3 } from './domain/vector.ts';
+export type { Camera } from './drawing/camera.ts';
 export { tellingElevations } from './drawing/elevations.ts';
 export { type RasterOptions, rasterise } from './drawing/rasterise.ts';
 export { type Scene, sceneOf } from './drawing/scene.ts';
 export { drawSheet, type SheetOptions } from './drawing/sheet.ts';
+export { drawSnapshot, type SnapshotOptions } from './drawing/snapshot.ts';
+export { type Spot, spotOf } from './drawing/spot.ts';
+export { type CameraOptions, spotCamera } from './drawing/spot-camera.ts';
 export {
   elevationLooking,
   elevationThrough,

@@ -1,4 +1,6 @@
 import { readFileSync, statSync } from 'node:fs';
+import { readBcf } from '../bcf/read-bcf.ts';
+import type { ReturnedBcf } from '../bcf/types.ts';
 import { parseBrief } from '../brief/parse-brief.ts';
 import type { Brief } from '../brief/types.ts';
 import { ModelError, RequestError } from '../domain/errors.ts';
@@ -14,6 +16,18 @@ export function readModelBytes(path: string): Uint8Array {
   } catch (error) {
     if (error instanceof ModelError) throw error;
     throw new ModelError(`${path}: ${reasonOf(error)}`);
+  }
+}
+
+const LARGEST_BCF = 1024 ** 3;
+
+/** The topics of a BCF file. Throws RequestError where it cannot be read. */
+export async function readReplies(path: string): Promise<ReturnedBcf> {
+  try {
+    if (statSync(path).size > LARGEST_BCF) throw new RequestError('larger than the limit of 1 GiB');
+    return await readBcf(readFileSync(path));
+  } catch (error) {
+    throw new RequestError(`${path}: ${error instanceof RequestError ? error.message : reasonOf(error)}`);
   }
 }
 

@@ -1,5 +1,7 @@
 import { basename } from 'node:path';
-import type { Command } from 'commander';
+import { type Command, Option } from 'commander';
+import type { BcfVersion } from '../bcf/types.ts';
+import { withReplies } from '../bcf/with-replies.ts';
 import { DEFAULT_BRIEF } from '../brief/default-brief.ts';
 import { EXIT } from '../domain/errors.ts';
 import { contentOf } from '../exporter/content.ts';
@@ -9,11 +11,14 @@ import { writeOutputs } from '../exporter/write-outputs.ts';
 import { type Run, type RunOptions, runModel, type Stage } from '../pipeline.ts';
 import { namingModel } from './failure.ts';
 import { makeProgress } from './progress.ts';
-import { readBrief, readModelBytes } from './read-files.ts';
+import { readBrief, readModelBytes, readReplies } from './read-files.ts';
 
 export interface RunFlags {
   readonly brief?: string;
   readonly output?: string[];
+  readonly replies?: string;
+  readonly bcfVersion?: BcfVersion;
+  readonly stamp?: boolean;
   readonly quiet?: boolean;
   readonly timings?: boolean;
 }
@@ -25,9 +30,12 @@ export function withRunOptions(command: Command): Command {
     .option('--brief <file>', 'scope, joints, supports, loads and combinations (YAML or JSON)')
     .option(
       '-o, --output <file>',
-      'write a result; the ending picks the format (.json .csv .csv/ .ifc .ifczip .svg), - is JSON on stdout; may be repeated',
+      'write a result; the ending picks the format (.json .csv .csv/ .ifc .ifczip .svg .bcf), - is JSON on stdout; may be repeated',
       (path: string, before: string[] = []) => [...before, path],
     )
+    .option('--replies <file>', 'a BCF file that came back: its statuses and comments stand beside the findings')
+    .addOption(new Option('--bcf-version <version>', 'of the BCF file written').choices(['2.1', '3.0']).default('3.0'))
+    .option('--stamp', 'clock time in what is written; without it the dates are those of the model')
     .option('--quiet', 'no summary and no progress')
     .option('--timings', 'one line of JSON on stderr: seconds by stage, peak memory in bytes');
 }
@@ -35,8 +43,10 @@ export function withRunOptions(command: Command): Command {
 /** Runs a model and writes what was asked for. Gives the exit code. */
 export async function runCommand(model: string, extent: RunOptions['extent'], flags: RunFlags): Promise<number> {
   const outputs = flags.output ?? [];
-  const plan = planOutputs(outputs, model);
+  const plan = planOutputs(outputs, model, ...(flags.replies === undefined ? [] : [flags.replies]));
+  const stamp = flags.stamp ? new Date().toISOString().replace(/\.\d+/, '') : null;
   const brief = flags.brief === undefined ? DEFAULT_BRIEF : readBrief(flags.brief);
+  const replies = flags.replies === undefined ? null : await readReplies(flags.replies);
   const bytes = readModelBytes(model);
   const progress = makeProgress(flags.quiet === true);
   const onStage = (stage: Stage) => progress.stage(STAGE_WORDS[stage]);
@@ -44,14 +54,15 @@ export async function runCommand(model: string, extent: RunOptions['extent'], fl
     runModel(bytes, { fileName: basename(model), extent, brief, onStage }),
   ).finally(() => progress.done());
   const analysed = performance.now();
-  await writeOutputs(plan, contentOf(run.result, run.file));
+  const result = replies === null ? run.result : withReplies(run.result, replies, basename(flags.replies ?? ''));
+  await writeOutputs(plan, contentOf(result, run.file, { version: flags.bcfVersion ?? '3.0', replies, stamp }));
   if (flags.timings) reportTimings(run, (performance.now() - analysed) / 1000);
   if (!flags.quiet && !plan.stdout) {
     const { elementCount, tracesRemoved, mass, coverage, topLevels } = run;
     // Before there are loads the reader is still choosing what belongs to the truss.
     const kinds = extent === 'survey' ? run.kinds : [];
     process.stdout.write(
-      summarise(run.result, { extras: { elementCount, tracesRemoved, mass, coverage, kinds, topLevels } }),
+      summarise(result, { extras: { elementCount, tracesRemoved, mass, coverage, kinds, topLevels } }),
     );
     if (outputs.length > 0) process.stdout.write(`\nWritten: ${outputs.join(', ')}\n`);
   }

@@ -93,6 +93,24 @@ const familySchema = z
   })
   .describe('members alike in role, section and length, the odd ones first');
 
+const replySchema = z.strictObject({
+  topic: text.describe('GUID of the returned topic'),
+  by: z.enum(['guid', 'members', 'place']).describe('how the topic was found again'),
+  status: text,
+  closed: z.boolean().describe('closed there, though the finding stands'),
+  assignedTo: textOrNull,
+  comments: z.array(z.strictObject({ date: text, author: text, text })),
+});
+
+const repliesSchema = z.strictObject({
+  file: text,
+  topics: z.number().int(),
+  unreadable: z.number().int(),
+  matched: z.number().int(),
+  others: z.number().int().describe('topics that no finding answers to and that are not known to be gone'),
+  gone: z.array(z.strictObject({ topic: text, title: text, status: text, closed: z.boolean() })),
+});
+
 const findingSchema = z.strictObject({
   code: z.enum(Object.keys(FINDING_SEVERITY) as [FindingCode, ...FindingCode[]]),
   severity: z.enum(['error', 'warning', 'note']),
@@ -103,6 +121,7 @@ const findingSchema = z.strictObject({
   place: textOrNull,
   gap: z.number().nullable().describe('m'),
   advice: text,
+  reply: replySchema.optional().describe('what came back of its topic'),
 });
 
 const remedySchema = z.union([
@@ -307,6 +326,7 @@ export const resultSchema = z.strictObject({
   bars: z.array(barSchema),
   families: z.array(familySchema).optional(),
   findings: z.array(findingSchema),
+  replies: repliesSchema.optional().describe('what a returned BCF file said'),
   stability: stabilitySchema,
   cases: z.array(caseSchema),
   combinations: z.array(combinationSchema),

@@ -1,3 +1,4 @@
+import { type BcfOptions, writeBcf } from '../bcf/write-bcf.ts';
 import type { Result } from '../domain/result.ts';
 import { drawSheet } from '../drawing/sheet.ts';
 import type { StepFile } from '../step/step-file.ts';
@@ -8,8 +9,11 @@ import { resultToJson } from './json.ts';
 import type { Content } from './outputs.ts';
 import { zipOne } from './zip-one.ts';
 
-/** What each planned file holds for this result; `file` is the model that an annotated copy is made of. */
-export function contentOf(result: Result, file: StepFile): (content: Content) => Chunks {
+/**
+ * What each planned file holds for this result; `file` is the model that an annotated copy is made of, `bcf` how topics are
+ * written.
+ */
+export function contentOf(result: Result, file: StepFile, bcf: Partial<BcfOptions> = {}): (content: Content) => Chunks {
   return (content) => {
     switch (content.kind) {
       case 'json':
@@ -22,6 +26,8 @@ export function contentOf(result: Result, file: StepFile): (content: Content) =>
         return zipOne(content.name, annotate(file, result));
       case 'svg':
         return encodeText([drawSheet(result)]);
+      case 'bcf':
+        return [writeBcf(result, bcf)];
     }
   };
 }

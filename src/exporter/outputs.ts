@@ -11,6 +11,7 @@ export type Content =
   | { readonly kind: 'ifc' }
   | { readonly kind: 'ifczip'; readonly name: string }
   | { readonly kind: 'svg' }
+  | { readonly kind: 'bcf' }
   | { readonly kind: 'csv'; readonly table: TableName };
 
 export interface PlannedFile {
@@ -29,16 +30,16 @@ export interface OutputPlan {
   readonly stdout: boolean;
 }
 
-const WRITTEN = '.json .csv .csv/ .ifc .ifczip .svg';
-const NOT_YET = new Set(['.xlsx', '.html', '.bcf', '.bcfzip']);
+const WRITTEN = '.json .csv .csv/ .ifc .ifczip .svg .bcf .bcfzip';
+const NOT_YET = new Set(['.xlsx', '.html']);
 
 /**
  * Finds what each output path asks for and whether it can be written, before any work is done. The endings pick the
  * formats; `-` is the JSON on standard output, a path ending in `.csv/` a folder with every table.
  *
- * Throws a RequestError for a path that cannot be written, stands twice or names the input.
+ * Throws a RequestError for a path that cannot be written, stands twice or names an input.
  */
-export function planOutputs(paths: readonly string[], inputPath: string): OutputPlan {
+export function planOutputs(paths: readonly string[], ...inputPaths: readonly string[]): OutputPlan {
   const files: PlannedFile[] = [];
   const folders: string[] = [];
   for (const given of paths) {
@@ -56,7 +57,7 @@ export function planOutputs(paths: readonly string[], inputPath: string): Output
     }
   }
   forbidDoubles(paths, files, folders);
-  forbidInput(files, inputPath);
+  for (const inputPath of inputPaths) forbidInput(files, inputPath);
   return { files, folders, stdout: paths.includes('-') };
 }
 
@@ -66,6 +67,7 @@ function contentByEnding(given: string): Content {
   if (ending === '.json' || ending === '.ifc') return { kind: ending === '.ifc' ? 'ifc' : 'json' };
   if (ending === '.ifczip') return { kind: 'ifczip', name: `${basename(given, ending)}.ifc` };
   if (ending === '.svg') return { kind: 'svg' };
+  if (ending === '.bcf' || ending === '.bcfzip') return { kind: 'bcf' };
   if (ending === '.csv') return { kind: 'csv', table: 'bars' };
   if (NOT_YET.has(ending)) throw new RequestError(`${given}: ${ending} is not written yet; written are ${WRITTEN}`);
   throw new RequestError(`${given}: the ending picks the format; use one of ${WRITTEN}, or - for JSON on stdout`);
@@ -139,7 +141,7 @@ function forbidInput(files: readonly PlannedFile[], inputPath: string): void {
   const input = new Set(namesOf(resolve(inputPath)));
   for (const { given, target } of files) {
     if (namesOf(target).some((name) => input.has(name))) {
-      throw new RequestError(`${given}: is the input itself; name another output, the model is never overwritten`);
+      throw new RequestError(`${given}: is the input itself; name another output, what is read is never overwritten`);
     }
   }
 }

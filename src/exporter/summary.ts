@@ -11,6 +11,7 @@ import { memberKinds } from './summary/kinds.ts';
 import { degrees, harmless, wrapped } from './summary/layout.ts';
 import { SUMMARY_DEFAULTS, type SummaryOptions } from './summary/options.ts';
 import { reactions } from './summary/reactions.ts';
+import { replies } from './summary/replies.ts';
 
 /** The result as plain text for a terminal; a survey, which has no cases, is told without loads and forces. */
 export function summarise(result: Result, options: Partial<SummaryOptions> = {}): string {
@@ -21,6 +22,7 @@ export function summarise(result: Result, options: Partial<SummaryOptions> = {})
     memberKinds(chosen),
     oddMembers(result, chosen),
     findings(result, chosen),
+    replies(result, chosen),
     standing(result, chosen),
     loadCases(result, chosen),
     worstBars(result, chosen),

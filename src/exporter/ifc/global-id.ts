@@ -1,10 +1,7 @@
-import { createHash } from 'node:crypto';
+import { NAMESPACE, uuidVersion5 } from '../../domain/uuid.ts';
 
 /** The base 64 of IFC GlobalIds (ISO 16739, IfcGloballyUniqueId). */
 const ALPHABET = '0123456789ABCDEFGHIJKLMNOPQRSTUVWXYZabcdefghijklmnopqrstuvwxyz_$';
-
-/** The name space of all ids that Pinwright makes: a UUID drawn once at random. */
-const NAMESPACE = uuidBytes('5d7f0c1e-8a4b-4e63-9c52-b0e6f4a1d937');
 
 /** 16 bytes in IFC's 22 characters; the first stands for two bits only and so is 0, 1, 2 or 3. */
 export function encodeGlobalId(bytes: Uint8Array): string {
@@ -31,15 +28,6 @@ export function decodeGlobalId(text: string): Uint8Array | null {
   return bytes;
 }
 
-/** The UUID of version 5 (RFC 9562, 5.5) of a name in a name space. */
-export function uuidVersion5(namespace: Uint8Array, name: string): Uint8Array {
-  const hash = createHash('sha1').update(namespace).update(name, 'utf8').digest();
-  const bytes = new Uint8Array(hash.subarray(0, 16));
-  bytes[6] = (bytes[6] & 0x0f) | 0x50;
-  bytes[8] = (bytes[8] & 0x3f) | 0x80;
-  return bytes;
-}
-
 /**
  * The GlobalId of something that Pinwright writes, the same in every run: `role` says what it is, `of` whose it is
  * (a GlobalId or a name), `draw` counts the draws after one that was already in use.
@@ -47,8 +35,4 @@ export function uuidVersion5(namespace: Uint8Array, name: string): Uint8Array {
 export function drawGlobalId(role: string, of: string, part: number, draw = 0): string {
   const name = draw === 0 ? [role, of, part] : [role, of, part, draw];
   return encodeGlobalId(uuidVersion5(NAMESPACE, name.join('\n')));
-}
-
-export function uuidBytes(uuid: string): Uint8Array {
-  return new Uint8Array(Buffer.from(uuid.replaceAll('-', ''), 'hex'));
 }

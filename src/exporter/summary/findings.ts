@@ -3,6 +3,7 @@ import { count } from '../../domain/verdict.ts';
 import { millimetres } from '../../domain/words.ts';
 import { harmless, wrapped } from './layout.ts';
 import type { SummaryOptions } from './options.ts';
+import { replyWords } from './replies.ts';
 
 /** What is wrong with the file itself is told first: much of the rest may follow from it. */
 const FAULTS_OF_FILE: ReadonlySet<string> = new Set([
@@ -51,6 +52,7 @@ function told(group: readonly ResultFinding[], severity: string, { width, findin
     const isSaid = severity === 'note' || found.advice === told[i + 1]?.advice;
     return [
       ...wrapped(sentence(found), width, '         - ', '           '),
+      ...wrapped(replyWords(found) ?? '', width, '           ', '           '),
       ...(isSaid ? [] : wrapped(`To do: ${harmless(found.advice)}`, width, '           ', '           ')),
     ];
   });

@@ -14,7 +14,10 @@ export interface ZippedModel {
   readonly content: Uint8Array;
 }
 
-interface Packed {
+export type ZipLimits = Pick<OpenOptions, 'largest' | 'ratio' | 'mostEntries'>;
+
+/** A file in a zip, not yet unpacked. */
+export interface Packed {
   readonly entry: Entry;
   /** As it stands in the zip, printable. */
   readonly path: string;
@@ -26,7 +29,7 @@ interface Packed {
  * @throws ModelError where there is none or several, it is damaged, encrypted, packed by a method that is not read or beyond the limits.
  */
 export async function modelInZip(bytes: Uint8Array, options: OpenOptions): Promise<ZippedModel> {
-  const files = await filesOf(asBuffer(bytes), options);
+  const files = await packedFiles(asBuffer(bytes), options);
   const models = files.filter(isModel);
   const [model, another] = models;
   if (model === undefined) throw new ModelError(`The zip holds no IFC model${contents(files)}. Put one into it.`);
@@ -38,7 +41,8 @@ export async function modelInZip(bytes: Uint8Array, options: OpenOptions): Promi
   return { name: model.path.slice(model.path.lastIndexOf('/') + 1), content: unpack(model, options) };
 }
 
-async function filesOf(bytes: Buffer, options: OpenOptions): Promise<Packed[]> {
+/** All files of a zip. Throws ModelError where it is damaged or holds too many. */
+export async function packedFiles(bytes: Buffer, options: ZipLimits): Promise<Packed[]> {
   const files: Packed[] = [];
   try {
     const zip = await fromBufferPromise(bytes, { decodeStrings: false });
@@ -99,7 +103,8 @@ function beginningOf({ compressionMethod }: Entry, packed: Uint8Array): Uint8Arr
   }
 }
 
-function unpack({ entry, path, bytes }: Packed, { largest, ratio }: OpenOptions): Uint8Array {
+/** The content of a file in a zip, within the limits. Throws ModelError beyond them, and where it is damaged or encrypted. */
+export function unpack({ entry, path, bytes }: Packed, { largest, ratio }: ZipLimits): Uint8Array {
   if (entry.isEncrypted()) throw new ModelError(`${path} in the zip is encrypted; pack it again without a password.`);
   if (!isReadable(entry)) {
     const method = METHODS[entry.compressionMethod] ?? `method ${entry.compressionMethod}`;

@@ -1,12 +1,7 @@
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
-import {
-  decodeGlobalId,
-  drawGlobalId,
-  encodeGlobalId,
-  uuidBytes,
-  uuidVersion5,
-} from '../../../src/exporter/ifc/global-id.ts';
+import { uuidBytes, uuidVersion5 } from '../../../src/domain/uuid.ts';
+import { decodeGlobalId, drawGlobalId, encodeGlobalId } from '../../../src/exporter/ifc/global-id.ts';
 
 describe('a GlobalId', () => {
   it('gives back the 16 bytes it was made of, in 22 characters of which the first is 0 to 3', () => {
