@@ -27,13 +27,14 @@ export const BCF_DEFAULTS: BcfOptions = { version: '3.0', replies: null, stamp: 
  */
 export function writeBcf(result: Result, options: Partial<BcfOptions> = {}): Uint8Array {
   const { version, replies, stamp } = { ...BCF_DEFAULTS, ...options };
-  const model = modelOf(result);
+  const model = topicModel(result);
   const date = stamp ?? model.date;
   const made = makeTopics(result, date);
-  return zipped(replies === null ? made : carryOver(made, result, replies, date), model, version);
+  return bcfOf(replies === null ? made : carryOver(made, result, replies, date), model, version);
 }
 
-function modelOf({ model }: Result): TopicModel {
+/** What topics say of the model that they are about. */
+export function topicModel({ model }: Result): TopicModel {
   const project = model.project?.globalId ?? '';
   return {
     fileName: model.file,
@@ -46,7 +47,8 @@ function modelOf({ model }: Result): TopicModel {
 /** The earliest time that a zip can say, in the machine's own zone as zips have it: no clock shows in the bytes. */
 const NO_TIME = new Date(1980, 0, 1, 0, 0, 0);
 
-function zipped(topics: readonly Topic[], model: TopicModel, version: BcfVersion): Uint8Array {
+/** The bytes of a file with these topics. */
+export function bcfOf(topics: readonly Topic[], model: TopicModel, version: BcfVersion): Uint8Array {
   const encoder = new TextEncoder();
   const files: Zippable = { 'bcf.version': encoder.encode(versionXml(version)) };
   files['project.bcfp'] = encoder.encode(projectXml(model, version));

@@ -5,7 +5,7 @@ import { describe, expect, it } from 'vitest';
 import { groupFindings } from '../../src/bcf/group-findings.ts';
 import { makeTopics } from '../../src/bcf/make-topics.ts';
 import { xmlDate } from '../../src/bcf/words.ts';
-import { writeBcf } from '../../src/bcf/write-bcf.ts';
+import { bcfOf, topicModel, writeBcf } from '../../src/bcf/write-bcf.ts';
 import { ModelError } from '../../src/domain/errors.ts';
 import type { Result } from '../../src/domain/result.ts';
 import { clippingDepth } from '../../src/drawing/snapshot.ts';
@@ -162,7 +162,7 @@ describe("topics' ids", () => {
     }));
     const [topic, ...more] = makeTopics({ ...result, findings: cases }, DATE);
     expect(more).toEqual([]);
-    expect(topic!.description).toMatch(/dead moves it\.\s+snow moves it\./);
+    for (const name of ['dead', 'snow']) expect(topic!.description).toContain(`${name} moves it.`);
     expect(topic!.views).toHaveLength(1);
   });
 });
@@ -171,37 +171,38 @@ const bcfChecker = checker('check_bcf.py');
 const folder = temporaryFolder();
 
 /** Where the machine has no xmllint the checker says so by 3, after all its other checks. */
-function checked(bytes: Uint8Array, name: string, model: string): void {
-  const path = join(folder, name);
-  writeFileSync(path, bytes);
-  const { code, output } = runChecker(bcfChecker!, [path, '--ifc', model]);
-  expect(output).toMatch(/^0 problems in \d+ topics/m);
-  expect(code).toBe(output.includes('xmllint is missing') ? 3 : 0);
+function checkBothVersions(result: Result, name: string, model: string): void {
+  const about = topicModel(result);
+  const topics = makeTopics(result, about.date);
+  for (const version of ['3.0', '2.1'] as const) {
+    const path = join(folder, `${name}-${version}.bcf`);
+    writeFileSync(path, bcfOf(topics, about, version));
+    const { code, output } = runChecker(bcfChecker!, [path, '--ifc', model]);
+    expect(output).toMatch(/^0 problems in \d+ topics/m);
+    expect(code).toBe(output.includes('xmllint is missing') ? 3 : 0);
+  }
+}
+
+/** One finding of each code, a few of them: pictures take their time. */
+function someFindings(result: Result): Result {
+  const codes = new Map(result.findings.map((finding) => [finding.code, finding]));
+  return { ...result, findings: [...codes.values()].slice(-5) };
 }
 
 describe.skipIf(bcfChecker === null)('an independent checker finds nothing wrong with the topics of', () => {
   it('the demo hall with faults', async () => {
     const model = fixture('boat-hall-faults.ifc');
     const { result } = await runModel(readFileSync(model), { fileName: 'boat-hall-faults.ifc', extent: 'survey' });
-    for (const version of ['3.0', '2.1'] as const) checked(writeBcf(result, { version }), `hall-${version}.bcf`, model);
+    checkBothVersions(result, 'hall', model);
   });
 
   it.each(PUBLIC_STEP_MODELS)('%s', async (name) => {
     const model = publicModel(name);
     if (model === null) return;
-    const bytes = readFileSync(model);
-    const run = await runModel(bytes, { fileName: name, extent: 'survey' }).catch((error: unknown) => {
+    const run = await runModel(readFileSync(model), { fileName: name, extent: 'survey' }).catch((error: unknown) => {
       if (error instanceof ModelError) return null;
       throw error;
     });
-    if (run === null) return;
-    // One finding of each code: pictures take their time.
-    const { findings } = run.result;
-    const result = {
-      ...run.result,
-      findings: findings.filter((one, k) => findings.findIndex(({ code }) => code === one.code) === k),
-    };
-    for (const version of ['3.0', '2.1'] as const)
-      checked(writeBcf(result, { version }), `${name}-${version}.bcf`, model);
+    if (run !== null) checkBothVersions(someFindings(run.result), name, model);
   });
 });
