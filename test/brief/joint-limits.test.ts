@@ -84,9 +84,9 @@ describe('joining with them', () => {
   it('tells the limits that were used: those set, and the range that the sections gave', () => {
     const { limits } = joinMembers([chord, post('P', 2, 0.05), post('Q', 4, 0.05)], { reach: [null, 0.2, null] });
     expect(limits.reach.set).toEqual([{ value: 0.2, members: 1 }]);
-    // Half the chord's depth and a gap of 1.25 x its own depth, at right angles: 50 + 125 mm.
-    expect(limits.reach.bySections?.[0]).toBeCloseTo(0.175, 9);
-    expect(limits.reach.bySections?.[1]).toBeCloseTo(0.175, 9);
+    // Half the chord's depth and a detailer's gap, at right angles: 50 + 150 mm.
+    expect(limits.reach.bySections?.[0]).toBeCloseTo(0.2, 9);
+    expect(limits.reach.bySections?.[1]).toBeCloseTo(0.2, 9);
     expect(limits.offset).toEqual({ set: [], bySections: [0.05, 0.05] });
   });
 });

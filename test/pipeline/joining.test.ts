@@ -2,12 +2,12 @@ import { describe, expect, it } from 'vitest';
 import { summarise } from '../../src/exporter/summary.ts';
 import { type DrawnMember, DrawnModel } from './support/drawn-model.ts';
 
-/** A flat frame of three panels: a chord, two posts and a tie; the second post stops 250 mm short of the chord. */
+/** A flat frame of three panels: a chord, two posts and a tie; the second post stops 290 mm short of the chord. */
 const FRAME: readonly DrawnMember[] = [
   { mark: 'chord', from: [0, 0, 3], to: [6, 0, 3] },
   { mark: 'tie', from: [0, 0, 0], to: [6, 0, 0] },
   { mark: 'post', from: [0, 0, 0], to: [0, 0, 3] },
-  { mark: 'short', from: [3, 0, 0], to: [3, 0, 2.75] },
+  { mark: 'short', from: [3, 0, 0], to: [3, 0, 2.71] },
   { mark: 'brace', from: [0, 0, 0], to: [3, 0, 3] },
 ];
 
@@ -68,7 +68,7 @@ describe('an end that stops too far off for nearness alone', () => {
 
   it('is joined by a cleat that is drawn as a member, too short to be a bar', async () => {
     const model = drawn((m) => {
-      m.member({ mark: 'cleat', from: [3, 0.05, 2.75], to: [3, 0.05, 2.95], size: 0.2 });
+      m.member({ mark: 'cleat', from: [3, 0.05, 2.69], to: [3, 0.05, 2.95], size: 0.22 });
     });
     expect(await shortPost(model)).toMatchObject({ joined: ['part cleat'], misses: [] });
   });
