@@ -35,7 +35,7 @@ export interface SolveOptions {
 
 export const SOLVE_DEFAULTS: SolveOptions = {
   workTolerance: 1e-8,
-  leanTolerance: 1e-4,
+  leanTolerance: 1e-7,
   settling: 0.01,
   oneWay: { tensionOnly: [], compressionOnly: [] },
 };
