@@ -21,10 +21,13 @@ export interface ProfileShape {
   readonly shearCentre?: Point2;
 }
 
-/** @throws NotRead (no-section) where the outline encloses no area. */
+/** @throws NotRead (no-section) where the outline encloses no area, or so much that its moments are no numbers. */
 export function propertiesOf(shape: ProfileShape): PlaneProperties {
   const properties = outlineProperties(shape.outline);
   if (properties === null) throw noSection(`the outline of profile '${shape.name}' encloses no area`);
+  if (!Number.isFinite(properties.secondX + properties.secondY + properties.productXY)) {
+    throw noSection(`the profile '${shape.name}' is larger than anything that is built`);
+  }
   return properties;
 }
 
