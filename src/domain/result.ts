@@ -149,6 +149,20 @@ const stabilitySchema = z.strictObject({
   selfStressStates: z.number().int(),
   freeBody: z.boolean(),
   gap: z.number().nullable().describe("ratio across the spectrum's gap, null where none is clear"),
+  criticalBars: z
+    .array(text)
+    .optional()
+    .describe('bars in no state of self-stress: without any one of them there is one mechanism more'),
+  redundancy: z
+    .array(
+      z.strictObject({
+        bars: z.number().int().describe('bars and springs'),
+        mechanisms: z.number().int(),
+        selfStressStates: z.number().int(),
+      }),
+    )
+    .optional()
+    .describe('by part that hangs together'),
   setAside: z.array(text).describe('bars'),
   modes: z.array(modeSchema),
   modesOmitted: z.number().int().optional(),

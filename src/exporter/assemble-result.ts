@@ -9,6 +9,7 @@ import { between, type Vec3 } from '../domain/vector.ts';
 import type { BarBending } from '../statics/bending/between-nodes.ts';
 import type { EccentricityMoment } from '../statics/bending/eccentricity-moments.ts';
 import type { BucklingJudgement } from '../statics/buckling/judge-buckling.ts';
+import type { Judgement } from '../statics/stability/assess-stability.ts';
 import type {
   BarEnvelope,
   ExtremeForce,
@@ -19,7 +20,6 @@ import type {
   Remedy,
   SolvedCase,
   SolvedCombination,
-  Stability,
   Supports,
 } from '../statics/types.ts';
 import type { JoinLimits } from '../topology/limits.ts';
@@ -36,7 +36,7 @@ export interface RunRecord {
   readonly placeOf: PlaceNamer;
   readonly truss: Truss;
   readonly supports: Supports;
-  readonly stability: Stability;
+  readonly stability: Judgement;
   readonly families: readonly Family[];
   readonly findings: readonly Finding[];
   readonly cases: readonly SolvedCase[];
@@ -203,7 +203,7 @@ function fixedLetters({ restraints }: Supports): Map<number, string> {
   return letters;
 }
 
-function resultStability(stability: Stability): Result['stability'] {
+function resultStability(stability: Judgement): Result['stability'] {
   const { modes, setAside } = stability;
   const listed = modes.slice(0, MODES_LISTED);
   const omitted = stability.mechanisms - listed.length;
@@ -217,6 +217,8 @@ function resultStability(stability: Stability): Result['stability'] {
     selfStressStates: stability.selfStressStates,
     freeBody: stability.freeBody,
     gap: stability.gap,
+    ...(stability.criticalBars === null ? {} : { criticalBars: stability.criticalBars.map(barId) }),
+    redundancy: stability.parts.map(({ part, freedoms, ...counts }) => ({ ...counts })),
     setAside: setAside.map(barId),
     modes: listed.map(resultMode),
     ...(omitted > 0 ? { modesOmitted: omitted } : {}),

@@ -135,6 +135,8 @@ function standing(result: Result, { width, modes }: SummaryOptions): string[] {
   const gap = stability.gap === null ? '' : `, gap in the spectrum ${stability.gap.toExponential(0)}`;
   const sum = `${count(nodes, 'node')}, ${count(bars, 'bar')}, ${count(restraints, 'restraint')}${springWords}, rank ${rank}${gap}`;
   lines.push(...wrapped(sum, width, '         '));
+  const needed = criticalWords(stability);
+  if (needed !== null) lines.push(...wrapped(needed, width, '         '));
   if (result.findings.some(({ code }) => code === 'moves-freely')) return lines;
   const told = stability.freeBody ? stability.modes.filter((mode) => mode.kind !== 'whole') : stability.modes;
   for (const mode of told.slice(0, modes))
@@ -142,4 +144,11 @@ function standing(result: Result, { width, modes }: SummaryOptions): string[] {
   const more = told.length - modes + (stability.modesOmitted ?? 0);
   if (more > 0 && told.length > 0) lines.push(`         - and ${more} more`);
   return lines;
+}
+
+/** Which bars the truss can do without: those that take part in self-stress. */
+function criticalWords({ criticalBars, bars, selfStressStates }: Result['stability']): string | null {
+  if (criticalBars === undefined || selfStressStates === 0) return null;
+  if (criticalBars.length === 0) return 'any one bar can be lost without a mechanism: all take part in self-stress';
+  return `${count(criticalBars.length, 'bar')} of ${bars} cannot be lost without a mechanism; the others take part in self-stress`;
 }

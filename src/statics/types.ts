@@ -102,6 +102,8 @@ export interface Stability {
   readonly freeBody: boolean;
   /** Ratio across the spectrum's gap; null where none is clear. */
   readonly gap: number | null;
+  /** Bars in no state of self-stress, by index: without any one of them one mechanism more. Null where the spectrum has no clear gap. */
+  readonly criticalBars: readonly number[] | null;
   /** Bars of parts that nothing supports, by index. */
   readonly setAside: readonly number[];
   /** The whole motions first, then the others up to a few hundred: where there are more, fewer than `mechanisms`. */

@@ -15,6 +15,7 @@ import { STABILITY_DEFAULTS, type StabilityOptions } from './options.ts';
 import { stiffenedBySelfStress } from './order.ts';
 import { countParts, type PartCounts } from './part-counts.ts';
 import { barsAgainst, type NewBar } from './remedy-bars.ts';
+import { criticalBars } from './self-stress.ts';
 import { type Spectrum, sliceSpectrum } from './slicing.ts';
 import { worksInBending } from './works-in-bending.ts';
 
@@ -62,6 +63,7 @@ export function assessStability(truss: Truss, supports: Supports, options: Parti
     selfStressStates: bars.length + springs.length - rank,
     freeBody: parts.freeBody,
     gap: spectrum.gap,
+    criticalBars: spectrum.gap === null ? null : criticalBars(base, found.system, bars.length + springs.length - rank),
     setAside: parts.setAside,
     modes,
     findings: [
