@@ -11,6 +11,7 @@ import { memberKinds } from './summary/kinds.ts';
 import { degrees, harmless, wrapped } from './summary/layout.ts';
 import { SUMMARY_DEFAULTS, type SummaryOptions } from './summary/options.ts';
 import { reactions } from './summary/reactions.ts';
+import { redundancyWords } from './summary/redundancy.ts';
 import { replies } from './summary/replies.ts';
 
 /** The result as plain text for a terminal; a survey, which has no cases, is told without loads and forces. */
@@ -135,8 +136,7 @@ function standing(result: Result, { width, modes }: SummaryOptions): string[] {
   const gap = stability.gap === null ? '' : `, gap in the spectrum ${stability.gap.toExponential(0)}`;
   const sum = `${count(nodes, 'node')}, ${count(bars, 'bar')}, ${count(restraints, 'restraint')}${springWords}, rank ${rank}${gap}`;
   lines.push(...wrapped(sum, width, '         '));
-  const needed = criticalWords(stability);
-  if (needed !== null) lines.push(...wrapped(needed, width, '         '));
+  for (const words of redundancyWords(result)) lines.push(...wrapped(harmless(words), width, '         '));
   if (result.findings.some(({ code }) => code === 'moves-freely')) return lines;
   const told = stability.freeBody ? stability.modes.filter((mode) => mode.kind !== 'whole') : stability.modes;
   for (const mode of told.slice(0, modes))
@@ -144,11 +144,4 @@ function standing(result: Result, { width, modes }: SummaryOptions): string[] {
   const more = told.length - modes + (stability.modesOmitted ?? 0);
   if (more > 0 && told.length > 0) lines.push(`         - and ${more} more`);
   return lines;
-}
-
-/** Which bars the truss can do without: those that take part in self-stress. */
-function criticalWords({ criticalBars, bars, selfStressStates }: Result['stability']): string | null {
-  if (criticalBars === undefined || selfStressStates === 0) return null;
-  if (criticalBars.length === 0) return 'any one bar can be lost without a mechanism: all take part in self-stress';
-  return `${count(criticalBars.length, 'bar')} of ${bars} cannot be lost without a mechanism; the others take part in self-stress`;
 }

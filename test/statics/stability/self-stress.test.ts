@@ -1,6 +1,7 @@
 import { describe, expect, test } from 'vitest';
+import type { Vec3 } from '../../../src/domain/vector.ts';
 import { assessStability } from '../../../src/statics/stability/assess-stability.ts';
-import { randomTruss } from '../support/trusses.ts';
+import { alsoFlat, fix, randomTruss, trussOf } from '../support/trusses.ts';
 
 describe('bars that cannot be lost', () => {
   test('are exactly those without which the truss has one mechanism more', () => {
@@ -30,5 +31,31 @@ describe('bars that cannot be lost', () => {
       });
     }
     expect(some).toBeGreaterThan(50);
+  });
+});
+
+describe('redundancy by part', () => {
+  /** A square with both diagonals, and apart from it one with a single diagonal. */
+  const points = [0, 5].flatMap((x): Vec3[] => [
+    [x, 0, 0],
+    [x + 1, 0, 0],
+    [x + 1, 0, 1],
+    [x, 0, 1],
+  ]);
+  const frame = [
+    [0, 1],
+    [1, 2],
+    [2, 3],
+    [3, 0],
+    [0, 2],
+  ] as const;
+  const bars = [...frame, [1, 3] as const, ...frame.map(([a, b]) => [a + 4, b + 4] as const)];
+  const supports = alsoFlat(fix({ 0: 'xz', 1: 'z', 4: 'xz', 5: 'z' }), 8, 'y');
+
+  test('counts the states of each part and names the bars that cannot be lost: those of the part without any', () => {
+    const judged = assessStability(trussOf({ points, bars }), supports);
+    expect(judged.mechanisms).toBe(0);
+    expect(judged.parts.map((part) => part.selfStressStates)).toEqual([1, 0]);
+    expect(judged.criticalBars).toEqual([6, 7, 8, 9, 10]);
   });
 });
