@@ -9,6 +9,7 @@ import { resolveOneWay } from './brief/one-way.ts';
 import { applyScope } from './brief/scope.ts';
 import { applySections, withoutSettled } from './brief/sections.ts';
 import { type TopLevel, topLevels } from './brief/selectors/top-levels.ts';
+import { resolveSettlements } from './brief/settlements.ts';
 import { resolveGivenSupports, resolveSupports } from './brief/supports.ts';
 import type { Brief } from './brief/types.ts';
 import { type Finding, finding } from './domain/finding.ts';
@@ -27,12 +28,14 @@ import type { Given } from './importer/given.ts';
 import { importModel } from './importer/import-model.ts';
 import { placedInScope } from './importer/places-in-scope.ts';
 import type { ImportedModel } from './importer/types.ts';
+import { type Stage, stageClock } from './stage-clock.ts';
 import { bendingBetweenNodes } from './statics/bending/between-nodes.ts';
 import { eccentricityMoments } from './statics/bending/eccentricity-moments.ts';
 import { bendingFindings, withMoments } from './statics/bending/findings.ts';
 import { listed } from './statics/combinations/listed.ts';
 import { type BuiltCases, buildCases, type Coverage } from './statics/loads/build-cases.ts';
 import { buildGivenCases } from './statics/loads/given-cases.ts';
+import { withSettlement } from './statics/loads/settlement-case.ts';
 import { withSeverity } from './statics/solution/severity.ts';
 import { solveRun } from './statics/solution/solve-run.ts';
 import { assessStability } from './statics/stability/assess-stability.ts';
@@ -59,7 +62,7 @@ export const RUN_DEFAULTS: RunOptions = {
   onStage: () => {},
 };
 
-export type Stage = 'import' | 'topology' | 'stability' | 'solve' | 'checks' | 'export';
+export type { Stage } from './stage-clock.ts';
 
 export interface Run {
   readonly result: Result;
@@ -127,7 +130,9 @@ export async function runModel(bytes: Uint8Array, options: Partial<RunOptions> =
     : () => buildCases(truss, members, brief);
   const loaded = extent === 'analyse' && members.length > 0 ? loadOn() : NO_LOADS;
   const { oneWay, findings: oneWayFindings } = resolveOneWay(truss, members, brief);
-  const solved = solveRun(truss, supports, stability, loaded.cases, {
+  const settlements = extent === 'analyse' ? resolveSettlements(truss, members, brief) : [];
+  const cases = withSettlement(loaded.cases, settlements);
+  const solved = solveRun(truss, supports, stability, cases, {
     brief,
     given: usesGivenCases ? given.combinations : null,
     oneWay,
@@ -175,6 +180,7 @@ export async function runModel(bytes: Uint8Array, options: Partial<RunOptions> =
     findings,
     cases: solved.cases,
     oneWay,
+    asked: loaded.asked,
     ...listed(solved.combinations, solved.envelope, solved.generated, solved.buckling),
     analysis: brief.analysis,
     buckling: solved.buckling,
@@ -197,7 +203,7 @@ export async function runModel(bytes: Uint8Array, options: Partial<RunOptions> =
   };
 }
 
-const NO_LOADS: BuiltCases = { cases: [], coverage: [], findings: [] };
+const NO_LOADS: BuiltCases = { cases: [], coverage: [], asked: [], findings: [] };
 
 /**
  * The model's physical elements, or its structural analysis view: where the brief asks for it, and where it does not say and
@@ -277,22 +283,6 @@ function unusedCases(given: Given | null, brief: Brief, extent: RunOptions['exte
       "Leave `cases:` out of the brief to use the model's.",
     ),
   ];
-}
-
-function stageClock(onStage: (stage: Stage) => void) {
-  const seconds: Partial<Record<Stage, number>> = {};
-  let running: { readonly stage: Stage; readonly since: number } | null = null;
-  const stop = () => {
-    if (running) seconds[running.stage] = (performance.now() - running.since) / 1000;
-    running = null;
-    return seconds;
-  };
-  const enter = (stage: Stage) => {
-    stop();
-    onStage(stage);
-    running = { stage, since: performance.now() };
-  };
-  return { enter, stop };
 }
 
 function hashOf(chunks: Iterable<Uint8Array>): string {

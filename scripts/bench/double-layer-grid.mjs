@@ -4,7 +4,7 @@ import { buildRows } from '../../dist/statics/engine/system.js';
  * A square-on-square double-layer grid of `cells` x `cells` pyramids, 2.5 m wide and 1.8 m deep, its upper layer held along the edge; turned about the
  * vertical by `turn` (rad), which leaves no zeros inside the node blocks.
  */
-function doubleLayerGrid(cells, turn) {
+export function doubleLayerGrid(cells, turn) {
   const points = [];
   const upper = (i, j) => i * (cells + 1) + j;
   const lower = (i, j) => (cells + 1) ** 2 + i * cells + j;

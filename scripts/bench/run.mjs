@@ -1,5 +1,5 @@
 // `npm run bench -- import joining-faults`: prints ratios and times; with no name, all of them.
-const BENCHES = ['import', 'joining', 'joining-faults', 'write-back', 'statics'];
+const BENCHES = ['import', 'joining', 'joining-faults', 'write-back', 'statics', 'cases'];
 const asked = process.argv.slice(2);
 const unknown = asked.filter((name) => !BENCHES.includes(name));
 if (unknown.length > 0) {

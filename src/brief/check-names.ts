@@ -3,15 +3,20 @@ import { quoted } from './one-line.ts';
 import type { WrittenBrief } from './schema.ts';
 import type { Path, Problem, WrittenSource } from './written-source.ts';
 
+/** The case that supports which settle make. */
+export const SETTLEMENT = 'settlement';
+
 /** Names that stand twice among cases and combinations, and factors of cases that do not exist. */
 export function findNameProblems(written: WrittenBrief, source: WrittenSource): Problem[] {
-  const cases = (written.cases ?? []).map((rule) => rule.name);
+  const own = (written.cases ?? []).map((rule) => rule.name);
+  const settles = (written.supports ?? []).some(({ settle }) => settle !== undefined);
+  const cases = settles ? [...own, SETTLEMENT] : own;
   const combinations = Array.isArray(written.combinations) ? written.combinations : [];
   const places: { name: string; path: Path }[] = [
-    ...cases.map((name, i) => ({ name, path: ['cases', i, 'name'] })),
+    ...own.map((name, i) => ({ name, path: ['cases', i, 'name'] })),
     ...combinations.map(({ name }, i) => ({ name, path: ['combinations', i, 'name'] })),
   ];
-  const seen = new Set<string>();
+  const seen = new Set<string>(settles ? [SETTLEMENT] : []);
   const problems: Problem[] = [];
   for (const { name, path } of places) {
     if (seen.has(name)) {

@@ -1,25 +1,15 @@
 import { DEFAULT_BRIEF } from './default-brief.ts';
+import { toLoads } from './normalise-loads.ts';
+import { toMemberSelectors, toNodeSelectors, withoutUndefined } from './normalise-selectors.ts';
 import type { WrittenBrief } from './schema.ts';
-import type {
-  Brief,
-  CaseRule,
-  CombinationRule,
-  HoldRule,
-  LengthRule,
-  LoadRule,
-  MemberSelector,
-  NodeSelector,
-  SupportRule,
-} from './types.ts';
+import type { Brief, CaseRule, CombinationRule, HoldRule, LengthRule, SupportRule } from './types.ts';
 import { toCodeRule, type WrittenCombinations } from './written-combinations.ts';
-import type { WrittenMemberSelector, WrittenNodeSelector } from './written-selectors.ts';
 import type { Path } from './written-source.ts';
 
 type LineAt = (path: Path) => number;
 type WrittenSupport = NonNullable<WrittenBrief['supports']>[number];
 type WrittenHold = NonNullable<WrittenBrief['holds']>[number];
 type WrittenCase = NonNullable<WrittenBrief['cases']>[number];
-type WrittenLoad = WrittenCase['loads'][number];
 
 /** Fills in the defaults of a checked brief and gives every rule and selector its line in the file. */
 export function normaliseBrief(written: WrittenBrief, lineAt: LineAt): Brief {
@@ -76,6 +66,7 @@ function toSupport(written: WrittenSupport, path: Path, lineAt: LineAt): Support
     at: toNodeSelectors(written.at, [...path, 'at'], lineAt),
     fix: written.fix ?? [],
     springs: written.spring ?? [],
+    ...(written.settle === undefined ? {} : { settle: written.settle }),
   };
 }
 
@@ -96,59 +87,11 @@ function toCase(written: WrittenCase, path: Path, lineAt: LineAt): CaseRule {
     nature: written.nature,
     ...(written.category === undefined ? {} : { category: written.category }),
     ...(written.alternative === undefined ? {} : { alternative: written.alternative }),
-    loads: written.loads.map((load, i) => toLoad(load, [...path, 'loads', i], lineAt)),
+    loads: written.loads.flatMap((load, i) => toLoads(load, [...path, 'loads', i], lineAt)),
   };
-}
-
-function toLoad(written: WrittenLoad, path: Path, lineAt: LineAt): LoadRule {
-  const line = lineAt(path);
-  if ('selfWeight' in written) {
-    const { selfWeight } = written;
-    return { kind: 'selfWeight', line, factor: typeof selfWeight === 'number' ? selfWeight : selfWeight.factor };
-  }
-  if ('area' in written) {
-    const { area: pressure, acts, per } = written;
-    return { kind: 'area', line, pressure, over: toNodeSelectors(written.over, [...path, 'over'], lineAt), acts, per };
-  }
-  if ('line' in written) {
-    const on = toMemberSelectors(written.on, [...path, 'on'], lineAt);
-    return { kind: 'line', line, force: written.line, on, per: written.per };
-  }
-  return { kind: 'point', line, force: written.point, at: toNodeSelectors(written.at, [...path, 'at'], lineAt) };
 }
 
 function toCombinations(written: WrittenCombinations, lineAt: LineAt): CombinationRule[] {
   if (!Array.isArray(written)) return [];
   return written.map((rule, i) => ({ line: lineAt(['combinations', i]), ...rule }));
-}
-
-function toMemberSelectors(written: readonly WrittenMemberSelector[], path: Path, lineAt: LineAt): MemberSelector[] {
-  return written.map((selector, i) => toMemberSelector(selector, [...path, i], lineAt));
-}
-
-function toMemberSelector(written: WrittenMemberSelector, path: Path, lineAt: LineAt): MemberSelector {
-  const { not, ...keys } = withoutUndefined(written);
-  const selector: MemberSelector = { line: lineAt(path), ...(keys as Omit<MemberSelector, 'line' | 'not'>) };
-  return not === undefined ? selector : { ...selector, not: toMemberSelector(not, [...path, 'not'], lineAt) };
-}
-
-function toNodeSelectors(written: readonly WrittenNodeSelector[], path: Path, lineAt: LineAt): NodeSelector[] {
-  return written.map((selector, i) => toNodeSelector(selector, [...path, i], lineAt));
-}
-
-function toNodeSelector(written: WrittenNodeSelector, path: Path, lineAt: LineAt): NodeSelector {
-  const { not, endOf, joins, ...keys } = withoutUndefined(written);
-  return {
-    line: lineAt(path),
-    ...(keys as Omit<NodeSelector, 'line' | 'not' | 'endOf' | 'joins'>),
-    ...(endOf === undefined ? {} : { endOf: toMemberSelectors(endOf, [...path, 'endOf'], lineAt) }),
-    ...(joins === undefined ? {} : { joins: toMemberSelectors(joins, [...path, 'joins'], lineAt) }),
-    ...(not === undefined ? {} : { not: toNodeSelector(not, [...path, 'not'], lineAt) }),
-  };
-}
-
-type Defined<T> = { [K in keyof T]: Exclude<T[K], undefined> };
-
-function withoutUndefined<T extends object>(written: T): Defined<T> {
-  return Object.fromEntries(Object.entries(written).filter(([, value]) => value !== undefined)) as Defined<T>;
 }

@@ -1,13 +1,5 @@
 /** What the brief will be able to say and this version cannot honour: refused by name, never passed over. */
-const KEYS: ReadonlySet<string> = new Set([
-  'settle',
-  'temperature',
-  'misfit',
-  'outline',
-  'openings',
-  'edge',
-  'imperfections',
-]);
+const KEYS: ReadonlySet<string> = new Set(['imperfections']);
 
 const VALUES: readonly { readonly path: string; readonly value: RegExp }[] = [
   { path: 'chords', value: /^continuous$/u },

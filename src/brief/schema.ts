@@ -5,9 +5,11 @@ import { unit, type Vec3 } from '../domain/vector.ts';
 import { gradeIn } from '../importer/materials/grades.ts';
 import { knownDesignations } from '../importer/sections/designations/known-designations.ts';
 import { sectionFromDesignation } from '../importer/sections/designations/section-from-designation.ts';
+import { orthonormalSpan, remainder } from './held-directions.ts';
 import { category, combinations } from './written-combinations.ts';
 import { hold } from './written-holds.ts';
-import { positive, quantity, vector } from './written-quantities.ts';
+import { load } from './written-loads.ts';
+import { positive, quantity } from './written-quantities.ts';
 import { anyNumber, memberSelector, members, nodes, text } from './written-selectors.ts';
 
 /**
@@ -38,7 +40,11 @@ const fix = z
   .union([letters, along, z.array(z.union([letters, along], { error: LETTERS })).min(1)], { error: LETTERS })
   .transform((written) => (Array.isArray(written) ? written.flatMap((entry) => entry.held) : written.held));
 
+/** Along its own length, so that what is left of it is a share. */
+const scaled = (settle: Vec3): Vec3 => unit(settle) ?? settle;
+
 const stiffness = positive('forcePerLength').optional();
+const moved = quantity('length').optional();
 
 const support = z
   .strictObject({
@@ -54,32 +60,21 @@ const support = z
       )
       .refine((springs) => springs.length > 0, 'a spring needs x, y or z')
       .optional(),
+    settle: z
+      .strictObject({ x: moved, y: moved, z: moved })
+      .refine((settle) => Object.keys(settle).length > 0, 'a settlement needs x, y or z')
+      .transform(({ x = 0, y = 0, z: down = 0 }): Vec3 => [x, y, down])
+      .optional()
+      .describe('how far the support moves; a case of its own named settlement'),
   })
-  .refine((rule) => rule.fix !== undefined || rule.spring !== undefined, 'a support needs "fix" or "spring"');
-
-const selfWeight = z.strictObject({
-  selfWeight: z.union([z.number(), z.strictObject({ factor: z.number() })], { error: 'a factor, such as 1.0, is due' }),
-});
-
-const area = z
-  .strictObject({
-    area: quantity('forcePerArea'),
-    over: nodes,
-    acts: z.enum(['down', 'normal']).describe('down: positive is downward; normal: positive presses on the upper face'),
-    per: z.enum(['slope', 'plan']),
-  })
-  .refine((load) => load.acts !== 'normal' || load.per === 'slope', {
-    message: 'a load normal to the surface acts per slope, not per plan',
-    path: ['per'],
-  });
-
-const line = z.strictObject({
-  line: vector('forcePerLength').describe('global axes'),
-  on: members,
-  per: z.enum(['length', 'plan']),
-});
-
-const point = z.strictObject({ point: vector('force').describe('global axes; in full at every node'), at: nodes });
+  .refine((rule) => rule.fix !== undefined || rule.spring !== undefined, 'a support needs "fix" or "spring"')
+  .refine(
+    (rule) => rule.settle === undefined || remainder(scaled(rule.settle), orthonormalSpan(rule.fix ?? [])) === null,
+    {
+      message: 'a support settles only in a direction that its "fix" holds',
+      path: ['settle'],
+    },
+  );
 
 const loadCase = z
   .strictObject({
@@ -91,7 +86,7 @@ const loadCase = z
       .describe(
         'cases of one name never act together; default: one group each of wind, snow and thermal; none: no group',
       ),
-    loads: z.array(z.union([selfWeight, area, line, point])),
+    loads: z.array(load),
   })
   .refine((rule) => rule.category === undefined || rule.nature === 'imposed', {
     message: 'only imposed loads have a category',

@@ -1,8 +1,12 @@
 import type { Section } from '../domain/member.ts';
 import type { Vec3 } from '../domain/vector.ts';
 import type { Category, CodeRule, Limit } from './code-rule.ts';
+import type { LoadRule } from './load-rule.ts';
+import type { MemberSelector, NodeSelector } from './selector.ts';
 
 export type { Limit } from './code-rule.ts';
+export type { LoadRule } from './load-rule.ts';
+export type { MemberSelector, NodeSelector, Range } from './selector.ts';
 
 /** A validated brief: SI throughout, defaults filled in. Each rule keeps its line in the file, for findings. */
 export interface Brief {
@@ -40,54 +44,6 @@ export interface Brief {
   };
 }
 
-/** An end left null is open. */
-export type Range = readonly [from: number | null, to: number | null];
-
-/** All keys given must hold. Texts take `*`. */
-export interface MemberSelector {
-  readonly line: number;
-  readonly class?: string;
-  readonly predefinedType?: string;
-  readonly globalId?: string;
-  readonly tag?: string;
-  readonly name?: string;
-  readonly type?: string;
-  readonly assembly?: string;
-  readonly storey?: string;
-  readonly layer?: string;
-  /** Name of a group it is assigned to. */
-  readonly group?: string;
-  /** By "Set.Property"; numbers in SI. */
-  readonly property?: Readonly<Record<string, boolean | number | string | Range>>;
-  readonly section?: string;
-  readonly material?: string;
-  /** World z of the member's middle, m. */
-  readonly level?: Range;
-  /** Angle to the horizontal, rad. */
-  readonly slope?: Range;
-  /** m. */
-  readonly length?: Range;
-  readonly not?: MemberSelector;
-}
-
-/** All keys given must hold. */
-export interface NodeSelector {
-  readonly line: number;
-  readonly near?: Vec3;
-  /** m; goes with `near`. */
-  readonly within?: number;
-  readonly lowest?: boolean;
-  readonly highest?: boolean;
-  /** World z, m. */
-  readonly level?: Range;
-  readonly top?: boolean;
-  /** An end of such a member lies at the node. */
-  readonly endOf?: readonly MemberSelector[];
-  /** Such a member meets the node, wherever along it. */
-  readonly joins?: readonly MemberSelector[];
-  readonly not?: NodeSelector;
-}
-
 /** A length, m, for the members it is given to; of several rules on one member the last counts. */
 export interface LengthRule {
   readonly line: number;
@@ -109,6 +65,8 @@ export interface SupportRule {
   readonly fix: readonly Vec3[];
   /** Stiffness in N/m along a unit direction. */
   readonly springs: readonly { readonly direction: Vec3; readonly stiffness: number }[];
+  /** m, how far the support itself moves, along what it fixes. */
+  readonly settle?: Vec3;
 }
 
 /** Nodes held by something that is not in the model. */
@@ -135,27 +93,6 @@ export interface CaseRule {
   readonly alternative?: string;
   readonly loads: readonly LoadRule[];
 }
-
-export type LoadRule =
-  | { readonly kind: 'selfWeight'; readonly line: number; readonly factor: number }
-  | {
-      readonly kind: 'area';
-      readonly line: number;
-      /** N/m2. */
-      readonly pressure: number;
-      readonly over: readonly NodeSelector[];
-      readonly acts: 'down' | 'normal';
-      readonly per: 'slope' | 'plan';
-    }
-  | {
-      readonly kind: 'line';
-      readonly line: number;
-      /** N/m, global axes. */
-      readonly force: Vec3;
-      readonly on: readonly MemberSelector[];
-      readonly per: 'length' | 'plan';
-    }
-  | { readonly kind: 'point'; readonly line: number; readonly force: Vec3; readonly at: readonly NodeSelector[] };
 
 export interface CombinationRule {
   readonly line: number;

@@ -343,6 +343,18 @@ export const resultSchema = z.strictObject({
   replies: repliesSchema.optional().describe('what a returned BCF file said'),
   stability: stabilitySchema,
   cases: z.array(caseSchema),
+  asked: z
+    .array(
+      z.strictObject({
+        case: text,
+        line: z.number().int().describe('of the brief'),
+        what: text,
+        asked: vector.nullable().describe('N, from areas, lengths and masses alone'),
+        applied: vector.describe('N, the sum at the nodes'),
+      }),
+    )
+    .optional()
+    .describe('each load of the brief: what it asks for and what was applied'),
   combinations: z.array(combinationSchema),
   analysis: z.enum(['first-order', 'second-order']).optional(),
   buckling: bucklingSchema.optional(),

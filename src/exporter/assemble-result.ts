@@ -9,6 +9,7 @@ import { between, type Vec3 } from '../domain/vector.ts';
 import type { BarBending } from '../statics/bending/between-nodes.ts';
 import type { EccentricityMoment } from '../statics/bending/eccentricity-moments.ts';
 import type { BucklingJudgement } from '../statics/buckling/judge-buckling.ts';
+import type { AskedLoad } from '../statics/loads/asked.ts';
 import type { Judgement } from '../statics/stability/assess-stability.ts';
 import type {
   BarEnvelope,
@@ -42,6 +43,7 @@ export interface RunRecord {
   readonly cases: readonly SolvedCase[];
   readonly combinations: readonly SolvedCombination[];
   readonly oneWay: OneWay;
+  readonly asked: readonly AskedLoad[];
   readonly combining?: Result['combining'];
   readonly envelope: readonly BarEnvelope[];
   readonly holds: readonly HoldForce[];
@@ -104,6 +106,7 @@ export function assembleResult(run: RunRecord): Result {
     combinations: run.combinations.map((one) => ({ ...resultCombination(one), ...factorOf(one.name) })),
     analysis: run.analysis,
     ...resultBuckling(run.buckling),
+    ...(run.asked.length === 0 ? {} : { asked: run.asked.map(resultAsked) }),
     ...oneWayBars(run.oneWay),
     ...(run.combining === undefined ? {} : { combining: run.combining }),
     envelope: run.envelope.map(({ bar, tension, compression }) => ({
@@ -250,6 +253,10 @@ function resultBuckling({ governing }: BucklingJudgement): Pick<Result, 'bucklin
     return { factor, nodes: nodes.map(nodeId), movement: nodes.map(vectorAt) };
   });
   return { buckling: { from: governing.from, modes } };
+}
+
+function resultAsked({ asked, applied, ...load }: AskedLoad): NonNullable<Result['asked']>[number] {
+  return { ...load, asked: asked && point(asked), applied: point(applied) };
 }
 
 function oneWayBars({ tensionOnly, compressionOnly }: OneWay): Pick<Result, 'oneWay'> {

@@ -228,12 +228,6 @@ describe('a brief that is wrong', () => {
     ['chords: continuous', '2:9: "continuous": this'],
     ['checks: {rule: "EN1993-1-1:2005"}', '"EN1993-1-1:2005": this'],
     ['checks: AISC360', '2:9: "AISC360": this'],
-    ['supports: [{at: {top: true}, fix: z, settle: {z: -5 mm}}]', '2:38: "settle": this key'],
-    [
-      'cases: [{name: a, nature: thermal, loads: [{temperature: 25 K, on: {class: IfcMember}}]}]',
-      '"temperature": this key',
-    ],
-    ['cases: [{name: a, nature: thermal, loads: [{misfit: 2 mm, on: {globalId: x}}]}]', '"misfit": this key'],
   ])('is told that %s is not available yet, and nothing else', (line, expected) => {
     const problems = problemsOf(`pinwright: 1\n${line}\n`);
     expect(problems).toHaveLength(1);

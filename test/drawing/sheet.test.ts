@@ -106,12 +106,21 @@ describe('a sheet', () => {
   });
 
   it('marks each finding that has a spot by the number it is listed under', () => {
-    const svg = drawSheet(faults);
+    const few = { ...faults, findings: faults.findings.slice(0, 10) };
+    const svg = drawSheet(few);
     const listed = new Set(elementsOf(svg, 'data-listed').map((mark) => mark['data-listed']));
-    const spots = faults.findings.filter(({ at, severity }) => at !== null && severity !== 'note');
+    const spots = few.findings.filter(({ at, severity }) => at !== null && severity !== 'note');
     expect(listed.size).toBe(spots.length);
     const [plan] = viewsOf(svg).filter(({ kind }) => kind === 'plan');
     expect(new Set(elementsOf(plan!.svg, 'data-mark').map((mark) => mark['data-mark']))).toEqual(listed);
+  });
+
+  it('lists as many findings as fit and says how many more there are', () => {
+    const many = { ...faults, findings: [...faults.findings, ...faults.findings, ...faults.findings] };
+    const svg = drawSheet(many);
+    const listed = elementsOf(svg, 'data-listed').map((mark) => Number(mark['data-listed']));
+    expect(listed).toEqual(listed.map((_, i) => i + 1));
+    expect(textsOf(svg).join(' ')).toContain(`and ${many.findings.length - listed.length} more findings`);
   });
 
   it('draws the views that are asked for', () => {

@@ -56,6 +56,15 @@ describe.each(Object.entries(runs))('%s', (_, { revision, run }) => {
       expect(residual).toBeLessThan(1e-9);
     }
     expect(result.combinations.every(({ refused }) => refused === undefined)).toBe(true);
+    for (const one of result.cases) {
+      const reaction = [0, 1, 2].map((axis) => one.reactions.reduce((sum, { force }) => sum + force[axis], 0));
+      const size = Math.max(...one.reactions.map(({ force }) => Math.hypot(...force)));
+      for (const axis of [0, 1, 2]) expect(Math.abs(reaction[axis] + one.loadSum[axis])).toBeLessThan(1e-9 * size);
+    }
+    for (const { asked, applied } of result.asked!)
+      for (const axis of [0, 1, 2]) expect(Math.abs(asked![axis] - applied[axis])).toBeLessThan(1e-6);
+    for (const { slack, axialForce } of result.combinations)
+      for (const bar of slack!) expect(axialForce[result.bars.findIndex(({ id }) => id === bar)]).toBeLessThan(1e-3);
     expect(result.combining?.rule).toBe('EN 1990:2002+A1, expression 6.10');
     expect(result.findings.map(({ code }) => code)).toEqual(['support-lifts']);
   });

@@ -57,13 +57,17 @@ const raised = ([from, to]: Range, move: Move): Range => [
   to === null ? null : move([0, 0, to])[2],
 ];
 
-/** The brief for a hall that was turned and moved: its points go along, its forces turn. */
+/** The brief for a hall that was turned and moved: its points go along, its forces and the way it calls left turn. */
 function turnedBrief(asked: Brief, move: Move, turn: Move): Brief {
   return {
     ...asked,
     cases: asked.cases.map((rule) => ({
       ...rule,
       loads: rule.loads.map((load) => {
+        if (load.kind === 'area' && load.snow?.left) {
+          const [x, y] = turn([...load.snow.left, 0]);
+          return { ...load, snow: { ...load.snow, left: [x, y] as const } };
+        }
         if (load.kind !== 'point') return load;
         const at = load.at.map(({ level, near, ...selector }) => ({
           ...selector,

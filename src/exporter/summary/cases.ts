@@ -24,12 +24,40 @@ export function loadCases(result: Result, { extras, width }: SummaryOptions): st
   return [
     'Load cases',
     ...columns(heads, rows),
+    ...asked(result, width),
     ...covered(extras, width),
     ...slackBars(result, width),
     ...refusals(result, width),
     ...combinations(result, width),
     ...asAWhole(result, width),
   ];
+}
+
+/** Each load of the brief: what it asks for beside what the nodes got. */
+function asked({ asked: loads = [] }: Result, width: number): string[] {
+  if (loads.length === 0) return [];
+  const inKilonewtons = kilonewtons(loads.flatMap((load) => [...load.applied, ...(load.asked ?? [])]));
+  const spelled = (force: readonly number[] | null) => (force === null ? '-' : force.map(inKilonewtons).join(' '));
+  const forces = loads.filter((load) => load.applied.some((v) => v !== 0) || load.asked?.some((v) => v !== 0));
+  const rows = forces.map((load) => [
+    String(load.line),
+    harmless(load.case),
+    harmless(load.what),
+    spelled(load.asked),
+    spelled(load.applied),
+  ]);
+  // Numbers are never cut: the words get what they leave of the line.
+  const numbers = [rows.map((row) => row[3]), rows.map((row) => row[4])];
+  const taken = numbers.reduce((sum, cells) => sum + Math.max(10, ...cells.map(({ length }) => length)), 0);
+  const words = Math.max(16, width - taken - 'line'.length - 2 * 5);
+  const heads: Column[] = [
+    { head: 'line', align: 'right' },
+    { head: 'case', align: 'left', most: Math.floor(words / 2) - 1 },
+    { head: 'load', align: 'left', most: Math.ceil(words / 2) + 1 },
+    { head: 'asked kN', align: 'right' },
+    { head: 'applied kN', align: 'right' },
+  ];
+  return rows.length === 0 ? [] : columns(heads, rows);
 }
 
 /** Area loads by the area they cover, the first thing a reader checks by hand. */
@@ -55,7 +83,7 @@ function slackBars({ oneWay, cases }: Result, width: number): string[] {
   const slack = cases.flatMap(({ name, slack: bars }) =>
     bars === undefined ? [] : [`${harmless(name)} ${bars.length}`],
   );
-  const words = `${kinds.join(', ')}; slack: ${slack.join(', ')}. Forces of cases do not add up: every combination is solved for itself.`;
+  const words = `${kinds.join(', ')}; without force: ${slack.join(', ')}. Forces of cases do not add up: every combination is solved for itself.`;
   return wrapped(words, width, '  ', '    ');
 }
 

@@ -2,15 +2,21 @@ import { findEmptyMemberSelectors, findEmptyNodeSelectors } from '../../brief/se
 import { selectMembers } from '../../brief/selectors/select-members.ts';
 import { selectNodes } from '../../brief/selectors/select-nodes.ts';
 import type { Brief, CaseRule, LoadRule } from '../../brief/types.ts';
+import { GRAVITY } from '../../domain/constants.ts';
 import { type Finding, finding } from '../../domain/finding.ts';
 import type { Member } from '../../domain/member.ts';
 import type { Truss } from '../../domain/truss.ts';
-import type { LoadCase } from '../types.ts';
+import { ORIGIN, scale, type Vec3 } from '../../domain/vector.ts';
+import { count } from '../../domain/verdict.ts';
+import { millimetres } from '../../domain/words.ts';
+import type { BarStretch, LoadCase } from '../types.ts';
 import { type AreaCoverage, type AreaRule, addAreaLoad } from './area-load.ts';
+import type { AskedLoad } from './asked.ts';
 import { addLineLoad } from './line-load.ts';
 import { NodeForces } from './node-forces.ts';
 import { addPointLoad } from './point-load.ts';
-import { addSelfWeight } from './self-weight.ts';
+import { addSelfWeight, weighedMass } from './self-weight.ts';
+import { stretchByMisfit, stretchByWarmth } from './strains.ts';
 
 /** The area that one area load of the brief has covered, and its resultant. */
 export interface Coverage extends AreaCoverage {
@@ -22,6 +28,8 @@ export interface BuiltCases {
   /** One a case of the brief, in its order, empty ones included. */
   readonly cases: readonly LoadCase[];
   readonly coverage: readonly Coverage[];
+  /** What each load of the brief asks for and what was applied of it. */
+  readonly asked: readonly AskedLoad[];
   readonly findings: readonly Finding[];
 }
 
@@ -34,6 +42,7 @@ export function buildCases(truss: Truss, members: readonly Member[], brief: Pick
   return {
     cases: built.map(({ loadCase }) => loadCase),
     coverage: built.flatMap(({ coverage }) => coverage),
+    asked: built.flatMap(({ asked }) => asked),
     findings: built.flatMap(({ findings }) => findings),
   };
 }
@@ -42,59 +51,117 @@ function buildCase(truss: Truss, members: readonly Member[], rule: CaseRule) {
   const forces = new NodeForces();
   const coverage: Coverage[] = [];
   const findings: Finding[] = [];
+  const asked: AskedLoad[] = [];
+  const freeStretch: BarStretch[] = [];
   const notPut: string[] = [];
   for (const load of rule.loads) {
     findings.push(...findEmptySelectors(truss, members, load));
-    if (load.kind === 'selfWeight') addSelfWeight(forces, truss, load.factor);
-    else if (load.kind === 'point') addPointLoad(forces, selectNodes(truss, members, load.at), load.force);
-    else if (load.kind === 'line') {
-      const chosen = selectMembers(members, load.on);
-      const bars = addLineLoad(forces, truss, chosen, load.force, load.per);
-      if (chosen.length > 0 && bars === 0) {
-        const why = 'its members have no bar in the truss';
-        findings.push(sayNotPut(rule, load, why, []));
-        notPut.push(`line ${load.line} of the brief: ${why}`);
-      }
-    } else {
-      const covered = coverArea(forces, truss, members, rule, load);
-      if (covered.coverage !== null) coverage.push(covered.coverage);
-      findings.push(...covered.findings);
-      if (covered.fault !== null) notPut.push(`line ${load.line} of the brief: ${covered.fault}`);
-    }
+    const own = new NodeForces();
+    const put = putLoad(own, truss, members, rule, load);
+    forces.addAll(own);
+    asked.push({ case: rule.name, line: load.line, what: put.what, asked: put.asked, applied: own.sum() });
+    if (put.coverage) coverage.push(put.coverage);
+    freeStretch.push(...(put.freeStretch ?? []));
+    findings.push(...(put.findings ?? []));
+    if (put.fault) notPut.push(`line ${load.line} of the brief: ${put.fault}`);
   }
   const loads = forces.toLoads();
   // Where a load could not be put on the truss, that has been said.
   const isSaid = findings.some(({ code }) => code === 'no-load');
-  if (loads.length === 0 && !isSaid) findings.push(sayEmpty(rule));
-  const incomplete = notPut.length === 0 ? {} : { incomplete: notPut.join('; ') };
+  if (loads.length === 0 && freeStretch.length === 0 && !isSaid) findings.push(sayEmpty(rule));
   const { name, nature, category, alternative } = rule;
-  const combining = { ...(category && { category }), ...(alternative && { alternative }) };
-  return { loadCase: { name, nature, ...combining, loads, ...incomplete }, coverage, findings };
+  const more = {
+    ...(category && { category }),
+    ...(alternative && { alternative }),
+    ...(freeStretch.length > 0 && { freeStretch }),
+    ...(notPut.length > 0 && { incomplete: notPut.join('; ') }),
+  };
+  return { loadCase: { name, nature, ...more, loads }, coverage, asked, findings };
+}
+
+/** What became of one load. */
+interface Put {
+  readonly what: string;
+  readonly asked: Vec3 | null;
+  readonly coverage?: Coverage | null;
+  readonly freeStretch?: readonly BarStretch[];
+  readonly findings?: readonly Finding[];
+  readonly fault?: string | null;
+}
+
+function putLoad(forces: NodeForces, truss: Truss, members: readonly Member[], rule: CaseRule, load: LoadRule): Put {
+  switch (load.kind) {
+    case 'selfWeight': {
+      addSelfWeight(forces, truss, load.factor);
+      const asked: Vec3 = [0, 0, -load.factor * GRAVITY * weighedMass(truss)];
+      return { what: load.factor === 1 ? 'self weight' : `self weight x ${load.factor}`, asked };
+    }
+    case 'point': {
+      const nodes = selectNodes(truss, members, load.at);
+      addPointLoad(forces, nodes, load.force);
+      return { what: `point load, ${count(nodes.length, 'node')}`, asked: scale(load.force, nodes.length) };
+    }
+    case 'area':
+      return coverArea(forces, truss, members, rule, load);
+    case 'line': {
+      const chosen = selectMembers(members, load.on);
+      const { bars, metres } = addLineLoad(forces, truss, chosen, load.force, load.per);
+      const put = { what: `line load, ${metres.toFixed(1)} m`, asked: scale(load.force, metres) };
+      return chosen.length > 0 && bars === 0 ? { ...put, ...noBar(rule, load) } : put;
+    }
+    default: {
+      const chosen = selectMembers(members, load.on);
+      const isWarmth = load.kind === 'temperature';
+      const freeStretch = isWarmth
+        ? stretchByWarmth(truss, chosen, load.change)
+        : stretchByMisfit(truss, chosen, load.by);
+      const size = isWarmth ? `${load.change} K` : millimetres(load.by);
+      const put = { what: `${isWarmth ? 'temperature' : 'misfit'}, ${size}`, asked: ORIGIN, freeStretch };
+      return chosen.length > 0 && freeStretch.length === 0 ? { ...put, ...noBar(rule, load) } : put;
+    }
+  }
+}
+
+function noBar(rule: CaseRule, load: LoadRule): Pick<Put, 'findings' | 'fault'> {
+  const why = 'its members have no bar in the truss';
+  return { findings: [sayNotPut(rule, load, why, [])], fault: why };
 }
 
 function findEmptySelectors(truss: Truss, members: readonly Member[], load: LoadRule): Finding[] {
   if (load.kind === 'selfWeight') return [];
-  if (load.kind === 'line') return findEmptyMemberSelectors(members, load.on);
+  if ('on' in load) return findEmptyMemberSelectors(members, load.on);
   return findEmptyNodeSelectors(truss, members, load.kind === 'area' ? load.over : load.at);
 }
 
-function coverArea(
-  forces: NodeForces,
-  truss: Truss,
-  members: readonly Member[],
-  rule: CaseRule,
-  load: AreaRule,
-): { coverage: Coverage | null; fault: string | null; findings: Finding[] } {
+function coverArea(forces: NodeForces, truss: Truss, members: readonly Member[], rule: CaseRule, load: AreaRule): Put {
+  const what = load.called ?? 'area load';
   const nodes = selectNodes(truss, members, load.over);
-  if (nodes.length === 0) return { coverage: null, fault: null, findings: [] };
+  if (nodes.length === 0) return { what, asked: null };
   const covered = addAreaLoad(forces, truss, members, nodes, load);
   if ('fault' in covered) {
     const { fault, nodes: shown } = covered;
-    return { coverage: null, fault, findings: [sayNotPut(rule, load, fault, shown)] };
+    return { what, asked: null, fault, findings: [sayNotPut(rule, load, fault, shown)] };
   }
   const findings = covered.formedBy === 'bars' ? [] : [saySharedWithinOutline(rule, load, covered)];
   for (const opening of covered.openings) findings.push(sayOpening(truss, rule, load, opening));
-  return { coverage: { case: rule.name, line: load.line, ...covered }, fault: null, findings };
+  if (covered.askedPlanArea !== null && differ(covered.askedPlanArea, covered.planArea))
+    findings.push(sayBeyond(rule, load, covered.askedPlanArea, covered.planArea));
+  return { what, asked: covered.asked, coverage: { case: rule.name, line: load.line, ...covered }, findings };
+}
+
+/** Share by which the area of an outline and what the bars cover of it may differ by drawing accuracy. */
+const SAME_AREA = 0.01;
+
+const differ = (a: number, b: number): boolean => Math.abs(a - b) > SAME_AREA * Math.max(Math.abs(a), Math.abs(b));
+
+function sayBeyond(rule: CaseRule, load: LoadRule, asked: number, covered: number): Finding {
+  return finding(
+    'surface-skipped',
+    `The outline of line ${load.line} of the brief, case ${rule.name}, has ${asked.toFixed(1)} m2 in plan, and the bars between the nodes cover ` +
+      `${covered.toFixed(1)} m2 of it; the load of the rest is not on the truss.`,
+    'Choose nodes all over the outline, or give the roof beyond the last nodes by `edge:`.',
+    { severity: 'warning' },
+  );
 }
 
 function sayNotPut(rule: CaseRule, load: LoadRule, why: string, nodes: readonly number[]): Finding {

@@ -24,6 +24,7 @@ export function buildGivenCases(truss: Truss, members: readonly Member[], cases:
   return {
     cases: built.map(({ loadCase }) => loadCase),
     coverage: [],
+    asked: [],
     findings: built.flatMap(({ findings }) => findings),
   };
 }

@@ -7,7 +7,7 @@ import type { NodeForces } from './node-forces.ts';
  * bar hands on. A bar that is only partly theirs (a splice) is loaded over its whole length, a pair's bar once.
  * @param force N/m, global axes
  * @param per `length`: metres along the bar; `plan`: metres of its projection on the ground
- * @returns the number of bars that are theirs
+ * @returns the number of bars that are theirs, and m of them, along or in plan
  */
 export function addLineLoad(
   forces: NodeForces,
@@ -15,11 +15,12 @@ export function addLineLoad(
   members: readonly number[],
   force: Vec3,
   per: 'length' | 'plan',
-): number {
+): { readonly bars: number; readonly metres: number } {
   const chosen = new Set(members);
   const bars = truss.bars.filter((bar) => bar.members.some((member) => chosen.has(member)));
-  for (const bar of bars) forces.addToEnds(bar, scale(force, per === 'length' ? bar.length : planLength(truss, bar)));
-  return bars.length;
+  const metresOf = (bar: TrussBar) => (per === 'length' ? bar.length : planLength(truss, bar));
+  for (const bar of bars) forces.addToEnds(bar, scale(force, metresOf(bar)));
+  return { bars: bars.length, metres: bars.reduce((sum, bar) => sum + metresOf(bar), 0) };
 }
 
 function planLength(truss: Truss, bar: TrussBar): number {

@@ -18,3 +18,9 @@ export function addWeight(forces: NodeForces, truss: Truss, factors: Vec3): void
     if (overhangMass !== 0) forces.add(node, scale(factors, overhangMass * GRAVITY));
   });
 }
+
+/** kg that self weight acts on. */
+export function weighedMass(truss: Truss): number {
+  const bars = truss.bars.reduce((sum, bar) => sum + bar.massPerLength * bar.length, 0);
+  return truss.nodes.reduce((sum, { overhangMass }) => sum + overhangMass, bars);
+}

@@ -23,7 +23,7 @@ export interface NotCarried {
 }
 
 /** Share of the largest force below which a force of the wrong sign is rounding. */
-const NO_FORCE = 1e-9;
+const NO_FORCE = 1e-11;
 
 /** Share of the largest opening that counts as one. */
 const OPENS = 1e-6;

@@ -5,6 +5,7 @@ import { analyseWhole, type Whole } from '../analyse-whole.ts';
 import { NOT_JUDGED } from '../buckling/judge-buckling.ts';
 import { combinationsFor } from '../combinations/combinations-for.ts';
 import type { Generated, NamedCombination } from '../combinations/generate.ts';
+import { slackNote } from '../one-way/slack-note.ts';
 import type { Judgement } from '../stability/assess-stability.ts';
 import type { Named } from '../stability/names.ts';
 import type { BarEnvelope, HoldForce, LoadCase, OneWay, Supports } from '../types.ts';
@@ -65,6 +66,7 @@ export function solveRun(
       ...combined.findings,
       ...balance.findings,
       ...supportLifts(truss, whole.combinations),
+      ...slackNote(truss, oneWay, whole.cases, whole.combinations),
       ...whole.findings,
     ],
   };
