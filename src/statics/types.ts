@@ -114,6 +114,8 @@ export interface Stability {
 /** Set where bar forces do not bring the mechanisms back: the bars that those move. Their forces cannot last. */
 export interface Unstable {
   readonly bars: readonly number[];
+  /** How it gives way, three components a node. */
+  readonly moves: Float64Array;
 }
 
 /** Forces of one case. Entries are null where the case is refused or the bar or node is set aside. */

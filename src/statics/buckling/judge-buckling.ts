@@ -52,20 +52,24 @@ export function judgeBuckling(
   if (carried.length === 0 || lacksSection(truss, parts) !== null) return NOT_JUDGED;
   const system = buildSystem({ truss, supports, parts }, [], realStiffness(truss));
   const buckling = prepareBuckling(system, stability.modes, stability.mechanisms);
-  const found = carried.map(({ name, axialForce }) => ({
+  const found = carried.map(({ name, axialForce, unstable }) => ({
     name,
     axialForce,
-    lowest: criticalFactors(buckling, axialForce, 1).at(0) ?? null,
+    // What its forces do not bring back has no factor above zero, whichever mechanism it is.
+    lowest: unstable ? { factor: 0, moves: unstable.moves } : (criticalFactors(buckling, axialForce, 1).at(0) ?? null),
   }));
   const factors = new Map(found.map(({ name, lowest }) => [name, lowest?.factor ?? null]));
   const below = found
     .flatMap(({ name, axialForce, lowest }) => (lowest === null ? [] : [{ name, axialForce, lowest }]))
     .sort((a, b) => a.lowest.factor - b.lowest.factor);
   if (below.length === 0) return { factors, governing: null, findings: [] };
-  const { name, axialForce } = below[0];
+  const { name, axialForce, lowest } = below[0];
   return {
     factors,
-    governing: { from: name, modes: criticalFactors(buckling, axialForce, settings.modes) },
+    governing: {
+      from: name,
+      modes: lowest.factor === 0 ? [lowest] : criticalFactors(buckling, axialForce, settings.modes),
+    },
     findings: findingsOf(truss, below, settings),
   };
 }

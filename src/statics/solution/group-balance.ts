@@ -1,82 +1,123 @@
 import { CholeskyDecomposition, EigenvalueDecomposition, Matrix } from 'ml-matrix';
 import type { Truss } from '../../domain/truss.ts';
-import type { ModeGroup } from './mode-groups.ts';
+import { assemble } from '../engine/assemble.ts';
+import { factorise } from '../engine/factor.ts';
+import { lowestOfStiffness } from '../engine/lanczos.ts';
+import { solveOne } from '../engine/solve.ts';
+import type { Symbolic } from '../engine/symbolic.ts';
+import { applyStiffness } from '../engine/system.ts';
+import { inner, scatter } from '../engine/vectors.ts';
+import type { MotionGroup } from './mode-groups.ts';
 
-/** How the bar forces of one case act on the modes of one group. */
+export type Kind = 'stable' | 'indifferent' | 'unstable';
+
+/** How the bar forces of one case act on motions that no bar resists. */
 export interface GroupBalance {
-  readonly kind: 'stable' | 'indifferent' | 'unstable';
-  /** Shares of the group's modes in the motion that the forces resist least; empty where they hold all. */
-  readonly motion: readonly number[];
-  /** Bars whose compression drives that motion, the most driving first. */
-  readonly pushing: readonly number[];
+  readonly kind: Kind;
+  /** The motion that the forces resist least, over the real nodes, three components a node of the truss; null where they bring all back. */
+  readonly moves: Float64Array | null;
 }
 
 /** Eigenvalues below this share of what the forces do, taken without their signs, are nothing. */
 const NOTHING = 1e-8;
-/** Bars that do less than this share of the worst one's part are not named. */
-const PART = 0.05;
+/** N / L of each bar of the group, on both of its rows. */
+function densitiesOf(truss: Truss, { bars }: MotionGroup, forces: readonly (number | null)[]): Float64Array {
+  const out = new Float64Array(2 * bars.length);
+  bars.forEach((bar, r) => {
+    out.fill((forces[bar] ?? 0) / truss.bars[bar].length, 2 * r, 2 * r + 2);
+  });
+  return out;
+}
 
-/**
- * The geometric stiffness of the bar forces on the modes: Q_ij = sum over bars of N / L times the movements across the bar in modes i and j
- * (N/m), with the largest share that one bar has in its diagonal.
- */
-export function geometricOf(
-  truss: Truss,
-  group: ModeGroup,
-  forces: readonly (number | null)[],
-): { readonly q: Matrix; readonly most: number } {
-  const size = group.modes.length;
-  const q = Matrix.zeros(size, size);
+/** The largest part that one bar has in the stiffness of a motion, without its sign. */
+function largestPart({ rows }: MotionGroup, densities: Float64Array): number {
   let most = 0;
-  for (const { bar, turns } of group.bars) {
-    const density = (forces[bar] ?? 0) / truss.bars[bar].length;
-    if (density === 0) continue;
-    for (const a of turns)
-      for (const b of turns) {
-        if (b.mode > a.mode) continue;
-        const work = density * (a.across[0] * b.across[0] + a.across[1] * b.across[1] + a.across[2] * b.across[2]);
-        q.set(a.mode, b.mode, q.get(a.mode, b.mode) + work);
-        if (a.mode === b.mode) most = Math.max(most, Math.abs(work));
-        else q.set(b.mode, a.mode, q.get(b.mode, a.mode) + work);
+  for (let row = 0; row < rows.count; row++)
+    for (let p = rows.start[row]; p < rows.start[row + 1]; p++)
+      most = Math.max(most, Math.abs(densities[row]) * rows.value[p] ** 2);
+  return most;
+}
+
+/** The geometric stiffness of the bar forces on the motions, N/m: sum over bars of N / L times the movements across the bar. */
+export function geometricOf(truss: Truss, group: MotionGroup, forces: readonly (number | null)[]): Matrix {
+  return inFull(group, densitiesOf(truss, group, forces));
+}
+
+function inFull({ motions, rows }: MotionGroup, densities: Float64Array): Matrix {
+  const q = Matrix.zeros(motions.length, motions.length);
+  for (let row = 0; row < rows.count; row++) {
+    if (densities[row] === 0) continue;
+    for (let a = rows.start[row]; a < rows.start[row + 1]; a++)
+      for (let b = rows.start[row]; b < rows.start[row + 1]; b++) {
+        const [i, j] = [rows.unknown[a], rows.unknown[b]];
+        if (j > i) continue;
+        q.set(i, j, q.get(i, j) + densities[row] * rows.value[a] * rows.value[b]);
       }
   }
-  return { q, most };
+  for (let i = 0; i < q.rows; i++) for (let j = 0; j < i; j++) q.set(j, i, q.get(i, j));
+  return q;
 }
 
 /**
  * Bars do not stretch in a mode, so that to second order the geometric stiffness alone decides: with its smallest eigenvalue positive the
  * balance is stable (Pellegrino & Calladine 1986; Bazant & Cedolin, Stability of Structures, ch. 4, from memory).
  */
-export function balanceOf(truss: Truss, group: ModeGroup, forces: readonly (number | null)[]): GroupBalance {
-  const size = group.modes.length;
-  const { q, most } = geometricOf(truss, group, forces);
-  if (most === 0) return { kind: 'indifferent', motion: group.modes.map((_, i) => (i === 0 ? 1 : 0)), pushing: [] };
+export function balanceOf(truss: Truss, group: MotionGroup, forces: readonly (number | null)[]): GroupBalance {
+  const densities = densitiesOf(truss, group, forces);
+  const most = largestPart(group, densities);
+  if (most === 0) return { kind: 'indifferent', moves: mixed(truss, group, [1]) };
   const little = NOTHING * most;
-  const lowered = Matrix.sub(q, Matrix.eye(size, size).mul(little));
-  if (new CholeskyDecomposition(lowered).isPositiveDefinite()) return { kind: 'stable', motion: [], pushing: [] };
-  const eigen = new EigenvalueDecomposition(q, { assumeSymmetric: true });
-  const lowest = eigen.realEigenvalues.indexOf(Math.min(...eigen.realEigenvalues));
-  const motion = eigen.eigenvectorMatrix.getColumn(lowest);
-  const kind = eigen.realEigenvalues[lowest] < -little ? 'unstable' : 'indifferent';
-  return { kind, motion, pushing: pushingBars(truss, group, forces, motion) };
+  const { kind, shares } =
+    group.symbolic === null
+      ? judgeInFull(group, densities, little)
+      : judgeSparse(group.symbolic, group, densities, little);
+  return { kind, moves: shares === null ? null : mixed(truss, group, shares) };
 }
 
-function pushingBars(
-  truss: Truss,
-  group: ModeGroup,
-  forces: readonly (number | null)[],
-  motion: readonly number[],
-): number[] {
-  const works = group.bars.flatMap(({ bar, turns }) => {
-    const force = forces[bar] ?? 0;
-    if (force >= 0) return [];
-    const across = [0, 1, 2].map((axis) => turns.reduce((sum, t) => sum + motion[t.mode] * t.across[axis], 0));
-    const work = (force / truss.bars[bar].length) * (across[0] ** 2 + across[1] ** 2 + across[2] ** 2);
-    return work < 0 ? [{ bar, work }] : [];
-  });
-  const worst = Math.min(0, ...works.map(({ work }) => work));
-  return works
-    .filter(({ work }) => work < PART * worst)
-    .sort((a, b) => a.work - b.work || a.bar - b.bar)
-    .map(({ bar }) => bar);
+/** Shares of the motions in the one that is resisted least; null where all are resisted. */
+interface Weakest {
+  readonly kind: Kind;
+  readonly shares: ArrayLike<number> | null;
+}
+
+function judgeInFull(group: MotionGroup, densities: Float64Array, little: number): Weakest {
+  const q = inFull(group, densities);
+  const lowered = Matrix.sub(q, Matrix.eye(q.rows, q.rows).mul(little));
+  if (new CholeskyDecomposition(lowered).isPositiveDefinite()) return { kind: 'stable', shares: null };
+  const eigen = new EigenvalueDecomposition(q, { assumeSymmetric: true });
+  const lowest = eigen.realEigenvalues.indexOf(Math.min(...eigen.realEigenvalues));
+  const kind = eigen.realEigenvalues[lowest] < -little ? 'unstable' : 'indifferent';
+  return { kind, shares: eigen.eigenvectorMatrix.getColumn(lowest) };
+}
+
+/** By the inertia of the matrix less a shift (Sylvester), however many motions there are. */
+function judgeSparse(symbolic: Symbolic, { rows }: MotionGroup, densities: Float64Array, little: number): Weakest {
+  const { active } = symbolic.freedoms;
+  const matrix = assemble(symbolic, rows, densities);
+  if (factorise(matrix, { shift: little }).negative === 0) return { kind: 'stable', shares: null };
+  if (factorise(matrix, { shift: -little }).negative > 0)
+    return {
+      kind: 'unstable',
+      shares: lowestOfStiffness((x) => applyStiffness(rows, densities, x), active),
+    };
+  // Inverse iteration from just below the eigenvalues that are nothing.
+  const factor = factorise(matrix, { shift: -2 * little });
+  let x = scatter(active, 5);
+  for (let step = 0; step < 6; step++) {
+    x = solveOne(factor, x);
+    const size = Math.sqrt(inner(x, x));
+    x = x.map((v) => v / size);
+  }
+  return { kind: 'indifferent', shares: x };
+}
+
+function mixed(truss: Truss, { motions }: MotionGroup, shares: ArrayLike<number>): Float64Array {
+  const out = new Float64Array(3 * truss.nodes.length);
+  for (let m = 0; m < shares.length; m++) {
+    const { nodes, moves } = motions[m];
+    nodes.forEach((node, i) => {
+      for (let axis = 0; axis < 3; axis++) out[3 * node + axis] += shares[m] * moves[3 * i + axis];
+    });
+  }
+  return out;
 }

@@ -1,7 +1,7 @@
 import { CholeskyDecomposition, Matrix } from 'ml-matrix';
 import type { Truss } from '../../domain/truss.ts';
 import { geometricOf } from './group-balance.ts';
-import type { ModeGroup } from './mode-groups.ts';
+import type { MotionGroup } from './mode-groups.ts';
 
 /**
  * m. How far the truss moves along its modes until its bar forces carry what little of the load works on them: a truss drawn flat to a tenth
@@ -12,21 +12,21 @@ import type { ModeGroup } from './mode-groups.ts';
  */
 export function settlesBy(
   truss: Truss,
-  groups: readonly ModeGroup[],
+  groups: readonly MotionGroup[],
   forces: readonly (number | null)[],
   loads: Float64Array,
   nothing: number,
 ): number {
   let most = 0;
   for (const group of groups) {
-    const work = group.modes.map((mode) =>
-      mode.nodes.reduce((sum, node, i) => {
-        const v = mode.movement[i];
-        return sum + v[0] * loads[3 * node] + v[1] * loads[3 * node + 1] + v[2] * loads[3 * node + 2];
+    const work = group.motions.map(({ nodes, moves }) =>
+      nodes.reduce((sum, node, i) => {
+        for (let axis = 0; axis < 3; axis++) sum += moves[3 * i + axis] * loads[3 * node + axis];
+        return sum;
       }, 0),
     );
     if (work.every((w) => Math.abs(w) <= nothing)) continue;
-    const { q } = geometricOf(truss, group, forces);
+    const q = geometricOf(truss, group, forces);
     const factor = new CholeskyDecomposition(q);
     if (!factor.isPositiveDefinite()) return Number.POSITIVE_INFINITY;
     const amounts = factor.solve(Matrix.columnVector(work)).to1DArray();

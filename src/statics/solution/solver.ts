@@ -17,7 +17,7 @@ import { type Balance, balanceJoints } from './balance.ts';
 import { cleanOfModes } from './clean-of-modes.ts';
 import { leaveOutSetAside } from './leave-out-set-aside.ts';
 import { loadMovesIt, onRealNodes } from './load-moves-it.ts';
-import { groupModes, type ModeGroup } from './mode-groups.ts';
+import { groupMotions, type MotionGroup } from './mode-groups.ts';
 import { judgeSections, realStiffness, type SectionJudgement } from './sections.ts';
 import { settlesBy } from './settles.ts';
 
@@ -64,7 +64,7 @@ export class Solver {
   readonly #factor: Factor;
   readonly #sections: SectionJudgement;
   readonly #oneWay: OneWayBars | null;
-  #groups: readonly ModeGroup[] | null = null;
+  #groups: readonly MotionGroup[] | null | undefined;
 
   /** @param stability the judgement of this truss on these supports */
   constructor(truss: Truss, supports: Supports, stability: Judgement, options: Partial<SolveOptions> = {}) {
@@ -172,10 +172,13 @@ export class Solver {
     const { workTolerance, leanTolerance, settling } = this.#settings;
     const work = largestOf(pivotForces) / (largestForce || 1);
     if (work <= workTolerance) return true;
-    const { modes, mechanisms } = this.#stability;
-    if (work > leanTolerance || modes.length < mechanisms) return false;
+    if (work > leanTolerance) return false;
     const { truss } = this.#problem;
-    this.#groups ??= groupModes(truss, modes);
+    if (this.#groups === undefined) {
+      const motions = this.#stability.space.motions();
+      this.#groups = motions === null ? null : groupMotions(truss, motions);
+    }
+    if (this.#groups === null || this.#groups.some(({ symbolic }) => symbolic !== null)) return false;
     const by = settlesBy(truss, this.#groups, axialForce, onRealNodes(truss, loads), workTolerance * largestForce);
     return by <= settling || by === Number.POSITIVE_INFINITY;
   }

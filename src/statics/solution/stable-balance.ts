@@ -1,12 +1,16 @@
 import { type Finding, finding } from '../../domain/finding.ts';
 import type { Truss } from '../../domain/truss.ts';
 import { leverShares } from '../model/carriage.ts';
+import { carryMovements } from '../model/movement.ts';
 import type { Judgement } from '../stability/assess-stability.ts';
+import type { ModeSpace } from '../stability/mode-space.ts';
 import { listed, type Named, Names } from '../stability/names.ts';
 import { directionInWords, movementDirection, sizeAt } from '../stability/words.ts';
 import type { SolvedCase, SolvedCombination } from '../types.ts';
 import { balanceOf, type GroupBalance } from './group-balance.ts';
-import { groupModes, type ModeGroup, movesOf } from './mode-groups.ts';
+import { groupMotions } from './mode-groups.ts';
+import { pushingBars } from './pushing-bars.ts';
+import { WholeBalance } from './whole-balance.ts';
 
 export interface JudgedBalance {
   readonly cases: readonly SolvedCase[];
@@ -22,28 +26,28 @@ export interface JudgedBalance {
  */
 export function judgeBalance(
   truss: Truss,
-  stability: Judgement,
+  { space }: Pick<Judgement, 'space'>,
   cases: readonly SolvedCase[],
   combinations: readonly SolvedCombination[],
   members: readonly Named[] = [],
 ): JudgedBalance {
-  const modes = stability.freeBody ? stability.modes.filter((mode) => mode.kind !== 'whole') : stability.modes;
   const isCarried = cases.length > 0 && [...cases, ...combinations].every(({ refused }) => refused === null);
-  if (modes.length === 0) return { cases, combinations, findings: [], isStable: isCarried };
-  const groups = groupModes(truss, modes);
-  const upsets: Upset[] = groups.map((group) => ({ group, in: [] }));
+  const isAsked = [...cases, ...combinations].some(isLoaded);
+  if (space.dimension === 0 || !isAsked) return { cases, combinations, findings: [], isStable: isCarried };
+  const judges = judgesOf(truss, space);
+  const upsets: Upset[] = judges.map(() => ({ in: [] }));
   const judge = <T extends SolvedCase | SolvedCombination>(one: T): T => {
-    if (one.refused !== null || one.axialForce.every((force) => force === null || force === 0)) return one;
+    if (!isLoaded(one)) return one;
     const bars = new Set<number>();
-    let isStable = true;
-    groups.forEach((group, g) => {
-      const balance = balanceOf(truss, group, one.axialForce);
-      if (balance.kind === 'stable') return;
-      isStable = false;
-      upsets[g].in.push({ name: one.name, isCase: 'nature' in one, balance });
-      if (balance.kind === 'unstable') for (const { bar } of group.bars) bars.add(bar);
+    let moves: Float64Array | null = null;
+    judges.forEach((balanceUnder, g) => {
+      const balance = balanceUnder(one.axialForce);
+      if (balance.moves === null) return;
+      moves ??= balance.moves;
+      upsets[g].in.push({ name: one.name, isCase: 'nature' in one, balance, forces: one.axialForce });
+      if (balance.kind === 'unstable') for (const bar of balance.bars) bars.add(bar);
     });
-    return isStable ? one : { ...one, unstable: { bars: [...bars].sort((a, b) => a - b) } };
+    return moves === null ? one : { ...one, unstable: { bars: [...bars].sort((a, b) => a - b), moves } };
   };
   const judged = { cases: cases.map(judge), combinations: combinations.map(judge) };
   const last = combinations.length > 0 ? judged.combinations : judged.cases;
@@ -52,10 +56,44 @@ export function judgeBalance(
   return { ...judged, findings, isStable };
 }
 
-/** A group of modes with the cases and combinations that do not hold it. */
+const isLoaded = ({ refused, axialForce }: SolvedCase | SolvedCombination): boolean =>
+  refused === null && axialForce.some((force) => force !== null && force !== 0);
+
+/** A balance with the bars that what gives way would move. */
+type Judged = GroupBalance & { readonly bars: readonly number[] };
+
+/** One judge for each group of motions that forces couple; one for all where the motions are too many to be written out. */
+function judgesOf(truss: Truss, space: ModeSpace): ((forces: readonly (number | null)[]) => Judged)[] {
+  const motions = space.motions();
+  const groups = motions === null ? null : groupMotions(truss, motions);
+  const shares = leverShares(truss);
+  const filled = ({ kind, moves }: GroupBalance): GroupBalance => ({
+    kind,
+    moves: moves === null ? null : carryMovements(truss, shares, moves),
+  });
+  if (groups !== null)
+    return groups.map((group) => (forces) => ({ ...filled(balanceOf(truss, group, forces)), bars: group.bars }));
+  const whole = new WholeBalance(space);
+  return [
+    (forces) => {
+      const balance = whole.judge(forces);
+      const { moves } = balance;
+      const bars = truss.bars.flatMap(({ from, to }, b) =>
+        moves !== null && (sizeAt(moves, from) > 0 || sizeAt(moves, to) > 0) ? [b] : [],
+      );
+      return { ...balance, bars };
+    },
+  ];
+}
+
+/** The cases and combinations that do not hold one group of motions. */
 interface Upset {
-  readonly group: ModeGroup;
-  readonly in: { readonly name: string; readonly isCase: boolean; readonly balance: GroupBalance }[];
+  readonly in: {
+    readonly name: string;
+    readonly isCase: boolean;
+    readonly balance: GroupBalance;
+    readonly forces: readonly (number | null)[];
+  }[];
 }
 
 interface Told {
@@ -81,26 +119,20 @@ function tell(truss: Truss, names: Names, upsets: readonly Upset[], isCombined: 
   return [...groups.values()].map((group) => findingOf(truss, names, group));
 }
 
-function toldOf(truss: Truss, names: Names, { group, in: all }: Upset, isCombined: boolean): Told {
+function toldOf(truss: Truss, names: Names, { in: all }: Upset, isCombined: boolean): Told {
   const combined = all.filter((one) => !one.isCase);
   const said = isCombined && combined.length > 0 ? combined : all;
   const worst = said.find((one) => one.balance.kind === 'unstable') ?? said[0];
-  const shares = leverShares(truss);
-  const sum = new Float64Array(3 * truss.nodes.length);
-  worst.balance.motion.forEach((share, m) => {
-    if (share === 0) return;
-    const moves = movesOf(truss, shares, group.modes[m]);
-    for (let i = 0; i < sum.length; i++) sum[i] = sum[i] + share * moves[i];
-  });
-  const moved = [...new Set(group.modes.flatMap((mode) => mode.nodes))].sort((a, b) => a - b);
-  const shown = moved.reduce((best, i) => (sizeAt(sum, i) > sizeAt(sum, best) * (1 + 1e-9) ? i : best), moved[0]);
-  const nodes = moved.filter((i) => sizeAt(sum, i) > MOVES * sizeAt(sum, shown));
+  const moves = worst.balance.moves!;
+  const moved = truss.nodes.flatMap(({ carriedBy }, i) => (carriedBy === null ? [i] : []));
+  const shown = moved.reduce((best, i) => (sizeAt(moves, i) > sizeAt(moves, best) * (1 + 1e-9) ? i : best), moved[0]);
+  const nodes = moved.filter((i) => sizeAt(moves, i) > MOVES * sizeAt(moves, shown));
   return {
     nodes,
     shown,
     owner: names.owner(nodes),
-    way: directionInWords(movementDirection(sum, shown)),
-    pushing: worst.balance.pushing,
+    way: directionInWords(movementDirection(moves, shown)),
+    pushing: pushingBars(truss, worst.forces, moves),
     kind: worst.balance.kind,
     names: [...new Set(said.map((one) => one.name))],
     onlyAlone: isCombined && combined.length === 0,

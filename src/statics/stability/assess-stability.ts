@@ -9,6 +9,7 @@ import { movesFreely, nearlyMoves } from './findings.ts';
 import { leftWithBars, leftWithHeld } from './judged-again.ts';
 import { kindOf } from './kind.ts';
 import { movingNodes } from './localise.ts';
+import { ModeSpace } from './mode-space.ts';
 import { modeInWords } from './mode-words.ts';
 import { Names } from './names.ts';
 import { STABILITY_DEFAULTS, type StabilityOptions } from './options.ts';
@@ -23,6 +24,8 @@ import { worksInBending } from './works-in-bending.ts';
 export interface Judgement extends Stability {
   /** One direction for each mechanism; with all of them held nothing moves freely. More than `modes` where some of those are left out. */
   readonly pivots: readonly Restraint[];
+  /** All mechanisms, those left out of `modes` too. */
+  readonly space: ModeSpace;
   /** Counts of each part that is judged. */
   readonly parts: readonly PartCounts[];
 }
@@ -77,6 +80,7 @@ export function assessStability(truss: Truss, supports: Supports, options: Parti
       ...(nearly ? [nearly] : []),
     ],
     pivots: found.pivots,
+    space: new ModeSpace(base, spectrum, found, modes, parts.freeBody),
     parts: counts,
   };
 }
