@@ -15,6 +15,7 @@ import { type Contact, findContacts } from './contacts.ts';
 import { resolveDoubles } from './doubles.ts';
 import { eccentricitiesOf, offsetJointFindings } from './eccentricity.ts';
 import { type PairEvidence, relatedMembers, touchingPlates, united } from './evidence.ts';
+import { flattened } from './flat-patches.ts';
 import { carriedFindings, closeJointFindings, crossingFindings, crowdedFindings } from './joint-findings.ts';
 import { makeJoints, type Refusal } from './joints.ts';
 import { labelOf } from './labels.ts';
@@ -121,7 +122,7 @@ function trussOf(
     by: reasonsFor(vertex, kept),
     eccentricities: eccentricitiesOf(vertex, axes),
   });
-  return { truss: buildTruss(graph, runs, members, axes, placeOf, joiningOf), refused, graph };
+  return { truss: buildTruss(flattened(graph, runs), runs, members, axes, placeOf, joiningOf), refused, graph };
 }
 
 function zeroLengthFindings(
