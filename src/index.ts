@@ -15,7 +15,7 @@ export type { Brief, MemberSelector, NodeSelector } from './brief/types.ts';
 export { CAUTION } from './domain/caution.ts';
 export { EXIT, ModelError, PinwrightError, RequestError } from './domain/errors.ts';
 export type { Finding, FindingCode, Severity } from './domain/finding.ts';
-export type { Material, Member, Section } from './domain/member.ts';
+export { type Material, type Member, recordOf, type Section } from './domain/member.ts';
 export type { Result } from './domain/result.ts';
 export type { Truss, TrussBar, TrussNode } from './domain/truss.ts';
 export type { Vec3 } from './domain/vector.ts';

@@ -64,7 +64,10 @@ export function developedLength({ axis, bow }: Pick<Member, 'axis' | 'bow'>): nu
   return points.slice(1).reduce((sum, point, i) => sum + distance(points[i], point), 0);
 }
 
-/** An element of the model read as a line of force. All lengths in metres, in the model's own world axes. */
+/**
+ * An element of the model read as a line of force. All lengths in metres, in the model's own world axes. Members of a file
+ * look most of this up when asked: `{ ...recordOf(member) }` copies one, `{ ...member }` does not.
+ */
 export interface Member {
   readonly globalId: string;
   /** 0, or the order among several members read from one element. */
@@ -93,7 +96,7 @@ export interface Member {
   readonly facts?: ElementFacts;
 }
 
-/** A member as a plain record. Those of a file are none (most of what they say is looked up), so that spreading one loses it. */
+/** A member as a plain record, with all that a member of a file looks up when asked. */
 export function recordOf(member: Member): Member {
   return {
     globalId: member.globalId,

@@ -41,14 +41,12 @@ export function elementAxes(
   const read = bodiesOrRefusal(reading, sections, shape.body, world, known);
   const bodies = isUnknown(reading, sections, read) ? meshed(read, parsedMesh(), world, known) : read;
   if (bodies !== read) noteUnread(reading, sections, read);
-  const drawn = Array.isArray(lines) ? lines.filter(isLong) : [];
+  const drawn = Array.isArray(lines) ? longOnes(lines) : [];
   const solids = Array.isArray(bodies) ? distinctAxes(bodies) : [];
   const members = solids.length === 0 ? [] : memberSolids(sections, solids, profiles);
   const isGiven = options.axes === 'given' && !isLattice(drawn, members);
   if (drawn.length > 0 && (isGiven || members.length === 0)) {
-    const axes: MemberAxis[] = [];
-    for (const line of drawn) axes.push(axisOfLine(sections, line, solids, profiles, world));
-    return axes;
+    return drawn.map((line) => axisOfLine(sections, line, solids, profiles, world));
   }
   if (members.length > 0) {
     if (members.length < solids.length) reading.note(FITTINGS);
@@ -60,6 +58,8 @@ export function elementAxes(
 }
 
 const isLong = (line: Chord): boolean => !(distance(line.from, line.to) < SHORTEST);
+
+const longOnes = (lines: Chord[]): Chord[] => (lines.every(isLong) ? lines : lines.filter(isLong));
 
 function linesOrRefusal(reading: Reading, items: readonly number[], world: Transform): Chord[] | NotRead {
   try {

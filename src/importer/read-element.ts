@@ -69,8 +69,7 @@ function membersOf(sources: Sources, id: number, globalId: string, world: Transf
     axes.sort((a, b) => compareRounded(a.ends[0], b.ends[0]) || compareRounded(a.ends[1], b.ends[1]));
 
   const layer = layerOf(reading, relations, shape);
-  const members: Member[] = [];
-  for (const found of axes) {
+  return axes.map((found, part) => {
     reading.about(globalId, found.ends[0], found.ends[1]);
     const { axis, remarks } = namedAxis(found, texts);
     for (const remark of remarks) reading.note(remark);
@@ -91,12 +90,13 @@ function membersOf(sources: Sources, id: number, globalId: string, world: Transf
       section: axis.section,
       material: materials.inSection(made.material, axis.section),
     };
-    members.push(sources.members.add(id, globalId, members.length, axis.ends, axis.centroidEnds, kind, axis.bow));
-  }
-  return members;
+    return sources.members.add(id, globalId, part, axis.ends, axis.centroidEnds, kind, axis.bow);
+  });
 }
 
 function materialId(relations: Relations, id: number): number | null {
+  const own = relations.materialOf.get(id);
+  if (own !== undefined) return own;
   const type = relations.typeOf.get(id);
-  return relations.materialOf.get(id) ?? (type === undefined ? null : (relations.materialOf.get(type) ?? null));
+  return type === undefined ? null : (relations.materialOf.get(type) ?? null);
 }

@@ -40,5 +40,5 @@ export function readPhysicalModel(
 
 function elementsOf(file: StepFile, extra: readonly string[]): number[] {
   const classes = new Set([...MEMBER_CLASSES, ...extra].map((name) => name.toUpperCase()));
-  return [...classes].flatMap((name) => [...file.idsOf(name)]);
+  return [...classes].flatMap((name) => file.idsOf(name));
 }

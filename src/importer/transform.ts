@@ -29,6 +29,24 @@ export function mapPosition(t: Transform, p: Vec3): Vec3 {
   ];
 }
 
+/** Where the map puts the point (x, y) of its plane z = 0. */
+export function mapPlanePoint(t: Transform, x: number, y: number): Vec3 {
+  return [
+    t.x[0] * x + t.y[0] * y + t.origin[0],
+    t.x[1] * x + t.y[1] * y + t.origin[1],
+    t.x[2] * x + t.y[2] * y + t.origin[2],
+  ];
+}
+
+/** `p` moved by what the map makes of the direction `d`. */
+export function movedBy(p: Vec3, t: Transform, d: Vec3): Vec3 {
+  return [
+    p[0] + (t.x[0] * d[0] + t.y[0] * d[1] + t.z[0] * d[2]),
+    p[1] + (t.x[1] * d[0] + t.y[1] * d[1] + t.z[1] * d[2]),
+    p[2] + (t.x[2] * d[0] + t.y[2] * d[1] + t.z[2] * d[2]),
+  ];
+}
+
 /** The map that does `inner` first and `outer` after it. */
 export function compose(outer: Transform, inner: Transform): Transform {
   if (outer === IDENTITY) return inner;

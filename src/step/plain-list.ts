@@ -107,6 +107,10 @@ export class PlainLists {
         depth++;
         if (bytes[p] !== CLOSE) continue;
       }
+      if (bytes[p] === COMMA && bytes[p + 1] > SPACE) {
+        p++;
+        continue;
+      }
       while (bytes[p] <= SPACE) p++;
       while (bytes[p] === CLOSE) {
         p++;

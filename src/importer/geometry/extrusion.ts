@@ -4,7 +4,7 @@ import { axesOf } from '../placement-axes.ts';
 import type { Reading } from '../reading.ts';
 import type { Point2 } from '../sections/outline.ts';
 import type { SectionBook } from '../sections/section-book.ts';
-import { compose, mapDirection, mapPosition, type Transform } from '../transform.ts';
+import { compose, mapPlanePoint, mapPosition, movedBy, type Transform } from '../transform.ts';
 import type { BodyAxis } from './body-axis.ts';
 
 /** An extrusion's parts, before any profile is read. */
@@ -39,14 +39,11 @@ export function readExtrusion(reading: Reading, id: number, world: Transform): E
 export function extrusionAxis(book: SectionBook, extrusion: Extrusion): BodyAxis {
   const { plane, profile, endProfile, sweep } = extrusion;
   const centroid = book.centroidOrOrigin(profile);
-  const start = mapPosition(plane, [centroid[0], centroid[1], 0]);
+  const start = mapPlanePoint(plane, centroid[0], centroid[1]);
   return {
     from: 'extrusion',
     start,
-    end:
-      endProfile === null
-        ? add(start, mapDirection(plane, sweep))
-        : farEnd(plane, book.centroidOrOrigin(endProfile), sweep),
+    end: endProfile === null ? movedBy(start, plane, sweep) : farEnd(plane, book.centroidOrOrigin(endProfile), sweep),
     x: plane.x,
     y: plane.y,
     profile,
