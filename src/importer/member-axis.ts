@@ -41,7 +41,7 @@ const FARTHEST = 1e8;
 export const isSound = (p: Vec3): boolean => isNear(p[0]) && isNear(p[1]) && isNear(p[2]);
 
 /** False of what is no number, too. */
-const isNear = (coordinate: number): boolean => Math.abs(coordinate) <= FARTHEST;
+export const isNear = (coordinate: number): boolean => Math.abs(coordinate) <= FARTHEST;
 
 /** Ends are told apart to a tenth of a millimetre. */
 const ROUNDED = 1e4;

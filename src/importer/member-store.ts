@@ -2,6 +2,7 @@ import { type ElementFacts, type Member, recordOf } from '../domain/member.ts';
 import type { Vec3 } from '../domain/vector.ts';
 import type { StepFile } from '../step/step-file.ts';
 import type { FactsBook } from './facts.ts';
+import { geometricOrder } from './geometric-order.ts';
 
 /** What members have in common with others: most of a model's members are of a few kinds. */
 export type Kind = Pick<
@@ -23,53 +24,124 @@ type Line = readonly [Vec3, Vec3];
 
 /** Six coordinates: both ends. */
 const SIZE = 6;
-const FIRST_LINES = 64;
+const FIRST_MEMBERS = 64;
 /** Of so many kinds with one section the next member is likely to be one. */
 const KINDS_TRIED = 16;
+const NO_LINE = 0xffff_ffff;
 
 /**
- * The members read from one file. The engine's garbage collection takes longer over some ten small objects a member than
- * reading them does, so that a member is one: its line stands in one array with all the others', what it has in common with
- * others is theirs too, and its names are read from the file when they are asked for.
+ * The members read from one file, in columns. The engine's garbage collection takes longer over some ten small objects a
+ * member than reading them does, so that a member is a view of one row, made when all are read: what it has in common with others is
+ * theirs too, and its names are read from the file when they are asked for.
  */
 export class MemberStore {
+  count = 0;
   readonly file: StepFile;
   readonly facts: FactsBook;
-  private lines = new Float64Array(SIZE * FIRST_LINES);
-  private count = 0;
-  /** Of the few that are bent, by where their lines stand. */
+  /** A row a member: its instance, the order among several of one element, its kind, and where its lines stand. */
+  private ids = new Uint32Array(FIRST_MEMBERS);
+  private parts = new Uint32Array(FIRST_MEMBERS);
+  private kinds = new Uint32Array(FIRST_MEMBERS);
+  private axes = new Uint32Array(FIRST_MEMBERS);
+  private centroids = new Uint32Array(FIRST_MEMBERS);
+  private readonly globalIds: string[] = [];
+  private lines = new Float64Array(SIZE * FIRST_MEMBERS);
+  private lineCount = 0;
+  /** Of the few that are bent. */
   private readonly bows = new Map<number, readonly Vec3[]>();
-  private readonly kinds = new Map<Kind['section'], Kind[]>();
+  private readonly kindList: Kind[] = [];
+  private readonly kindsOf = new Map<Kind['section'], number[]>();
 
   constructor(file: StepFile, facts: FactsBook) {
     this.file = file;
     this.facts = facts;
   }
 
-  /** @param centroidLine `line` itself where the two are the same */
+  /** Makes room for so many members, one a line, which saves copying the columns as they grow. */
+  reserve(count: number): void {
+    if (count > this.ids.length) this.resize(count);
+    if (count * SIZE > this.lines.length) this.lines = enlarged(this.lines, new Float64Array(count * SIZE));
+  }
+
+  /**
+   * @param line both ends, six coordinates
+   * @param centroidLine `line` itself where the two are the same
+   */
   add(
     id: number,
     globalId: string,
     part: number,
-    line: Line,
-    centroidLine: Line | null,
+    line: Float64Array,
+    centroidLine: Float64Array | null,
     kind: Kind,
     bow: readonly Vec3[] | null = null,
-  ): Member {
-    const at = this.keepLine(line);
-    if (bow !== null) this.bows.set(at, bow);
-    return new StoredMember(
-      this,
-      id,
-      at,
-      globalId,
-      part,
-      centroidLine === line ? 'own' : centroidLine,
-      this.kept(kind),
-    );
+  ): void {
+    const row = this.count++;
+    if (row === this.ids.length) this.resize(2 * row);
+    this.ids[row] = id;
+    this.parts[row] = part;
+    this.kinds[row] = this.kept(kind);
+    const axis = this.keepLine(line);
+    this.axes[row] = axis;
+    this.centroids[row] = centroidLine === null ? NO_LINE : centroidLine === line ? axis : this.keepLine(centroidLine);
+    this.globalIds.push(globalId);
+    if (bow !== null) this.bows.set(row, bow);
   }
 
-  lineAt(at: number): Line {
+  /** The members in the order of geometry. */
+  members(): Member[] {
+    const found = new Array<Member>(this.count);
+    const { lines, axes, globalIds, parts } = this;
+    const isNamedAfter = (a: number, b: number): boolean =>
+      globalIds[a] === globalIds[b] ? parts[a]! > parts[b]! : globalIds[a]! > globalIds[b]!;
+    const order = geometricOrder(this.count, (row, k) => lines[axes[row]! + k]!, isNamedAfter);
+    for (let i = 0; i < found.length; i++) found[i] = new StoredMember(this, order[i]!);
+    return found;
+  }
+
+  /** Least x and y of the members' ends; null where there are none. */
+  corner(): Vec3 | null {
+    if (this.count === 0) return null;
+    let x = Number.POSITIVE_INFINITY;
+    let y = Number.POSITIVE_INFINITY;
+    for (let row = 0; row < this.count; row++) {
+      const at = this.axes[row]!;
+      x = Math.min(x, this.lines[at]!, this.lines[at + 3]!);
+      y = Math.min(y, this.lines[at + 1]!, this.lines[at + 4]!);
+    }
+    return [x, y, 0];
+  }
+
+  globalIdOf(row: number): string {
+    return this.globalIds[row]!;
+  }
+
+  idOf(row: number): number {
+    return this.ids[row]!;
+  }
+
+  partOf(row: number): number {
+    return this.parts[row]!;
+  }
+
+  kindOf(row: number): Kind {
+    return this.kindList[this.kinds[row]!]!;
+  }
+
+  axisOf(row: number): Line {
+    return this.lineAt(this.axes[row]!);
+  }
+
+  centroidAxisOf(row: number): Line | null {
+    const at = this.centroids[row]!;
+    return at === NO_LINE ? null : this.lineAt(at);
+  }
+
+  bowOf(row: number): readonly Vec3[] | null {
+    return this.bows.get(row) ?? null;
+  }
+
+  private lineAt(at: number): Line {
     const { lines } = this;
     return [
       [lines[at]!, lines[at + 1]!, lines[at + 2]!],
@@ -77,38 +149,39 @@ export class MemberStore {
     ];
   }
 
-  bowAt(at: number): readonly Vec3[] | null {
-    return this.bows.get(at) ?? null;
-  }
-
-  private keepLine([from, to]: Line): number {
-    const at = SIZE * this.count++;
-    if (at === this.lines.length) {
-      const larger = new Float64Array(2 * at);
-      larger.set(this.lines);
-      this.lines = larger;
-    }
-    this.lines[at] = from[0];
-    this.lines[at + 1] = from[1];
-    this.lines[at + 2] = from[2];
-    this.lines[at + 3] = to[0];
-    this.lines[at + 4] = to[1];
-    this.lines[at + 5] = to[2];
+  private keepLine(line: Float64Array): number {
+    const at = SIZE * this.lineCount++;
+    if (at === this.lines.length) this.lines = enlarged(this.lines, new Float64Array(2 * at));
+    for (let i = 0; i < SIZE; i++) this.lines[at + i] = line[i]!;
     return at;
   }
 
-  /** The kind that was met before, if it was met lately. */
-  private kept(kind: Kind): Kind {
-    let known = this.kinds.get(kind.section);
+  private resize(rows: number): void {
+    this.ids = enlarged(this.ids, new Uint32Array(rows));
+    this.parts = enlarged(this.parts, new Uint32Array(rows));
+    this.kinds = enlarged(this.kinds, new Uint32Array(rows));
+    this.axes = enlarged(this.axes, new Uint32Array(rows));
+    this.centroids = enlarged(this.centroids, new Uint32Array(rows));
+  }
+
+  /** The number of the kind that was met before, if it was met lately. */
+  private kept(kind: Kind): number {
+    let known = this.kindsOf.get(kind.section);
     if (known === undefined) {
       known = [];
-      this.kinds.set(kind.section, known);
+      this.kindsOf.set(kind.section, known);
     }
-    for (let i = known.length - 1; i >= 0; i--) if (isSame(known[i]!, kind)) return known[i]!;
+    for (let i = known.length - 1; i >= 0; i--) if (isSame(this.kindList[known[i]!]!, kind)) return known[i]!;
     if (known.length === KINDS_TRIED) known.shift();
-    known.push(kind);
-    return kind;
+    known.push(this.kindList.length);
+    this.kindList.push(kind);
+    return this.kindList.length - 1;
   }
+}
+
+function enlarged<T extends Float64Array | Uint32Array>(array: T, larger: T): T {
+  larger.set(array);
+  return larger;
 }
 
 const isSame = (a: Kind, b: Kind): boolean =>
@@ -125,38 +198,32 @@ const isSame = (a: Kind, b: Kind): boolean =>
   a.section === b.section;
 
 class StoredMember implements Member {
-  readonly globalId: string;
-  readonly part: number;
   private readonly store: MemberStore;
-  private readonly id: number;
-  private readonly at: number;
-  private readonly centroidLine: Line | 'own' | null;
-  private readonly kind: Kind;
+  private readonly row: number;
 
-  constructor(
-    store: MemberStore,
-    id: number,
-    at: number,
-    globalId: string,
-    part: number,
-    centroidLine: Line | 'own' | null,
-    kind: Kind,
-  ) {
+  constructor(store: MemberStore, row: number) {
     this.store = store;
-    this.id = id;
-    this.at = at;
-    this.globalId = globalId;
-    this.part = part;
-    this.centroidLine = centroidLine;
-    this.kind = kind;
+    this.row = row;
+  }
+
+  private get kind(): Kind {
+    return this.store.kindOf(this.row);
+  }
+
+  get globalId(): string {
+    return this.store.globalIdOf(this.row);
+  }
+
+  get part(): number {
+    return this.store.partOf(this.row);
   }
 
   get name(): string | null {
-    return this.store.file.stringAt(this.id, 2);
+    return this.store.file.stringAt(this.store.idOf(this.row), 2);
   }
 
   get tag(): string | null {
-    return this.store.file.stringAt(this.id, 7);
+    return this.store.file.stringAt(this.store.idOf(this.row), 7);
   }
 
   get class(): string {
@@ -192,15 +259,15 @@ class StoredMember implements Member {
   }
 
   get axis(): Line {
-    return this.store.lineAt(this.at);
+    return this.store.axisOf(this.row);
   }
 
   get bow(): readonly Vec3[] | null {
-    return this.store.bowAt(this.at);
+    return this.store.bowOf(this.row);
   }
 
   get centroidAxis(): Line | null {
-    return this.centroidLine === 'own' ? this.axis : this.centroidLine;
+    return this.store.centroidAxisOf(this.row);
   }
 
   get zAxis(): Vec3 {
@@ -216,7 +283,7 @@ class StoredMember implements Member {
   }
 
   get facts(): ElementFacts {
-    return this.store.facts.of(this.id);
+    return this.store.facts.of(this.store.idOf(this.row));
   }
 
   toJSON(): Member {

@@ -42,6 +42,12 @@ export class Placements {
     return this.walk(id);
   }
 
+  /** The same of a placement that was walked before; null of any other. */
+  known(id: number): Transform | null {
+    const found = this.world.get(id);
+    return found === undefined || found instanceof NotRead ? null : found;
+  }
+
   private walk(id: number): Transform {
     // Walked in a loop and not by recursion: files hold chains of many thousand links.
     const chain: { id: number; relative: Transform }[] = [];

@@ -1,11 +1,11 @@
 import type { Member } from '../domain/member.ts';
+import type { Vec3 } from '../domain/vector.ts';
 import type { StepFile } from '../step/step-file.ts';
 import { asRef, asString } from '../step/values.ts';
 import { ContextBook } from './context.ts';
 import { FactsBook } from './facts.ts';
 import { noteFileProblems, noteGuessedSchema, noteMissingLengthUnit, noteRepeatedGlobalIds } from './file-remarks.ts';
 import { FindingsLog } from './findings-log.ts';
-import { inGeometricOrder } from './geometric-order.ts';
 import { gridLines } from './grid-lines.ts';
 import { type Grid, readGrids } from './grids.ts';
 import { markNamer } from './marks.ts';
@@ -15,7 +15,6 @@ import { NotRead } from './not-read.ts';
 import type { ImportOptions } from './options.ts';
 import { Placements } from './placements.ts';
 import { placeNamers, type Storey } from './places.ts';
-import { cornerOf } from './places-in-scope.ts';
 import type { Sources } from './read-element.ts';
 import { Reading } from './reading.ts';
 import { readRelations } from './relations.ts';
@@ -62,9 +61,11 @@ export function prepare(file: StepFile, options: ImportOptions): Prepared {
 }
 
 /**
- * Puts the members in order and gathers the findings.
+ * Gathers the findings.
  * @param elements the instances they were read from and those that could not be read
  * @param globalIds theirs; '' where there is none
+ * @param members in the order of geometry
+ * @param corner least x and y of the members' ends; null where there are none
  */
 export function finish(
   { sources, grids, log }: Prepared,
@@ -72,18 +73,18 @@ export function finish(
   elements: readonly number[],
   globalIds: readonly string[],
   members: readonly Member[],
+  corner: Vec3 | null,
 ): Omit<ImportedModel, 'given' | 'evidence'> {
   const { reading, placements } = sources;
-  const found = inGeometricOrder(members);
   noteRepeatedGlobalIds(reading, globalIds);
   const storeys = readStoreys(sources);
   noteFileProblems(reading);
-  const { placeOf, placesFrom } = placeNamers({ grids, placements, storeys }, cornerOf(found));
+  const { placeOf, placesFrom } = placeNamers({ grids, placements, storeys }, corner);
   return {
     schema: reading.file.schema,
     lengthUnit: reading.units.lengthName,
     source,
-    members: found,
+    members,
     findings: log.findings(placeOf, markNamer(reading.file, elements, globalIds)),
     placeOf,
     placesFrom,

@@ -1,4 +1,3 @@
-import type { Member } from '../domain/member.ts';
 import type { BodyMeshes } from './body-meshes.ts';
 import { writtenClass } from './class-names.ts';
 import { type ContextBook, layerOf } from './context.ts';
@@ -6,7 +5,7 @@ import { elementAxes } from './element-axes.ts';
 import { NO_GLOBAL_ID, refusal, remarksOn, triedText } from './element-remarks.ts';
 import type { FactsBook } from './facts.ts';
 import type { MaterialBook } from './materials/material-book.ts';
-import { compareRounded, isSound } from './member-axis.ts';
+import { compareRounded, isSound, type MemberAxis } from './member-axis.ts';
 import type { MemberStore } from './member-store.ts';
 import { namedAxis } from './named-axis.ts';
 import { NotRead } from './not-read.ts';
@@ -36,8 +35,8 @@ export interface Sources {
   readonly options: ImportOptions;
 }
 
-/** The members that one element holds; none, with a finding, where it cannot be read. */
-export function readElement(sources: Sources, id: number, stated: string, meshes: BodyMeshes): Member[] {
+/** Reads the members that one element holds into the store; none, with a finding, where it cannot be read. */
+export function readElement(sources: Sources, id: number, stated: string, meshes: BodyMeshes): void {
   const { reading, placements } = sources;
   const { file } = reading;
   const globalId = stated === '' ? `#${id}` : stated;
@@ -46,17 +45,16 @@ export function readElement(sources: Sources, id: number, stated: string, meshes
   try {
     const world = placements.worldOf(file.refAt(id, 5));
     reading.about(globalId, isSound(world.origin) ? world.origin : null);
-    return membersOf(sources, id, globalId, world, meshes);
+    readMembers(sources, id, globalId, world, meshes);
   } catch (problem) {
     if (!(problem instanceof NotRead)) throw problem;
     reading.note(refusal(problem));
-    return [];
   } finally {
     reading.about(null);
   }
 }
 
-function membersOf(sources: Sources, id: number, globalId: string, world: Transform, meshes: BodyMeshes): Member[] {
+function readMembers(sources: Sources, id: number, globalId: string, world: Transform, meshes: BodyMeshes): void {
   const { reading, relations, materials, directions } = sources;
   const { file } = reading;
   const shape = file.refAt(id, 6);
@@ -69,7 +67,7 @@ function membersOf(sources: Sources, id: number, globalId: string, world: Transf
     axes.sort((a, b) => compareRounded(a.ends[0], b.ends[0]) || compareRounded(a.ends[1], b.ends[1]));
 
   const layer = layerOf(reading, relations, shape);
-  return axes.map((found, part) => {
+  axes.forEach((found, part) => {
     reading.about(globalId, found.ends[0], found.ends[1]);
     const { axis, remarks } = namedAxis(found, texts);
     for (const remark of remarks) reading.note(remark);
@@ -90,11 +88,16 @@ function membersOf(sources: Sources, id: number, globalId: string, world: Transf
       section: axis.section,
       material: materials.inSection(made.material, axis.section),
     };
-    return sources.members.add(id, globalId, part, axis.ends, axis.centroidEnds, kind, axis.bow);
+    const line = numbersOf(axis.ends);
+    const centroid = axis.centroidEnds === axis.ends ? line : axis.centroidEnds && numbersOf(axis.centroidEnds);
+    sources.members.add(id, globalId, part, line, centroid, kind, axis.bow);
   });
 }
 
-function materialId(relations: Relations, id: number): number | null {
+const numbersOf = ([from, to]: MemberAxis['ends']): Float64Array => Float64Array.of(...from, ...to);
+
+/** What the element, else its type, is made of. */
+export function materialId(relations: Relations, id: number): number | null {
   const own = relations.materialOf.get(id);
   if (own !== undefined) return own;
   const type = relations.typeOf.get(id);

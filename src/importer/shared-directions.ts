@@ -12,12 +12,14 @@ export class SharedDirections {
 
   /** The same direction, to the last digit, that was met before, if it was met lately. */
   shared(direction: Vec3): Vec3 {
-    const x = direction[0];
-    const y = direction[1];
-    const z = direction[2];
+    return this.sharedOf(direction[0], direction[1], direction[2]);
+  }
+
+  sharedOf(x: number, y: number, z: number): Vec3 {
     const slot = Math.round((x + 3 * y + 9 * z) * 1e6) & (KEPT - 1);
     const known = this.lately[slot];
     if (known !== undefined && Object.is(known[0], x) && Object.is(known[1], y) && Object.is(known[2], z)) return known;
+    const direction: Vec3 = [x, y, z];
     this.lately[slot] = direction;
     return direction;
   }

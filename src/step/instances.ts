@@ -1,3 +1,4 @@
+import { Cursor } from './cursor.ts';
 import type { InstanceTable } from './instance-table.ts';
 import type { Keywords } from './keywords.ts';
 import { ParameterReader, type StepRecord } from './parameters.ts';
@@ -31,6 +32,11 @@ export class StepInstances {
     this.bytes = bytes;
     this.reader = new ParameterReader(bytes);
     this.plain = new PlainLists(bytes);
+  }
+
+  /** A reader of plain parameters in the order they stand in. */
+  cursor(): Cursor {
+    return new Cursor(this.bytes, this.table, this.keywords);
   }
 
   /** How many instances there are. */

@@ -36,19 +36,13 @@ function afterBlank(bytes: Uint8Array, at: number): number {
 /** A number of so many characters, its exponent of two digits at most, cannot overflow. */
 const LONGEST_NUMBER = 40;
 
-/**
- * Fills `into` with the list of nothing but numbers at `at`, which need not stand in a plain list.
- * @param isOnly whether it has to be the last parameter
- * @returns how many there are, `into` or not; -1 where anything about them is out of the ordinary.
- */
-export function plainNumbers(bytes: Uint8Array, at: number, into: Float64Array, isOnly = false): number {
-  if (bytes[at] !== OPEN) return -1;
-  let count = 0;
-  let p = at;
-  do {
-    p++;
-    while (bytes[p] <= SPACE) p++;
-    const from = p;
+/** Reads single numbers; the value stands in an array because a number given back would be an object of its own. */
+export class NumberScanner {
+  readonly value = new Float64Array(1);
+
+  /** The offset after the number at `at`; -1 where anything about it is out of the ordinary. */
+  scan(bytes: Uint8Array, at: number): number {
+    let p = at;
     const isNegative = bytes[p] === MINUS;
     if (isNegative || bytes[p] === PLUS) p++;
     let digit = bytes[p] - DIGIT_0;
@@ -71,10 +65,29 @@ export function plainNumbers(bytes: Uint8Array, at: number, into: Float64Array, 
       for (; p < end && isDigit(bytes[p]); p++) power = power * 10 + (bytes[p] - DIGIT_0);
       exponent += isDownward ? -power : power;
     }
-    if (p - from > LONGEST_NUMBER) return -1;
+    if (p - at > LONGEST_NUMBER) return -1;
     let size = exactReal(mantissa, exponent);
-    if (!(size >= 0)) size = Math.abs(Number(latin1(bytes, from, p)));
-    if (count < into.length) into[count] = isNegative ? -size : size;
+    if (!(size >= 0)) size = Math.abs(Number(latin1(bytes, at, p)));
+    this.value[0] = isNegative ? -size : size;
+    return p;
+  }
+}
+
+const scanner = new NumberScanner();
+
+/**
+ * Fills `into` with the list of nothing but numbers at `at`, which need not stand in a plain list.
+ * @param isOnly whether it has to be the last parameter
+ * @returns how many there are, `into` or not; -1 where anything about them is out of the ordinary.
+ */
+export function plainNumbers(bytes: Uint8Array, at: number, into: Float64Array, isOnly = false): number {
+  if (bytes[at] !== OPEN) return -1;
+  let count = 0;
+  let p = at;
+  do {
+    p = scanner.scan(bytes, afterBlank(bytes, p + 1));
+    if (p < 0) return -1;
+    if (count < into.length) into[count] = scanner.value[0];
     count++;
     while (bytes[p] <= SPACE) p++;
   } while (bytes[p] === COMMA);

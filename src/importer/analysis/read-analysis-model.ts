@@ -1,5 +1,7 @@
 import type { StepFile } from '../../step/step-file.ts';
+import { inGeometricOrder } from '../geometric-order.ts';
 import { IMPORT_DEFAULTS, type ImportOptions } from '../options.ts';
+import { cornerOf } from '../places-in-scope.ts';
 import { finish, prepare } from '../prepare.ts';
 import type { Reading } from '../reading.ts';
 import type { ImportedModel } from '../types.ts';
@@ -27,10 +29,10 @@ export function readAnalysisModel(file: StepFile, options: Partial<ImportOptions
   const { cases, combinations } = readLoadGroups(sources, frames, actions);
   noteConnections(sources.reading, members);
   noteSurfaces(sources.reading);
-  const read = [...members.values()].map(({ member }) => member);
+  const read = inGeometricOrder([...members.values()].map(({ member }) => member));
   const globalIds = ids.map((id) => file.stringAt(id, 0)?.trim() ?? '');
   return {
-    ...finish(prepared, 'analysis', ids, globalIds, read),
+    ...finish(prepared, 'analysis', ids, globalIds, read, cornerOf(read)),
     given: { supports, cases, combinations },
     evidence: null,
   };

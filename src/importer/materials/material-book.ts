@@ -33,7 +33,7 @@ export class MaterialBook {
   private readonly reading: Reading;
   /** The brief's grade, for what the file leaves open. */
   private readonly fallback: Material | null;
-  private readonly known = new Map<number | null, MadeOf>();
+  private readonly read = new Map<number | null, MadeOf>();
   private readonly strengthened = new Map<Material, Map<string, Material>>();
   private readonly inSections = new Map<Material, Map<Section, Material>>();
   private stated: ReadonlyMap<number, StatedNumbers> | null = null;
@@ -45,15 +45,20 @@ export class MaterialBook {
   }
 
   madeOf(id: number | null): MadeOf {
-    let found = this.known.get(id);
+    let found = this.read.get(id);
     if (found === undefined) {
       const parts: Named[] = [];
       const profiles: number[] = [];
       if (id !== null) this.gather(id, parts, profiles, 0);
       found = { ...this.choose(parts), profiles };
-      this.known.set(id, found);
+      this.read.set(id, found);
     }
     return found;
+  }
+
+  /** The same where it was asked for before; null where it was not. */
+  known(id: number | null): MadeOf | null {
+    return this.read.get(id) ?? null;
   }
 
   /** `material` with the strengths of a part as thick as the section's thickest. */

@@ -24,7 +24,7 @@ export interface SeenSection {
 }
 
 /** A profile that is read, with the sections that it has shown. */
-interface Known {
+export interface Known {
   readonly profile: Profile;
   /** In the plane that is swept, metres. */
   readonly centroid: Point2;
@@ -59,6 +59,12 @@ export class SectionBook {
     const found = this.knownOrRefusal(id);
     if (!(found instanceof NotRead)) return null;
     return found instanceof ImpossibleProfile && this.sectionWithoutOutline(id) !== null ? null : found;
+  }
+
+  /** A profile that was read before without a word to say of it; null of any other. */
+  plainlyKnown(id: number): Known | null {
+    const found = this.profiles.get(id);
+    return found === undefined || found instanceof NotRead || found.contradictions.length > 0 ? null : found;
   }
 
   private knownOrRefusal(id: number): Known | NotRead {
@@ -176,7 +182,7 @@ function seenOnPlane(x: Vec3, y: Vec3, d: Point2, along: Vec3): Vec3 {
 }
 
 /** The section that a profile shows whose x has become (`right`, `up`) and whose y is seen `size` times as long. */
-function view({ profile, views, last }: Known, right: number, up: number, size: number): Section {
+export function view({ profile, views, last }: Known, right: number, up: number, size: number): Section {
   const a = Math.round(right * 1e6);
   const b = Math.round(up * 1e6);
   const c = Math.round(size * 1e6);
