@@ -137,8 +137,9 @@ function judgeSkew(a: Axis, b: Axis, sine: number, options: JoinOptions, widenin
   const { s, t, distance, normal } = approach(a, b);
   const [acrossB, acrossA] = [approachDirection(a, b), approachDirection(b, a)];
   const cosine = Math.abs(dot(a.direction, b.direction));
-  const reachA = (a.reach ?? reachOf(a, b.halfExtent(acrossB) + a.halfExtent(acrossA) * cosine, sine)) * widening;
-  const reachB = (b.reach ?? reachOf(b, a.halfExtent(acrossA) + b.halfExtent(acrossB) * cosine, sine)) * widening;
+  const slant = runOnEachOther(a, b, s, t) ? Math.max(sine, TOLERANCE.facingSine) : sine;
+  const reachA = (a.reach ?? reachOf(a, b.halfExtent(acrossB) + a.halfExtent(acrossA) * cosine, slant)) * widening;
+  const reachB = (b.reach ?? reachOf(b, a.halfExtent(acrossA) + b.halfExtent(acrossB) * cosine, slant)) * widening;
   const extensionA = beyondEnds(s, a);
   const extensionB = beyondEnds(t, b);
   const lengthwise = Math.max(extensionA / reachA, extensionB / reachB);
@@ -174,6 +175,16 @@ function judgeSkew(a: Axis, b: Axis, sine: number, options: JoinOptions, widenin
     isNear: true,
   } as const;
   return { contact, ratio: Math.max(lengthwise, sideways) };
+}
+
+/**
+ * Whether two members end here and leave the place on opposite sides, as a web over a column does: such ends face each
+ * other and do not run into each other's sides, however slanting their axes cross.
+ */
+function runOnEachOther(a: Axis, b: Axis, s: number, t: number): boolean {
+  const end = (station: number, { length, depth }: Axis) =>
+    station < depth ? 1 : station > length - depth ? -1 : 0;
+  return dot(a.direction, b.direction) * end(s, a) * end(t, b) < 0;
 }
 
 /** Parallel axes meet where two ends face each other: splices, a chord's ridge, a bar run on by the next. */

@@ -38,6 +38,8 @@ export const TOLERANCE = {
   /** How far an end may run past the far side of what it meets before that is an overhang. */
   overrun: 0.06,
   leastSine: 0.3,
+  /** Ends that face each other clear no long slanting side: they keep apart at most as if they met at 45 degrees. */
+  facingSine: Math.SQRT1_2,
   leastOffset: 0.02,
   /** A sheet or a wall is as deep as a storey; axes do not meet across it. */
   mostOffset: 0.3,
