@@ -142,6 +142,9 @@ export function approach(a: Axis, b: Axis): Approach {
 
 export const sineBetween = (a: Axis, b: Axis): number => norm(cross(a.direction, b.direction));
 
+/** Whether two members cross as what sits and what carries do: 64 degrees or more, purlins on the skew lie no more slanting. */
+export const liesSquare = (a: Axis, b: Axis): boolean => sineBetween(a, b) > 0.9;
+
 /** Direction in which `a` comes at `b`: the part of a's direction that is square to b. Not for parallel axes. */
 export function approachDirection(a: Axis, b: Axis): Vec3 {
   const square = subtract(a.direction, scale(b.direction, dot(a.direction, b.direction)));

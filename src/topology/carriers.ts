@@ -1,5 +1,5 @@
 import { facetAt } from './along-axes.ts';
-import type { Axis } from './axes.ts';
+import { type Axis, liesSquare } from './axes.ts';
 import { offCourse } from './bows.ts';
 import type { JoinOptions } from './options.ts';
 import { straightLines } from './straight-lines.ts';
@@ -75,7 +75,7 @@ function isTriangulated(runner: number, index: number, frame: Frame): boolean {
   const { vertices, chains } = graph;
   const vertex = vertices[index];
   for (const { member } of vertex.stations) {
-    if (member === runner || vertex.seated.has(member)) continue;
+    if (member === runner || onlySits(member, runner, vertex, axes)) continue;
     for (const far of neighboursOn(chains[member], index).map((next) => beyondSplices(next, member, frame))) {
       if (isFoot(vertices[far], vertex, axes[member], stationOn(vertex, member))) return true;
       for (const { member: third } of vertices[far].stations) {
@@ -85,6 +85,12 @@ function isTriangulated(runner: number, index: number, frame: Frame): boolean {
     }
   }
   return false;
+}
+
+/** Purlins lie square to what carries them; a web beside its post, as far from it as if it sat there, slants and triangulates. */
+function onlySits(member: number, runner: number, vertex: Vertex, axes: readonly (Axis | null)[]): boolean {
+  const [a, b] = [axes[member], axes[runner]];
+  return vertex.seated.has(member) && (a === null || b === null || liesSquare(a, b));
 }
 
 /** The next vertex along a member's line at which something else is: a splice in a web leads on to its far end. */

@@ -1,6 +1,6 @@
 import { along, between, dot, scale, subtract, type Vec3 } from '../domain/vector.ts';
 import { boxAround, facetsOf, mayMeet, rangeOf } from './along-axes.ts';
-import { type Axis, approach, approachDirection, looksCrossed, sineBetween } from './axes.ts';
+import { type Axis, approach, approachDirection, liesSquare, looksCrossed, sineBetween } from './axes.ts';
 import { type PairEvidence, pairKey } from './evidence.ts';
 import { type JoinOptions, TOLERANCE } from './options.ts';
 import { indexBoxes, searchBoxes } from './spatial-index.ts';
@@ -182,8 +182,7 @@ function judgeSkew(a: Axis, b: Axis, sine: number, options: JoinOptions, widenin
  * other and do not run into each other's sides, however slanting their axes cross.
  */
 function runOnEachOther(a: Axis, b: Axis, s: number, t: number): boolean {
-  const end = (station: number, { length, depth }: Axis) =>
-    station < depth ? 1 : station > length - depth ? -1 : 0;
+  const end = (station: number, { length, depth }: Axis) => (station < depth ? 1 : station > length - depth ? -1 : 0);
   return dot(a.direction, b.direction) * end(s, a) * end(t, b) < 0;
 }
 
@@ -252,8 +251,5 @@ const isInside = (s: number, axis: Axis, reach: number): boolean => s > reach &&
  */
 function looksLikeSeat(a: Axis, b: Axis, s: number, t: number): boolean {
   const slender = Math.min(a.depth, b.depth) < 0.4 * Math.max(a.depth, b.depth);
-  return sineBetween(a, b) > SQUARE && !slender && !looksCrossed(a, b, s, t);
+  return liesSquare(a, b) && !slender && !looksCrossed(a, b, s, t);
 }
-
-/** Sine of 64 degrees: purlins on the skew lie that slanting at the most. */
-const SQUARE = 0.9;

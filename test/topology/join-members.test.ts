@@ -49,6 +49,31 @@ describe('joining members', () => {
     expect(second!.from).toBe(first!.to);
   });
 
+  it('lets no steep web reach down to a column under it as if it ran along its side', () => {
+    // The column's half depth over the sine of the slant (0.6 m) would bridge the gap of 0.5 m between the two ends.
+    const column = member('C', [0, 0, -4], [0, 0, 0], { section: hollow(0.2) });
+    const web = (gap: number) => member('W', [0.17 * gap, 0, gap], [0.34, 0, 2]);
+    const nodesOf = (gap: number) => joinMembers([column, web(gap)]).truss.nodes.length;
+    expect(nodesOf(0.2)).toBe(3);
+    expect(nodesOf(0.5)).toBe(4);
+  });
+
+  it('splits a post where webs beside it end, as far off as if they sat on it', () => {
+    // Angles on the two sides of one gusset: their axes pass the post's at 70 mm.
+    const angle = { section: hollow(0.12) };
+    const beside = (mark: string, z: number) => member(mark, [0, 0.07, 1.5], [2, 0.07, z], angle);
+    const frame = [
+      member('P', [0, 0, 0], [0, 0, 3], { section: hollow(0.1) }),
+      member('Q', [2, 0.07, 0], [2, 0.07, 3], angle),
+      member('T', [0, 0.03, 3], [2, 0.03, 3], angle),
+      member('B', [0, 0.03, 0], [2, 0.03, 0], angle),
+    ];
+    const { truss } = joinMembers([...frame, beside('K1', 3), beside('K2', 0)]);
+    const middle = truss.nodes.find(({ at }) => Math.abs(at[2] - 1.5) < 0.1)!;
+    expect(middle.members.length).toBe(3);
+    expect(middle.carriedBy).toBeNull();
+  });
+
   it('takes a purlin that sits on a panel point to the chord node', () => {
     const purlin = member('PU', [3, 0, 1 + 0.1 * Math.hypot(1, 1 / 3)], [3, 6, 1 + 0.1 * Math.hypot(1, 1 / 3)]);
     const { truss, findings } = joinMembers([...pitchedTruss(0, 'A'), ...pitchedTruss(6, 'B'), purlin]);

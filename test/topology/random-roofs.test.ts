@@ -10,7 +10,7 @@ import { assessStability } from '../../src/statics/stability/assess-stability.ts
 import { joinMembers } from '../../src/topology/join-members.ts';
 
 /** Two roofs of every kind of truss; `npm run bench -- joining-faults` tells which others are not yet read rightly. */
-const SEEDS = [1, 2, 3, 4, 6, 7, 8, 9, 14, 16, 18, 19, 20, 21, 23, 24, 26, 36, 40, 68];
+const SEEDS = [1, 2, 3, 4, 6, 7, 8, 9, 14, 16, 18, 19, 20, 21, 23, 24, 26, 36, 40, 68, 96];
 
 describe('roofs drawn at random as detailers draw them', () => {
   it.each(SEEDS)('roof %i becomes the truss of its work points, and nothing is wrong with it', (seed) => {
@@ -28,7 +28,7 @@ describe('roofs drawn at random as detailers draw them', () => {
 });
 
 /** Two roofs of every kind that the other hand draws; `npm run bench -- joining-faults` tells what is not yet found. */
-const OTHER_SEEDS = [0, 1, 2, 17, 4, 5, 6, 7, 9, 10, 12, 13, 16, 18];
+const OTHER_SEEDS = [0, 1, 2, 3, 17, 4, 5, 6, 7, 9, 10, 12, 13, 16, 18, 38];
 
 describe('roofs drawn at random by another hand', () => {
   it.each(OTHER_SEEDS)('roof %i becomes the truss of its work points, and nothing is wrong with it', (seed) => {

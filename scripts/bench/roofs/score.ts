@@ -101,7 +101,7 @@ export interface Found {
 export interface Score {
   readonly roofs: number;
   readonly planted: Readonly<Record<FaultKind, Found>>;
-  /** Findings of one roof that name the same member at the same place under another code. */
+  /** New findings of one roof that name the same member at the same place under another code. */
   readonly toldTwice: readonly { readonly seed: number; readonly findings: readonly [Finding, Finding] }[];
   readonly findings: ReadonlyMap<string, { right: number; wrong: number }>;
   /** The codes that tell each kind, of the faults planted. */
@@ -144,7 +144,8 @@ export function score(seeds: readonly number[], stages: Stages, roofOf: (seed: n
     const isMobileNow = mobility(faulty.roof, result, stages);
     const odd = oddMarks(sound);
     const oddNow = oddMarks(result);
-    toldTwice.push(...doublesOf(result.findings).map((pair) => ({ seed, findings: pair })));
+    const fresh = result.findings.filter((one) => !before.has(spelling(one)));
+    toldTwice.push(...doublesOf(fresh).map((pair) => ({ seed, findings: pair })));
     for (const fault of faulty.faults) {
       planted[fault.kind].planted++;
       for (const code of fault.codes) codes[fault.kind].add(code);
