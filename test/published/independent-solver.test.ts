@@ -17,13 +17,13 @@ interface Answer {
 describe.skipIf(!hasScipy)('against an independent linear solver (python3 with scipy)', () => {
   test('bar forces, displacements and reactions of 200 random trusses with springs and carried nodes agree to 1e-9', () => {
     const stable: RandomTruss[] = [];
-    for (let seed = 1000; stable.length < 200 && seed < 2000; seed++) {
+    for (let seed = 1000; stable.length < 260 && seed < 2400; seed++) {
       const random = randomTruss(seed, seed % 5);
       const touched = new Set(random.truss.bars.flatMap((bar) => [bar.from, bar.to]));
       if (random.truss.nodes.some((node, i) => node.carriedBy === null && !touched.has(i))) continue;
       if (assessStability(random.truss, random.supports).mechanisms === 0) stable.push(random);
     }
-    expect(stable.length).toBe(200);
+    expect(stable.length).toBe(260);
     const answers = JSON.parse(
       execFileSync('python3', [program], { input: JSON.stringify(stable.map(asInput)), maxBuffer: 1 << 28 }).toString(),
     ) as Answer[];
@@ -51,7 +51,7 @@ describe.skipIf(!hasScipy)('against an independent linear solver (python3 with s
         expect(difference(reactions.flat(), wanted.reactions.flat(), 1), `truss ${i}`).toBeLessThan(1e-9);
       });
     });
-    expect(compared).toBeGreaterThan(150);
+    expect(compared).toBeGreaterThanOrEqual(200);
   }, 60_000);
 });
 

@@ -45,16 +45,21 @@ export function denseRows({ nodes, bars }: Truss, supports: Supports): { strains
   };
 }
 
-/** Mechanisms by the singular values of all rows together, with the ratio across the gap there; rows are scaled alike. */
-export function denseMechanisms(truss: Truss, supports: Supports): { mechanisms: number; clear: boolean } {
+/**
+ * Mechanisms by the singular values of all rows together; rows are scaled alike. `gap` is the widest ratio between neighbours at or below a thousandth of
+ * the highest, with what lies below rounding taken for rounding.
+ */
+export function denseMechanisms(truss: Truss, supports: Supports): { mechanisms: number; gap: number } {
   const { strains, conditions } = denseRows(truss, supports);
   const width = strains.columns;
   // Rows of zeros make it no wider than high.
   const padding = Array.from({ length: width }, () => new Array<number>(width).fill(0));
   const all = new Matrix([...strains.to2DArray(), ...conditions.to2DArray(), ...padding]);
-  const padded = new SingularValueDecomposition(all).diagonal;
-  const highest = Math.max(...padded);
-  const small = padded.filter((v) => v < 1e-10 * highest).length;
-  const next = Math.min(...padded.filter((v) => v >= 1e-10 * highest));
-  return { mechanisms: small, clear: next > 1e-3 * highest };
+  const values = [...new SingularValueDecomposition(all).diagonal].sort((a, b) => a - b);
+  const rounding = 1e-15 * values[width - 1];
+  const below = [rounding, ...values.map((v) => Math.max(v, rounding))];
+  let mechanisms = 0;
+  for (let m = 0; m < width && below[m] <= 1e-3 * values[width - 1]; m++)
+    if (below[m + 1] / below[m] > below[mechanisms + 1] / below[mechanisms]) mechanisms = m;
+  return { mechanisms, gap: below[mechanisms + 1] / below[mechanisms] };
 }
