@@ -12,8 +12,19 @@ export interface ResolvedOneWay {
   readonly compressionOnly: readonly number[];
 }
 
+/** IfcStructuralCurveMemberTypeEnum. */
+const PULLING: ReadonlySet<string | null> = new Set(['CABLE', 'TENSION_MEMBER']);
+const PUSHING: ReadonlySet<string | null> = new Set(['COMPRESSION_MEMBER']);
+
+/** What a structural analysis view says by itself. */
+function barsOfView(truss: Truss, members: readonly Member[], types: ReadonlySet<string | null>): number[] {
+  const acts = ({ axisFrom, predefinedType }: Member) => axisFrom === 'analysis-view' && types.has(predefinedType);
+  return truss.bars.flatMap((bar, b) => (bar.members.some((member) => acts(members[member])) ? [b] : []));
+}
+
 /**
  * The bars of the members that the brief lets pull only or push only; a spliced or paired bar is one of them as soon as one of its members is.
+ * Where the brief names none, a structural analysis view's own cables, ties and struts are.
  * @throws RequestError where a member is caught by both lists
  */
 export function resolveOneWay(
@@ -26,7 +37,10 @@ export function resolveOneWay(
     const chosen = new Set(selectMembers(members, selectors));
     return truss.bars.flatMap((bar, b) => (bar.members.some((member) => chosen.has(member)) ? [b] : []));
   };
-  const oneWay = { tensionOnly: barsOf(brief.tensionOnly), compressionOnly: barsOf(brief.compressionOnly) };
+  const saysNothing = brief.tensionOnly.length + brief.compressionOnly.length === 0;
+  const oneWay = saysNothing
+    ? { tensionOnly: barsOfView(truss, members, PULLING), compressionOnly: barsOfView(truss, members, PUSHING) }
+    : { tensionOnly: barsOf(brief.tensionOnly), compressionOnly: barsOf(brief.compressionOnly) };
   const both = oneWay.tensionOnly.find((bar) => oneWay.compressionOnly.includes(bar));
   if (both !== undefined) {
     throw new RequestError(

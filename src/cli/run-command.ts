@@ -5,7 +5,7 @@ import { withReplies } from '../bcf/with-replies.ts';
 import { DEFAULT_BRIEF } from '../brief/default-brief.ts';
 import { EXIT } from '../domain/errors.ts';
 import { contentOf } from '../exporter/content.ts';
-import { planOutputs } from '../exporter/outputs.ts';
+import { type OtherOutput, planOutputs } from '../exporter/outputs.ts';
 import { summarise } from '../exporter/summary.ts';
 import { writeOutputs } from '../exporter/write-outputs.ts';
 import { type Run, type RunOptions, runModel, type Stage } from '../pipeline.ts';
@@ -16,6 +16,7 @@ import { readBrief, readModelBytes, readReplies } from './read-files.ts';
 export interface RunFlags {
   readonly brief?: string;
   readonly output?: string[];
+  readonly view?: string;
   readonly replies?: string;
   readonly bcfVersion?: BcfVersion;
   readonly stamp?: boolean;
@@ -33,6 +34,7 @@ export function withRunOptions(command: Command): Command {
       'write a result; the ending picks the format (.json .csv .csv/ .ifc .ifczip .svg .bcf), - is JSON on stdout; may be repeated',
       (path: string, before: string[] = []) => [...before, path],
     )
+    .option('--view <file>', 'write the truss as an IFC structural analysis view, a file of its own')
     .option('--replies <file>', 'a BCF file that came back: its statuses and comments stand beside the findings')
     .addOption(new Option('--bcf-version <version>', 'of the BCF file written').choices(['2.1', '3.0']).default('3.0'))
     .option('--stamp', 'clock time in what is written; without it the dates are those of the model')
@@ -43,7 +45,8 @@ export function withRunOptions(command: Command): Command {
 /** Runs a model and writes what was asked for. Gives the exit code. */
 export async function runCommand(model: string, extent: RunOptions['extent'], flags: RunFlags): Promise<number> {
   const outputs = flags.output ?? [];
-  const plan = planOutputs(outputs, model, ...(flags.replies === undefined ? [] : [flags.replies]));
+  const others = otherOutputs(flags);
+  const plan = planOutputs([...outputs, ...others], model, ...(flags.replies === undefined ? [] : [flags.replies]));
   const stamp = flags.stamp ? new Date().toISOString().replace(/\.\d+/, '') : null;
   const brief = flags.brief === undefined ? DEFAULT_BRIEF : readBrief(flags.brief);
   const replies = flags.replies === undefined ? null : await readReplies(flags.replies);
@@ -64,9 +67,15 @@ export async function runCommand(model: string, extent: RunOptions['extent'], fl
     process.stdout.write(
       summarise(result, { extras: { elementCount, tracesRemoved, mass, coverage, kinds, topLevels } }),
     );
-    if (outputs.length > 0) process.stdout.write(`\nWritten: ${outputs.join(', ')}\n`);
+    const written = [...outputs, ...others.map(({ given }) => given)];
+    if (written.length > 0) process.stdout.write(`\nWritten: ${written.join(', ')}\n`);
   }
   return hasFaults(run) ? EXIT.faultsFound : EXIT.done;
+}
+
+/** What options of their own ask to be written. */
+function otherOutputs({ view }: RunFlags): OtherOutput[] {
+  return view === undefined ? [] : [{ given: view, content: { kind: 'view' } }];
 }
 
 const STAGE_WORDS: Readonly<Record<Stage, string>> = {

@@ -78,6 +78,7 @@ const barSchema = z.strictObject({
   from: text,
   to: text,
   length: z.number(),
+  axialStiffness: z.number().nullable().optional().describe('EA in N; null where a member has no section'),
 });
 
 const familySchema = z
@@ -306,6 +307,12 @@ const jointSchema = z.strictObject({
   ),
 });
 
+const supportSchema = z.strictObject({
+  node: text,
+  fixed: z.array(vector).describe('unit directions that are held rigidly'),
+  springs: z.array(z.strictObject({ direction: vector, stiffness: z.number().describe('N/m') })),
+});
+
 const holdSchema = z.strictObject({
   node: text,
   direction: vector,
@@ -367,6 +374,10 @@ export const resultSchema = z.strictObject({
   combining: combiningSchema.optional(),
   envelope: z.array(z.strictObject({ bar: text, tension: extreme, compression: extreme })),
   checks: z.array(checkSchema),
+  supports: z
+    .array(supportSchema)
+    .optional()
+    .describe('by node, in the order of nodes; what only holds keep is under `holds`'),
   holds: z.array(holdSchema).optional(),
   joining: joiningSchema.optional(),
   eccentricities: z.array(eccentricitySchema).optional(),

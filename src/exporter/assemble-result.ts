@@ -115,6 +115,7 @@ export function assembleResult(run: RunRecord): Result {
       compression: extreme(compression),
     })),
     checks: [],
+    ...resultSupports(run.supports),
     ...(run.holds.length === 0 ? {} : { holds: run.holds.map((hold) => resultHold(hold, run.supports)) }),
     ...(run.limits === null ? {} : { joining: resultLimits(run.limits) }),
     eccentricities: run.eccentricities.map(({ node, eccentricity: { of, member, e }, moment, from }) => ({
@@ -192,6 +193,7 @@ function resultBar(bar: Truss['bars'][number], index: number, members: readonly 
     from: nodeId(bar.from),
     to: nodeId(bar.to),
     length: bar.length,
+    axialStiffness: bar.stiffnessEA,
   };
 }
 
@@ -262,6 +264,19 @@ function resultAsked({ asked, applied, ...load }: AskedLoad): NonNullable<Result
 function oneWayBars({ tensionOnly, compressionOnly }: OneWay): Pick<Result, 'oneWay'> {
   if (tensionOnly.length + compressionOnly.length === 0) return {};
   return { oneWay: { tensionOnly: tensionOnly.map(barId), compressionOnly: compressionOnly.map(barId) } };
+}
+
+function resultSupports({ restraints, springs }: Supports): Pick<Result, 'supports'> {
+  const nodes = [...new Set([...restraints, ...springs].map(({ node }) => node))].sort((a, b) => a - b);
+  if (nodes.length === 0) return {};
+  const supports = nodes.map((node) => ({
+    node: nodeId(node),
+    fixed: restraints.filter((one) => one.node === node).map(({ direction }) => point(direction)),
+    springs: springs
+      .filter((one) => one.node === node)
+      .map(({ direction, stiffness }) => ({ direction: point(direction), stiffness })),
+  }));
+  return { supports };
 }
 
 function resultHold(hold: HoldForce, { restraints, springs }: Supports): NonNullable<Result['holds']>[number] {

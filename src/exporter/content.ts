@@ -5,6 +5,7 @@ import type { StepFile } from '../step/step-file.ts';
 import { type Chunks, encodeText } from './chunks.ts';
 import { tableToCsv } from './csv.ts';
 import { annotate } from './ifc/annotate.ts';
+import { writeView } from './ifc/view/write-view.ts';
 import { resultToJson } from './json.ts';
 import type { Content } from './outputs.ts';
 import { zipOne } from './zip-one.ts';
@@ -28,6 +29,8 @@ export function contentOf(result: Result, file: StepFile, bcf: Partial<BcfOption
         return encodeText([drawSheet(result)]);
       case 'bcf':
         return [writeBcf(result, bcf)];
+      case 'view':
+        return writeView(result);
     }
   };
 }

@@ -12,6 +12,7 @@ export type Content =
   | { readonly kind: 'ifczip'; readonly name: string }
   | { readonly kind: 'svg' }
   | { readonly kind: 'bcf' }
+  | { readonly kind: 'view' }
   | { readonly kind: 'csv'; readonly table: TableName };
 
 export interface PlannedFile {
@@ -30,6 +31,9 @@ export interface OutputPlan {
   readonly stdout: boolean;
 }
 
+/** An output that an option of its own asks for, whatever its ending. */
+export type OtherOutput = Pick<PlannedFile, 'given' | 'content'>;
+
 const WRITTEN = '.json .csv .csv/ .ifc .ifczip .svg .bcf .bcfzip';
 const NOT_YET = new Set(['.xlsx', '.html']);
 
@@ -39,10 +43,15 @@ const NOT_YET = new Set(['.xlsx', '.html']);
  *
  * Throws a RequestError for a path that cannot be written, stands twice or names an input.
  */
-export function planOutputs(paths: readonly string[], ...inputPaths: readonly string[]): OutputPlan {
+export function planOutputs(outputs: readonly (string | OtherOutput)[], ...inputPaths: readonly string[]): OutputPlan {
   const files: PlannedFile[] = [];
   const folders: string[] = [];
-  for (const given of paths) {
+  for (const output of outputs) {
+    if (typeof output !== 'string') {
+      files.push({ ...output, target: triedFile(output.given, resolve(output.given), null) });
+      continue;
+    }
+    const given = output;
     if (given === '-') continue;
     if (given.toLowerCase().endsWith('.csv/')) {
       const folder = triedFolder(given);
@@ -56,9 +65,9 @@ export function planOutputs(paths: readonly string[], ...inputPaths: readonly st
       files.push({ given, target: triedFile(given, resolve(given), null), content });
     }
   }
-  forbidDoubles(paths, files, folders);
+  forbidDoubles(outputs, files, folders);
   for (const inputPath of inputPaths) forbidInput(files, inputPath);
-  return { files, folders, stdout: paths.includes('-') };
+  return { files, folders, stdout: outputs.includes('-') };
 }
 
 function contentByEnding(given: string): Content {
@@ -124,8 +133,9 @@ function tryWritingInto(given: string, folder: string): string {
   return folder;
 }
 
-function forbidDoubles(paths: readonly string[], files: readonly PlannedFile[], folders: readonly string[]): void {
-  if (paths.filter((path) => path === '-').length > 1) throw new RequestError('-: stands twice among the outputs');
+function forbidDoubles(outputs: readonly unknown[], files: readonly PlannedFile[], folders: readonly string[]): void {
+  if (outputs.filter((output) => output === '-').length > 1)
+    throw new RequestError('-: stands twice among the outputs');
   const taken = new Set<string>();
   const claim = (given: string, path: string) => {
     for (const name of namesOf(path)) {

@@ -27,7 +27,7 @@ function writeOwnerHistory(file: StepFile, version: string, block: Block): StepR
 }
 
 /** Seconds since 1970 of the model's own time stamp, read as UTC: the same model gives the same block at any hour. */
-function secondsOf(timeStamp: string | null): number {
+export function secondsOf(timeStamp: string | null): number {
   const stamp = /^\d{4}-\d\d-\d\dT\d\d:\d\d(:\d\d)?/.exec(timeStamp ?? '')?.[0];
   const milliseconds = stamp === undefined ? Number.NaN : Date.parse(`${stamp}Z`);
   return Number.isFinite(milliseconds) ? Math.max(0, Math.floor(milliseconds / 1000)) : 0;

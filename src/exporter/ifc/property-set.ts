@@ -1,5 +1,5 @@
 import type { StepRef } from '../../step/values.ts';
-import { refs, typed, type ValueToWrite } from '../../step/write.ts';
+import { type InstanceWriter, refs, typed, type ValueToWrite } from '../../step/write.ts';
 import { type Block, label, measured } from './block.ts';
 import {
   definitionOf,
@@ -20,12 +20,15 @@ export interface Common {
   readonly units: Readonly<Partial<Record<Measure, StepRef>>>;
 }
 
+/** Where sets are written to. */
+export type SetWriter = Pick<InstanceWriter, 'add'> & Pick<Block, 'globalId' | 'isIfc2x3'>;
+
 /**
  * Writes a property set with its properties and ties it to objects. `of` is the GlobalId of the object, from which
  * those of the set and of its relationship are drawn.
  */
 export function writeSet<S extends SetName>(
-  block: Block,
+  block: SetWriter,
   { owner, units }: Common,
   name: S,
   values: SetValues<S>,
@@ -49,7 +52,7 @@ export function writeSet<S extends SetName>(
 }
 
 function writeProperty(
-  block: Block,
+  block: SetWriter,
   unit: StepRef | null,
   name: string,
   { kind, measure }: PropertyDefinition,

@@ -44,8 +44,9 @@ const BY_WORDS: readonly (readonly [pattern: RegExp, limit: Limit])[] = [
  * The limit state of a combination, which IFC has no attribute for: by the words of its purpose and names; else one that
  * raises no action is characteristic and any other is one of strength.
  */
-export function limitOf(words: string, type: string | null, factors: readonly number[]): Limit {
-  const said = BY_WORDS.find(([pattern]) => pattern.test(words));
+export function limitOf(purpose: string, names: string, type: string | null, factors: readonly number[]): Limit {
+  const saidIn = (words: string) => BY_WORDS.find(([pattern]) => pattern.test(words));
+  const said = saidIn(purpose) ?? saidIn(names);
   if (said !== undefined) return said[1];
   if (type === 'EXTRAORDINARY_A') return 'accidental';
   return factors.some((factor) => Math.abs(factor) > 1) ? 'strength' : 'characteristic';

@@ -139,8 +139,9 @@ class LoadGroups {
     };
     gather(id, this.coefficientOf(id), new Set());
     const stated = this.nameOf(id, 'Combination');
-    const words = [asString(args[9]), asString(args[2]), asString(args[3])].filter((text) => text !== null).join(' ');
-    return { name: names.take(stated), limit: limitOf(words, asEnum(args[6]), Object.values(factors)), factors };
+    const text = (i: number): string => asString(args[i]) ?? '';
+    const limit = limitOf(text(9), `${text(2)} ${text(3)}`, asEnum(args[6]), Object.values(factors));
+    return { name: names.take(stated), limit, factors };
   }
 
   private coefficientOf(id: number): number {

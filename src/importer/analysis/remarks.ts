@@ -37,10 +37,10 @@ export const ECCENTRIC_END: Remark = {
 
 export const ONE_WAY = take(
   'one way',
-  'act in tension or in compression only in the model; they are taken to act in both.',
-  'acts in tension or in compression only in the model; it is taken to act in both.',
-  'Look at the sign of their forces.',
-  'warning',
+  'act in tension or in compression only in the model, and are taken so where the brief names no such bars itself.',
+  'acts in tension or in compression only in the model, and is taken so where the brief names no such bars itself.',
+  'Name the bars that only pull or only push in the brief if it is others.',
+  'note',
 );
 
 export const TAPERED: Remark = {

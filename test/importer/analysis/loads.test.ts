@@ -309,7 +309,7 @@ describe('ends of members', () => {
   });
 
   it.each(['CABLE', 'TENSION_MEMBER', 'COMPRESSION_MEMBER'])(
-    'of a %s do not make it act one way, which is said',
+    'of a %s are said to be of a bar that acts one way',
     (kind) => {
       expect(found('$,$,$,$,$,$,$', kind)).toContain('only in the model');
     },
