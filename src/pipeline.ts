@@ -179,6 +179,7 @@ export async function runModel(bytes: Uint8Array, options: Partial<RunOptions> =
     families: joined.families,
     findings,
     cases: solved.cases,
+    applied: cases,
     oneWay,
     asked: loaded.asked,
     ...listed(solved.combinations, solved.envelope, solved.generated, solved.buckling),

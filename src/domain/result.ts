@@ -188,6 +188,14 @@ const caseSchema = z.strictObject({
   nature: z.enum(['permanent', 'imposed', 'snow', 'wind', 'thermal', 'accidental']),
   refused: text.optional(),
   loads: nodeForces,
+  stretch: z
+    .array(z.strictObject({ bar: text, by: z.number().describe('m longer than without force') }))
+    .optional()
+    .describe('of temperature and misfit'),
+  settlements: z
+    .array(z.strictObject({ node: text, movement: vector.describe('m') }))
+    .optional()
+    .describe('how far supports move their nodes, along directions they hold'),
   loadSum: vector,
   axialForce: forcePerBar,
   displacement: displacementPerNode,

@@ -15,6 +15,7 @@ import type {
   BarEnvelope,
   ExtremeForce,
   HoldForce,
+  LoadCase,
   Mode,
   NodalForce,
   OneWay,
@@ -41,6 +42,8 @@ export interface RunRecord {
   readonly families: readonly Family[];
   readonly findings: readonly Finding[];
   readonly cases: readonly SolvedCase[];
+  /** What was put on the truss in each case, by name. */
+  readonly applied: readonly LoadCase[];
   readonly combinations: readonly SolvedCombination[];
   readonly oneWay: OneWay;
   readonly asked: readonly AskedLoad[];
@@ -100,7 +103,7 @@ export function assembleResult(run: RunRecord): Result {
     })),
     stability: resultStability(run.stability),
     cases: run.cases.map((one) => ({
-      ...resultCase(one),
+      ...resultCase(one, run.applied),
       ...(run.combinations.length === 0 ? factorOf(one.name) : {}),
     })),
     combinations: run.combinations.map((one) => ({ ...resultCombination(one), ...factorOf(one.name) })),
@@ -298,9 +301,13 @@ function resultRemedy(step: Remedy): Result['stability']['modes'][number]['remed
     : { node: nodeId(step.node), direction: point(step.direction) };
 }
 
-function resultCase({ refused, slack, unstable, ...solved }: SolvedCase): Result['cases'][number] {
+function resultCase(
+  { refused, slack, unstable, ...solved }: SolvedCase,
+  applied: readonly LoadCase[],
+): Result['cases'][number] {
   return {
     ...solved,
+    ...movesOf(applied.find(({ name }) => name === solved.name)),
     ...(refused === null ? {} : { refused }),
     ...(slack === undefined ? {} : { slack: slack.map(barId) }),
     ...(unstable === undefined ? {} : { unstable: { bars: unstable.bars.map(barId) } }),
@@ -309,6 +316,20 @@ function resultCase({ refused, slack, unstable, ...solved }: SolvedCase): Result
     axialForce: [...solved.axialForce],
     displacement: solved.displacement.map((movement) => movement && point(movement)),
     reactions: nodalForces(solved.reactions),
+  };
+}
+
+/** Of one bar all free stretch together. */
+function movesOf(applied: LoadCase | undefined): Pick<Result['cases'][number], 'stretch' | 'settlements'> {
+  const stretch = new Map<number, number>();
+  for (const { bar, by } of applied?.freeStretch ?? []) stretch.set(bar, (stretch.get(bar) ?? 0) + by);
+  const settlements = (applied?.settlements ?? []).map(({ node, movement }) => ({
+    node: nodeId(node),
+    movement: point(movement),
+  }));
+  return {
+    ...(stretch.size === 0 ? {} : { stretch: [...stretch].map(([bar, by]) => ({ bar: barId(bar), by })) }),
+    ...(settlements.length === 0 ? {} : { settlements }),
   };
 }
 

@@ -1,6 +1,9 @@
 /** The bytes of one output, piece by piece, so that no output has to fit into one string or one array. */
 export type Chunks = Iterable<Uint8Array>;
 
+/** What a file is written from: bytes that are there, or that have to be waited for. */
+export type Output = Chunks | AsyncIterable<Uint8Array>;
+
 const BATCH_CHARACTERS = 1 << 16;
 
 /** The UTF-8 bytes of many small pieces of text, gathered into pieces worth writing. */

@@ -2,19 +2,20 @@ import { type BcfOptions, writeBcf } from '../bcf/write-bcf.ts';
 import type { Result } from '../domain/result.ts';
 import { drawSheet } from '../drawing/sheet.ts';
 import type { StepFile } from '../step/step-file.ts';
-import { type Chunks, encodeText } from './chunks.ts';
+import { encodeText, type Output } from './chunks.ts';
 import { tableToCsv } from './csv.ts';
 import { annotate } from './ifc/annotate.ts';
 import { writeView } from './ifc/view/write-view.ts';
 import { resultToJson } from './json.ts';
 import type { Content } from './outputs.ts';
+import { workbook } from './xlsx/workbook.ts';
 import { zipOne } from './zip-one.ts';
 
 /**
  * What each planned file holds for this result; `file` is the model that an annotated copy is made of, `bcf` how topics are
  * written.
  */
-export function contentOf(result: Result, file: StepFile, bcf: Partial<BcfOptions> = {}): (content: Content) => Chunks {
+export function contentOf(result: Result, file: StepFile, bcf: Partial<BcfOptions> = {}): (content: Content) => Output {
   return (content) => {
     switch (content.kind) {
       case 'json':
@@ -29,6 +30,8 @@ export function contentOf(result: Result, file: StepFile, bcf: Partial<BcfOption
         return encodeText([drawSheet(result)]);
       case 'bcf':
         return [writeBcf(result, bcf)];
+      case 'xlsx':
+        return workbook(result);
       case 'view':
         return writeView(result);
     }

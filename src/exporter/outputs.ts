@@ -12,6 +12,7 @@ export type Content =
   | { readonly kind: 'ifczip'; readonly name: string }
   | { readonly kind: 'svg' }
   | { readonly kind: 'bcf' }
+  | { readonly kind: 'xlsx' }
   | { readonly kind: 'view' }
   | { readonly kind: 'csv'; readonly table: TableName };
 
@@ -34,8 +35,8 @@ export interface OutputPlan {
 /** An output that an option of its own asks for, whatever its ending. */
 export type OtherOutput = Pick<PlannedFile, 'given' | 'content'>;
 
-const WRITTEN = '.json .csv .csv/ .ifc .ifczip .svg .bcf .bcfzip';
-const NOT_YET = new Set(['.xlsx', '.html']);
+const WRITTEN = '.json .csv .csv/ .xlsx .ifc .ifczip .svg .bcf .bcfzip';
+const NOT_YET = new Set(['.html']);
 
 /**
  * Finds what each output path asks for and whether it can be written, before any work is done. The endings pick the
@@ -77,6 +78,7 @@ function contentByEnding(given: string): Content {
   if (ending === '.ifczip') return { kind: 'ifczip', name: `${basename(given, ending)}.ifc` };
   if (ending === '.svg') return { kind: 'svg' };
   if (ending === '.bcf' || ending === '.bcfzip') return { kind: 'bcf' };
+  if (ending === '.xlsx') return { kind: 'xlsx' };
   if (ending === '.csv') return { kind: 'csv', table: 'bars' };
   if (NOT_YET.has(ending)) throw new RequestError(`${given}: ${ending} is not written yet; written are ${WRITTEN}`);
   throw new RequestError(`${given}: the ending picks the format; use one of ${WRITTEN}, or - for JSON on stdout`);

@@ -4,7 +4,7 @@ import { dirname, join } from 'node:path';
 import type { Writable } from 'node:stream';
 import pLimit from 'p-limit';
 import { RequestError } from '../domain/errors.ts';
-import type { Chunks } from './chunks.ts';
+import type { Output } from './chunks.ts';
 import { asRequestError, errorCode, tried } from './outputs/failure.ts';
 import type { Files } from './outputs/files.ts';
 import { type Replacement, replaceAll } from './outputs/replace.ts';
@@ -28,7 +28,7 @@ export const WRITE_DEFAULTS: WriteOptions = { filesAtOnce: 4, stdout: process.st
  */
 export async function writeOutputs(
   plan: OutputPlan,
-  contentOf: (content: Content) => Chunks,
+  contentOf: (content: Content) => Output,
   options: Partial<WriteOptions> = {},
 ): Promise<void> {
   const { filesAtOnce, stdout, files } = { ...WRITE_DEFAULTS, ...options };
@@ -68,7 +68,7 @@ async function makeFolders({ folders }: OutputPlan): Promise<string[]> {
 async function writeAll(
   planned: readonly PlannedFile[],
   replacements: readonly Replacement[],
-  contentOf: (content: Content) => Chunks,
+  contentOf: (content: Content) => Output,
   filesAtOnce: number,
   files: Files,
 ): Promise<void> {
@@ -91,13 +91,13 @@ async function writeAll(
 
 async function writeOne(
   { given, target, temporary }: Replacement,
-  chunks: Chunks,
+  chunks: Output,
   files: Files,
   isGivenUp: () => boolean,
 ): Promise<void> {
   const handle = await tried(given, async () => files.open(temporary, 'wx'));
   try {
-    for (const chunk of chunks) {
+    for await (const chunk of chunks) {
       if (isGivenUp()) return;
       await tried(given, () => handle.writeFile(chunk));
     }
@@ -117,14 +117,14 @@ async function keepPermissions(handle: FileHandle, target: string): Promise<void
 }
 
 /** A reader that has left (`| head`) wants no more and is no failure. */
-async function writeToStream(stream: Writable, chunks: Chunks): Promise<void> {
+async function writeToStream(stream: Writable, chunks: Output): Promise<void> {
   let failure: unknown = null;
   const note = (error: unknown) => {
     failure ??= error;
   };
   stream.on('error', note);
   try {
-    for (const chunk of chunks) {
+    for await (const chunk of chunks) {
       await new Promise<void>((done) => {
         stream.write(chunk, (error) => {
           if (error) note(error);

@@ -2,7 +2,7 @@ import { Zip, ZipDeflate } from 'fflate';
 import type { Chunks } from './chunks.ts';
 
 /** The first moment that a zip can tell: the same content gives the same bytes at any hour. */
-const NO_TIME = new Date(1980, 0, 1);
+export const NO_TIME = new Date(1980, 0, 1);
 
 /** A zip with one file in it, piece by piece. */
 export function* zipOne(name: string, content: Chunks): Generator<Uint8Array, void> {

@@ -39,6 +39,10 @@ export type GivenLoad =
       readonly forceFrom: Vec3;
       readonly forceTo: Vec3;
     }
+  /** K, of a whole member. */
+  | { readonly kind: 'temperature'; readonly globalId: string; readonly change: number }
+  /** How far a support moves what stands on it, m. */
+  | { readonly kind: 'settlement'; readonly at: Vec3; readonly movement: Vec3 }
   /** Weight of all bars times this vector: (0, 0, -1) is their own weight. */
   | { readonly kind: 'selfWeight'; readonly factors: Vec3 };
 

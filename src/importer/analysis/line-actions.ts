@@ -6,7 +6,7 @@ import type { Sources } from '../read-element.ts';
 import type { CurveMember } from './curve-members.ts';
 import { axesOf, type Frames, inAxes } from './frames.ts';
 import type { Items } from './items.ts';
-import { forceOf, isLocal, notTaken } from './load-values.ts';
+import { forceOf, isLocal, notTaken, temperatureOf } from './load-values.ts';
 import { actsElsewhere } from './point-actions.ts';
 import { readEdgeLine, readPoint } from './topology.ts';
 
@@ -24,7 +24,7 @@ interface Stretch {
 }
 
 /**
- * Forces per length on a curve member: constant, or linear between stations; forces at stations where the action is
+ * A change of temperature, or forces per length on a curve member: constant, or linear between stations; forces at stations where the action is
  * discrete. IFC4: IfcStructuralLoadConfiguration; IFC2X3: IfcStructuralLinearActionVarying.
  * @throws NotRead where the distribution is another
  */
@@ -33,6 +33,9 @@ export function lineLoads(sources: Sources, frames: Frames, items: Items, id: nu
   const args = reading.args(id);
   const member = items.members.get(item);
   if (member === undefined) throw actsElsewhere();
+  const applied = asRef(args[7]);
+  const change = applied === null ? null : temperatureOf(reading, applied);
+  if (change !== null) return [{ kind: 'temperature', globalId: member.member.globalId, change }];
   const drawn = readEdgeLine(reading, asRef(args[6]), frames.of(item));
   const stretch = stretchOf(drawn?.from ?? member.start, drawn?.to ?? member.end);
   const shape = reading.family === 'IFC2X3' ? null : asEnum(args[11]);

@@ -177,14 +177,18 @@ function times(load: GivenLoad, k: number): GivenLoad {
   const by = (v: Vec3): Vec3 => [v[0] * k, v[1] * k, v[2] * k];
   if (load.kind === 'point') return { ...load, force: by(load.force) };
   if (load.kind === 'line') return { ...load, forceFrom: by(load.forceFrom), forceTo: by(load.forceTo) };
+  if (load.kind === 'temperature') return { ...load, change: load.change * k };
+  if (load.kind === 'settlement') return { ...load, movement: by(load.movement) };
   return { ...load, factors: by(load.factors) };
 }
 
-/** N or N/m; beyond it the sums of a solver are no numbers any more. */
+/** N, N/m, K or m; beyond it the sums of a solver are no numbers any more. */
 const MOST = 1e15;
 
 function isSane(load: GivenLoad): boolean {
-  const numbers = Object.values(load).flatMap((value) => (Array.isArray(value) ? (value as number[]) : []));
+  const numbers = Object.values(load)
+    .flat()
+    .filter((value) => typeof value === 'number');
   return numbers.every((value) => Math.abs(value) <= MOST);
 }
 

@@ -20,6 +20,26 @@ export function forceOf(reading: Reading, load: number, kind: 'force' | 'linearF
   return [part(1), part(2), part(3)];
 }
 
+/** K, of IfcStructuralLoadTemperature; null where the load is another. What bends a member is said. */
+export function temperatureOf(reading: Reading, load: number): number | null {
+  if (reading.typeOf(load) !== 'IFCSTRUCTURALLOADTEMPERATURE') return null;
+  const args = reading.args(load);
+  const bends = [2, 3].some((i) => typeof args[i] === 'number' && args[i] !== 0);
+  if (bends)
+    reading.note(
+      loadNotTaken('gradients', 'they are warmer on one side, which only bends pinned bars (the mean is taken)'),
+    );
+  return reading.quantity(args[1], 'temperature') ?? 0;
+}
+
+/** m, of IfcStructuralLoadSingleDisplacement; null where the load is another. */
+export function displacementOf(reading: Reading, load: number): Vec3 | null {
+  if (!reading.typeOf(load).startsWith('IFCSTRUCTURALLOADSINGLEDISPLACEMENT')) return null;
+  const args = reading.args(load);
+  const part = (i: number): number => reading.quantity(args[i], 'length') ?? 0;
+  return [part(1), part(2), part(3)];
+}
+
 const OTHER_LOADS: ReadonlyMap<string, string> = new Map([
   ['IFCSTRUCTURALLOADTEMPERATURE', 'they are temperatures'],
   ['IFCSTRUCTURALLOADSINGLEDISPLACEMENT', 'they are settlements or imposed movements'],

@@ -1,14 +1,16 @@
+import type { Vec3 } from '../../domain/vector.ts';
 import { asRef, asRefs } from '../../step/values.ts';
 import type { GivenLoad } from '../given.ts';
 import type { NotRead } from '../not-read.ts';
 import type { Sources } from '../read-element.ts';
+import { readNodeCondition } from './boundary-condition.ts';
 import { type Frames, inAxes, turned } from './frames.ts';
 import type { Items } from './items.ts';
-import { forceOf, isLocal, notTaken } from './load-values.ts';
+import { displacementOf, forceOf, isLocal, notTaken } from './load-values.ts';
 import { readVertex } from './topology.ts';
 
 /**
- * A force on a point connection, or on a point of a curve member that the action itself draws.
+ * A force on a point connection, how far a support settles, or on a point of a curve member that the action itself draws.
  * @throws NotRead where there is no such point
  */
 export function pointLoads(sources: Sources, frames: Frames, items: Items, id: number, item: number): GivenLoad[] {
@@ -21,11 +23,21 @@ export function pointLoads(sources: Sources, frames: Frames, items: Items, id: n
   const at = readVertex(reading, asRef(args[6]), frame) ?? connection?.at ?? null;
   if (at === null) throw notTaken('they act on a member at a point that is not given');
   const load = singleLoad(sources, asRef(args[7]));
-  const given = load === null ? null : forceOf(reading, load, 'force');
-  if (given === null) return [];
-  if (!isLocal(args[8])) return [{ kind: 'point', at, force: turned(frame, given) }];
-  const force = connection === undefined ? inAxes(member!.axes, given) : turned(connection.own, given);
-  return [{ kind: 'point', at, force }];
+  if (load === null) return [];
+  const inWorld = (given: Vec3): Vec3 => {
+    if (!isLocal(args[8])) return turned(frame, given);
+    return connection === undefined ? inAxes(member!.axes, given) : turned(connection.own, given);
+  };
+  const moved = connection !== undefined && isHeld(sources, item) ? displacementOf(reading, load) : null;
+  if (moved !== null) return [{ kind: 'settlement', at, movement: inWorld(moved) }];
+  const given = forceOf(reading, load, 'force');
+  return given === null ? [] : [{ kind: 'point', at, force: inWorld(given) }];
+}
+
+/** A movement that is imposed where nothing holds the node is no settlement. */
+function isHeld({ reading }: Sources, connection: number): boolean {
+  const condition = readNodeCondition(reading, reading.args(connection)[7]);
+  return condition?.translations.some(({ kind }) => kind === 'rigid') ?? false;
 }
 
 /** Of a configuration of one value that value. */

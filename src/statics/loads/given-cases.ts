@@ -5,6 +5,7 @@ import type { Member } from '../../domain/member.ts';
 import type { Truss, TrussBar } from '../../domain/truss.ts';
 import { between, distance, dot, scale, subtract, unit, type Vec3 } from '../../domain/vector.ts';
 import type { GivenCase, GivenLoad } from '../../importer/given.ts';
+import type { BarStretch, Settlement } from '../types.ts';
 import type { BuiltCases } from './build-cases.ts';
 import { NodeForces } from './node-forces.ts';
 import { addWeight } from './self-weight.ts';
@@ -33,10 +34,12 @@ class Placing {
   private readonly truss: Truss;
   private readonly nodeAt: (at: Vec3) => number | null;
   private readonly barsOf = new Map<string, TrussBar[]>();
+  private readonly indexOf: ReadonlyMap<TrussBar, number>;
 
   constructor(truss: Truss, members: readonly Member[]) {
     this.truss = truss;
     this.nodeAt = nodeFinder(truss);
+    this.indexOf = new Map(truss.bars.map((bar, index) => [bar, index]));
     for (const bar of truss.bars) for (const member of bar.members) pushTo(this.barsOf, members[member].globalId, bar);
   }
 
@@ -44,10 +47,17 @@ class Placing {
     const forces = new NodeForces();
     const betweenNodes: Vec3[] = [];
     const lost: { at: Vec3; members: string[] }[] = [];
+    const freeStretch: BarStretch[] = [];
+    const settlements: Settlement[] = [];
     for (const load of given) {
       if (load.kind === 'selfWeight') addWeight(forces, this.truss, load.factors);
       else if (load.kind === 'line') {
         if (!this.putLine(forces, load)) lost.push({ at: between(load.from, load.to, 0.5), members: [load.globalId] });
+      } else if (load.kind === 'temperature') freeStretch.push(...this.warmed(load));
+      else if (load.kind === 'settlement') {
+        const node = this.nodeAt(load.at);
+        if (node === null) lost.push({ at: load.at, members: [] });
+        else settlements.push({ node, movement: load.movement });
       } else {
         const where = this.putPoint(forces, load);
         if (where === 'bar') betweenNodes.push(load.at);
@@ -58,8 +68,19 @@ class Placing {
     const findings: Finding[] = [];
     if (betweenNodes.length > 0) findings.push(sayBetweenNodes(name, betweenNodes));
     if (lost.length > 0) findings.push(sayLost(name, lost));
-    else if (loads.length === 0) findings.push(sayEmpty(name));
-    return { loadCase: { name, nature, loads }, findings };
+    else if (loads.length + freeStretch.length + settlements.length === 0) findings.push(sayEmpty(name));
+    const moves = {
+      ...(freeStretch.length === 0 ? {} : { freeStretch }),
+      ...(settlements.length === 0 ? {} : { settlements }),
+    };
+    return { loadCase: { name, nature, loads, ...moves }, findings };
+  }
+
+  private warmed({ globalId, change }: Extract<GivenLoad, { kind: 'temperature' }>): BarStretch[] {
+    return (this.barsOf.get(globalId) ?? []).map((bar) => ({
+      bar: this.indexOf.get(bar)!,
+      by: bar.expansion * change * bar.length,
+    }));
   }
 
   private putPoint(forces: NodeForces, { at, force }: PointLoad): 'node' | 'bar' | null {

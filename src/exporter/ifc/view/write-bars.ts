@@ -13,6 +13,8 @@ import { stiffnessValue, type WrittenNode } from './write-nodes.ts';
 export interface WrittenBar {
   readonly member: StepRef;
   readonly globalId: string;
+  /** 1/K, of its material. */
+  readonly expansion: number;
 }
 
 /** A curve member for each bar, pinned at both ends; with its section and material, and tied to the elements it stands for. */
@@ -55,7 +57,7 @@ export function* writeBars(
     connect(view, once, member, globalId, nodes[to]!.connection, 'end');
     if (own !== undefined) sections.note(member, bar, own, zAxis);
     for (const id of ids) if (elements.has(id)) pushTo(barsOf, id, member);
-    into.push({ member, globalId });
+    into.push({ member, globalId, expansion: own?.material?.expansion ?? 0 });
     yield* file.take();
   }
   carriedNodes(view, once, nodes, into);

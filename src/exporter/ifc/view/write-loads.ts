@@ -3,6 +3,7 @@ import type { StepRef } from '../../../step/values.ts';
 import { enumeration, type ValueToWrite } from '../../../step/write.ts';
 import { label } from '../block.ts';
 import { ROLE, type View } from './view-parts.ts';
+import type { WrittenBar } from './write-bars.ts';
 import type { WrittenNode } from './write-nodes.ts';
 
 type Nature = Result['cases'][number]['nature'];
@@ -17,31 +18,29 @@ const ACTIONS: Readonly<Record<Nature, readonly [type: string, source: string]>>
   accidental: ['EXTRAORDINARY_A', 'NOTDEFINED'],
 };
 
+const SETTLING = ['PERMANENT_G', 'SETTLEMENT_U'] as const;
+
 /** The load group of each case and combination, by name. */
 export interface WrittenGroups {
   readonly cases: Map<string, StepRef>;
   readonly combinations: Map<string, StepRef>;
 }
 
-/** Load cases with their forces at nodes (own weight among them), and combinations of them. */
-export function* writeLoads(view: View, nodes: readonly WrittenNode[], into: WrittenGroups): Generator<string> {
-  const { file, frame, result, nodeKeys } = view;
-  const indexOf = new Map(result.nodes.map(({ id }, k) => [id, k]));
-  for (const { name, nature, loads } of result.cases) {
-    const [type, source] = ACTIONS[nature];
+/** Load cases with what acts at nodes (own weight among it) and on bars, and combinations of them. */
+export function* writeLoads(
+  view: View,
+  nodes: readonly WrittenNode[],
+  bars: readonly WrittenBar[],
+  into: WrittenGroups,
+): Generator<string> {
+  const { file, result } = view;
+  for (const loadCase of result.cases) {
+    const { name, nature } = loadCase;
+    const [type, source] = (loadCase.settlements ?? []).length > 0 ? SETTLING : ACTIONS[nature];
     const group = writeGroup(view, name, ['LOAD_CASE', type, source, 1, null]);
     into.cases.set(name, group);
     const actions: StepRef[] = [];
-    for (const { node, force } of loads) {
-      const k = indexOf.get(node)!;
-      const id = file.globalId(`${ROLE} action`, `${name}\n${nodeKeys[k]}`);
-      const load = file.add('IFCSTRUCTURALLOADSINGLEFORCE', null, ...force, null, null, null);
-      const rest: ValueToWrite[] = [load, enumeration('GLOBAL_COORDS'), ...(file.isIfc2x3 ? [false, null] : [false])];
-      const action = file.add('IFCSTRUCTURALPOINTACTION', id, frame.owner, null, null, null, null, null, ...rest);
-      connectActivity(view, nodes[k]!.connection, action, id);
-      actions.push(action);
-      yield* file.take();
-    }
+    yield* writeActions(view, nodes, bars, loadCase, actions);
     assign(view, actions, group, `loads of ${name}`);
     yield* file.take();
   }
@@ -52,6 +51,55 @@ export function* writeLoads(view: View, nodes: readonly WrittenNode[], into: Wri
       const own = into.cases.get(loadCase);
       if (own !== undefined) addByFactor(view, { name, group }, { name: loadCase, group: own }, factor);
     }
+    yield* file.take();
+  }
+}
+
+/** Forces and settlements at nodes; what warmth or misfit makes of bars as the change of temperature that does it. */
+function* writeActions(
+  { file, frame, result, nodeKeys }: View,
+  nodes: readonly WrittenNode[],
+  bars: readonly WrittenBar[],
+  { name, loads, stretch = [], settlements = [] }: Result['cases'][number],
+  into: StepRef[],
+): Generator<string> {
+  const nodeOf = new Map(result.nodes.map(({ id }, k) => [id, k]));
+  const barOf = new Map(result.bars.map(({ id }, k) => [id, k]));
+  const act = (
+    type: string,
+    role: string,
+    key: string,
+    item: StepRef,
+    load: StepRef,
+    tail: readonly ValueToWrite[],
+  ) => {
+    const id = file.globalId(`${ROLE} ${role}`, `${name}\n${key}`);
+    const rest = [load, enumeration(role === 'warmth' ? 'LOCAL_COORDS' : 'GLOBAL_COORDS'), false, ...tail];
+    const action = file.add(type, id, frame.owner, null, null, null, null, null, ...rest);
+    connectActivity({ file, frame }, item, action, id);
+    into.push(action);
+  };
+  const causedBy = file.isIfc2x3 ? [null] : [];
+  const atNode = (node: string, role: string, type: string, value: readonly number[]) => {
+    const k = nodeOf.get(node)!;
+    const load = file.add(type, null, ...value, null, null, null);
+    act('IFCSTRUCTURALPOINTACTION', role, nodeKeys[k]!, nodes[k]!.connection, load, causedBy);
+  };
+  for (const { node, force } of loads) {
+    atNode(node, 'action', 'IFCSTRUCTURALLOADSINGLEFORCE', force);
+    yield* file.take();
+  }
+  for (const { node, movement } of settlements) {
+    atNode(node, 'settlement', 'IFCSTRUCTURALLOADSINGLEDISPLACEMENT', movement);
+    yield* file.take();
+  }
+  for (const { bar, by } of stretch) {
+    const { member, globalId, expansion } = bars[barOf.get(bar)!]!;
+    const change = by / (expansion * result.bars[barOf.get(bar)!]!.length);
+    if (!Number.isFinite(change)) continue;
+    const load = file.add('IFCSTRUCTURALLOADTEMPERATURE', null, change, null, null);
+    const along = file.isIfc2x3 ? [enumeration('TRUE_LENGTH')] : [null, enumeration('CONST')];
+    act('IFCSTRUCTURALLINEARACTION', 'warmth', globalId, member, load, [...causedBy, ...along]);
     yield* file.take();
   }
 }
@@ -108,7 +156,12 @@ export function assign({ file, frame }: View, items: readonly StepRef[], group: 
   file.add('IFCRELASSIGNSTOGROUP', file.globalId(`${ROLE} assigns`, of), frame.owner, null, null, items, null, group);
 }
 
-export function connectActivity({ file, frame }: View, item: StepRef, activity: StepRef, of: string): void {
+export function connectActivity(
+  { file, frame }: Pick<View, 'file' | 'frame'>,
+  item: StepRef,
+  activity: StepRef,
+  of: string,
+): void {
   const id = file.globalId(`${ROLE} acts`, of);
   file.add('IFCRELCONNECTSSTRUCTURALACTIVITY', id, frame.owner, null, null, item, activity);
 }

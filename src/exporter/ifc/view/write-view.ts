@@ -38,7 +38,7 @@ function* viewLines(file: NewFile, result: Result): Generator<string> {
   const bars: WrittenBar[] = [];
   yield* writeBars(view, nodes, elements, bars);
   const groups: WrittenGroups = { cases: new Map(), combinations: new Map() };
-  yield* writeLoads(view, nodes, groups);
+  yield* writeLoads(view, nodes, bars, groups);
   const results: StepRef[] = [];
   yield* writeResults(view, nodes, bars, groups, results);
 
