@@ -45,6 +45,7 @@ import type { StepFile } from './step/step-file.ts';
 import { platesOfCleats } from './topology/cleats.ts';
 import { joinMembers } from './topology/join-members.ts';
 import { type JoinOptions, valueFor } from './topology/options.ts';
+import { membersInRole } from './topology/regularity/families.ts';
 
 export interface RunOptions {
   /** The model's name in outputs; no path. */
@@ -137,6 +138,7 @@ export async function runModel(bytes: Uint8Array, options: Partial<RunOptions> =
     given: usesGivenCases ? given.combinations : null,
     oneWay,
     members,
+    bracing: membersInRole(joined.families, 'bracing'),
   });
 
   const eccentricities = eccentricityMoments(truss, solved.cases, solved.combinations);
@@ -187,6 +189,7 @@ export async function runModel(bytes: Uint8Array, options: Partial<RunOptions> =
     buckling: solved.buckling,
     envelope: solved.envelope,
     holds: solved.holds,
+    idle: solved.idle,
     limits: given === null ? joined.limits : null,
     eccentricities,
     bending,

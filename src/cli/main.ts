@@ -5,6 +5,7 @@ import { EXIT } from '../domain/errors.ts';
 import { GENERATOR } from '../domain/generator.ts';
 import { cleanCommand, withCleanOptions } from './clean-command.ts';
 import { reportFailure } from './failure.ts';
+import { withHandChecks } from './hand-check-options.ts';
 import { type RunFlags, runCommand, withRunOptions } from './run-command.ts';
 
 const program = new Command('pinwright')
@@ -31,11 +32,11 @@ withRunOptions(program.command('survey'))
     exitCode = await runCommand(model, 'survey', flags);
   });
 
-withRunOptions(program.command('analyse'))
+withHandChecks(withRunOptions(program.command('analyse')))
   .description('everything: read, join, judge, load and solve a model')
   .addHelpText(
     'after',
-    '\nExample:\n  pinwright analyse roof.ifc --brief roof.yaml -o forces.json -o roof-with-forces.ifc',
+    '\nExample:\n  pinwright analyse roof.ifc --brief roof.yaml -o forces.json -o roof-with-forces.ifc\n  pinwright analyse roof.ifc --brief roof.yaml --joint 12,18,6.4 --cut x=7.5',
   )
   .action(async (model: string, flags: RunFlags) => {
     exitCode = await runCommand(model, 'analyse', flags);

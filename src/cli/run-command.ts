@@ -6,14 +6,16 @@ import { DEFAULT_BRIEF } from '../brief/default-brief.ts';
 import { EXIT } from '../domain/errors.ts';
 import { contentOf } from '../exporter/content.ts';
 import { type OtherOutput, planOutputs } from '../exporter/outputs.ts';
+import { wrapped } from '../exporter/summary/layout.ts';
 import { summarise } from '../exporter/summary.ts';
 import { writeOutputs } from '../exporter/write-outputs.ts';
 import { type Run, type RunOptions, runModel, type Stage } from '../pipeline.ts';
 import { namingModel } from './failure.ts';
+import { asksForHandCheck, type HandCheckFlags, handChecks, readHandChecks } from './hand-check-options.ts';
 import { makeProgress } from './progress.ts';
 import { readBrief, readModelBytes, readReplies } from './read-files.ts';
 
-export interface RunFlags {
+export interface RunFlags extends HandCheckFlags {
   readonly brief?: string;
   readonly output?: string[];
   readonly view?: string;
@@ -44,6 +46,7 @@ export function withRunOptions(command: Command): Command {
 
 /** Runs a model and writes what was asked for. Gives the exit code. */
 export async function runCommand(model: string, extent: RunOptions['extent'], flags: RunFlags): Promise<number> {
+  readHandChecks(flags);
   const outputs = flags.output ?? [];
   const others = otherOutputs(flags);
   const plan = planOutputs([...outputs, ...others], model, ...(flags.replies === undefined ? [] : [flags.replies]));
@@ -60,13 +63,17 @@ export async function runCommand(model: string, extent: RunOptions['extent'], fl
   const result = replies === null ? run.result : withReplies(run.result, replies, basename(flags.replies ?? ''));
   await writeOutputs(plan, contentOf(result, run.file, { version: flags.bcfVersion ?? '3.0', replies, stamp }));
   if (flags.timings) reportTimings(run, (performance.now() - analysed) / 1000);
+  const isHandCheck = asksForHandCheck(flags) && !plan.stdout;
+  if (isHandCheck) process.stdout.write(handChecks(result, flags));
   if (!flags.quiet && !plan.stdout) {
     const { elementCount, tracesRemoved, mass, coverage, topLevels } = run;
     // Before there are loads the reader is still choosing what belongs to the truss.
     const kinds = extent === 'survey' ? run.kinds : [];
-    process.stdout.write(
-      summarise(result, { extras: { elementCount, tracesRemoved, mass, coverage, kinds, topLevels } }),
-    );
+    if (isHandCheck) process.stdout.write(`\n${wrapped(result.caution, 80).join('\n')}\n`);
+    else
+      process.stdout.write(
+        summarise(result, { extras: { elementCount, tracesRemoved, mass, coverage, kinds, topLevels } }),
+      );
     const written = [...outputs, ...others.map(({ given }) => given)];
     if (written.length > 0) process.stdout.write(`\nWritten: ${written.join(', ')}\n`);
   }

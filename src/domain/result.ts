@@ -277,6 +277,24 @@ const joiningSchema = z
   .strictObject({ reach: limitSchema, offset: limitSchema })
   .describe('how far axes were allowed to be carried; evidence widens it for the pair concerned');
 
+const idleBar = z.strictObject({
+  bar: text,
+  rule: z
+    .enum(['alone', 'two', 'three', 'out-of-line', 'out-of-plane', 'slack', 'whole'])
+    .describe(
+      'what shows it: alone at an unloaded joint; one of two bars not in line, or of three not in one plane, there; all else at the joint in one line, ' +
+        'or in one plane, that it stands out of; it only pulls or pushes and would have to do the other; the balance of the whole',
+    ),
+  node: textOrNull.describe('the joint that shows it'),
+});
+
+const idleSchema = z
+  .strictObject({
+    everywhere: z.array(idleBar).describe('in every case, and in every combination where forces do not add up'),
+    cases: z.array(z.strictObject({ case: text, bars: z.array(idleBar) })),
+  })
+  .describe('bars that carry nothing, in the order in which a person would find them');
+
 const eccentricitySchema = z.strictObject({
   node: text,
   of: z.enum(['braces', 'seat']),
@@ -386,6 +404,7 @@ export const resultSchema = z.strictObject({
     .array(supportSchema)
     .optional()
     .describe('by node, in the order of nodes; what only holds keep is under `holds`'),
+  idle: idleSchema.optional(),
   holds: z.array(holdSchema).optional(),
   joining: joiningSchema.optional(),
   eccentricities: z.array(eccentricitySchema).optional(),

@@ -9,6 +9,7 @@ import { between, type Vec3 } from '../domain/vector.ts';
 import type { BarBending } from '../statics/bending/between-nodes.ts';
 import type { EccentricityMoment } from '../statics/bending/eccentricity-moments.ts';
 import type { BucklingJudgement } from '../statics/buckling/judge-buckling.ts';
+import type { IdleBar, IdleBars } from '../statics/idle/idle-bars.ts';
 import type { AskedLoad } from '../statics/loads/asked.ts';
 import type { Judgement } from '../statics/stability/assess-stability.ts';
 import type {
@@ -50,6 +51,7 @@ export interface RunRecord {
   readonly combining?: Result['combining'];
   readonly envelope: readonly BarEnvelope[];
   readonly holds: readonly HoldForce[];
+  readonly idle: IdleBars;
   /** Null where the model's own view says which points are shared. */
   readonly limits: JoinLimits | null;
   readonly eccentricities: readonly EccentricityMoment[];
@@ -119,6 +121,7 @@ export function assembleResult(run: RunRecord): Result {
     })),
     checks: [],
     ...resultSupports(run.supports),
+    ...idleBars(run.idle),
     ...(run.holds.length === 0 ? {} : { holds: run.holds.map((hold) => resultHold(hold, run.supports)) }),
     ...(run.limits === null ? {} : { joining: resultLimits(run.limits) }),
     eccentricities: run.eccentricities.map(({ node, eccentricity: { of, member, e }, moment, from }) => ({
@@ -280,6 +283,15 @@ function resultSupports({ restraints, springs }: Supports): Pick<Result, 'suppor
       .map(({ direction, stiffness }) => ({ direction: point(direction), stiffness })),
   }));
   return { supports };
+}
+
+function idleBars({ everywhere, cases }: IdleBars): Pick<Result, 'idle'> {
+  const named = (bars: readonly IdleBar[]) =>
+    bars.map(({ bar, rule, node }) => ({ bar: barId(bar), rule, node: node === null ? null : nodeId(node) }));
+  if (cases.length === 0) return {};
+  return {
+    idle: { everywhere: named(everywhere), cases: cases.map((one) => ({ case: one.case, bars: named(one.bars) })) },
+  };
 }
 
 function resultHold(hold: HoldForce, { restraints, springs }: Supports): NonNullable<Result['holds']>[number] {

@@ -52,6 +52,33 @@ describe('pinwright analyse on the demo roof', () => {
     expect({ code, stdout, stderr }).toEqual({ code: 0, stdout: '', stderr: '' });
   });
 
+  it('shows joints, cuts and the whole for a check by hand in place of the summary', () => {
+    const asked = ['--joint', '12,18,6.4', '--cut', 'x=7.5', '--cut', '12,0,0/1,1,0', '--balance'];
+    const { code, stdout } = pinwright(['analyse', hall, '--brief', brief, ...asked, '--case', 'hoist']);
+    expect(code).toBe(0);
+    expect(Math.max(...stdout.split('\n').map((line) => line.length))).toBeLessThanOrEqual(80);
+    expect(stdout).toMatch(/^Balance of the whole/);
+    expect(stdout).toContain('Joint n65 at 12.000 18.000 6.400 (C/4, +6.40), in hoist');
+    expect(stdout).toMatch(/load +0\.0 +0\.0 +-20\.0/);
+    for (const [, left] of stdout.matchAll(/left over: (?:less than )?(\S+) of/g))
+      expect(Number(left)).toBeLessThan(1e-9);
+    expect([...stdout.matchAll(/left over: /g)]).toHaveLength(3);
+    expect(stdout).toContain('licensed engineer');
+  });
+
+  it('says in one line what a check by hand cannot find', () => {
+    for (const asked of [
+      ['--cut', 'q=1'],
+      ['--joint', 'top'],
+      ['--joint', 'n9999'],
+      ['--balance', '--case', 'rain'],
+    ]) {
+      const { code, stderr } = pinwright(['analyse', hall, '--brief', brief, '--quiet', ...asked]);
+      expect(code).toBe(2);
+      expect(stderr).toMatch(oneLine);
+    }
+  });
+
   it('gives one line of timings with --timings', () => {
     const { stderr } = pinwright(['analyse', hall, '--brief', brief, '--timings', '--quiet']);
     expect(stderr).toMatch(oneLine);

@@ -31,6 +31,17 @@ describe('the README shows what', () => {
   });
 });
 
+describe('the README shows of a joint', () => {
+  it('what --joint prints', () => {
+    const asked = ['--joint', '12,18,6.4', '--case', 'hoist'];
+    const { stdout } = pinwright(
+      ['analyse', 'fixtures/boat-hall-a.ifc', '--brief', 'fixtures/boat-hall.yaml', ...asked],
+      checkout,
+    );
+    expect(withoutNoise(stdout)).toContain(withoutNoise(shown[2]));
+  });
+});
+
 describe('every code that the README explains', () => {
   it('is a code of the program, and every example brief in it is accepted', async () => {
     const { FINDING_SEVERITY } = await import('../../src/domain/finding.ts');

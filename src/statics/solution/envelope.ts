@@ -15,14 +15,30 @@ export function envelope(
   combinations: readonly SolvedCombination[],
 ): BarEnvelope[] {
   const carried = decisive(cases, combinations);
-  return truss.bars.map((_, bar): BarEnvelope => {
-    let tension: ExtremeForce | null = null;
-    let compression: ExtremeForce | null = null;
-    for (const { name, axialForce } of carried) {
+  const count = truss.bars.length;
+  const most = new Float64Array(count).fill(NO_FORCE);
+  const least = new Float64Array(count).fill(-NO_FORCE);
+  const mostIn = new Int32Array(count).fill(-1);
+  const leastIn = new Int32Array(count).fill(-1);
+  // One answer after the other: each is one list, and walking along a list is what a machine does best.
+  carried.forEach(({ axialForce }, from) => {
+    for (let bar = 0; bar < count; bar++) {
       const force = axialForce[bar] ?? 0;
-      if (force > (tension?.force ?? NO_FORCE)) tension = { force, from: name };
-      if (force < (compression?.force ?? -NO_FORCE)) compression = { force, from: name };
+      if (force > most[bar]) {
+        most[bar] = force;
+        mostIn[bar] = from;
+      }
+      if (force < least[bar]) {
+        least[bar] = force;
+        leastIn[bar] = from;
+      }
     }
-    return { bar, tension, compression };
   });
+  const extreme = (values: Float64Array, from: Int32Array, bar: number): ExtremeForce | null =>
+    from[bar] < 0 ? null : { force: values[bar], from: carried[from[bar]].name };
+  return truss.bars.map((_, bar) => ({
+    bar,
+    tension: extreme(most, mostIn, bar),
+    compression: extreme(least, leastIn, bar),
+  }));
 }

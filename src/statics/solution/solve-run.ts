@@ -5,6 +5,8 @@ import { analyseWhole, type Whole } from '../analyse-whole.ts';
 import { NOT_JUDGED } from '../buckling/judge-buckling.ts';
 import { combinationsFor } from '../combinations/combinations-for.ts';
 import type { Generated, NamedCombination } from '../combinations/generate.ts';
+import { findIdleBars, type IdleBars } from '../idle/idle-bars.ts';
+import { idleFindings } from '../idle/words.ts';
 import { slackNote } from '../one-way/slack-note.ts';
 import type { Judgement } from '../stability/assess-stability.ts';
 import type { Named } from '../stability/names.ts';
@@ -24,6 +26,8 @@ export interface RunRules {
   readonly oneWay: OneWay;
   /** Those the truss was made of, for their marks. */
   readonly members: readonly Named[];
+  /** Which of them brace. */
+  readonly bracing: ReadonlySet<number>;
 }
 
 export interface RunSolution extends Whole {
@@ -31,6 +35,7 @@ export interface RunSolution extends Whole {
   readonly generated: Generated | null;
   readonly envelope: readonly BarEnvelope[];
   readonly holds: readonly HoldForce[];
+  readonly idle: IdleBars;
   /** Every case is carried in stable balance. */
   readonly isStable: boolean;
 }
@@ -41,7 +46,7 @@ export function solveRun(
   supports: Supports,
   stability: Judgement,
   cases: readonly LoadCase[],
-  { brief, given, oneWay, members }: RunRules,
+  { brief, given, oneWay, members, bracing }: RunRules,
 ): RunSolution {
   const superposable = oneWay.tensionOnly.length + oneWay.compressionOnly.length === 0;
   refuseTogether(cases, brief.analysis === 'second-order', superposable);
@@ -55,9 +60,11 @@ export function solveRun(
   const whole = superposable
     ? analyseWhole(truss, supports, stability, balance.cases, balance.combinations, { analysis: brief.analysis })
     : { cases: balance.cases, combinations: balance.combinations, buckling: NOT_JUDGED, findings: [] };
+  const idle = findIdleBars(truss, supports, whole, oneWay);
   return {
     ...whole,
     generated,
+    idle,
     envelope: envelope(truss, whole.cases, whole.combinations),
     holds: holdForces(truss, supports, whole.cases, whole.combinations),
     isStable: balance.isStable,
@@ -66,6 +73,7 @@ export function solveRun(
       ...combined.findings,
       ...balance.findings,
       ...supportLifts(truss, whole.combinations),
+      ...idleFindings(truss, members, idle.everywhere, bracing),
       ...slackNote(truss, oneWay, whole.cases, whole.combinations),
       ...whole.findings,
     ],

@@ -55,6 +55,11 @@ export function findFamilies(members: readonly Member[], roles: readonly (Member
   return families.sort(compareFamilies);
 }
 
+/** The members that do one thing, by index. */
+export function membersInRole(families: readonly Family[], role: MemberRole): ReadonlySet<number> {
+  return new Set(families.flatMap((family) => (family.role === role ? family.members : [])));
+}
+
 /** Groups of one length, shortest first; a group does not stretch by chaining. */
 function byLength(own: readonly number[], lengths: readonly number[]): Cut[] {
   const sorted = [...own].sort((a, b) => lengths[a] - lengths[b] || a - b);
