@@ -2,7 +2,8 @@ import type { Finding } from '../domain/finding.ts';
 import type { Truss } from '../domain/truss.ts';
 import { type BucklingJudgement, judgeBuckling } from './buckling/judge-buckling.ts';
 import { solveSecondOrder } from './second-order/solve-second-order.ts';
-import type { NodalForce, SolvedCase, SolvedCombination, Stability, Supports } from './types.ts';
+import type { Judgement } from './stability/assess-stability.ts';
+import type { NodalForce, SolvedCase, SolvedCombination, Supports } from './types.ts';
 
 export interface WholeOptions {
   /** first-order: balance at the nodes as they stand in the model; second-order: at the nodes as they have moved. */
@@ -25,13 +26,13 @@ export interface Whole {
 export function analyseWhole(
   truss: Truss,
   supports: Supports,
-  stability: Stability,
+  stability: Judgement,
   cases: readonly SolvedCase[],
   combinations: readonly SolvedCombination[],
   options: Partial<WholeOptions> = {},
 ): Whole {
   const isSecondOrder = { ...WHOLE_DEFAULTS, ...options }.analysis === 'second-order';
-  const buckling = judgeBuckling(truss, supports, stability, cases, combinations, { isSecondOrder });
+  const buckling = judgeBuckling(truss, stability, cases, combinations, { isSecondOrder });
   if (!isSecondOrder) return { cases, combinations, buckling, findings: buckling.findings };
   if (combinations.length === 0) {
     const again = cases.map((firstOrder) => ({ firstOrder, loads: firstOrder.loads }));

@@ -11,7 +11,7 @@ function judge(sketch: Sketch, supports: Supports, loads: readonly NodalForce[])
   const stability = assessStability(truss, supports);
   const { cases } = solveCases(truss, supports, stability, [caseOf(loads)]);
   expect(cases[0].refused).toBeNull();
-  return judgeBuckling(truss, supports, stability, cases, []);
+  return judgeBuckling(truss, stability, cases, []);
 }
 
 /** A straight chord of `panels` bars under an end thrust, held up everywhere and sideways at its ends, besides what `holds` and `springs` do. */

@@ -38,15 +38,23 @@ export interface Buckling {
   readonly mechanisms: readonly Float64Array[];
 }
 
-/** @param system with the bars' real stiffness and nothing held but by supports */
-export function prepareBuckling(system: System, modes: readonly Mode[], mechanisms: number): Buckling {
+/**
+ * @param system with the bars' real stiffness and nothing held but by supports
+ * @param factor of its matrix, where it is at hand
+ */
+export function prepareBuckling(
+  system: System,
+  modes: readonly Mode[],
+  mechanisms: number,
+  factor: Factor | null = null,
+): Buckling {
   const { movement, elongations, problem } = system;
   const transverse = mapTransverse(problem.truss, movement, elongations);
   return {
     system,
     transverse,
     rows: joinRows(system.rows, transverse),
-    elastic: mechanisms === 0 ? factorise(system.matrix) : null,
+    elastic: mechanisms === 0 ? (factor ?? factorise(system.matrix)) : null,
     mechanisms: modes.map((mode) => movesOf(system, mode)),
   };
 }

@@ -1,10 +1,9 @@
 import { type Finding, finding } from '../../domain/finding.ts';
 import type { Truss } from '../../domain/truss.ts';
-import { findParts } from '../model/parts.ts';
-import { buildSystem } from '../model/system.ts';
-import { lacksSection, realStiffness } from '../solution/sections.ts';
+import { lacksSection } from '../solution/sections.ts';
+import type { Judgement } from '../stability/assess-stability.ts';
 import { directionInWords, movementDirection, nodeInWords, sizeAt } from '../stability/words.ts';
-import type { SolvedCase, SolvedCombination, Stability, Supports } from '../types.ts';
+import type { SolvedCase, SolvedCombination } from '../types.ts';
 import { type BucklingMode, criticalFactors, prepareBuckling } from './critical-factors.ts';
 
 export interface BucklingOptions {
@@ -36,8 +35,7 @@ export const NOT_JUDGED: BucklingJudgement = { factors: new Map(), governing: nu
  */
 export function judgeBuckling(
   truss: Truss,
-  supports: Supports,
-  stability: Pick<Stability, 'modes' | 'mechanisms'>,
+  { modes: mechanisms, mechanisms: count, elastic: judged }: Pick<Judgement, 'modes' | 'mechanisms' | 'elastic'>,
   cases: readonly SolvedCase[],
   combinations: readonly SolvedCombination[],
   options: Partial<BucklingOptions> = {},
@@ -48,27 +46,32 @@ export function judgeBuckling(
       ? combinations.filter(({ limit }) => limit === 'strength' || limit === 'accidental')
       : cases;
   const carried = decisive.filter(({ refused }) => refused === null);
-  const parts = findParts(truss, supports);
-  if (carried.length === 0 || lacksSection(truss, parts) !== null) return NOT_JUDGED;
-  const system = buildSystem({ truss, supports, parts }, [], realStiffness(truss));
-  const buckling = prepareBuckling(system, stability.modes, stability.mechanisms);
+  const elastic = judged.with(truss);
+  const { system } = elastic;
+  if (carried.length === 0 || lacksSection(truss, system.problem.parts) !== null) return NOT_JUDGED;
+  const buckling = prepareBuckling(system, mechanisms, count, count === 0 ? elastic.factor : null);
+  // With one load alone the modes that are shown are found at once.
+  const atOnce = carried.length === 1 ? settings.modes : 1;
   const found = carried.map(({ name, axialForce, unstable }) => ({
     name,
     axialForce,
     // What its forces do not bring back has no factor above zero, whichever mechanism it is.
-    lowest: unstable ? { factor: 0, moves: unstable.moves } : (criticalFactors(buckling, axialForce, 1).at(0) ?? null),
+    found: unstable ? [{ factor: 0, moves: unstable.moves }] : criticalFactors(buckling, axialForce, atOnce),
   }));
-  const factors = new Map(found.map(({ name, lowest }) => [name, lowest?.factor ?? null]));
+  const factors = new Map(found.map((one) => [one.name, one.found.at(0)?.factor ?? null]));
   const below = found
-    .flatMap(({ name, axialForce, lowest }) => (lowest === null ? [] : [{ name, axialForce, lowest }]))
+    .flatMap((one) => one.found.slice(0, 1).map((lowest) => ({ ...one, lowest })))
     .sort((a, b) => a.lowest.factor - b.lowest.factor);
   if (below.length === 0) return { factors, governing: null, findings: [] };
-  const { name, axialForce, lowest } = below[0];
+  const { name, axialForce, lowest, found: known } = below[0];
   return {
     factors,
     governing: {
       from: name,
-      modes: lowest.factor === 0 ? [lowest] : criticalFactors(buckling, axialForce, settings.modes),
+      modes:
+        lowest.factor === 0 || atOnce === settings.modes
+          ? known
+          : criticalFactors(buckling, axialForce, settings.modes),
     },
     findings: findingsOf(truss, below, settings),
   };

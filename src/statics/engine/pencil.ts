@@ -12,6 +12,8 @@ export interface PencilOptions {
 
 export const PENCIL_DEFAULTS: PencilOptions = { tolerance: 1e-6, mostSteps: 200 };
 
+/** Share of a vector that is left by orthogonalisation where once is enough. */
+const KEPT = 0.1;
 /** Steps between two looks at what has been found. */
 const LOOK = 6;
 
@@ -42,7 +44,8 @@ export function highestOfPencil(
     image = applyG(basis[step - 1]);
     vector = solveOne(factor, image);
     diagonal.push(inner(basis[step - 1], image));
-    for (let pass = 0; pass < 2; pass++)
+    let before = Math.sqrt(Math.max(inner(vector, image), 0));
+    for (let pass = 0; pass < 2; pass++) {
       basis.forEach((b, i) => {
         const k = inner(vector, images[i]);
         for (let u = 0; u < vector.length; u++) {
@@ -50,7 +53,11 @@ export function highestOfPencil(
           image[u] = image[u] - k * images[i][u];
         }
       });
-    size = Math.sqrt(Math.max(inner(vector, image), 0));
+      size = Math.sqrt(Math.max(inner(vector, image), 0));
+      // Where little was taken away, little rounding came in (Daniel, Gragg, Kaufman & Stewart 1976).
+      if (size > KEPT * before) break;
+      before = size;
+    }
     const scale = Math.max(...diagonal.map(Math.abs), ...beside);
     const exhausted = size <= 1e-13 * scale;
     if (step % LOOK === 0 || exhausted || step === mostSteps) {

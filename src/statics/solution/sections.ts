@@ -1,26 +1,8 @@
 import type { Truss } from '../../domain/truss.ts';
-import type { Elongations } from '../model/elongation.ts';
 import type { Parts } from '../model/parts.ts';
 import type { Problem } from '../model/system.ts';
 import type { Judgement } from '../stability/assess-stability.ts';
 import type { LoadCase } from '../types.ts';
-
-/** EA/L of every bar, then the springs. Bars without a section get the mean EA of the others: only where no force hangs on it. */
-export function realStiffness(truss: Truss): (elongations: Elongations) => Float64Array {
-  const known = truss.bars.flatMap((bar) => (bar.stiffnessEA !== null && bar.stiffnessEA > 0 ? [bar.stiffnessEA] : []));
-  const mean = known.length > 0 ? known.reduce((sum, ea) => sum + ea, 0) / known.length : 1;
-  return ({ bars, springs, lengths }) => {
-    const out = new Float64Array(bars.length + springs.length);
-    bars.forEach((b, row) => {
-      const ea = truss.bars[b].stiffnessEA ?? mean;
-      out[row] = lengths[row] > 0 ? ea / lengths[row] : 0;
-    });
-    springs.forEach((spring, s) => {
-      out[bars.length + s] = spring.stiffness;
-    });
-    return out;
-  };
-}
 
 /** The name of a bar that is solved and has no section; null where all have one. */
 export function lacksSection(truss: Truss, parts: Parts): string | null {

@@ -3,10 +3,10 @@ import type { Truss } from '../../domain/truss.ts';
 import type { Vec3 } from '../../domain/vector.ts';
 import { type Factor, factorise } from '../engine/factor.ts';
 import { type Refined, solveRefined } from '../engine/refine.ts';
+import { realStiffness } from '../model/elastic.ts';
 import { elongationsOf } from '../model/elongation.ts';
 import { imposedMovement } from '../model/imposed-movement.ts';
 import { gatherForces, nodeMovements } from '../model/movement.ts';
-import { findParts } from '../model/parts.ts';
 import { buildSystem, type Problem, type System } from '../model/system.ts';
 import { OneWayBars } from '../one-way/one-way-bars.ts';
 import { oneWayRows } from '../one-way/one-way-rows.ts';
@@ -18,7 +18,7 @@ import { cleanOfModes } from './clean-of-modes.ts';
 import { leaveOutSetAside } from './leave-out-set-aside.ts';
 import { loadMovesIt, onRealNodes } from './load-moves-it.ts';
 import { groupMotions, type MotionGroup } from './mode-groups.ts';
-import { judgeSections, realStiffness, type SectionJudgement } from './sections.ts';
+import { judgeSections, type SectionJudgement } from './sections.ts';
 import { settlesBy } from './settles.ts';
 
 export interface SolveOptions {
@@ -69,14 +69,15 @@ export class Solver {
   /** @param stability the judgement of this truss on these supports */
   constructor(truss: Truss, supports: Supports, stability: Judgement, options: Partial<SolveOptions> = {}) {
     const { oneWay, ...settings } = { ...SOLVE_DEFAULTS, ...options };
-    this.#problem = { truss, supports, parts: findParts(truss, supports) };
     this.#stability = stability;
     this.#settings = settings;
     const { pivots } = stability;
-    const stiffnessOf = realStiffness(truss);
-    this.#base = buildSystem(this.#problem, [], stiffnessOf);
-    this.#held = pivots.length === 0 ? this.#base : buildSystem(this.#problem, pivots, stiffnessOf, this.#base);
-    this.#factor = factorise(this.#held.matrix);
+    const elastic = stability.elastic.with(truss);
+    this.#base = elastic.system;
+    this.#problem = { truss, supports, parts: this.#base.problem.parts };
+    this.#held =
+      pivots.length === 0 ? this.#base : buildSystem(this.#problem, pivots, realStiffness(truss), this.#base);
+    this.#factor = pivots.length === 0 ? elastic.factor : factorise(this.#held.matrix);
     this.#sections = judgeSections(this.#problem, stability);
     const rows = oneWayRows(this.#base, oneWay);
     this.#oneWay = rows.length === 0 ? null : new OneWayBars(this.#held, this.#factor, rows);

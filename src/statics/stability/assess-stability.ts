@@ -1,6 +1,7 @@
 import type { Truss } from '../../domain/truss.ts';
 import type { Vec3 } from '../../domain/vector.ts';
 import { countFreedoms } from '../engine/system.ts';
+import { Elastic } from '../model/elastic.ts';
 import { findParts } from '../model/parts.ts';
 import { buildSystem, type Problem, type System } from '../model/system.ts';
 import type { Mode, Restraint, Stability, Supports } from '../types.ts';
@@ -24,6 +25,8 @@ import { worksInBending } from './works-in-bending.ts';
 export interface Judgement extends Stability {
   /** One direction for each mechanism; with all of them held nothing moves freely. More than `modes` where some of those are left out. */
   readonly pivots: readonly Restraint[];
+  /** The same truss with the real stiffness of its bars. */
+  readonly elastic: Elastic;
   /** All mechanisms, those left out of `modes` too. */
   readonly space: ModeSpace;
   /** Counts of each part that is judged. */
@@ -66,7 +69,10 @@ export function assessStability(truss: Truss, supports: Supports, options: Parti
     selfStressStates: bars.length + springs.length - rank,
     freeBody: parts.freeBody,
     gap: spectrum.gap,
-    criticalBars: spectrum.gap === null ? null : criticalBars(base, found.system, bars.length + springs.length - rank),
+    criticalBars:
+      spectrum.gap === null
+        ? null
+        : criticalBars(base, spectrum.factor, found.system, bars.length + springs.length - rank),
     setAside: parts.setAside,
     modes,
     findings: [
@@ -80,6 +86,7 @@ export function assessStability(truss: Truss, supports: Supports, options: Parti
       ...(nearly ? [nearly] : []),
     ],
     pivots: found.pivots,
+    elastic: new Elastic(base),
     space: new ModeSpace(base, spectrum, found, modes, parts.freeBody),
     parts: counts,
   };

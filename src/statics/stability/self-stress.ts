@@ -14,12 +14,19 @@ const NOTHING = 1e-8;
  * Bars that take part in no state of self-stress: the loss of any one of them makes a mechanism more. Bar forces projected on the states of
  * self-stress are zero in a row for every set of forces exactly where the bar has no redundancy (the diagonal of the redundancy matrix).
  * Indices into the truss's bars.
+ *
+ * @param known the factor of `base`, where nothing moves and it is at hand
  */
-export function criticalBars(base: System, held: HeldSystem | null, selfStressStates: number): number[] {
+export function criticalBars(
+  base: System,
+  known: Factor | null,
+  held: HeldSystem | null,
+  selfStressStates: number,
+): number[] {
   const { bars } = base.elongations;
   if (selfStressStates === 0) return [...bars];
   const system = held?.held ?? base;
-  const factor = held?.factor ?? factorise(base.matrix);
+  const factor = held?.factor ?? known ?? factorise(base.matrix);
   const left = new Float64Array(system.rows.count);
   const all = new Uint8Array(system.rows.count).fill(1);
   for (let trial = 0; trial < TRIALS; trial++) {

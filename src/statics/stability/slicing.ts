@@ -1,4 +1,4 @@
-import { factorise } from '../engine/factor.ts';
+import { type Factor, factorise } from '../engine/factor.ts';
 import { lowestEigenvalue } from '../engine/lanczos.ts';
 import { countBelow, highestEigenvalue, type Stiffness } from '../engine/spectrum.ts';
 import { countFreedoms } from '../engine/system.ts';
@@ -29,6 +29,8 @@ export interface Spectrum {
   readonly nearly: number;
   /** Share of the lowest eigenvalue that is no mechanism, where it was found. */
   readonly lowest: number | null;
+  /** Of the system itself, where nothing moves freely. */
+  readonly factor: Factor | null;
   /** The counts found on the way, by ratio. */
   readonly ladder: readonly Rung[];
 }
@@ -37,14 +39,23 @@ export interface Spectrum {
 export function sliceSpectrum(system: Stiffness, options: StabilityOptions): Spectrum {
   const freedoms = countFreedoms(system.matrix.symbolic.freedoms);
   const highest = freedoms === 0 ? 0 : highestEigenvalue(system);
-  const plain = { highest, gap: 1 / ROUNDING, cut: options.threshold, nearly: 0, lowest: null, ladder: [] };
+  const plain = {
+    highest,
+    gap: 1 / ROUNDING,
+    cut: options.threshold,
+    nearly: 0,
+    lowest: null,
+    factor: null,
+    ladder: [],
+  };
   if (highest === 0) return { ...plain, mechanisms: freedoms };
   const counts = new Counts(system, highest, freedoms);
 
   if (counts.below(options.threshold) === 0) {
-    const lowest = lowestEigenvalue(factorise(system.matrix)) / highest;
+    const factor = factorise(system.matrix);
+    const lowest = lowestEigenvalue(factor) / highest;
     const nearly = lowest < options.nearly ? counts.below(options.nearly) : 0;
-    return { ...plain, mechanisms: 0, gap: lowest / ROUNDING, nearly, lowest, ladder: counts.rungs() };
+    return { ...plain, mechanisms: 0, gap: lowest / ROUNDING, nearly, lowest, factor, ladder: counts.rungs() };
   }
   const gap = widestGap(counts, options, freedoms <= BISECTED);
   if (gap === null || gap.upper / gap.lower < options.clearGap) {

@@ -1,12 +1,12 @@
 import { describe, expect, test } from 'vitest';
 import { factorise } from '../../../src/statics/engine/factor.ts';
 import { solveRefined } from '../../../src/statics/engine/refine.ts';
+import { realStiffness } from '../../../src/statics/model/elastic.ts';
 import { gatherForces } from '../../../src/statics/model/movement.ts';
 import { findParts } from '../../../src/statics/model/parts.ts';
 import { buildSystem } from '../../../src/statics/model/system.ts';
 import { OneWayBars } from '../../../src/statics/one-way/one-way-bars.ts';
 import { oneWayRows } from '../../../src/statics/one-way/one-way-rows.ts';
-import { realStiffness } from '../../../src/statics/solution/sections.ts';
 import { solveCases } from '../../../src/statics/solution/solve-cases.ts';
 import { solveCombinations } from '../../../src/statics/solution/solve-combinations.ts';
 import { Solver } from '../../../src/statics/solution/solver.ts';
