@@ -36,6 +36,7 @@ export {
   WHOLE_PLAN,
 } from './drawing/view.ts';
 export { annotate } from './exporter/ifc/annotate.ts';
+export { writePicture } from './exporter/ifc/picture/write-picture.ts';
 export { writeView } from './exporter/ifc/view/write-view.ts';
 export { resultJsonSchema, resultToJson } from './exporter/json.ts';
 export { summarise } from './exporter/summary.ts';

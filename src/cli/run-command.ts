@@ -19,6 +19,7 @@ export interface RunFlags extends HandCheckFlags {
   readonly brief?: string;
   readonly output?: string[];
   readonly view?: string;
+  readonly picture?: string;
   readonly replies?: string;
   readonly bcfVersion?: BcfVersion;
   readonly stamp?: boolean;
@@ -37,6 +38,7 @@ export function withRunOptions(command: Command): Command {
       (path: string, before: string[] = []) => [...before, path],
     )
     .option('--view <file>', 'write the truss as an IFC structural analysis view, a file of its own')
+    .option('--picture <file>', 'write the truss in colours as an IFC file to open beside the model')
     .option('--replies <file>', 'a BCF file that came back: its statuses and comments stand beside the findings')
     .addOption(new Option('--bcf-version <version>', 'of the BCF file written').choices(['2.1', '3.0']).default('3.0'))
     .option('--stamp', 'clock time in what is written; without it the dates are those of the model')
@@ -81,8 +83,11 @@ export async function runCommand(model: string, extent: RunOptions['extent'], fl
 }
 
 /** What options of their own ask to be written. */
-function otherOutputs({ view }: RunFlags): OtherOutput[] {
-  return view === undefined ? [] : [{ given: view, content: { kind: 'view' } }];
+function otherOutputs({ view, picture }: RunFlags): OtherOutput[] {
+  return [
+    ...(view === undefined ? [] : [{ given: view, content: { kind: 'view' } } as const]),
+    ...(picture === undefined ? [] : [{ given: picture, content: { kind: 'picture' } } as const]),
+  ];
 }
 
 const STAGE_WORDS: Readonly<Record<Stage, string>> = {

@@ -16,6 +16,16 @@ const WITHOUT_FORCE = 0.3;
 /** Of the greatest force: below it a bar is drawn as idle. */
 const NEXT_TO_NOTHING = 0.002;
 
+export type BarState = 'tension' | 'compression' | 'idle' | 'unknown' | 'neutral';
+
+/** What a bar's force makes of it; neutral where there are no forces at all. */
+export function barState(force: number | null, greatest: number, isLoaded: boolean): BarState {
+  if (force === null) return isLoaded ? 'unknown' : 'neutral';
+  const share = greatest > 0 ? Math.abs(force) / greatest : 0;
+  if (share < NEXT_TO_NOTHING) return 'idle';
+  return force < 0 ? 'compression' : 'tension';
+}
+
 /** The weight grows with the root of the force: small forces stay visible beside large ones. */
 export function barStyle(force: number | null, greatest: number, isLoaded: boolean, thinness = 1): BarStyle {
   if (force === null) {

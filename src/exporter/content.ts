@@ -5,6 +5,7 @@ import type { StepFile } from '../step/step-file.ts';
 import { encodeText, type Output } from './chunks.ts';
 import { tableToCsv } from './csv.ts';
 import { annotate } from './ifc/annotate.ts';
+import { writePicture } from './ifc/picture/write-picture.ts';
 import { writeView } from './ifc/view/write-view.ts';
 import { resultToJson } from './json.ts';
 import type { Content } from './outputs.ts';
@@ -34,6 +35,8 @@ export function contentOf(result: Result, file: StepFile, bcf: Partial<BcfOption
         return workbook(result);
       case 'view':
         return writeView(result);
+      case 'picture':
+        return writePicture(result);
     }
   };
 }

@@ -14,6 +14,7 @@ export type Content =
   | { readonly kind: 'bcf' }
   | { readonly kind: 'xlsx' }
   | { readonly kind: 'view' }
+  | { readonly kind: 'picture' }
   | { readonly kind: 'csv'; readonly table: TableName };
 
 export interface PlannedFile {

@@ -1,7 +1,7 @@
 import type { ResultMember } from '../../../domain/result.ts';
 import type { StepRef } from '../../../step/values.ts';
 import { label } from '../block.ts';
-import { type NewFile, single } from './new-file.ts';
+import { type NewFile, single } from '../new-file.ts';
 
 type Material = NonNullable<ResultMember['material']>;
 

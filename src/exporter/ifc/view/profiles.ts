@@ -5,7 +5,7 @@ import { centroidOf, type ProfileShape, sectionOf } from '../../../importer/sect
 import type { StepRef } from '../../../step/values.ts';
 import { enumeration, integer, typed, type ValueToWrite } from '../../../step/write.ts';
 import { label } from '../block.ts';
-import { type NewFile, single } from './new-file.ts';
+import { type NewFile, single } from '../new-file.ts';
 
 export type ResultSection = NonNullable<Result['members'][number]['section']>;
 

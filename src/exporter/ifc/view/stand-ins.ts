@@ -2,7 +2,7 @@ import type { Result } from '../../../domain/result.ts';
 import type { StepRef } from '../../../step/values.ts';
 import { enumeration } from '../../../step/write.ts';
 import { label } from '../block.ts';
-import type { FileFrame, NewFile } from './new-file.ts';
+import type { FileFrame, NewFile } from '../new-file.ts';
 
 /** How many attributes follow the tag, in IFC2X3 and from IFC4 on. */
 const MORE: Readonly<Record<string, readonly [in2x3: number, later: number]>> = {

@@ -1,6 +1,6 @@
 import type { Result } from '../../../domain/result.ts';
 import type { StepRef } from '../../../step/values.ts';
-import type { FileFrame, NewFile } from './new-file.ts';
+import type { FileFrame, NewFile } from '../new-file.ts';
 
 /** What the writers of the parts of a view share. */
 export interface View {

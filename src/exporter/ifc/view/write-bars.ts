@@ -4,8 +4,8 @@ import { anyNormal, dot, norm, subtract, unit, type Vec3 } from '../../../domain
 import type { StepRef } from '../../../step/values.ts';
 import { enumeration, integer } from '../../../step/write.ts';
 import { label } from '../block.ts';
+import type { NewFile } from '../new-file.ts';
 import { writeMaterial } from './materials.ts';
-import type { NewFile } from './new-file.ts';
 import { type BarSection, writeProfile, writeProfileProperties } from './profiles.ts';
 import { Once, ROLE, type View } from './view-parts.ts';
 import { stiffnessValue, type WrittenNode } from './write-nodes.ts';

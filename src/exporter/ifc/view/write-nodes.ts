@@ -3,7 +3,7 @@ import type { Vec3 } from '../../../domain/vector.ts';
 import type { StepRef } from '../../../step/values.ts';
 import { type TypedToWrite, typed } from '../../../step/write.ts';
 import { label } from '../block.ts';
-import type { NewFile } from './new-file.ts';
+import type { NewFile } from '../new-file.ts';
 import { type NodeCondition, nodeCondition } from './node-conditions.ts';
 import { Once, ROLE, type View } from './view-parts.ts';
 

@@ -3,7 +3,7 @@ import type { SchemaFamily } from '../../../importer/schema.ts';
 import type { StepRef } from '../../../step/values.ts';
 import { enumeration } from '../../../step/write.ts';
 import type { Chunks } from '../../chunks.ts';
-import { NewFile, writeFrame } from './new-file.ts';
+import { NewFile, writeFrame } from '../new-file.ts';
 import { writeStandIns } from './stand-ins.ts';
 import { ROLE, viewOf } from './view-parts.ts';
 import { type WrittenBar, writeBars } from './write-bars.ts';

@@ -1,10 +1,10 @@
-import type { Result } from '../../../domain/result.ts';
-import { knownSchema, type SchemaFamily } from '../../../importer/schema.ts';
-import { DERIVED, type StepRef } from '../../../step/values.ts';
-import { encodeString, enumeration, InstanceWriter, integer, typed, type ValueToWrite } from '../../../step/write.ts';
-import { type Chunks, encodeText } from '../../chunks.ts';
-import { decodeGlobalId, drawGlobalId } from '../global-id.ts';
-import { secondsOf } from '../owner-history.ts';
+import type { Result } from '../../domain/result.ts';
+import { knownSchema, type SchemaFamily } from '../../importer/schema.ts';
+import { DERIVED, type StepRef } from '../../step/values.ts';
+import { encodeString, enumeration, InstanceWriter, integer, typed, type ValueToWrite } from '../../step/write.ts';
+import { type Chunks, encodeText } from '../chunks.ts';
+import { decodeGlobalId, drawGlobalId } from './global-id.ts';
+import { secondsOf } from './owner-history.ts';
 
 const SCHEMA_NAMES: Readonly<Record<SchemaFamily, string>> = { IFC2X3: 'IFC2X3', IFC4: 'IFC4', IFC4X3: 'IFC4X3_ADD2' };
 
