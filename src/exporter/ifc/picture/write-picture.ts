@@ -30,11 +30,7 @@ type Kind = keyof typeof KINDS;
  */
 export function writePicture(result: Result): Chunks {
   const file = new NewFile(result);
-  return file.chunks(
-    'the truss in colours, to be opened beside the model',
-    'notYetAssigned',
-    lines(file, result),
-  );
+  return file.chunks('the truss in colours, to be opened beside the model', 'notYetAssigned', lines(file, result));
 }
 
 function* lines(file: NewFile, result: Result): Generator<string> {
