@@ -39,5 +39,6 @@ module.exports = {
     tsConfig: { fileName: 'tsconfig.json' },
     tsPreCompilationDeps: true,
     doNotFollow: { path: 'node_modules' },
+    exclude: { path: '\\.as\\.ts$' },
   },
 };

@@ -36,7 +36,7 @@ export function noteRepeatedGlobalIds(reading: Reading, globalIds: readonly stri
 /** Whether no two texts can be the same, by numbers made of them: a set of many texts takes several times as long. */
 function areApart(texts: readonly string[]): boolean {
   const numbers = new Float64Array(texts.length);
-  for (const [i, text] of texts.entries()) numbers[i] = numberOf(text);
+  for (let i = 0; i < texts.length; i++) numbers[i] = numberOf(texts[i]!);
   numbers.sort();
   for (let i = 1; i < numbers.length; i++) if (numbers[i] === numbers[i - 1]) return false;
   return true;

@@ -37,6 +37,22 @@ export class InstanceTable {
     if (id > this.maxId) this.maxId = id;
   }
 
+  /** Adds the first `count` rows of these columns, the greatest of whose ids is `maxId`. */
+  addRows(ids: Uint32Array, offsets: Uint32Array, codes: Uint16Array, count: number, maxId: number): void {
+    const { rows } = this;
+    this.rows += count;
+    if (this.rows > this.ids.length) this.grow(offsets[count - 1]);
+    this.ids.set(ids.subarray(0, count), rows);
+    this.offsets.set(offsets.subarray(0, count), rows);
+    this.codes.set(codes.subarray(0, count), rows);
+    if (maxId > this.maxId) this.maxId = maxId;
+  }
+
+  /** The id in the last row; null where there is none. */
+  get lastId(): number | null {
+    return this.rows === 0 ? null : this.ids[this.rows - 1];
+  }
+
   /** Makes instances findable. Of those that share an id the first stays; the others are given to `doubled` and left out. */
   close(doubled: (id: number) => void): void {
     this.hashMask = 0;

@@ -26,6 +26,7 @@ import { InstanceTable } from './instance-table.ts';
 import type { IndexedInstances } from './instances.ts';
 import { Keywords } from './keywords.ts';
 import { ParameterReader } from './parameters.ts';
+import type { PlainIndex } from './plain-index.ts';
 import { StepProblems } from './problems.ts';
 import { unclosedString } from './unclosed.ts';
 
@@ -46,9 +47,13 @@ export class DataScanner {
   private current: IndexedInstances;
   private lastId: number | null = null;
   private readonly lines: LineCounter;
+  private readonly plain: PlainIndex | null;
 
-  constructor(bytes: Uint8Array) {
+  /** @param plain goes over what is plain; null to read all of the file here */
+  constructor(bytes: Uint8Array, plain: PlainIndex | null) {
     this.bytes = bytes;
+    this.plain = plain;
+    plain?.begin(bytes);
     this.lines = new LineCounter(bytes);
     this.model = emptyIndex(bytes);
     this.current = this.model;
@@ -59,7 +64,7 @@ export class DataScanner {
     const { bytes } = this;
     let p = at;
     for (;;) {
-      p = this.skipBetween(p);
+      p = this.skipBetween(this.skipPlain(p));
       if (p >= bytes.length) throw this.cutOff();
       if (bytes[p] === HASH) p = this.instance(p);
       else if (isWordAt(bytes, p, 'ENDSEC')) break;
@@ -80,6 +85,16 @@ export class DataScanner {
         index.problems.add('doubled-id', id, `#${id} stands more than once in the file; the first is used.`),
       );
     }
+  }
+
+  /** Indexes the instances from `at` on that are as plain as can be, as `instance` would; the offset after them. */
+  private skipPlain(at: number): number {
+    const { plain, model } = this;
+    if (plain === null || this.current !== model) return at;
+    const { rows } = model.table;
+    const end = plain.index(at, model.table);
+    if (model.table.rows > rows) this.lastId = model.table.lastId;
+    return end;
   }
 
   /** White space and comments between statements; the two comments of our block switch from one index to the other. */
@@ -128,6 +143,7 @@ export class DataScanner {
     if (bytes[p] === OPEN) return this.complexInstance(id, at, p);
     if (STARTS_KEYWORD[bytes[p]] !== 1) return this.broken(id, at, equals + 1, 'names no type');
     const code = keywords.codeAt(bytes, p);
+    if (this.current === this.model) this.plain?.learn(p, keywords.end, code);
     p = keywords.end;
     const open = bytes[p] === OPEN ? p : skipBlank(bytes, p);
     if (bytes[open] !== OPEN) return this.broken(id, at, p, 'has no parameters');

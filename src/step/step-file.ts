@@ -12,6 +12,7 @@ import {
 } from './bytes.ts';
 import { readHeader, type StepHeader, skipStatement } from './header.ts';
 import { StepInstances } from './instances.ts';
+import { type PlainIndex, plainIndex } from './plain-index.ts';
 import { DataScanner } from './scan-data.ts';
 import type { StepValue } from './values.ts';
 
@@ -73,13 +74,25 @@ interface DataSections {
  * Throws ModelError where the structure is broken: not a STEP file, no DATA section, cut off, a text or comment never closed.
  */
 export function openStep(bytes: Uint8Array): StepFile {
+  return openStepWith(bytes, bytes.length > WORTHWHILE ? plainIndex() : null);
+}
+
+/** bytes; what is shorter is read before the kernel is ready. */
+const WORTHWHILE = 1 << 16;
+
+/** The same with a kernel for what is plain, or without. */
+export function openStepWith(bytes: Uint8Array, plain: PlainIndex | null): StepFile {
   const buffer = asBuffer(bytes);
   const start = startOfStep(buffer);
-  const scanner = new DataScanner(buffer);
+  const scanner = new DataScanner(buffer, plain);
   const { header, end } = readHeader(buffer, start, scanner.model.problems);
-  const sections = readSections(buffer, end, scanner);
-  scanner.close();
-  return new StepFile(bytes, header, scanner, sections);
+  try {
+    const sections = readSections(buffer, end, scanner);
+    scanner.close();
+    return new StepFile(bytes, header, scanner, sections);
+  } finally {
+    plain?.end();
+  }
 }
 
 /** The offset after `ISO-10303-21;`. */

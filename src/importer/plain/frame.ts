@@ -26,7 +26,7 @@ export class Frame {
   }
 
   setIdentity(): void {
-    this.at.set(IDENTITY_NUMBERS);
+    for (let k = 0; k < this.at.length; k++) this.at[k] = IDENTITY_NUMBERS[k]!;
     this.isIdentity = true;
   }
 
@@ -59,12 +59,13 @@ export class Frame {
     const { at } = this;
     if (outer.isIdentity || inner.isIdentity) {
       const other = outer.isIdentity ? inner : outer;
-      at.set(other.at);
+      for (let k = 0; k < at.length; k++) at[k] = other.at[k]!;
       this.isIdentity = other.isIdentity;
       return;
     }
     this.isIdentity = false;
-    const [o, i] = [outer.at, inner.at];
+    const o = outer.at;
+    const i = inner.at;
     for (let column = X; column <= Z; column += 3) {
       const a = i[column]!;
       const b = i[column + 1]!;

@@ -62,7 +62,7 @@ export class PlainLine {
     const { ends, centroid, along, bodyAlong, seen, zAxis, first } = this;
     positionInto(ends, 0, world, from.at[0]!, from.at[1]!, from.at[2]!);
     positionInto(ends, END, world, to.at[0]!, to.at[1]!, to.at[2]!);
-    first.set(ends.subarray(0, END));
+    for (let i = 0; i < END; i++) first[i] = ends[i]!;
     putInOrder(ends);
     if (!directionInto(along, ends) || !directionInto(bodyAlong, centroid)) return false;
     this.isCentroid = isSame(ends, centroid);
@@ -94,7 +94,9 @@ export class PlainLine {
     const { seen } = this;
     seenOnPlane(seen, 3, at, map.x, along);
     seenOnPlane(seen, 6, at, map.y, along);
-    const [a, b, c] = [seen[3]!, seen[4]!, seen[5]!];
+    const a = seen[3]!;
+    const b = seen[4]!;
+    const c = seen[5]!;
     const size = hypot(seen[6]!, seen[7]!, seen[8]!);
     if (!(size > 0 && size < Number.POSITIVE_INFINITY && hypot(a, b, c) > 0)) return false;
     const k = 1 / size;

@@ -78,7 +78,9 @@ export class PlainShape {
   private readAxes(id: number, into: Frame): boolean {
     const { cursor, origin, axis, reference } = this;
     cursor.enter(id, this.codes.axes);
-    const [location, z, x] = [cursor.ref(), cursor.ref(), cursor.ref()];
+    const location = cursor.ref();
+    const z = cursor.ref();
+    const x = cursor.ref();
     if (!cursor.leave() || !origin.read(cursor, location, this.length)) return false;
     if (z !== NO_ID && !axis.read(cursor, z, 1)) return false;
     if (x !== NO_ID && !reference.read(cursor, x, 1)) return false;
