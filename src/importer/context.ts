@@ -25,11 +25,20 @@ const SPATIAL = new Set([
 
 const WHOLE_ITSELF = { assembly: null, partOf: null };
 
+interface Shared {
+  readonly own: string | null;
+  readonly typeId: number | undefined;
+  readonly container: number;
+  readonly context: ElementContext;
+}
+
 /** What stands around the elements of a file; what many share is read once. */
 export class ContextBook {
   private readonly reading: Reading;
   private readonly relations: Relations;
   private readonly names = new Map<number, string | null>();
+  /** Of the last element that is part of nothing: most have the same type and storey as the one before them. */
+  private last: Shared | null = null;
   private readonly storeysAbove = new Map<number, number | null>();
 
   constructor(reading: Reading, relations: Relations) {
@@ -38,12 +47,29 @@ export class ContextBook {
   }
 
   of(id: number): ElementContext {
-    const wholes = wholesAbove(this.relations, id);
+    return this.ofTyped(id, this.reading.family === 'IFC2X3' ? null : this.reading.file.enumAt(id, 8));
+  }
+
+  /** The same of an element whose own predefined type is known. */
+  ofTyped(id: number, own: string | null): ElementContext {
     const typeId = this.relations.typeOf.get(id);
+    const container = this.relations.containerOf.get(id);
+    const isWhole = container !== undefined && !this.relations.wholeOf.has(id);
+    const { last } = this;
+    if (isWhole && last !== null && last.own === own && last.typeId === typeId && last.container === container) {
+      return last.context;
+    }
+    const context = this.read(id, typeId, own);
+    if (isWhole) this.last = { own, typeId, container, context };
+    return context;
+  }
+
+  private read(id: number, typeId: number | undefined, own: string | null): ElementContext {
+    const wholes = wholesAbove(this.relations, id);
     const storey = this.storeyOf(id, wholes);
     const { assembly, partOf } = wholes.length === 0 ? WHOLE_ITSELF : this.wholeAmong(wholes);
     return {
-      predefinedType: this.predefinedType(id, typeId),
+      predefinedType: this.predefinedType(own, typeId),
       type: typeId === undefined ? null : this.named(typeId),
       assembly,
       partOf,
@@ -74,9 +100,8 @@ export class ContextBook {
   }
 
   /** IFC2X3 has a predefined type on the element's type only. */
-  private predefinedType(id: number, typeId: number | undefined): string | null {
-    const { file, family } = this.reading;
-    const own = family === 'IFC2X3' ? null : file.enumAt(id, 8);
+  private predefinedType(own: string | null, typeId: number | undefined): string | null {
+    const { file } = this.reading;
     if (own !== null && own !== 'NOTDEFINED') return own;
     return (typeId === undefined ? null : file.enumAt(typeId, 9)) ?? own;
   }

@@ -1,5 +1,6 @@
 import { type ElementFacts, type Member, recordOf } from '../domain/member.ts';
 import type { Vec3 } from '../domain/vector.ts';
+import type { Cursor } from '../step/cursor.ts';
 import type { StepFile } from '../step/step-file.ts';
 import type { FactsBook } from './facts.ts';
 import { geometricOrder } from './geometric-order.ts';
@@ -36,7 +37,8 @@ const NO_LINE = 0xffff_ffff;
  */
 export class MemberStore {
   count = 0;
-  readonly file: StepFile;
+  private readonly file: StepFile;
+  private readonly cursor: Cursor;
   readonly facts: FactsBook;
   /** A row a member: its instance, the order among several of one element, its kind, and where its lines stand. */
   private ids = new Uint32Array(FIRST_MEMBERS);
@@ -54,6 +56,7 @@ export class MemberStore {
 
   constructor(file: StepFile, facts: FactsBook) {
     this.file = file;
+    this.cursor = file.cursor();
     this.facts = facts;
   }
 
@@ -114,6 +117,12 @@ export class MemberStore {
 
   globalIdOf(row: number): string {
     return this.globalIds[row]!;
+  }
+
+  /** The text in an attribute of the element. The cursor may be asked first: what is wrong there was told when it was read. */
+  textOf(row: number, index: number): string | null {
+    const id = this.ids[row]!;
+    return this.cursor.stringAt(id, index) ?? this.file.stringAt(id, index);
   }
 
   idOf(row: number): number {
@@ -219,11 +228,11 @@ class StoredMember implements Member {
   }
 
   get name(): string | null {
-    return this.store.file.stringAt(this.store.idOf(this.row), 2);
+    return this.store.textOf(this.row, 2);
   }
 
   get tag(): string | null {
-    return this.store.file.stringAt(this.store.idOf(this.row), 7);
+    return this.store.textOf(this.row, 7);
   }
 
   get class(): string {

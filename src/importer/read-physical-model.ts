@@ -30,9 +30,10 @@ export function readPhysicalModel(
   const globalIds: string[] = [];
   members.reserve(elements.length);
   for (const id of elements) {
-    const globalId = file.stringAt(id, 0)?.trim() ?? '';
+    const known = plain.read(id);
+    const globalId = known ?? file.stringAt(id, 0)?.trim() ?? '';
     globalIds.push(globalId);
-    if (!plain.read(id, globalId)) readElement(sources, id, globalId, meshes);
+    if (known === null) readElement(sources, id, globalId, meshes);
   }
   noteUnknownClasses(sources.reading);
   return {

@@ -1,4 +1,17 @@
-import { APOSTROPHE, CLOSE, COMMA, DIGIT_0, DOLLAR, HASH, OPEN, SPACE } from './bytes.ts';
+import {
+  APOSTROPHE,
+  CLOSE,
+  COMMA,
+  DIGIT_0,
+  DOLLAR,
+  HASH,
+  IN_KEYWORD,
+  latin1,
+  OPEN,
+  POINT,
+  SPACE,
+  UPPER_IN_KEYWORD,
+} from './bytes.ts';
 import type { InstanceTable } from './instance-table.ts';
 import type { Keywords } from './keywords.ts';
 import { IS_PLAIN } from './plain-list.ts';
@@ -15,6 +28,10 @@ export const NO_ID = -1;
 export class Cursor {
   isPlain = false;
   private p = 0;
+  /** Of the text last passed over. */
+  private lastEnd = 0;
+  /** The enumeration name met last. */
+  private name = '';
   private readonly bytes: Uint8Array;
   private readonly table: InstanceTable;
   private readonly keywords: Keywords;
@@ -71,7 +88,62 @@ export class Cursor {
       while (IS_PLAIN[bytes[p]] === 1);
       this.isPlain &&= bytes[p] === APOSTROPHE && bytes[p + 1] !== APOSTROPHE;
     } else this.isPlain &&= bytes[p] === DOLLAR;
+    this.lastEnd = p;
     this.pass(p + 1);
+  }
+
+  /** The text; '' for `$`. */
+  string(): string {
+    const from = this.p + 1;
+    const isText = this.bytes[this.p] === APOSTROPHE;
+    this.text();
+    return isText && this.isPlain ? latin1(this.bytes, from, this.lastEnd) : '';
+  }
+
+  /** The enumeration's name; null for `$`. Neighbours mostly have the same, which then is the same string. */
+  enumeration(): string | null {
+    const { bytes } = this;
+    if (bytes[this.p] === DOLLAR) {
+      this.pass(this.p + 1);
+      return null;
+    }
+    const from = this.p + 1;
+    let p = from;
+    while (IN_KEYWORD[bytes[p]] === 1 && UPPER_IN_KEYWORD[bytes[p]] === bytes[p]) p++;
+    // One letter is a truth value.
+    this.isPlain &&= bytes[from - 1] === POINT && bytes[p] === POINT && p > from + 1;
+    if (!this.isPlain) return null;
+    if (!this.isName(from, p)) this.name = latin1(bytes, from, p);
+    this.pass(p + 1);
+    return this.name;
+  }
+
+  private isName(from: number, to: number): boolean {
+    const { bytes, name } = this;
+    if (to - from !== name.length) return false;
+    for (let i = 0; i < name.length; i++) if (bytes[from + i] !== name.charCodeAt(i)) return false;
+    return true;
+  }
+
+  /** The text in parameter `index` of `id`; null where that is none, or what stands before it is not plain. */
+  stringAt(id: number, index: number): string | null {
+    this.enter(id);
+    for (let i = 0; i < index; i++) this.skip();
+    const isText = this.bytes[this.p] === APOSTROPHE;
+    const text = this.string();
+    return isText && this.isPlain ? text : null;
+  }
+
+  private skip(): void {
+    const { bytes } = this;
+    let p = this.p;
+    if (bytes[p] === APOSTROPHE) {
+      this.text();
+      return;
+    }
+    while (bytes[p] !== COMMA && bytes[p] !== CLOSE && bytes[p] !== OPEN && p < bytes.length) p++;
+    this.isPlain &&= bytes[p] === COMMA;
+    this.pass(p);
   }
 
   /** Passes over the text `word`, if that stands here. */

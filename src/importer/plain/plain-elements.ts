@@ -1,6 +1,7 @@
 import type { Vec3 } from '../../domain/vector.ts';
+import type { Cursor } from '../../step/cursor.ts';
 import { writtenClass } from '../class-names.ts';
-import { layerOf } from '../context.ts';
+import { type ElementContext, layerOf } from '../context.ts';
 import type { MadeOf } from '../materials/material-book.ts';
 import { materialId, type Sources } from '../read-element.ts';
 import { PlainLine } from './plain-line.ts';
@@ -14,37 +15,44 @@ import { PlainShape } from './plain-shape.ts';
  */
 export class PlainElements {
   private readonly sources: Sources;
+  private readonly cursor: Cursor;
   private readonly shape: PlainShape;
   private readonly line: PlainLine;
 
   constructor(sources: Sources) {
     const { reading, placements } = sources;
     this.sources = sources;
-    this.shape = new PlainShape(reading.file.cursor(), placements, reading.units.length);
+    this.cursor = reading.file.cursor();
+    this.shape = new PlainShape(this.cursor, placements, reading.units.length);
     this.line = new PlainLine(reading.units.length);
   }
 
-  /** Reads element `id` into the store; false, with nothing done, where it has to be read the general way. */
-  read(id: number, globalId: string): boolean {
-    const { sources, shape, line } = this;
-    const { file } = sources.reading;
+  /** Reads element `id` into the store; its GlobalId, or null, with nothing done, where it has to be read the general way. */
+  read(id: number): string | null {
+    const { sources, shape, line, cursor } = this;
+    const isTyped = sources.reading.family !== 'IFC2X3';
+    cursor.enter(id);
+    const globalId = cursor.string().trim();
+    cursor.ref();
+    for (let i = 0; i < 3; i++) cursor.text();
+    const placement = cursor.ref();
+    const shapeId = cursor.ref();
+    cursor.text();
+    const predefinedType = isTyped ? cursor.enumeration() : null;
+    if (!cursor.leave() || globalId === '') return null;
     const made = sources.materials.known(materialId(sources.relations, id));
-    const placement = file.refAt(id, 5);
-    const shapeId = file.refAt(id, 6);
-    if (globalId === '' || made === null || placement === null || shapeId === null) return false;
-    if (!shape.readShape(shapeId)) return false;
+    if (made === null || !shape.readShape(shapeId)) return null;
     const profile = sources.sections.plainlyKnown(shape.profile);
-    if (profile === null || !shape.readPlacement(placement)) return false;
-    if (!line.find(shape, profile, sources.options.axes === 'given')) return false;
+    if (profile === null || !shape.readPlacement(placement)) return null;
+    if (!line.find(shape, profile, sources.options.axes === 'given')) return null;
     this.remarkOn(made, globalId);
-    this.keep(id, globalId, made, shapeId);
-    return true;
+    this.keep(id, globalId, made, sources.contexts.ofTyped(id, predefinedType), shapeId);
+    return globalId;
   }
 
-  private keep(id: number, globalId: string, made: MadeOf, shapeId: number): void {
+  private keep(id: number, globalId: string, made: MadeOf, context: ElementContext, shapeId: number): void {
     const { sources, line } = this;
     const { zAxis, section } = line;
-    const context = sources.contexts.of(id);
     const kind = {
       class: writtenClass(sources.reading.file.typeOf(id)),
       predefinedType: context.predefinedType,

@@ -23,14 +23,14 @@ function readBothWays(open: () => StepFile, options: Partial<ImportOptions> = {}
   const short = readPhysicalModel(open(), chosen, undefined, (sources) => {
     const plain = new PlainElements(sources);
     return {
-      read(id, globalId) {
-        const isRead = plain.read(id, globalId);
-        if (isRead) count++;
-        return isRead;
+      read(id) {
+        const globalId = plain.read(id);
+        if (globalId !== null) count++;
+        return globalId;
       },
     };
   });
-  const general = readPhysicalModel(open(), chosen, undefined, () => ({ read: () => false }));
+  const general = readPhysicalModel(open(), chosen, undefined, () => ({ read: () => null }));
   return { short: said(short), general: said(general), count };
 }
 
