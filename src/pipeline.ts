@@ -36,6 +36,7 @@ import { listed } from './statics/combinations/listed.ts';
 import { type BuiltCases, buildCases, type Coverage } from './statics/loads/build-cases.ts';
 import { buildGivenCases } from './statics/loads/given-cases.ts';
 import { withSettlement } from './statics/loads/settlement-case.ts';
+import { addSway } from './statics/loads/sway.ts';
 import { withSeverity } from './statics/solution/severity.ts';
 import { solveRun } from './statics/solution/solve-run.ts';
 import { assessStability } from './statics/stability/assess-stability.ts';
@@ -132,7 +133,8 @@ export async function runModel(bytes: Uint8Array, options: Partial<RunOptions> =
   const loaded = extent === 'analyse' && members.length > 0 ? loadOn() : NO_LOADS;
   const { oneWay, findings: oneWayFindings } = resolveOneWay(truss, members, brief);
   const settlements = extent === 'analyse' ? resolveSettlements(truss, members, brief) : [];
-  const cases = withSettlement(loaded.cases, settlements);
+  const sway = addSway(truss, supports, loaded.cases, brief.imperfections);
+  const cases = withSettlement(sway.cases, settlements);
   const solved = solveRun(truss, supports, stability, cases, {
     brief,
     given: usesGivenCases ? given.combinations : null,
@@ -182,6 +184,7 @@ export async function runModel(bytes: Uint8Array, options: Partial<RunOptions> =
     findings,
     cases: solved.cases,
     applied: cases,
+    imperfections: sway.words,
     oneWay,
     asked: loaded.asked,
     ...listed(solved.combinations, solved.envelope, solved.generated, solved.buckling),

@@ -16,6 +16,7 @@ export const DEFAULT_BRIEF: Brief = {
   tensionOnly: [],
   compressionOnly: [],
   cases: [],
+  imperfections: null,
   combinations: [],
   codeRule: null,
   site: { altitude: null, nordic: false },

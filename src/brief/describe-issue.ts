@@ -1,7 +1,7 @@
 import type { z } from 'zod';
 import { didYouMean, nearestWord } from '../domain/nearest-word.ts';
 import { knownKeysAt } from './known-keys.ts';
-import { isKeyNotYetAvailable, isValueNotYetAvailable } from './not-yet.ts';
+import { isValueNotYetAvailable } from './not-yet.ts';
 import { oneLine } from './one-line.ts';
 import type { Path, Problem, WrittenSource } from './written-source.ts';
 
@@ -63,7 +63,7 @@ function followsFromUnknownKey(
   if (valueAt(source.value, path) !== undefined) return false;
   const keys = unknown.get(JSON.stringify(path.slice(0, -1))) ?? [];
   const absent = String(path.at(-1));
-  return keys.some((key) => isKeyNotYetAvailable(key) || nearestWord(key, knownKeysAt(path.slice(0, -1))) === absent);
+  return keys.some((key) => nearestWord(key, knownKeysAt(path.slice(0, -1))) === absent);
 }
 
 function describe(issue: Issue, path: Path, source: WrittenSource): Problem[] {
@@ -89,7 +89,6 @@ function describe(issue: Issue, path: Path, source: WrittenSource): Problem[] {
 
 function sayUnknownKey(key: string, path: Path): string {
   const shown = `"${oneLine(key, 60)}"`;
-  if (isKeyNotYetAvailable(key)) return `${shown}: this key is not available yet`;
   return `${shown}: there is no such key here${didYouMean(key, knownKeysAt(path))}`;
 }
 

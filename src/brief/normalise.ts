@@ -2,7 +2,7 @@ import { DEFAULT_BRIEF } from './default-brief.ts';
 import { toLoads } from './normalise-loads.ts';
 import { toMemberSelectors, toNodeSelectors, withoutUndefined } from './normalise-selectors.ts';
 import type { WrittenBrief } from './schema.ts';
-import type { Brief, CaseRule, CombinationRule, HoldRule, LengthRule, SupportRule } from './types.ts';
+import type { Brief, CaseRule, CombinationRule, HoldRule, Imperfections, LengthRule, SupportRule } from './types.ts';
 import { toCodeRule, type WrittenCombinations } from './written-combinations.ts';
 import type { Path } from './written-source.ts';
 
@@ -43,10 +43,18 @@ export function normaliseBrief(written: WrittenBrief, lineAt: LineAt): Brief {
     tensionOnly: toMemberSelectors(written.tensionOnly ?? [], ['tensionOnly'], lineAt),
     compressionOnly: toMemberSelectors(written.compressionOnly ?? [], ['compressionOnly'], lineAt),
     cases: (written.cases ?? []).map((rule, i) => toCase(rule, ['cases', i], lineAt)),
+    imperfections: toImperfections(written.imperfections),
     combinations: toCombinations(written.combinations ?? 'none', lineAt),
     codeRule: toCodeRule(written.combinations),
     site: { ...DEFAULT_BRIEF.site, ...withoutUndefined(written.site ?? {}) },
   };
+}
+
+function toImperfections(written: WrittenBrief['imperfections'] = 'none'): Imperfections | null {
+  const { rule, along = [1, 0] } = typeof written === 'string' ? { rule: written } : written;
+  if (rule === 'none') return null;
+  const length = Math.hypot(along[0], along[1]);
+  return { rule, along: [along[0] / length, along[1] / length] };
 }
 
 type WrittenLengths = NonNullable<WrittenBrief['joints']>['reach'];

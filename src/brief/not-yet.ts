@@ -1,11 +1,7 @@
 /** What the brief will be able to say and this version cannot honour: refused by name, never passed over. */
-const KEYS: ReadonlySet<string> = new Set(['imperfections']);
-
 const VALUES: readonly { readonly path: string; readonly value: RegExp }[] = [
   { path: 'chords', value: /^continuous$/u },
 ];
-
-export const isKeyNotYetAvailable = (key: string): boolean => KEYS.has(key);
 
 export const isValueNotYetAvailable = (path: readonly PropertyKey[], value: unknown): boolean =>
   typeof value === 'string' && VALUES.some((entry) => entry.path === path.join('.') && entry.value.test(value));

@@ -120,6 +120,25 @@ const lengthByMember = z
     error: `${wordsFor('length')}, or a list of {on: ..., use: 200 mm}, is due`,
   })
   .describe('a length, or a list of {on, use}; of several rules on a member the last counts, of no rule the sections');
+const imperfectionRule = z.enum(['EN1993-1-1', 'AISC360', 'none']);
+
+const imperfections = z
+  .union(
+    [
+      imperfectionRule,
+      z.strictObject({
+        rule: imperfectionRule,
+        along: z
+          .tuple([z.number(), z.number()])
+          .refine(([x, y]) => Math.hypot(x, y) > 0, 'this direction has no length')
+          .optional()
+          .describe('[x, y] in plan: sway acts along it and at right angles to it; default [1, 0]'),
+      }),
+    ],
+    { error: 'EN1993-1-1, AISC360 or none is due' },
+  )
+  .describe('initial sway as horizontal forces in strength combinations');
+
 /** Only `none` can be honoured yet: check-rules.ts says so. */
 const checkRule = z.enum(['none', 'EN1993-1-1', 'EN1993-1-1:2005', 'EN1993-1-1:2005+A1', 'AISC360', 'AISC360-22']);
 
@@ -160,6 +179,7 @@ export const briefInputSchema = z.strictObject({
   tensionOnly: anyNumber(memberSelector).optional().describe('members that only pull: rods, flats, cables'),
   compressionOnly: anyNumber(memberSelector).optional().describe('members that only push'),
   cases: z.array(loadCase).optional(),
+  imperfections: imperfections.optional(),
   site: z
     .strictObject({
       altitude: quantity('length').optional().describe('above sea level'),

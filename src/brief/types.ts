@@ -34,6 +34,8 @@ export interface Brief {
   readonly tensionOnly: readonly MemberSelector[];
   readonly compressionOnly: readonly MemberSelector[];
   readonly cases: readonly CaseRule[];
+  /** null: none is loaded. */
+  readonly imperfections: Imperfections | null;
   /** Those listed one by one; none where a code makes them. */
   readonly combinations: readonly CombinationRule[];
   readonly codeRule: CodeRule | null;
@@ -42,6 +44,13 @@ export interface Brief {
     readonly altitude: number | null;
     readonly nordic: boolean;
   };
+}
+
+/** Initial sway as horizontal forces that follow every downward load. */
+export interface Imperfections {
+  readonly rule: 'EN1993-1-1' | 'AISC360';
+  /** Unit direction in plan; the other is at right angles to it. */
+  readonly along: readonly [number, number];
 }
 
 /** A length, m, for the members it is given to; of several rules on one member the last counts. */

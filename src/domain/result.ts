@@ -388,6 +388,7 @@ export const resultSchema = z.strictObject({
     )
     .optional()
     .describe('each load of the brief: what it asks for and what was applied'),
+  imperfections: text.optional().describe('what was loaded for imperfections, by what rule'),
   combinations: z.array(combinationSchema),
   analysis: z.enum(['first-order', 'second-order']).optional(),
   buckling: bucklingSchema.optional(),

@@ -1,4 +1,4 @@
-import { CAUTION } from '../domain/caution.ts';
+import { CAUTION, CAUTION_WITH_SWAY } from '../domain/caution.ts';
 import type { Finding } from '../domain/finding.ts';
 import type { GridLine } from '../domain/grid-line.ts';
 import type { Member } from '../domain/member.ts';
@@ -52,6 +52,8 @@ export interface RunRecord {
   readonly envelope: readonly BarEnvelope[];
   readonly holds: readonly HoldForce[];
   readonly idle: IdleBars;
+  /** What was loaded for imperfections; null where nothing was. */
+  readonly imperfections: string | null;
   /** Null where the model's own view says which points are shared. */
   readonly limits: JoinLimits | null;
   readonly eccentricities: readonly EccentricityMoment[];
@@ -78,7 +80,7 @@ export function assembleResult(run: RunRecord): Result {
     format: 'pinwright-result',
     version: 1,
     generator: run.generator,
-    caution: CAUTION,
+    caution: run.imperfections === null ? CAUTION : CAUTION_WITH_SWAY,
     units: { length: 'm', force: 'N', stress: 'Pa' },
     model: run.model,
     ...(run.gridLines.length === 0 ? {} : { grid: run.gridLines.map(resultGridLine) }),
@@ -122,6 +124,7 @@ export function assembleResult(run: RunRecord): Result {
     checks: [],
     ...resultSupports(run.supports),
     ...idleBars(run.idle),
+    ...(run.imperfections === null ? {} : { imperfections: run.imperfections }),
     ...(run.holds.length === 0 ? {} : { holds: run.holds.map((hold) => resultHold(hold, run.supports)) }),
     ...(run.limits === null ? {} : { joining: resultLimits(run.limits) }),
     eccentricities: run.eccentricities.map(({ node, eccentricity: { of, member, e }, moment, from }) => ({

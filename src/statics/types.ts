@@ -69,6 +69,10 @@ export interface LoadCase {
   readonly freeStretch?: readonly BarStretch[];
   /** How far supports move their nodes. */
   readonly settlements?: readonly Settlement[];
+  /** The case whose downward loads these are a share of, as sway: they act by its factor, either way, in strength combinations only. */
+  readonly swayOf?: string;
+  /** Of sway: 0 along the brief's direction, 1 at right angles to it. */
+  readonly swayWay?: 0 | 1;
   /** What of the case could not be put on the truss: the case is refused, since without it its forces would be too small. */
   readonly incomplete?: string;
 }

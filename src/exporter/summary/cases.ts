@@ -28,6 +28,9 @@ export function loadCases(result: Result, { extras, width }: SummaryOptions): st
     ...covered(extras, width),
     ...slackBars(result, width),
     ...refusals(result, width),
+    ...(result.imperfections === undefined
+      ? []
+      : wrapped(`imperfections: ${result.imperfections}`, width, '  ', '    ')),
     ...combinations(result, width),
     ...asAWhole(result, width),
   ];

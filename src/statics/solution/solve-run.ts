@@ -5,6 +5,7 @@ import { analyseWhole, type Whole } from '../analyse-whole.ts';
 import { NOT_JUDGED } from '../buckling/judge-buckling.ts';
 import { combinationsFor } from '../combinations/combinations-for.ts';
 import type { Generated, NamedCombination } from '../combinations/generate.ts';
+import { withSway } from '../combinations/with-sway.ts';
 import { findIdleBars, type IdleBars } from '../idle/idle-bars.ts';
 import { idleFindings } from '../idle/words.ts';
 import { slackNote } from '../one-way/slack-note.ts';
@@ -52,7 +53,9 @@ export function solveRun(
   refuseTogether(cases, brief.analysis === 'second-order', superposable);
   const solver = new Solver(truss, supports, stability, { oneWay });
   const solved = solver.solve(cases);
-  const { combinations: rules, generated } = combinationsFor(cases, brief, given, superposable);
+  const acting = cases.filter(({ swayOf }) => swayOf === undefined);
+  const { combinations: upright, generated } = combinationsFor(acting, brief, given, superposable);
+  const rules = withSway(upright, cases);
   const combined = superposable
     ? { combinations: combine(solved.cases, rules), findings: [] }
     : solveCombinations(solver, cases, rules);
