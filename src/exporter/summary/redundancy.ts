@@ -9,8 +9,13 @@ export function redundancyWords({ stability, bars }: Pick<Result, 'stability' | 
   const { criticalBars, redundancy = [], selfStressStates } = stability;
   const lines: string[] = [];
   if (redundancy.length > 1 && selfStressStates > 0) {
-    const told = redundancy.slice(0, FEW).map((part) => `${part.selfStressStates} in ${count(part.bars, 'bar')}`);
-    const more = redundancy.length - told.length;
+    const alike = new Map<string, number>();
+    for (const part of redundancy) {
+      const words = `${part.selfStressStates} in ${count(part.bars, 'bar')}`;
+      alike.set(words, (alike.get(words) ?? 0) + 1);
+    }
+    const told = [...alike].slice(0, FEW).map(([words, parts]) => (parts === 1 ? words : `${words} (${parts} parts)`));
+    const more = redundancy.length - [...alike.values()].slice(0, FEW).reduce((sum, parts) => sum + parts, 0);
     lines.push(`self-stress by part: ${told.join(', ')}${more > 0 ? ` and ${count(more, 'more part')}` : ''}`);
   }
   if (criticalBars === undefined) return lines;

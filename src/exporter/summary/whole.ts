@@ -10,9 +10,11 @@ export function asAWhole({ buckling, analysis, combinations }: Result, width: nu
   if (buckling !== undefined) {
     const { factor } = buckling.modes[0];
     const times = factor >= FAR ? `beyond ${FAR} times` : `at ${factor.toPrecision(3)} times`;
-    lines.push(
-      ...wrapped(`nearest to buckling as a whole: ${harmless(buckling.from)}, ${times} its load`, width, '  ', '    '),
-    );
+    const words =
+      factor === 0
+        ? `no load at all is stable in ${harmless(buckling.from)}: its bar forces do not bring back what moves freely`
+        : `nearest to buckling as a whole: ${harmless(buckling.from)}, ${times} its load`;
+    lines.push(...wrapped(words, width, '  ', '    '));
   }
   if (analysis === 'second-order') {
     const what = combinations.length > 0 ? 'combinations' : 'cases';

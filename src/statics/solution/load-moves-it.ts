@@ -17,10 +17,12 @@ export function loadMovesIt(
   const pivot = stability.pivots[indexOfLargest(pivotForces)];
   const node = moved?.node ?? pivot.node;
   const direction = moved?.direction ?? pivot.direction;
+  const work = ((moved?.work ?? Math.abs(pivotForces[indexOfLargest(pivotForces)])) / 1000).toPrecision(3);
+  const done = `${work} kNm for each metre that it moves`;
   const where = `at ${nodeInWords(truss, node)} ${directionInWords(direction)}`;
   const sentence = moved
-    ? `the load does work on a mechanism, most ${where}: ${moved.mode.words}`
-    : `the load does work on one of ${stability.mechanisms} mechanisms: nothing holds it ${where}`;
+    ? `the load does work on a mechanism (${done}), most ${where}: ${moved.mode.words}`
+    : `the load does work on one of ${stability.mechanisms} mechanisms (${done}): nothing holds it ${where}`;
   return {
     sentence,
     finding: finding(
@@ -61,7 +63,7 @@ function mostMoved(truss: Truss, modes: readonly Mode[], loads: Float64Array) {
   const at = indexOfLargest(Float64Array.from(mode.nodes, (_, i) => workAt(mode, i)));
   const fallback = indexOfLargest(Float64Array.from(mode.movement, (v) => Math.hypot(...v)));
   const chosen = workAt(mode, at) !== 0 ? at : fallback;
-  return { mode, node: mode.nodes[chosen], direction: tidyDirection(mode.movement[chosen]) };
+  return { mode, work: best, node: mode.nodes[chosen], direction: tidyDirection(mode.movement[chosen]) };
 }
 
 /** Loads on carried nodes go to the ends of their bars; one step after another, whatever carries what. */

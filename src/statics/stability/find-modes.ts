@@ -36,6 +36,9 @@ export interface FoundModes {
 /** Numbers in memory that the modes may take up at once. */
 const MOST_NUMBERS = 3e7;
 
+/** Nodes times modes squared of a component up to which its modes are made local: larger ones take seconds and are told as a tangle. */
+const MOST_TANGLED = 1.5e7;
+
 /** Modes that are looked at to choose what stands still while parts of a free body move. */
 const SAMPLE = 12;
 
@@ -54,7 +57,7 @@ export function findModes(base: System, spectrum: Spectrum, options: StabilityOp
   const raw = modesOfComponents(first, components, inner, shares);
   const next = neighboursOf(base, components);
   const local = components.map((component, c) =>
-    shares[c] === component.pivots.length
+    shares[c] === component.pivots.length && component.nodes.length * shares[c] ** 2 < MOST_TANGLED
       ? localModes(first, component, raw[c], next)
       : { modes: raw[c].map(tidyMode), pivots: component.pivots.slice(0, shares[c]).map((i) => inner[i]) },
   );

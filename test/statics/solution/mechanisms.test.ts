@@ -76,6 +76,7 @@ describe('a truss with mechanisms', () => {
     ]);
     expect(cases[0].refused).toBeNull();
     expect(cases[1].refused).toContain('(4.500, 0.000, 2.000) sideways (along y)');
+    expect(cases[1].refused).toContain('(1.00 kNm for each metre that it moves)');
     expect(cases[1].axialForce.every((force) => force === null)).toBe(true);
     expect(cases[1].residual).toBeNull();
     expect(findings.map((f) => [f.code, f.nodes])).toEqual([['load-moves-it', [5]]]);
