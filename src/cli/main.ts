@@ -4,6 +4,7 @@ import { CAUTION } from '../domain/caution.ts';
 import { EXIT } from '../domain/errors.ts';
 import { GENERATOR } from '../domain/generator.ts';
 import { cleanCommand, withCleanOptions } from './clean-command.ts';
+import { compareCommand, withCompareOptions } from './compare-command.ts';
 import { reportFailure } from './failure.ts';
 import { withHandChecks } from './hand-check-options.ts';
 import { type RunFlags, runCommand, withRunOptions } from './run-command.ts';
@@ -40,6 +41,13 @@ withHandChecks(withRunOptions(program.command('analyse')))
   )
   .action(async (model: string, flags: RunFlags) => {
     exitCode = await runCommand(model, 'analyse', flags);
+  });
+
+withCompareOptions(program.command('compare'))
+  .description('what changed from one revision to the next, and what it did to the forces')
+  .addHelpText('after', '\nExample:\n  pinwright compare roof-a.ifc roof-b.ifc --brief roof.yaml -o changes.json')
+  .action(async (...[old, now, flags]: Parameters<typeof compareCommand>) => {
+    exitCode = await compareCommand(old, now, flags);
   });
 
 withCleanOptions(program.command('clean'))

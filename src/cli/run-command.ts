@@ -34,7 +34,7 @@ export function withRunOptions(command: Command): Command {
     .option('--brief <file>', 'scope, joints, supports, loads and combinations (YAML or JSON)')
     .option(
       '-o, --output <file>',
-      'write a result; the ending picks the format (.json .csv .csv/ .xlsx .ifc .ifczip .svg .bcf), - is JSON on stdout; may be repeated',
+      'write a result; the ending picks the format (.json .csv .csv/ .xlsx .html .ifc .ifczip .svg .bcf), - is JSON on stdout; may be repeated',
       (path: string, before: string[] = []) => [...before, path],
     )
     .option('--view <file>', 'write the truss as an IFC structural analysis view, a file of its own')

@@ -8,7 +8,8 @@ import { annotate } from './ifc/annotate.ts';
 import { writePicture } from './ifc/picture/write-picture.ts';
 import { writeView } from './ifc/view/write-view.ts';
 import { resultToJson } from './json.ts';
-import type { Content } from './outputs.ts';
+import type { Content } from './outputs/formats.ts';
+import { reportOf } from './report/report.ts';
 import { workbook } from './xlsx/workbook.ts';
 import { zipOne } from './zip-one.ts';
 
@@ -31,6 +32,8 @@ export function contentOf(result: Result, file: StepFile, bcf: Partial<BcfOption
         return encodeText([drawSheet(result)]);
       case 'bcf':
         return [writeBcf(result, bcf)];
+      case 'html':
+        return reportOf(result);
       case 'xlsx':
         return workbook(result);
       case 'view':

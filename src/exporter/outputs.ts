@@ -2,42 +2,33 @@ import { accessSync, constants, lstatSync, realpathSync, rmSync, type Stats, sta
 import { basename, dirname, join, resolve } from 'node:path';
 import { RequestError } from '../domain/errors.ts';
 import { asRequestError, errorCode } from './outputs/failure.ts';
+import { type Content, contentByEnding, type Formats, RESULT_FORMATS } from './outputs/formats.ts';
 import { temporaryName } from './outputs/temporary.ts';
-import { TABLE_NAMES, type TableName } from './tables.ts';
 
-/** What a file holds. */
-export type Content =
-  | { readonly kind: 'json' }
-  | { readonly kind: 'ifc' }
-  | { readonly kind: 'ifczip'; readonly name: string }
-  | { readonly kind: 'svg' }
-  | { readonly kind: 'bcf' }
-  | { readonly kind: 'xlsx' }
-  | { readonly kind: 'view' }
-  | { readonly kind: 'picture' }
-  | { readonly kind: 'csv'; readonly table: TableName };
-
-export interface PlannedFile {
+export interface PlannedFile<C = Content> {
   /** The path as the user gave it, for messages. */
   readonly given: string;
   /** Absolute, links resolved. */
   readonly target: string;
-  readonly content: Content;
+  readonly content: C;
 }
 
-export interface OutputPlan {
-  readonly files: readonly PlannedFile[];
+export interface OutputPlan<C = Content> {
+  readonly files: readonly PlannedFile<C>[];
   /** Folders to be made if they are not there; their parents are. */
   readonly folders: readonly string[];
-  /** The result's JSON goes to standard output as well. */
+  /** The JSON goes to standard output as well. */
   readonly stdout: boolean;
+  readonly json: C;
 }
 
 /** An output that an option of its own asks for, whatever its ending. */
-export type OtherOutput = Pick<PlannedFile, 'given' | 'content'>;
+export type OtherOutput<C = Content> = Pick<PlannedFile<C>, 'given' | 'content'>;
 
-const WRITTEN = '.json .csv .csv/ .xlsx .ifc .ifczip .svg .bcf .bcfzip';
-const NOT_YET = new Set(['.html']);
+/** The plan for the outputs of a result. */
+export function planOutputs(outputs: readonly (string | OtherOutput)[], ...inputPaths: readonly string[]): OutputPlan {
+  return planFor(RESULT_FORMATS, outputs, ...inputPaths);
+}
 
 /**
  * Finds what each output path asks for and whether it can be written, before any work is done. The endings pick the
@@ -45,8 +36,12 @@ const NOT_YET = new Set(['.html']);
  *
  * Throws a RequestError for a path that cannot be written, stands twice or names an input.
  */
-export function planOutputs(outputs: readonly (string | OtherOutput)[], ...inputPaths: readonly string[]): OutputPlan {
-  const files: PlannedFile[] = [];
+export function planFor<C>(
+  formats: Formats<C>,
+  outputs: readonly (string | OtherOutput<C>)[],
+  ...inputPaths: readonly string[]
+): OutputPlan<C> {
+  const files: PlannedFile<C>[] = [];
   const folders: string[] = [];
   for (const output of outputs) {
     if (typeof output !== 'string') {
@@ -58,31 +53,17 @@ export function planOutputs(outputs: readonly (string | OtherOutput)[], ...input
     if (given.toLowerCase().endsWith('.csv/')) {
       const folder = triedFolder(given);
       folders.push(folder);
-      for (const table of TABLE_NAMES) {
-        const target = triedFile(given, join(folder, `${table}.csv`), folder);
-        files.push({ given, target, content: { kind: 'csv', table } });
+      for (const { name, content } of formats.tables) {
+        files.push({ given, target: triedFile(given, join(folder, `${name}.csv`), folder), content });
       }
     } else {
-      const content = contentByEnding(given);
+      const content = contentByEnding(given, formats);
       files.push({ given, target: triedFile(given, resolve(given), null), content });
     }
   }
   forbidDoubles(outputs, files, folders);
   for (const inputPath of inputPaths) forbidInput(files, inputPath);
-  return { files, folders, stdout: outputs.includes('-') };
-}
-
-function contentByEnding(given: string): Content {
-  if (given.endsWith('/')) throw new RequestError(`${given}: is a folder; only one ending in .csv/ can be written`);
-  const ending = (/\.[a-z0-9]+$/i.exec(basename(given))?.[0] ?? '').toLowerCase();
-  if (ending === '.json' || ending === '.ifc') return { kind: ending === '.ifc' ? 'ifc' : 'json' };
-  if (ending === '.ifczip') return { kind: 'ifczip', name: `${basename(given, ending)}.ifc` };
-  if (ending === '.svg') return { kind: 'svg' };
-  if (ending === '.bcf' || ending === '.bcfzip') return { kind: 'bcf' };
-  if (ending === '.xlsx') return { kind: 'xlsx' };
-  if (ending === '.csv') return { kind: 'csv', table: 'bars' };
-  if (NOT_YET.has(ending)) throw new RequestError(`${given}: ${ending} is not written yet; written are ${WRITTEN}`);
-  throw new RequestError(`${given}: the ending picks the format; use one of ${WRITTEN}, or - for JSON on stdout`);
+  return { files, folders, stdout: outputs.includes('-'), json: formats.json };
 }
 
 /** The folder's real path, if it is one or can be made. */
@@ -136,7 +117,11 @@ function tryWritingInto(given: string, folder: string): string {
   return folder;
 }
 
-function forbidDoubles(outputs: readonly unknown[], files: readonly PlannedFile[], folders: readonly string[]): void {
+function forbidDoubles(
+  outputs: readonly unknown[],
+  files: readonly Pick<PlannedFile, 'given' | 'target'>[],
+  folders: readonly string[],
+): void {
   if (outputs.filter((output) => output === '-').length > 1)
     throw new RequestError('-: stands twice among the outputs');
   const taken = new Set<string>();
@@ -150,7 +135,7 @@ function forbidDoubles(outputs: readonly unknown[], files: readonly PlannedFile[
   for (const { given, target } of files) claim(given, target);
 }
 
-function forbidInput(files: readonly PlannedFile[], inputPath: string): void {
+function forbidInput(files: readonly Pick<PlannedFile, 'given' | 'target'>[], inputPath: string): void {
   const input = new Set(namesOf(resolve(inputPath)));
   for (const { given, target } of files) {
     if (namesOf(target).some((name) => input.has(name))) {

@@ -9,7 +9,7 @@ import { asRequestError, errorCode, tried } from './outputs/failure.ts';
 import type { Files } from './outputs/files.ts';
 import { type Replacement, replaceAll } from './outputs/replace.ts';
 import { sweepStrays, temporaryName } from './outputs/temporary.ts';
-import type { Content, OutputPlan, PlannedFile } from './outputs.ts';
+import type { OutputPlan, PlannedFile } from './outputs.ts';
 
 export interface WriteOptions {
   /** How many files are written at once: each holds a generator's state and an open file. */
@@ -26,9 +26,9 @@ export const WRITE_DEFAULTS: WriteOptions = { filesAtOnce: 4, stdout: process.st
  *
  * Throws a RequestError naming the path where the disk is full or refuses; what `contentOf` throws is thrown on.
  */
-export async function writeOutputs(
-  plan: OutputPlan,
-  contentOf: (content: Content) => Output,
+export async function writeOutputs<C>(
+  plan: OutputPlan<C>,
+  contentOf: (content: C) => Output,
   options: Partial<WriteOptions> = {},
 ): Promise<void> {
   const { filesAtOnce, stdout, files } = { ...WRITE_DEFAULTS, ...options };
@@ -47,11 +47,11 @@ export async function writeOutputs(
     for (const folder of made) await nodeFiles.rmdir(folder).catch(() => undefined);
     throw error;
   }
-  if (plan.stdout) await writeToStream(stdout, contentOf({ kind: 'json' }));
+  if (plan.stdout) await writeToStream(stdout, contentOf(plan.json));
 }
 
 /** The folders that were not there before. */
-async function makeFolders({ folders }: OutputPlan): Promise<string[]> {
+async function makeFolders({ folders }: Pick<OutputPlan, 'folders'>): Promise<string[]> {
   const made: string[] = [];
   for (const folder of folders) {
     try {
@@ -65,10 +65,10 @@ async function makeFolders({ folders }: OutputPlan): Promise<string[]> {
 }
 
 /** Writes all temporary files; the first failure stops the others, and is thrown when all have come to rest. */
-async function writeAll(
-  planned: readonly PlannedFile[],
+async function writeAll<C>(
+  planned: readonly PlannedFile<C>[],
   replacements: readonly Replacement[],
-  contentOf: (content: Content) => Output,
+  contentOf: (content: C) => Output,
   filesAtOnce: number,
   files: Files,
 ): Promise<void> {

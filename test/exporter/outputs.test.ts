@@ -68,10 +68,6 @@ describe('planning the outputs', () => {
     expect(readdirSync(folder)).toEqual(['roof.ifc']);
   });
 
-  it.each(['x.html'])('says that %s is not written yet', (name) => {
-    refuses([name], /is not written yet; written are \.json \.csv \.csv\/ \.xlsx \.ifc \.ifczip \.svg \.bcf/);
-  });
-
   it.each(['x.txt', 'x', 'json'])('refuses the unknown ending of %s', (name) => {
     refuses([name], /the ending picks the format/);
   });

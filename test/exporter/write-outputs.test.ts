@@ -16,8 +16,9 @@ import { Writable } from 'node:stream';
 import { afterEach, beforeEach, describe, expect, it } from 'vitest';
 import { RequestError } from '../../src/domain/errors.ts';
 import { encodeText } from '../../src/exporter/chunks.ts';
+import type { Content } from '../../src/exporter/outputs/formats.ts';
 import { temporaryName } from '../../src/exporter/outputs/temporary.ts';
-import { type Content, planOutputs } from '../../src/exporter/outputs.ts';
+import { planOutputs } from '../../src/exporter/outputs.ts';
 import { type WriteOptions, writeOutputs } from '../../src/exporter/write-outputs.ts';
 
 let folder: string;
