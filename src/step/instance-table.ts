@@ -1,18 +1,25 @@
-/** Beyond this many slots for each instance a table by id wastes more memory than a hash table. */
+/** Beyond this many ids for each instance a table by id wastes more memory than a hash table. */
 const SPARSE_FROM = 4;
 const FIRST_ROWS = 1024;
 
 /**
- * Where each instance of a file stands: ids, offsets and keyword codes in typed arrays, 10 bytes an instance, and 4 to 16 more to find one by its id.
+ * Where each instance of a file stands, and its keyword's code. As long as ids ascend and lie close together, which is how most
+ * exporters number, a row is the id itself: 6 bytes for each, and one look-up to find it. From the first id that does not fit in
+ * there on, rows are in file order with their ids beside them: 10 bytes an instance, and 4 to 16 more to find one by its id.
  * Rows are added in file order; `close` must follow before anything is looked up.
  */
 export class InstanceTable {
-  rows = 0;
+  /** How many instances there are. */
+  count = 0;
   maxId = 0;
-  private ids: Uint32Array;
-  private offsets: Uint32Array;
-  private codes: Uint16Array;
-  /** Row + 1 by id, or by hash of the id; 0 where there is none. */
+  /** The id that was added last; null where there is none. */
+  lastId: number | null = null;
+  /** By row; null while a row is its id. */
+  private ids: Uint32Array | null = null;
+  private offsets = new Uint32Array(FIRST_ROWS);
+  /** 0 where an id has no instance. */
+  private codes = new Uint16Array(FIRST_ROWS);
+  /** Where rows are no ids: row + 1 by id, or by hash of the id; 0 where there is none. */
   private rowPlusOne = new Uint32Array(0);
   private hashMask = 0;
   /** Of the file, by which the tables grow. */
@@ -23,68 +30,84 @@ export class InstanceTable {
   /** @param length of the file, bytes */
   constructor(length: number) {
     this.length = length;
-    this.ids = new Uint32Array(FIRST_ROWS);
-    this.offsets = new Uint32Array(FIRST_ROWS);
-    this.codes = new Uint16Array(FIRST_ROWS);
   }
 
+  /** @param code above 0 */
   add(id: number, offset: number, code: number): void {
-    const row = this.rows++;
-    if (row === this.ids.length) this.grow(offset);
-    this.ids[row] = id;
+    if (this.ids === null && !this.fits(id)) this.ids = this.idsInOrder();
+    const row = this.ids === null ? id : this.count;
+    if (row >= this.codes.length) this.grow(row, offset);
+    if (this.ids !== null) this.ids[row] = id;
     this.offsets[row] = offset;
     this.codes[row] = code;
+    this.count++;
+    this.lastId = id;
     if (id > this.maxId) this.maxId = id;
   }
 
-  /** Adds the first `count` rows of these columns, the greatest of whose ids is `maxId`. */
-  addRows(ids: Uint32Array, offsets: Uint32Array, codes: Uint16Array, count: number, maxId: number): void {
-    const { rows } = this;
-    this.rows += count;
-    if (this.rows > this.ids.length) this.grow(offsets[count - 1]);
-    this.ids.set(ids.subarray(0, count), rows);
-    this.offsets.set(offsets.subarray(0, count), rows);
-    this.codes.set(codes.subarray(0, count), rows);
-    if (maxId > this.maxId) this.maxId = maxId;
+  /** Adds the first `count` of these columns. */
+  addAll(ids: Uint32Array, offsets: Uint32Array, codes: Uint16Array, count: number): void {
+    for (let i = 0; i < count; i++) this.add(ids[i], offsets[i], codes[i]);
   }
 
-  /** The id in the last row; null where there is none. */
-  get lastId(): number | null {
-    return this.rows === 0 ? null : this.ids[this.rows - 1];
+  /** Whether the row of an instance that comes now can be its id. */
+  private fits(id: number): boolean {
+    return id > (this.lastId ?? -1) && id < SPARSE_FROM * this.count + FIRST_ROWS;
+  }
+
+  /** From rows that are ids to rows in file order, which is that of the ids so far. */
+  private idsInOrder(): Uint32Array {
+    const ids = new Uint32Array(this.codes.length);
+    let row = 0;
+    for (let id = 0; row < this.count; id++) {
+      if (this.codes[id] === 0) continue;
+      ids[row] = id;
+      this.offsets[row] = this.offsets[id];
+      this.codes[row] = this.codes[id];
+      row++;
+    }
+    return ids;
   }
 
   /** Makes instances findable. Of those that share an id the first stays; the others are given to `doubled` and left out. */
   close(doubled: (id: number) => void): void {
+    if (this.ids === null) {
+      for (let id = 0; id <= this.maxId; id++) if (this.codes[id] !== 0) this.countIn(this.codes[id], id);
+    } else this.closeRows(this.ids, doubled);
+  }
+
+  private closeRows(ids: Uint32Array, doubled: (id: number) => void): void {
     this.hashMask = 0;
-    if (this.maxId >= SPARSE_FROM * this.rows + FIRST_ROWS) {
+    if (this.maxId >= SPARSE_FROM * this.count + FIRST_ROWS) {
       let slots = 4;
-      while (slots < 2 * this.rows) slots *= 2;
+      while (slots < 2 * this.count) slots *= 2;
       this.hashMask = slots - 1;
     }
     this.rowPlusOne = new Uint32Array(this.hashMask === 0 ? this.maxId + 1 : this.hashMask + 1);
     let kept = 0;
-    for (let row = 0; row < this.rows; row++) {
-      const id = this.ids[row];
-      const slot = this.slotOf(id);
+    for (let row = 0; row < this.count; row++) {
+      const id = ids[row];
+      const slot = this.slotOf(ids, id);
       if (this.rowPlusOne[slot] !== 0) {
         doubled(id);
         continue;
       }
       if (kept !== row) {
-        this.ids[kept] = id;
+        ids[kept] = id;
         this.offsets[kept] = this.offsets[row];
         this.codes[kept] = this.codes[row];
       }
       this.countIn(this.codes[kept], kept);
       this.rowPlusOne[slot] = ++kept;
     }
-    this.rows = kept;
+    this.count = kept;
   }
 
   /** The row of an id, or -1. */
   rowOf(id: number): number {
-    if (!(id >= 0 && id <= this.maxId) || this.rows === 0) return -1;
-    return this.rowPlusOne[this.slotOf(id)] - 1;
+    if (!(id >= 0 && id <= this.maxId) || this.count === 0) return -1;
+    if (this.ids === null) return this.codes[id] === 0 ? -1 : id;
+    return this.rowPlusOne[this.slotOf(this.ids, id)] - 1;
   }
 
   offsetOf(row: number): number {
@@ -100,29 +123,34 @@ export class InstanceTable {
     const span = this.spans[code];
     if (span === undefined) return [];
     const ids = new Array<number>(span.count);
-    for (let row = span.first, i = 0; row <= span.last; row++) if (this.codes[row] === code) ids[i++] = this.ids[row];
+    for (let row = span.first, i = 0; row <= span.last; row++) if (this.codes[row] === code) ids[i++] = this.idOf(row);
     return ids;
   }
 
   /** The first id in the file whose keyword has this code; -1 where there is none. */
   firstOf(code: number): number {
     const span = this.spans[code];
-    return span === undefined ? -1 : this.ids[span.first];
+    return span === undefined ? -1 : this.idOf(span.first);
   }
 
   /** All ids in file order. */
   *allIds(): Generator<number> {
-    for (let row = 0; row < this.rows; row++) yield this.ids[row];
+    const rows = this.count === 0 ? 0 : this.ids === null ? this.maxId + 1 : this.count;
+    for (let row = 0; row < rows; row++) if (this.codes[row] !== 0) yield this.idOf(row);
+  }
+
+  private idOf(row: number): number {
+    return this.ids === null ? row : this.ids[row];
   }
 
   /** The slot of the id, or the free slot where it belongs. */
-  private slotOf(id: number): number {
+  private slotOf(ids: Uint32Array, id: number): number {
     if (this.hashMask === 0) return id;
     let slot = Math.imul(id, 0x9e3779b1);
     slot = (slot ^ (slot >>> 15)) & this.hashMask;
     for (;;) {
       const row = this.rowPlusOne[slot] - 1;
-      if (row < 0 || this.ids[row] === id) return slot;
+      if (row < 0 || ids[row] === id) return slot;
       slot = (slot + 1) & this.hashMask;
     }
   }
@@ -137,12 +165,12 @@ export class InstanceTable {
   }
 
   /** To what the whole file takes if it goes on as it did up to `offset`: copying half a table costs more than a page too many. */
-  private grow(offset: number): void {
-    const expected = (this.rows * this.length) / offset;
-    const capacity = Math.ceil(Math.min(Math.max(1.5 * this.rows, 1.05 * expected), 16 * this.rows));
-    this.ids = enlarged(this.ids, new Uint32Array(capacity));
+  private grow(row: number, offset: number): void {
+    const expected = (row * this.length) / offset;
+    const capacity = Math.ceil(Math.min(Math.max(1.5 * row, 1.05 * expected), 16 * row)) + 1;
     this.offsets = enlarged(this.offsets, new Uint32Array(capacity));
     this.codes = enlarged(this.codes, new Uint16Array(capacity));
+    if (this.ids !== null) this.ids = enlarged(this.ids, new Uint32Array(capacity));
   }
 }
 

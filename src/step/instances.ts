@@ -41,7 +41,7 @@ export class StepInstances {
 
   /** How many instances there are. */
   get size(): number {
-    return this.table.rows;
+    return this.table.count;
   }
 
   /** The highest id in use; 0 where there is no instance. */

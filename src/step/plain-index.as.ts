@@ -31,7 +31,6 @@ const following: usize = memory.data(2 * (LATELY + 1), 16);
 let keywordCount: u32 = 0;
 let lately: u32 = 0;
 let rowCount: u32 = 0;
-let greatestId: u32 = 0;
 /** Whether the window's end was met inside an instance. */
 let cutOff: bool = false;
 
@@ -53,11 +52,6 @@ export function codesAt(): usize {
 /** How many instances the last call of `index` found. */
 export function rows(): u32 {
   return rowCount;
-}
-
-/** The greatest id of these; 0 where there are none. */
-export function maxId(): u32 {
-  return greatestId;
 }
 
 /** Whether it stopped because the window ends, and not because something there is not plain. */
@@ -197,7 +191,6 @@ export function index(from: u32, to: u32, base: u32): u32 {
   cutOff = false;
   const toFile = base - <u32>window;
   let count: u32 = 0;
-  let most: u32 = 0;
   let start = window + from;
   for (;;) {
     let p = start;
@@ -228,12 +221,10 @@ export function index(from: u32, to: u32, base: u32): u32 {
     store<u32>(opens + 4 * count, toFile + <u32>open);
     store<u16>(codes + 2 * count, code);
     count++;
-    if (id > most) most = id;
     lately = ((lately << 2) ^ (code * SPREAD)) & LATELY;
     start = p + 1;
   }
   rowCount = count;
-  greatestId = most;
   // Close to the end a keyword or a semicolon may only seem to be wrong.
   cutOff = cutOff || start + MARGIN > end;
   return <u32>(start - window);

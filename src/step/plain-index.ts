@@ -16,7 +16,6 @@ interface Kernel {
   learn(at: number, length: number, code: number): number;
   index(from: number, to: number, base: number): number;
   rows(): number;
-  maxId(): number;
   isCutOff(): number;
 }
 
@@ -75,7 +74,7 @@ export class PlainIndex {
       const from = p;
       p = this.base + kernel.index(from - this.base, this.filled, this.base);
       const rows = kernel.rows();
-      if (rows > 0) table.addRows(this.ids, this.opens, this.codes, rows, kernel.maxId());
+      if (rows > 0) table.addAll(this.ids, this.opens, this.codes, rows);
       // An instance longer than the window, and the last ones of the file, are left to the scanner.
       const isMore = kernel.isCutOff() !== 0 && p > this.base && this.base + this.filled < this.bytes.length;
       if (!isMore) return p;

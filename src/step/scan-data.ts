@@ -91,9 +91,9 @@ export class DataScanner {
   private skipPlain(at: number): number {
     const { plain, model } = this;
     if (plain === null || this.current !== model) return at;
-    const { rows } = model.table;
+    const { count } = model.table;
     const end = plain.index(at, model.table);
-    if (model.table.rows > rows) this.lastId = model.table.lastId;
+    if (model.table.count > count) this.lastId = model.table.lastId;
     return end;
   }
 
