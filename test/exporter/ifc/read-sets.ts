@@ -24,7 +24,7 @@ export async function readSets(bytes: Uint8Array): Promise<Map<string, Map<strin
       .map(line)
       .map((property: Record<string, unknown>): [string, ReadValue] => [
         String((property.Name as Value).value),
-        valueOf(property),
+        readValue(property),
       ]);
     for (const object of RelatedObjects) {
       found.set(`${line(object).GlobalId.value} ${set.Name.value}`, new Map<string, ReadValue>(properties));
@@ -35,7 +35,7 @@ export async function readSets(bytes: Uint8Array): Promise<Map<string, Map<strin
   return found;
 }
 
-function valueOf(property: Record<string, unknown>): ReadValue {
+function readValue(property: Record<string, unknown>): ReadValue {
   const list = (values: unknown) => (values as Value[]).map(({ value }) => value);
   if (property.DefiningValues) {
     const numbers = list(property.DefinedValues) as number[];
