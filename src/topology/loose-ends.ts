@@ -29,9 +29,14 @@ export interface Miss {
   readonly other: Axis;
   /** m, from the end straight to the nearest point of the other axis. */
   readonly gap: number;
-  /** m by which the end would have to be carried along its own axis, and m by which the two axes pass each other. */
+  /** m by which the end would have to be carried along its own axis, and how far it may be; null where it is the other that ends. */
   readonly lengthwise: number;
+  readonly reach: number | null;
+  /** m by which the other member ends short of the place. */
+  readonly beyond: number;
+  /** m by which the two lines pass each other, and how far they may. */
   readonly sideways: number;
+  readonly offset: number;
 }
 
 /** Every end that no joint took and nothing supports: a miss where another axis is close, else loose. */
@@ -97,7 +102,7 @@ function nearMissSearch(axes: readonly (Axis | null)[], options: JoinOptions): (
         if (ratio > TOLERANCE.nearMiss || contact.kind === 'crossing') continue;
         const s = stationOf(contact, axis.member);
         if (s < axis.length / 2 !== atStart) continue;
-        const miss = { end, other, gap, ...missOf(contact, s, lines[0]) };
+        const miss = { end, other, gap, ...missOf(contact, s, lines) };
         found.push({ miss, ratio, s, runsOn: runsThrough(contact, other) });
       }
     });
@@ -144,9 +149,16 @@ function largestGap(own: Axis, other: Axis): number {
   return Math.max(own.reach ?? 0, own.depth, other.depth) + TOLERANCE.detailingGap;
 }
 
-function missOf({ cost }: Contact, s: number, axis: Axis): Pick<Miss, 'lengthwise' | 'sideways'> {
-  const lengthwise = Math.max(0, -s, s - axis.length);
-  return { lengthwise, sideways: Math.max(0, cost - lengthwise) };
+function missOf(
+  contact: Contact,
+  s: number,
+  [own, other]: readonly [Axis, Axis],
+): Pick<Miss, 'lengthwise' | 'reach' | 'beyond' | 'sideways' | 'offset'> {
+  const { cost, reach, offset } = contact;
+  const t = stationOf(contact, other.member);
+  const lengthwise = Math.max(0, -s, s - own.length);
+  const beyond = Math.max(0, -t, t - other.length);
+  return { lengthwise, reach, beyond, sideways: Math.max(0, cost - lengthwise - beyond), offset };
 }
 
 export function looseEndFinding(end: FreeEnd, members: readonly Member[], placeOf: PlaceNamer): Finding {

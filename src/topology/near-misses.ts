@@ -106,11 +106,11 @@ function oneMiss(
   );
 }
 
-/** The change to the model that closes the gap. */
-function mend({ lengthwise, sideways }: Miss, own: string, met: string): string {
-  if (sideways > lengthwise)
-    return `Move the end of ${own} by ${millimetres(sideways)} sideways on to the axis of ${met}`;
-  return `Carry the end of ${own} on by ${millimetres(lengthwise)} to the axis of ${met}`;
+/** The change to the model that closes the gap: carrying the end on where its line comes to the other, else straight there. */
+function mend({ lengthwise, sideways, beyond, offset, gap }: Miss, own: string, met: string): string {
+  if (sideways <= offset && beyond <= offset && lengthwise > 0)
+    return `Carry the end of ${own} on by ${millimetres(lengthwise)} to the axis of ${met}`;
+  return `Move the end of ${own} by ${millimetres(gap)} straight on to the axis of ${met}`;
 }
 
 /** Reach asked for is rounded up to this, m. */
@@ -126,13 +126,12 @@ function sameEverywhere(
   const gaps = misses.map(({ gap }) => gap);
   const [least, most] = [Math.min(...gaps), Math.max(...gaps)].map(millimetres);
   const span = least === most ? most : `${least} to ${most}`;
-  const reach = Math.ceil((Math.max(...misses.map(({ lengthwise }) => lengthwise)) + 1e-6) / ROUND) * ROUND;
   const own = misses.map(({ end }) => members[end.axis.member].globalId);
   const met = misses.map(({ other }) => members[other.member].globalId);
   return finding(
     'near-miss',
     `${misses.length} ends of one kind (${kindWords(first, pattern)}) miss their ${metWord(first, pattern)} by ${span} and join nothing: the same at all ${misses.length}, so it may be the detail that is meant${joined.count === 0 ? '' : `; ${joined.count} more of this kind are joined`}.`,
-    `If a plate bridges the gap, say \`joints: {reach: ${millimetres(reach)}}\` in the brief; if not, carry the ends on.`,
+    `If a plate bridges the gap, ${widened(misses)}; if not, ${lowerFirst(mend(first, 'each', 'what it should meet'))}.`,
     {
       members: [...new Set([...own, ...met])],
       nodes: misses.map(({ end }) => end.node),
@@ -142,6 +141,31 @@ function sameEverywhere(
     },
   );
 }
+
+/**
+ * What joins these members all the same: reach or offset in the brief, only what is short for them, and for them alone. Where their
+ * lines come together far from their ends no such number is sound, and the plate itself has to be in the model.
+ */
+function widened(misses: readonly Miss[]): string {
+  const most = (of: (miss: Miss) => number) => Math.max(...misses.map(of));
+  const section = misses[0].end.axis.sectionName;
+  const on = section === null ? 'class: IfcMember' : `section: "${section}"`;
+  const line = (limit: string, use: number) =>
+    `\`joints: {${limit}: [{on: {${on}}, use: ${millimetres(Math.ceil((use + 1e-6) / ROUND) * ROUND)}}]}\``;
+  const along = most(({ lengthwise, beyond }) => Math.max(lengthwise, beyond));
+  const aside = most(({ sideways }) => sideways);
+  const isShort = misses.some(({ lengthwise, beyond, reach }) => Math.max(lengthwise, beyond) > (reach ?? 0));
+  const isAside = misses.some(({ sideways, offset }) => sideways > offset);
+  const lines = [...(isShort ? [line('reach', along)] : []), ...(isAside ? [line('offset', aside)] : [])];
+  if (lines.length === 0 || Math.max(along, aside) > MUCH * most(({ gap }) => gap))
+    return 'model the plate: one that touches both joins them';
+  return `say ${lines.join(' and ')} in the brief`;
+}
+
+/** Of the gap itself. */
+const MUCH = 1.5;
+
+const lowerFirst = (words: string): string => words.charAt(0).toLowerCase() + words.slice(1);
 
 function kindWords({ end: { axis } }: Miss, { roles }: Pattern): string {
   return [axis.sectionName, roles[axis.member]].filter((word) => word).join(' ') || 'no section';
