@@ -45,7 +45,9 @@ function judgement(result: Result): string {
     return `It does not stand by itself: it moves freely in ${ways}; ${stress}.${unclear(result)}`;
   }
   const determinate = stability.selfStressStates === 0 ? ' (statically determinate)' : '';
-  return `It stands: no mechanism, ${stress}${determinate}.${unclear(result)}`;
+  const barely = result.findings.some(({ code }) => code === 'nearly-moves');
+  const stands = barely ? 'It barely stands, by small dimensions only' : 'It stands';
+  return `${stands}: no mechanism, ${stress}${determinate}.${unclear(result)}`;
 }
 
 function unclear({ stability }: Result): string {

@@ -12,6 +12,7 @@ import { slackNote } from '../one-way/slack-note.ts';
 import type { Judgement } from '../stability/assess-stability.ts';
 import type { Named } from '../stability/names.ts';
 import type { BarEnvelope, HoldForce, LoadCase, OneWay, Supports } from '../types.ts';
+import { forcesBeyondReason } from './beyond-reason.ts';
 import { combine } from './combine.ts';
 import { envelope } from './envelope.ts';
 import { holdForces } from './hold-forces.ts';
@@ -73,6 +74,7 @@ export function solveRun(
     isStable: balance.isStable,
     findings: [
       ...solved.findings,
+      ...forcesBeyondReason(truss, cases, solved.cases),
       ...combined.findings,
       ...balance.findings,
       ...supportLifts(truss, whole.combinations),
