@@ -1,10 +1,10 @@
 // Cases and combinations of a double-layer grid of 5,178 bars, 178 of them rods that cross in its upper layer.
 import { factorise } from '../../dist/statics/engine/factor.js';
+import { realStiffness } from '../../dist/statics/model/elastic.js';
 import { findParts } from '../../dist/statics/model/parts.js';
 import { buildSystem } from '../../dist/statics/model/system.js';
 import { combine } from '../../dist/statics/solution/combine.js';
 import { envelope } from '../../dist/statics/solution/envelope.js';
-import { realStiffness } from '../../dist/statics/solution/sections.js';
 import { solveCombinations } from '../../dist/statics/solution/solve-combinations.js';
 import { Solver } from '../../dist/statics/solution/solver.js';
 import { assessStability } from '../../dist/statics/stability/assess-stability.js';
