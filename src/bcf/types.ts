@@ -25,7 +25,8 @@ export interface TopicView {
   readonly snapshot: Uint8Array;
 }
 
-export interface Topic {
+/** What a topic says, whichever way it goes. */
+interface TopicText {
   readonly guid: string;
   readonly title: string;
   readonly type: string;
@@ -34,10 +35,13 @@ export interface Topic {
   readonly labels: readonly string[];
   readonly created: string;
   readonly author: string;
-  readonly modified: string | null;
   readonly assignedTo: string | null;
   readonly description: string;
   readonly comments: readonly TopicComment[];
+}
+
+export interface Topic extends TopicText {
+  readonly modified: string | null;
   readonly views: readonly TopicView[];
 }
 
@@ -51,18 +55,7 @@ export interface TopicModel {
 }
 
 /** A topic as it came back. */
-export interface ReturnedTopic {
-  readonly guid: string;
-  readonly title: string;
-  readonly type: string;
-  readonly status: string;
-  readonly priority: string;
-  readonly labels: readonly string[];
-  readonly created: string;
-  readonly author: string;
-  readonly assignedTo: string | null;
-  readonly description: string;
-  readonly comments: readonly TopicComment[];
+export interface ReturnedTopic extends TopicText {
   /** GlobalIds of the elements that its viewpoints select or colour. */
   readonly components: readonly string[];
   /** GlobalIds of the projects that its header names. */

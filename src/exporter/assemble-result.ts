@@ -5,28 +5,35 @@ import type { Member } from '../domain/member.ts';
 import type { PlaceNamer } from '../domain/place.ts';
 import type { Result } from '../domain/result.ts';
 import type { Truss } from '../domain/truss.ts';
-import { between, type Vec3 } from '../domain/vector.ts';
+import { between } from '../domain/vector.ts';
 import type { BarBending } from '../statics/bending/between-nodes.ts';
 import type { EccentricityMoment } from '../statics/bending/eccentricity-moments.ts';
 import type { BucklingJudgement } from '../statics/buckling/judge-buckling.ts';
-import type { IdleBar, IdleBars } from '../statics/idle/idle-bars.ts';
+import type { IdleBars } from '../statics/idle/idle-bars.ts';
 import type { AskedLoad } from '../statics/loads/asked.ts';
 import type { Judgement } from '../statics/stability/assess-stability.ts';
 import type {
   BarEnvelope,
-  ExtremeForce,
   HoldForce,
   LoadCase,
-  Mode,
-  NodalForce,
   OneWay,
-  Remedy,
   SolvedCase,
   SolvedCombination,
   Supports,
 } from '../statics/types.ts';
 import type { JoinLimits } from '../topology/limits.ts';
 import type { Family } from '../topology/regularity/families.ts';
+import { barId, extreme, memberId, nodeId, point } from './assemble/names.ts';
+import {
+  idleBars,
+  oneWayBars,
+  resultAsked,
+  resultBuckling,
+  resultCase,
+  resultCombination,
+  resultHold,
+} from './assemble/solution.ts';
+import { resultStability } from './assemble/stability.ts';
 import { resultSchedules } from './schedules/result-schedules.ts';
 
 /** Everything a run found, by index; the result says the same by name. */
@@ -61,12 +68,6 @@ export interface RunRecord {
   readonly analysis: Result['analysis'];
   readonly buckling: BucklingJudgement;
 }
-
-const MODES_LISTED = 100;
-
-const memberId = (index: number): string => `m${index + 1}`;
-const nodeId = (index: number): string => `n${index + 1}`;
-const barId = (index: number): string => `b${index + 1}`;
 
 /** The result of CONTRACT section 3. */
 export function assembleResult(run: RunRecord): Result {
@@ -155,11 +156,6 @@ function concerned({ members: named, nodes }: Finding, truss: Truss, members: re
   return [...new Set(met)];
 }
 
-const point = (at: Vec3): [number, number, number] => [at[0], at[1], at[2]];
-const extreme = (force: ExtremeForce | null) => force && { ...force };
-const nodalForces = (forces: readonly NodalForce[]) =>
-  forces.map(({ node, force }) => ({ node: nodeId(node), force: point(force) }));
-
 function resultGridLine({ tag, from, to }: GridLine): NonNullable<Result['grid']>[number] {
   return { tag, from: point(from), to: point(to) };
 }
@@ -217,64 +213,6 @@ function fixedLetters({ restraints }: Supports): Map<number, string> {
   return letters;
 }
 
-function resultStability(stability: Judgement): Result['stability'] {
-  const { modes, setAside } = stability;
-  const listed = modes.slice(0, MODES_LISTED);
-  const omitted = stability.mechanisms - listed.length;
-  return {
-    nodes: stability.nodes,
-    bars: stability.bars,
-    restraints: stability.restraints,
-    springs: stability.springs,
-    rank: stability.rank,
-    mechanisms: stability.mechanisms,
-    selfStressStates: stability.selfStressStates,
-    freeBody: stability.freeBody,
-    gap: stability.gap,
-    ...(stability.criticalBars === null ? {} : { criticalBars: stability.criticalBars.map(barId) }),
-    redundancy: stability.parts.map(({ part, freedoms, ...counts }) => ({ ...counts })),
-    setAside: setAside.map(barId),
-    modes: listed.map(resultMode),
-    ...(omitted > 0 ? { modesOmitted: omitted } : {}),
-  };
-}
-
-function resultMode({ nodes, movement, remedy, otherRemedy, ...mode }: Mode): Result['stability']['modes'][number] {
-  return {
-    ...mode,
-    nodes: nodes.map(nodeId),
-    movement: movement.map(point),
-    remedy: remedy.map(resultRemedy),
-    ...(otherRemedy.length === 0 ? {} : { otherRemedy: otherRemedy.map(resultRemedy) }),
-  };
-}
-
-/** Movements below this share of the largest are left out of a mode. */
-const TOLD = 1e-3;
-
-function resultBuckling({ governing }: BucklingJudgement): Pick<Result, 'buckling'> {
-  if (governing === null) return {};
-  const modes = governing.modes.map(({ factor, moves }) => {
-    const vectorAt = (node: number): [number, number, number] => [
-      moves[3 * node],
-      moves[3 * node + 1],
-      moves[3 * node + 2],
-    ];
-    const nodes = [...Array(moves.length / 3).keys()].filter((node) => vectorAt(node).some((v) => Math.abs(v) > TOLD));
-    return { factor, nodes: nodes.map(nodeId), movement: nodes.map(vectorAt) };
-  });
-  return { buckling: { from: governing.from, modes } };
-}
-
-function resultAsked({ asked, applied, ...load }: AskedLoad): NonNullable<Result['asked']>[number] {
-  return { ...load, asked: asked && point(asked), applied: point(applied) };
-}
-
-function oneWayBars({ tensionOnly, compressionOnly }: OneWay): Pick<Result, 'oneWay'> {
-  if (tensionOnly.length + compressionOnly.length === 0) return {};
-  return { oneWay: { tensionOnly: tensionOnly.map(barId), compressionOnly: compressionOnly.map(barId) } };
-}
-
 function resultSupports({ restraints, springs }: Supports): Pick<Result, 'supports'> {
   const nodes = [...new Set([...restraints, ...springs].map(({ node }) => node))].sort((a, b) => a - b);
   if (nodes.length === 0) return {};
@@ -286,77 +224,4 @@ function resultSupports({ restraints, springs }: Supports): Pick<Result, 'suppor
       .map(({ direction, stiffness }) => ({ direction: point(direction), stiffness })),
   }));
   return { supports };
-}
-
-function idleBars({ everywhere, cases }: IdleBars): Pick<Result, 'idle'> {
-  const named = (bars: readonly IdleBar[]) =>
-    bars.map(({ bar, rule, node }) => ({ bar: barId(bar), rule, node: node === null ? null : nodeId(node) }));
-  if (cases.length === 0) return {};
-  return {
-    idle: { everywhere: named(everywhere), cases: cases.map((one) => ({ case: one.case, bars: named(one.bars) })) },
-  };
-}
-
-function resultHold(hold: HoldForce, { restraints, springs }: Supports): NonNullable<Result['holds']>[number] {
-  const { node, direction, because, force, compression, usual } = hold;
-  return {
-    node: nodeId(node),
-    direction: point(direction),
-    because,
-    supported: [...restraints, ...springs].some((support) => support.node === node),
-    force: extreme(force),
-    compression: extreme(compression),
-    usual,
-  };
-}
-
-function resultRemedy(step: Remedy): Result['stability']['modes'][number]['remedy'][number] {
-  return 'bar' in step
-    ? { bar: [nodeId(step.bar[0]), nodeId(step.bar[1])] }
-    : { node: nodeId(step.node), direction: point(step.direction) };
-}
-
-function resultCase(
-  { refused, slack, unstable, ...solved }: SolvedCase,
-  applied: readonly LoadCase[],
-): Result['cases'][number] {
-  return {
-    ...solved,
-    ...movesOf(applied.find(({ name }) => name === solved.name)),
-    ...(refused === null ? {} : { refused }),
-    ...(slack === undefined ? {} : { slack: slack.map(barId) }),
-    ...(unstable === undefined ? {} : { unstable: { bars: unstable.bars.map(barId) } }),
-    loads: nodalForces(solved.loads),
-    loadSum: point(solved.loadSum),
-    axialForce: [...solved.axialForce],
-    displacement: solved.displacement.map((movement) => movement && point(movement)),
-    reactions: nodalForces(solved.reactions),
-  };
-}
-
-/** Of one bar all free stretch together. */
-function movesOf(applied: LoadCase | undefined): Pick<Result['cases'][number], 'stretch' | 'settlements'> {
-  const stretch = new Map<number, number>();
-  for (const { bar, by } of applied?.freeStretch ?? []) stretch.set(bar, (stretch.get(bar) ?? 0) + by);
-  const settlements = (applied?.settlements ?? []).map(({ node, movement }) => ({
-    node: nodeId(node),
-    movement: point(movement),
-  }));
-  return {
-    ...(stretch.size === 0 ? {} : { stretch: [...stretch].map(([bar, by]) => ({ bar: barId(bar), by })) }),
-    ...(settlements.length === 0 ? {} : { settlements }),
-  };
-}
-
-function resultCombination({ refused, slack, unstable, ...solved }: SolvedCombination): Result['combinations'][number] {
-  return {
-    ...solved,
-    ...(refused === null ? {} : { refused }),
-    ...(slack === undefined ? {} : { slack: slack.map(barId) }),
-    ...(unstable === undefined ? {} : { unstable: { bars: unstable.bars.map(barId) } }),
-    factors: { ...solved.factors },
-    axialForce: [...solved.axialForce],
-    displacement: solved.displacement.map((movement) => movement && point(movement)),
-    reactions: nodalForces(solved.reactions),
-  };
 }

@@ -8,7 +8,7 @@ import { workPoints } from './work-points.ts';
 type Change = Comparison['changed'][number];
 
 /** m: what exporters round by. */
-const STILL = 0.001;
+export const STILL = 0.001;
 
 /** The members found again that are not what they were, the farthest moved first. */
 export function changedMembers(old: Result, now: Result, { pairs, added, removed }: Matching): Change[] {

@@ -5,6 +5,7 @@ import type { Result, ResultFinding, ResultMember } from '../domain/result.ts';
 import { count, verdict } from '../domain/verdict.ts';
 import { millimetres } from '../domain/words.ts';
 import { columns, harmless, kilonewtons, wrapped } from '../exporter/summary/layout.ts';
+import { STILL } from './changes.ts';
 import type { Comparison } from './comparison.ts';
 
 export interface ComparisonSummaryOptions {
@@ -106,16 +107,13 @@ function changedAlike(changed: Comparison['changed'], now: Result): string[] {
 
 function changeWords({ moved, aside, section, material, rejoined }: Comparison['changed'][number]): string {
   const words = [
-    moved > MOVED ? `moved by ${millimetres(moved)}` : aside > MOVED ? `drawn ${millimetres(aside)} aside` : '',
+    moved > STILL ? `moved by ${millimetres(moved)}` : aside > STILL ? `drawn ${millimetres(aside)} aside` : '',
     section ? `${section[0] ?? 'no section'} becomes ${section[1] ?? 'no section'}` : '',
     material ? `${material[0] ?? 'no material'} becomes ${material[1] ?? 'no material'}` : '',
     rejoined ? 'meets other members than it did' : '',
   ];
   return harmless(words.filter((word) => word !== '').join('; '));
 }
-
-/** m, as in `changed`. */
-const MOVED = 0.001;
 
 function groundTold({ supports, loads }: Comparison, options: ComparisonSummaryOptions): string[] {
   const supportWords = supports.map(({ place, at, old, new: now }) => {

@@ -1,6 +1,6 @@
 import type { Result } from '../domain/result.ts';
 
-/** For each GlobalId the GlobalIds that it shares a node with, and those of all members at these nodes, itself included. */
+/** For each GlobalId the others that it shares a node with. */
 export function partners(result: Result): ReadonlyMap<string, ReadonlySet<string>> {
   const found = new Map<string, Set<string>>();
   for (const { members } of result.nodes) {

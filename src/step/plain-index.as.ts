@@ -88,7 +88,6 @@ function hashOf(at: usize, length: u32): u32 {
 }
 
 /** Whether the keyword, with the bracket after it, stands at `p`. */
-// @ts-ignore: decorator
 @inline
 function isSpelt(number: u32, p: usize): bool {
   const length = <i32>load<u8>(lengths + number);
@@ -103,7 +102,6 @@ function isSpelt(number: u32, p: usize): bool {
 }
 
 /** The number of the keyword at `p`; -1 where it is not known or something else than a bracket follows. */
-// @ts-ignore: decorator
 @inline
 function keywordAt(p: usize): i32 {
   // Exporters write the instances of one element after another in the same order.
@@ -126,7 +124,6 @@ function lookUp(p: usize): i32 {
 }
 
 /** A bit for each of the 16 bytes at `p` that is one of ' ( ) / ; = */
-// @ts-ignore: decorator
 @inline
 function stopsAt(p: usize): u32 {
   const bytes = v128.load(p);
@@ -139,7 +136,6 @@ function stopsAt(p: usize): u32 {
 }
 
 /** The next apostrophe from `p` on; not below `end` where there is none before it. */
-// @ts-ignore: decorator
 @inline
 function apostropheFrom(p: usize, end: usize): usize {
   let at = p;
@@ -152,7 +148,6 @@ function apostropheFrom(p: usize, end: usize): usize {
 }
 
 /** The offset after the bracket that closes the one at `open`; 0 where that is not plain or not before `end`. */
-// @ts-ignore: decorator
 @inline
 function afterBrackets(open: usize, end: usize): usize {
   let depth = 0;

@@ -16,9 +16,31 @@ function solve(sketch: Sketch, supports: Supports, one: Partial<LoadCase>) {
 }
 
 /** Sources: the strain of one bar and virtual work by hand. trussOf gives every bar an expansion of 1.2e-5 / K. */
-describe('temperature, misfit and settlement', () => {
-  const EA = 4e8;
+/** N */
+const EA = 4e8;
 
+/** Two bars that lean by `lean` and one upright between them, hung at height `h`, meet at the origin. */
+function threeBars(h: number, lean: number) {
+  const points: Vec3[] = [
+    [-h * Math.tan(lean), 0, h],
+    [0, 0, h],
+    [h * Math.tan(lean), 0, h],
+    [0, 0, 0],
+  ];
+  const sketch: Sketch = {
+    points,
+    bars: [
+      [0, 3],
+      [1, 3],
+      [2, 3],
+    ],
+    stiffness: EA,
+  };
+  const supports = alsoFlat(fix({ 0: 'xz', 1: 'xz', 2: 'xz' }), 4, 'y');
+  return { sketch, supports };
+}
+
+describe('temperature, misfit and settlement', () => {
   test('a bar between two fixed points and warmed has N = -EA alpha dT', () => {
     const sketch = {
       points: [
@@ -53,22 +75,7 @@ describe('temperature, misfit and settlement', () => {
   // N (1 + 2 cos^3 a) h / EA ... from compatibility: N_mid = -EA d / h * 2 cos^3 a / (1 + 2 cos^3 a), N_out = -N_mid / (2 cos a).
   test('of three bars that meet, the middle one too long pushes against the others', () => {
     const [h, lean, d] = [3, 0.6, 2e-3];
-    const points: Vec3[] = [
-      [-h * Math.tan(lean), 0, h],
-      [0, 0, h],
-      [h * Math.tan(lean), 0, h],
-      [0, 0, 0],
-    ];
-    const sketch: Sketch = {
-      points,
-      bars: [
-        [0, 3],
-        [1, 3],
-        [2, 3],
-      ],
-      stiffness: EA,
-    };
-    const supports = alsoFlat(fix({ 0: 'xz', 1: 'xz', 2: 'xz' }), 4, 'y');
+    const { sketch, supports } = threeBars(h, lean);
     const solved = solve(sketch, supports, { freeStretch: stretchByMisfit(trussOf(sketch), [1], d) });
     const cubed = Math.cos(lean) ** 3;
     const middle = (-EA * d * 2 * cubed) / (h * (1 + 2 * cubed));
@@ -79,22 +86,7 @@ describe('temperature, misfit and settlement', () => {
   // The same three bars; the middle support sinks by s: N_mid is as with the bar made too long by s.
   test('a support that settles strains an indeterminate truss like a bar made too long, and moves with its node', () => {
     const [h, lean, s] = [3, 0.6, 2e-3];
-    const points: Vec3[] = [
-      [-h * Math.tan(lean), 0, h],
-      [0, 0, h],
-      [h * Math.tan(lean), 0, h],
-      [0, 0, 0],
-    ];
-    const sketch: Sketch = {
-      points,
-      bars: [
-        [0, 3],
-        [1, 3],
-        [2, 3],
-      ],
-      stiffness: EA,
-    };
-    const supports = alsoFlat(fix({ 0: 'xz', 1: 'xz', 2: 'xz' }), 4, 'y');
+    const { sketch, supports } = threeBars(h, lean);
     const solved = solve(sketch, supports, { settlements: [{ node: 1, movement: [0, 0, -s] }] });
     const cubed = Math.cos(lean) ** 3;
     expect(solved.axialForce[1]).toBeCloseTo((-EA * s * 2 * cubed) / (h * (1 + 2 * cubed)), 5);

@@ -65,5 +65,5 @@ function viewsSection(result: Result): Markup {
     const drawn = drawView(scene, view, { width: 180, height: view.kind === 'elevation' ? 80 : 120 });
     return drawn === null ? [] : [html`<figure class="view">${new Markup(drawn)}</figure>\n`];
   });
-  return html`<p>Line weight is the size of a bar's force; orange and whole is compression, blue and dashed is tension; triangles are supports, numbers are findings in the order of this report's list.</p>\n${figures}`;
+  return html`<p>Line weight is the size of a bar's force; orange and whole is compression, blue and dashed is tension; triangles are supports, numbers mark the spots of findings, the gravest first.</p>\n${figures}`;
 }
